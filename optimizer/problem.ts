@@ -17,7 +17,7 @@ export interface Gene {
   readonly low: number;
   /** Largest value, inclusive (`options.length − 1` for `choice`). */
   readonly high: number;
-  /** Names of the options of a `choice`, in index order. */
+  /** Names of the options of a `choice`, in index order; a `whole` may carry them too, as names of ordered options. */
   readonly options?: readonly string[];
 }
 
