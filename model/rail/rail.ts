@@ -18,9 +18,6 @@ export interface LoadPoint {
 /** What the stage does when the load is light. */
 export type LightLoadPolicy = 'forced-continuous' | 'diode-emulation' | 'phase-shedding';
 
-/** How the board is cooled; the number is the air speed in m/s that the volumetric sink figures are published for. */
-export type Cooling = 'still' | 'air-1' | 'air-2.5';
-
 /** Architectures that a sheet may ask for; a transformer stage names its secondary too. */
 export const ARCHITECTURES = [
   'buck-synchronous',
@@ -173,7 +170,8 @@ export interface Rail {
   readonly lightLoad: LightLoadPolicy;
   /** Highest ambient temperature, K: limits are judged here. */
   readonly ambient: number;
-  readonly cooling: Cooling;
+  /** Speed of the air over the board, m/s, 0 … 5; 0 is still air. */
+  readonly airSpeed: number;
   /** Area of the board that carries heat away, m². */
   readonly coolingArea: number;
   readonly limits: SheetLimits;
@@ -183,5 +181,7 @@ export interface Rail {
   readonly search: SearchRange;
   readonly objectives: readonly ObjectiveName[];
   readonly parts: PartsChoice;
+  /** Spec files of designs that exist already: the search starts from them and the results are compared with them. */
+  readonly incumbents?: readonly string[];
   readonly settings: SearchSettings;
 }
