@@ -1,0 +1,90 @@
+/** Quantities as an engineer writes them, and one common prefix for a whole axis. */
+
+const PREFIXES: readonly (readonly [string, number])[] = [
+  ['G', 1e9],
+  ['M', 1e6],
+  ['k', 1e3],
+  ['', 1],
+  ['m', 1e-3],
+  ['µ', 1e-6],
+  ['n', 1e-9],
+  ['p', 1e-12],
+];
+const PREFIXED = new Set(['V', 'A', 'Ω', 'H', 'F', 'Hz', 's', 'W', 'J', 'C']);
+const POWERS: Readonly<Record<string, readonly (readonly [string, number])[]>> = {
+  m: [
+    ['m', 1],
+    ['mm', 1e-3],
+  ],
+  'm²': [
+    ['m²', 1],
+    ['cm²', 1e-4],
+    ['mm²', 1e-6],
+  ],
+  'm³': [
+    ['L', 1e-3],
+    ['cm³', 1e-6],
+    ['mm³', 1e-9],
+  ],
+  kg: [
+    ['kg', 1],
+    ['g', 1e-3],
+  ],
+};
+
+/** How the numbers of one axis or column are written: shown = (value − offset) / factor. */
+export interface AxisUnit {
+  readonly label: string;
+  readonly factor: number;
+  readonly offset: number;
+}
+
+/** The unit with the prefix that suits values up to `largest` (SI). A fraction (no unit) is shown in percent if asked. */
+export function axisUnit(unit: string, largest: number): AxisUnit {
+  const size = Math.abs(largest);
+  if (unit === 'K') return { label: '°C', factor: 1, offset: 273.15 };
+  const powers = POWERS[unit];
+  if (powers !== undefined) return pick(powers, size, '');
+  if (PREFIXED.has(unit)) return pick(PREFIXES, size, unit);
+  return { label: unit, factor: 1, offset: 0 };
+}
+
+function pick(steps: readonly (readonly [string, number])[], size: number, unit: string): AxisUnit {
+  const last = steps[steps.length - 1] ?? ['', 1];
+  const [prefix, factor] = steps.find(([, step]) => size >= step * 0.9995) ?? (size === 0 ? ['', 1] : last);
+  if (size === 0 && unit === '') return { label: last[0], factor: last[1], offset: 0 };
+  return { label: `${prefix}${unit}`, factor, offset: 0 };
+}
+
+/** A difference of two quantities: like `show`, but kelvin stay kelvin; with a sign. */
+export function showDifference(value: number, unit: string): string {
+  const text = unit === 'K' ? `${digits(Math.abs(value))} K` : show(Math.abs(value), unit);
+  return `${value < 0 ? '−' : '+'}${text}`;
+}
+
+/** `value` in engineering units with three digits: `4.70 µH`, `55.0 °C`, `3.21 EUR`. Not a number: `none`. */
+export function show(value: number, unit: string): string {
+  if (!Number.isFinite(value)) return 'none';
+  const scale = axisUnit(unit, value);
+  const text = digits((value - scale.offset) / scale.factor);
+  return scale.label === '' ? text : `${text}\u00a0${scale.label}`;
+}
+
+/** A fraction in percent. */
+export function percent(fraction: number, places = 1): string {
+  return Number.isFinite(fraction) ? `${minus((fraction * 100).toFixed(places))}\u00a0%` : 'none';
+}
+
+/** Three significant digits without exponent; whole numbers of at most four digits stay whole. */
+export function digits(value: number): string {
+  if (value === 0) return '0';
+  const size = Math.abs(value);
+  if (Number.isInteger(value) && size < 1e4) return minus(String(value));
+  if (size >= 1000) return minus(value.toFixed(0));
+  const places = Math.max(0, 2 - Math.floor(Math.log10(size * 1.0000001)));
+  return minus(value.toFixed(Math.min(places, 12)));
+}
+
+function minus(text: string): string {
+  return text.replace('-', '−');
+}
