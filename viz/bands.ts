@@ -1,0 +1,37 @@
+/**
+ * How sure the model is, drawn on the front: published model-to-hardware experience is 0.25 points of efficiency and 20 %
+ * of volume (Burkart & Kolar 2017 and the like); prices are the table's own and carry no band of the model.
+ */
+import type { Rail } from '../model/rail/rail.ts';
+
+const EFFICIENCY_BAND = 0.0025;
+const VOLUME_BAND = 0.2;
+
+/** Half-width of the model's band about `value` of an objective, in the objective's unit; 0 where it has none. */
+export function bandOf(objective: string, value: number, rail: Rail): number {
+  if (objective === 'loss') return EFFICIENCY_BAND * (meanPower(rail) + value);
+  if (objective === 'full-load-loss') return EFFICIENCY_BAND * (rail.output.nominal * rail.output.current + value);
+  if (objective === 'inefficiency') return EFFICIENCY_BAND;
+  return objective === 'cost' ? 0 : VOLUME_BAND * value;
+}
+
+/** Designs whose every banded objective lies within the band about design `open`, itself not counted. */
+export function indistinguishable(
+  names: readonly string[],
+  rows: readonly { readonly objectives: readonly number[] }[],
+  open: number,
+  rail: Rail,
+): readonly number[] {
+  const centre = rows[open]?.objectives ?? [];
+  const widths = names.map((name, k) => Math.max(bandOf(name, centre[k] ?? 0, rail), Math.abs(centre[k] ?? 0) * 0.005));
+  return rows.flatMap((row, i) => {
+    const near = widths.every((width, k) => Math.abs((row.objectives[k] ?? 0) - (centre[k] ?? 0)) <= width);
+    return near && i !== open ? [i] : [];
+  });
+}
+
+/** Output power averaged over the profile's time, W; power that flows back counts with its size. */
+function meanPower(rail: Rail): number {
+  const full = rail.output.nominal * rail.output.current;
+  return rail.profile.reduce((sum, point) => sum + point.share * Math.abs(point.fraction) * full, 0);
+}
