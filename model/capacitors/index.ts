@@ -1,0 +1,13 @@
+/** Capacitors: what they hold, how they ripple, how they heat. */
+export {
+  type Bank,
+  type BankRipple,
+  bankRipple,
+  createBank,
+  createBankRipple,
+  setGroup1,
+  setGroup2,
+} from './bank.ts';
+export { ceramicCapacitance, ceramicWorstFactor } from './ceramic.ts';
+export { cancellation, capacitiveRipple, inputChargeRipple, inputMeanSquare } from './ripple.ts';
+export { electrolyticLife, selfHeating, seriesLoss } from './stress.ts';
