@@ -1,6 +1,6 @@
 /**
- * How sure the model is, drawn on the front: published model-to-hardware experience is 0.25 points of efficiency and 20 %
- * of volume (Burkart & Kolar 2017 and the like); prices are the table's own and carry no band of the model.
+ * How sure the model is, drawn on the front: built prototypes differ from models like this one by about 0.25 points of efficiency and 20 %
+ * of volume (common practice, no source); prices are the tables' own and carry no band of the model.
  */
 import type { Rail } from '../model/rail/rail.ts';
 

@@ -442,7 +442,7 @@ function traces(duty: number, period: number, current: number, ripple: number, p
 }
 
 function partsOf(design: DesignRecord): Assessment['parts'] {
-  const { phases = 1, outputCeramicCount = 4, inputCeramicCount = 2, inductance = 4.7e-6 } = design.genes;
+  const { phases = 1, outputCeramicCount = 4, inputCeramicCount = 2 } = design.genes;
   return Object.entries(design.parts).map(([slot, name]) => {
     const count =
       slot === 'outputCeramic'

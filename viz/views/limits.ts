@@ -1,0 +1,67 @@
+/** How close the design comes to each limit: tightest first, with the corner where it was judged worst. */
+import type { Assessment, Corner, LimitFigure } from '../../model/assessment.ts';
+import { titled } from '../labels.ts';
+import { bar } from '../marks/bar.ts';
+import { clear, type Root } from '../marks/root.ts';
+import { percent, show, showDifference } from '../units.ts';
+
+export const limitsDefaults = {
+  /** Margins below this share of what is allowed are called tight. */
+  tight: 0.05,
+};
+
+export function renderLimits<E extends Element>(root: Root<E>, design: Assessment, options = limitsDefaults): void {
+  const rows = [...design.limits].sort((a, b) => relative(a) - relative(b));
+  const table = clear(root).append('table').attr('class', 'ledger limits');
+  table
+    .append('caption')
+    .attr('class', 'unseen')
+    .text('Every limit with what the design has, what is allowed, the margin and the worst corner');
+  const head = table.append('thead').append('tr');
+  for (const word of ['Limit', 'has', 'allowed', 'margin', 'worst at'])
+    head.append('th').attr('scope', 'col').text(word);
+  const body = table.append('tbody');
+  for (const limit of rows) {
+    const state = verdict(limit, options.tight);
+    const row = body.append('tr').attr('class', `whole ${state}`);
+    const name = row.append('th').attr('scope', 'row').text(titled(limit.name));
+    if (state !== 'holds')
+      name
+        .append('span')
+        .attr('class', 'flag')
+        .text(state === 'broken' ? 'broken' : 'tight');
+    row.append('td').text(show(limit.value, limit.unit));
+    row.append('td').text(show(limit.allowed, limit.unit));
+    bar(row.append('td').text(showDifference(limit.margin, limit.unit)), Math.abs(relative(limit)), state);
+    row
+      .append('td')
+      .attr('class', 'where')
+      .text(limit.corner === undefined ? 'everywhere' : cornerText(limit.corner));
+  }
+}
+
+/** Broken limits as a list of sentences; empty where every limit holds. */
+export function brokenLimits(limits: readonly LimitFigure[]): readonly string[] {
+  return limits
+    .filter((limit) => limit.violation > 0)
+    .sort((a, b) => b.violation - a.violation)
+    .map(
+      (limit) =>
+        `${titled(limit.name)}: ${show(limit.value, limit.unit)} where ${show(limit.allowed, limit.unit)} is allowed, missed by ${percent(limit.violation)}`,
+    );
+}
+
+function verdict(limit: LimitFigure, tight: number): 'broken' | 'tight' | 'holds' {
+  if (limit.violation > 0) return 'broken';
+  return relative(limit) < tight ? 'tight' : 'holds';
+}
+
+/** Margin over what is allowed; temperatures, whose zero means nothing, over 100 K. */
+function relative(limit: LimitFigure): number {
+  const base = limit.unit === 'K' ? 100 : Math.abs(limit.allowed);
+  return limit.margin / (base || 1);
+}
+
+function cornerText(corner: Corner): string {
+  return `${show(corner.inputVoltage, 'V')} in, ${percent(corner.load, 0)}`;
+}

@@ -1,0 +1,128 @@
+/** Currents and ripple over one switching period at one operating point, currents above voltages on the same time axis. */
+import { line, scaleLinear } from 'd3';
+import type { PointReport, Trace } from '../../model/assessment.ts';
+import { titled } from '../labels.ts';
+import { bottomAxis, canvasOf, type Frame, leftAxis } from '../marks/axis.ts';
+import { numbersTable } from '../marks/numbers.ts';
+import { clear, px, type Root } from '../marks/root.ts';
+import { axisUnit, percent, show } from '../units.ts';
+
+export const waveformsDefaults = { width: 440, left: 50, right: 14, top: 44, bottom: 26, panel: 104, foot: 18 };
+
+export function renderWaveforms<E extends Element>(root: Root<E>, point: PointReport, o = waveformsDefaults): void {
+  const units = [...new Set(point.traces.map((trace) => trace.unit))];
+  const height = Math.max(1, units.length) * (o.panel + o.top) + o.bottom + o.foot;
+  const svg = canvasOf(clear(root), { ...o, height }, `Waveforms over one period at ${operatingPoint(point)}`);
+  const period = Math.max(...point.traces.map((trace) => trace.period), 1e-12);
+  const x = scaleLinear()
+    .domain([0, period])
+    .range([o.left, o.width - o.right]);
+  units.forEach((unit, row) => {
+    const top = row * (o.panel + o.top) + o.top;
+    panel(
+      svg,
+      point.traces.filter((trace) => trace.unit === unit),
+      unit,
+      x,
+      { width: o.width, height: top + o.panel, left: o.left, right: o.right, top, bottom: 0 },
+    );
+  });
+  bottomAxis(
+    svg,
+    x,
+    { ...o, height: height - o.foot, top: height - o.foot - o.bottom, bottom: o.bottom },
+    { title: 'Time', unit: axisUnit('s', period), ticks: 6 },
+  );
+  numbers(root, point);
+}
+
+/** `12.8 V in, 50 % load, continuous`. */
+export function operatingPoint(point: PointReport): string {
+  return `${show(point.inputVoltage, 'V')} in, ${percent(point.load, 0)} load, ${titled(point.mode).toLowerCase()}`;
+}
+
+function panel(
+  svg: Root<SVGSVGElement>,
+  traces: readonly Trace[],
+  unit: string,
+  x: (value: number) => number,
+  frame: Frame,
+): void {
+  const all = traces.flatMap((trace) => trace.value);
+  const [low, high] = [Math.min(...all), Math.max(...all)];
+  const span = high - low || 1;
+  const near = low > 0 && low < 1.5 * span ? 0 : low - 0.08 * span;
+  const y = scaleLinear()
+    .domain([near, high + 0.08 * span])
+    .range([frame.height, frame.top]);
+  leftAxis(svg, y, frame, { title: '', unit: axisUnit(unit, Math.max(Math.abs(low), Math.abs(high))), ticks: 3 });
+  if (near < 0)
+    svg
+      .append('path')
+      .attr('class', 'zero')
+      .attr('d', `M${frame.left} ${px(y(0))}H${frame.width - frame.right}`);
+  let at = frame.left + 26;
+  traces.forEach((trace, i) => {
+    svg
+      .append('path')
+      .attr('class', `line trace-${i % 4}`)
+      .attr('d', pathOf(trace, x, y));
+    at = key(svg, trace.name, i, at, frame.top - 26);
+  });
+}
+
+/** A short stroke and the trace's name; returns where the next key starts. */
+function key(svg: Root<SVGSVGElement>, name: string, i: number, x: number, y: number): number {
+  const words = titled(name);
+  svg
+    .append('path')
+    .attr('class', `line trace-${i % 4}`)
+    .attr('d', `M${x} ${y}h18`);
+  svg
+    .append('text')
+    .attr('class', 'line-name')
+    .attr('x', x + 23)
+    .attr('y', y)
+    .attr('dy', '0.32em')
+    .text(words);
+  return x + 38 + 6.3 * words.length;
+}
+
+function pathOf(trace: Trace, x: (value: number) => number, y: (value: number) => number): string {
+  const points = trace.time.map((time, i) => [time, trace.value[i] ?? 0] as const);
+  const first = points[0];
+  const closed = first === undefined ? points : [...points, [trace.period + first[0], first[1]] as const];
+  return (
+    line<readonly [number, number]>(
+      (point) => px(x(point[0])),
+      (point) => px(y(point[1])),
+    )(closed.filter((point) => point[0] <= trace.period * 1.0000001)) ?? ''
+  );
+}
+
+function numbers<E extends Element>(root: Root<E>, point: PointReport): void {
+  const rows = point.traces.flatMap((trace) =>
+    trace.time.map((time, i) => [titled(trace.name), show(time, 's'), show(trace.value[i] ?? 0, trace.unit)]),
+  );
+  const facts = [
+    ['Duty', percent(point.dutyCycle, 1)],
+    ['Switching frequency', show(point.frequency, 'Hz')],
+    ['Active phases', String(point.activePhases)],
+    ['Current ripple per phase', show(point.rippleCurrent, 'A')],
+    ['Peak and valley', `${show(point.peakCurrent, 'A')}, ${show(point.valleyCurrent, 'A')}`],
+    ['Output ripple', show(point.outputRipple, 'V')],
+    ['Input ripple', show(point.inputRipple, 'V')],
+  ];
+  const list = root.append('dl').attr('class', 'facts');
+  for (const [name, value] of facts) {
+    const pair = list.append('div');
+    pair.append('dt').text(name ?? '');
+    pair.append('dd').text(value ?? '');
+  }
+  numbersTable(
+    root,
+    { summary: 'Numbers', caption: 'Corner points of the waveforms' },
+    ['Trace', 'Time', 'Value'],
+    rows,
+  );
+}
