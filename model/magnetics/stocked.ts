@@ -1,0 +1,101 @@
+/** A stocked inductor: its losses from the row of a parts table. What depends on the design alone is taken once. */
+
+import { expAt, logAt, pow } from '../../optimizer/maths/index.ts';
+import type { Inductor } from '../parts/inductor.ts';
+import { COPPER_TEMPCO, copperResistivity, skinDepth } from './copper.ts';
+import { dowellHarmonics } from './dowell.ts';
+
+/** Harmonics summed one by one; the rest is bounded. */
+export const RIPPLE_HARMONICS = 6;
+
+/** Frequency-dependent figures of an inductor at one switching frequency. Filled once a design. */
+export interface InductorAtFrequency {
+  /** k·f^α, W at 1 A of swing. */
+  coreScale: number;
+  /** Layer thickness over skin depth at the fundamental. */
+  x1: number;
+  layers: number;
+  /** Dowell's factor at harmonics 1 … RIPPLE_HARMONICS. */
+  readonly factors: Float64Array;
+}
+
+/** An empty one. */
+export function createInductorAtFrequency(): InductorAtFrequency {
+  return { coreScale: 0, x1: 0, layers: 1, factors: new Float64Array(RIPPLE_HARMONICS) };
+}
+
+/**
+ * Fills `into` for `row` at `frequency` (Hz) of its ripple and conductor `temperature` (K).
+ * @source dowell-1966
+ * @valid row's conductor thickness and layers describe a layered winding
+ */
+export function prepareInductor(
+  row: Inductor,
+  frequency: number,
+  temperature: number,
+  into: InductorAtFrequency,
+): void {
+  into.coreScale = row.coreCoefficient * pow(frequency, row.coreFrequencyExponent);
+  into.x1 = row.conductorThickness / skinDepth(copperResistivity(temperature), frequency);
+  into.layers = row.layers;
+  dowellHarmonics(into.x1, row.layers, RIPPLE_HARMONICS, into.factors);
+}
+
+const scratch = new Float64Array(1);
+
+/**
+ * Writes to `into[0]` the core loss, W, of a triangle of `swing` A peak to peak rising for `duty` of the period:
+ * k·f^α·ΔI^β·[D^(1 − α) + (1 − D)^(1 − α)]/2^α. `coreScale` = k·f^α from `prepareInductor`. No loss without swing.
+ * For a pause in the ripple (rise for d1, fall for d2, d1 + d2 < 1) give `rise` and `fall` as fractions of the period:
+ * [d1^(1 − α) + d2^(1 − α)]/2^α.
+ * @source igse-2002, triangle with a flat
+ * @valid 0 < rise, 0 < fall, rise + fall ≤ 1
+ */
+export function stockedCoreLossAt(
+  row: Inductor,
+  coreScale: number,
+  swing: number,
+  rise: number,
+  fall: number,
+  into: Float64Array,
+): void {
+  if (!(swing > 0)) {
+    into[0] = 0;
+    return;
+  }
+  const less = 1 - row.coreFrequencyExponent;
+  scratch[0] = swing;
+  logAt(scratch, 0);
+  const base = row.coreSwingExponent * scratch[0] - row.coreFrequencyExponent * Math.LN2;
+  scratch[0] = rise;
+  logAt(scratch, 0);
+  scratch[0] = base + less * scratch[0];
+  expAt(scratch, 0);
+  const up = scratch[0];
+  scratch[0] = fall;
+  logAt(scratch, 0);
+  scratch[0] = base + less * scratch[0];
+  expAt(scratch, 0);
+  into[0] = coreScale * (up + scratch[0]);
+}
+
+/**
+ * Dc resistance at a temperature, Ω: R25·(1 + 0.00393·(T − 293.15))/(1 + 0.00393·5). `resistance25` Ω at 25 °C, `temperature` K.
+ * @source iec-60028, temperature coefficient of copper
+ * @valid copper windings
+ * @example windingResistance(0.01, 298.15) = 0.01
+ */
+export function windingResistance(resistance25: number, temperature: number): number {
+  return (resistance25 * (1 + COPPER_TEMPCO * (temperature - 293.15))) / (1 + COPPER_TEMPCO * 5);
+}
+
+/**
+ * Thermal resistance of the part to its surroundings, K/W, from its rated current: rise/(I²·R(hot)), hot = 25 °C + rise.
+ * `ratedCurrent` A, `ratedRise` K, `resistance25` Ω at 25 °C.
+ * @derivation the rated current is the dc current that makes the rated rise; all loss is then I²·R
+ * @valid rating given in still air at 25 °C
+ * @example inductorThermalResistance(10, 40, 0.005) = 69.314
+ */
+export function inductorThermalResistance(ratedCurrent: number, ratedRise: number, resistance25: number): number {
+  return ratedRise / (ratedCurrent * ratedCurrent * windingResistance(resistance25, 298.15 + ratedRise));
+}
