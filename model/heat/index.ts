@@ -1,6 +1,14 @@
 /** Heat: thermal paths, surfaces, heat sinks. */
+export { boardConductance } from './board.ts';
 export { fixedPoint, mixedFixedPoint, parallelResistance, pathTemperature } from './resistance.ts';
-export { sinkVolume, sinkVolumeByIndex, VOLUMETRIC_RESISTANCE, volumetricResistance } from './sink.ts';
+export {
+  sinkCost,
+  sinkMass,
+  sinkVolume,
+  sinkVolumeByIndex,
+  VOLUMETRIC_RESISTANCE,
+  volumetricResistance,
+} from './sink.ts';
 export {
   EMISSIVITY,
   forcedConvection,

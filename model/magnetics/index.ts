@@ -1,0 +1,59 @@
+/** Magnetics: copper, windings, core loss, gaps, saturation, stocked inductors and wound parts. */
+export { besselJ } from './bessel.ts';
+export {
+  COPPER_DENSITY,
+  COPPER_RESISTIVITY,
+  COPPER_TEMPCO,
+  copperResistivity,
+  MU0,
+  skinDepth,
+  wireResistance,
+} from './copper.ts';
+export {
+  cosinePowerIntegral,
+  dutyCorrectionAt,
+  igseAt,
+  igseConstant,
+  igseConstantApproximate,
+  steinmetz,
+  trapezoidLossDensity,
+  triangleLossDensity,
+} from './core-loss.ts';
+export { dowell, dowellAt, dowellHarmonics, optimumThickness, roundWireThickness } from './dowell.ts';
+export {
+  type EffectiveParameters,
+  effectiveParameters,
+  effectivePermeability,
+  inductanceFactor,
+  toroidParameters,
+} from './effective.ts';
+export { fluxOfCurrent, fluxSwing, saturationFlux } from './flux.ts';
+export { gamma } from './gamma.ts';
+export { fringingFactor, gapFor } from './gap.ts';
+export { roundWireProximity, roundWireSkin } from './round-wire.ts';
+export {
+  type Bend,
+  currentOfLinkage,
+  fluxLinkage,
+  inductanceAt,
+  meanInductanceAt,
+  swingAt,
+} from './saturation.ts';
+export {
+  createInductorAtFrequency,
+  type InductorAtFrequency,
+  inductorThermalResistance,
+  prepareInductor,
+  RIPPLE_HARMONICS,
+  stockedCoreLossAt,
+  windingResistance,
+} from './stocked.ts';
+export { triangleLoss } from './triangle-loss.ts';
+export {
+  effectiveResistanceFactor,
+  harmonicLoss,
+  tailBound,
+  WINDING_AC,
+  WINDING_BOUND,
+} from './winding-loss.ts';
+export { gaugeDiameter, litzLoss, roundArea } from './wire.ts';
