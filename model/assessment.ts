@@ -37,6 +37,8 @@ export interface LimitFigure {
   readonly allowed: number;
   /** How far inside, in `unit`: ≥ 0 holds. */
   readonly margin: number;
+  /** The margin as a fraction of what is allowed (of the allowed rise for a temperature): ≥ 0 holds. */
+  readonly slack: number;
   /** 0 where it holds, else the fraction by which it is missed. */
   readonly violation: number;
   /** Absent where the limit does not depend on the operating point. */

@@ -1,0 +1,173 @@
+/**
+ * The parts a rail may use, ordered so that neighbours are alike: a step of a whole-number gene then means a slightly
+ * larger part, not a random one. Parts that cannot work on this rail at all (a rating below what the sheet asks) are left
+ * out here, once, instead of being refused a million times in the search.
+ */
+import { bad, type Finding, good, type Outcome } from './outcome.ts';
+import type { Bulk } from './parts/bulk.ts';
+import type { Ceramic } from './parts/ceramic.ts';
+import type { Part } from './parts/common.ts';
+import type { Controller } from './parts/controller.ts';
+import type { Diode } from './parts/diode.ts';
+import type { Inductor } from './parts/inductor.ts';
+import type { Switch } from './parts/switch.ts';
+import type { PartsTables } from './parts/tables.ts';
+import type { Architecture, Rail } from './rail/rail.ts';
+
+/** Stocked inductors of one series by rising inductance. */
+export interface InductorSeries {
+  readonly name: string;
+  readonly rows: readonly Inductor[];
+}
+
+/** Options of every part slot, in the order in which genes count them. */
+export interface Catalogue {
+  /** By falling on-resistance. */
+  readonly highSwitches: readonly Switch[];
+  /** By falling on-resistance. */
+  readonly lowSwitches: readonly Switch[];
+  /** By rising rated current. */
+  readonly diodes: readonly Diode[];
+  /** By rising volume. */
+  readonly inductorSeries: readonly InductorSeries[];
+  /** By rising effective capacitance at the output's bias. */
+  readonly outputCeramics: readonly Ceramic[];
+  readonly outputBulks: readonly Bulk[];
+  /** By rising effective capacitance at the input's bias. */
+  readonly inputCeramics: readonly Ceramic[];
+  readonly inputBulks: readonly Bulk[];
+  /** By rising price. */
+  readonly controllers: readonly Controller[];
+}
+
+/** Ratings beyond this multiple of the need are left out: they only widen the search. */
+const RATING_SPAN = 6;
+
+/** The options for `rail`, or one finding for each part kind of which none is left. */
+export function createCatalogue(rail: Rail, tables: PartsTables): Outcome<Catalogue> {
+  const switchNeed = rail.input.maximum / rail.derating.switchVoltage;
+  const switches = usable(rail, tables.switches).filter((row) => within(row.voltageRating, switchNeed, RATING_SPAN));
+  const byResistance = sortBy(switches, (row) => -row.onResistance);
+  const catalogue: Catalogue = {
+    highSwitches: byResistance,
+    lowSwitches: byResistance,
+    diodes: sortBy(
+      usable(rail, tables.diodes).filter((row) => within(row.voltageRating, switchNeed, RATING_SPAN)),
+      (row) => row.currentRating,
+    ),
+    inductorSeries: inductorSeries(rail, tables.inductors),
+    outputCeramics: ceramicsFor(rail, tables.ceramics, rail.output.maximum),
+    outputBulks: bulksFor(rail, tables.bulks, rail.output.maximum),
+    inputCeramics: ceramicsFor(rail, tables.ceramics, rail.input.maximum),
+    inputBulks: bulksFor(rail, tables.bulks, rail.input.maximum),
+    controllers: controllersFor(rail, tables.controllers),
+  };
+  const findings = missingKinds(rail, catalogue);
+  return findings.length > 0 ? bad(findings) : good(catalogue);
+}
+
+/** Price of one piece of `part` when `quantity` pieces are bought, in the table's currency. */
+export function priceAt(part: Part, quantity: number): number {
+  let price = part.prices.length > 0 ? (part.prices[0] as { price: number }).price : 0;
+  for (const step of part.prices) if (quantity >= step.from) price = step.price;
+  return price;
+}
+
+/** Box volume of one piece, m³. */
+export function boxVolume(part: Part): number {
+  return part.length * part.width * part.height;
+}
+
+/** Capacitance of `row` at a bias of `volts`, F; the bias curve of the parts table. */
+export function capacitanceOrder(row: Ceramic, volts: number): number {
+  return row.capacitance / (1 + volts / row.halvingVoltage);
+}
+
+function usable<P extends Part>(rail: Rail, rows: readonly P[]): readonly P[] {
+  const allowed = rows.filter((row) => !rail.parts.barred.includes(row.name) && row.height <= heightLimit(rail));
+  const preferred = allowed.filter((row) => rail.parts.preferred.includes(row.name));
+  return preferred.length > 0 ? preferred : allowed;
+}
+
+function heightLimit(rail: Rail): number {
+  return rail.limits.height ?? Number.MAX_VALUE;
+}
+
+function within(rating: number, need: number, span: number): boolean {
+  return rating >= need && rating <= need * span + 30;
+}
+
+function sortBy<P extends Part>(rows: readonly P[], key: (row: P) => number): readonly P[] {
+  return [...rows].sort((a, b) => key(a) - key(b) || (a.name < b.name ? -1 : 1));
+}
+
+function inductorSeries(rail: Rail, rows: readonly Inductor[]): readonly InductorSeries[] {
+  const { minimum, maximum } = rail.search.inductance;
+  const bySeries = new Map<string, Inductor[]>();
+  for (const row of usable(rail, rows)) {
+    if (row.inductance < minimum * 0.999 || row.inductance > maximum * 1.001) continue;
+    const series = bySeries.get(row.series) ?? [];
+    series.push(row);
+    bySeries.set(row.series, series);
+  }
+  const list = [...bySeries].map(([name, members]) => ({ name, rows: sortBy(members, (row) => row.inductance) }));
+  const size = (series: InductorSeries): number => boxVolume(series.rows[0] as Inductor);
+  return list.sort((a, b) => size(a) - size(b) || (a.name < b.name ? -1 : 1));
+}
+
+function ceramicsFor(rail: Rail, rows: readonly Ceramic[], volts: number): readonly Ceramic[] {
+  const need = volts / rail.derating.ceramicVoltage;
+  return sortBy(
+    usable(rail, rows).filter((row) => within(row.voltageRating, need, RATING_SPAN) && row.capacitance >= 0.4e-6),
+    (row) => capacitanceOrder(row, volts),
+  );
+}
+
+function bulksFor(rail: Rail, rows: readonly Bulk[], volts: number): readonly Bulk[] {
+  const need = volts / rail.derating.bulkVoltage;
+  return sortBy(
+    usable(rail, rows).filter((row) => within(row.voltageRating, need, RATING_SPAN)),
+    (row) => row.capacitance,
+  );
+}
+
+function controllersFor(rail: Rail, rows: readonly Controller[]): readonly Controller[] {
+  const fits = (row: Controller): boolean =>
+    row.inputMaximum >= rail.input.maximum &&
+    row.inputMinimum <= rail.input.minimum &&
+    row.outputMinimum <= rail.output.minimum &&
+    row.outputMaximum >= rail.output.maximum;
+  return sortBy(usable(rail, rows).filter(fits), (row) => priceAt(row, rail.quantity));
+}
+
+/** Whether any of the sheet's architectures rectifies with a switch. */
+export function usesLowSwitch(architecture: Architecture): boolean {
+  return architecture !== 'buck-diode';
+}
+
+function missingKinds(rail: Rail, catalogue: Catalogue): Finding[] {
+  const wanted: [string, number, string][] = [
+    ['switches', catalogue.highSwitches.length, `a rating of at least ${rail.input.maximum} V with derating`],
+    [
+      'inductors',
+      catalogue.inductorSeries.length,
+      'an inductance inside the search range and a height inside the limit',
+    ],
+    ['ceramics', catalogue.outputCeramics.length, 'a rating for the output voltage with derating'],
+    ['ceramics', catalogue.inputCeramics.length, 'a rating for the input voltage with derating'],
+    ['controllers', catalogue.controllers.length, "limits that hold the sheet's input and output"],
+  ];
+  if (rail.search.architectures.includes('buck-diode')) {
+    wanted.push(['diodes', catalogue.diodes.length, `a rating of at least ${rail.input.maximum} V with derating`]);
+  }
+  return wanted
+    .filter(([, count]) => count === 0)
+    .map(([kind, , need]) => ({
+      file: rail.name,
+      line: 0,
+      column: 0,
+      field: `parts.${kind}`,
+      found: 'no usable row',
+      allowed: `at least one row with ${need}`,
+    }));
+}

@@ -1,0 +1,224 @@
+/**
+ * What both switching edges of a cycle cost. At each edge one switch of the leg turns off and the other on; which of them
+ * pays is decided by the sign of the current at that instant, so the same lines serve forward and reverse power, forced
+ * continuous operation and everything between, without a jump.
+ */
+import type { Design } from './design.ts';
+import { SLOT } from './ledger.ts';
+import type { Controller } from './parts/controller.ts';
+import type { Switch } from './parts/switch.ts';
+import type { StageState } from './stages/state.ts';
+import {
+  deadTimeEnergy,
+  diodeChargeEnergy,
+  edgeTime,
+  gateChargeAfterSwing,
+  gateChargeAt,
+  hardEdgeEnergy,
+  OUTPUT_CHARGE,
+  OUTPUT_ENERGY,
+  outputAt,
+  overlapEnergy,
+  partialEdgeEnergyAt,
+  recoveryCharge,
+  sharedGateResistance,
+  swingFraction,
+  transitionTime,
+} from './switches/index.ts';
+
+const highOutput = new Float64Array(2);
+const lowOutput = new Float64Array(2);
+const partial = new Float64Array(1);
+
+/** Adds the switching losses of all active phases at `state` to `ledger`, W. */
+export function addEdgeLosses(design: Design, state: StageState, ledger: Float64Array): void {
+  outputAt(design.high, state.inputVoltage, highOutput);
+  if (design.diode === undefined) addSwitchEdges(design, state, ledger);
+  else addDiodeEdges(design, state, ledger);
+}
+
+function addSwitchEdges(design: Design, state: StageState, ledger: Float64Array): void {
+  outputAt(design.low, state.inputVoltage, lowOutput);
+  const cycles = state.frequency * state.activePhases;
+  const { high, low, controller } = design;
+  const a = state.valleyCurrent;
+  const b = state.peakCurrent;
+  const nodeCharge = design.highParallel * highOutput[OUTPUT_CHARGE] + design.lowParallel * lowOutput[OUTPUT_CHARGE];
+  const toHigh = rising(design, state, nodeCharge);
+  const toLow = falling(design, state, nodeCharge);
+
+  // Into the high switch: hard while the current flows out of the leg, helped by it while it flows in.
+  ledger[SLOT['highSwitch.overlap']] +=
+    cycles * overlapOn(high, design.highParallel, controller, state.inputVoltage, a);
+  ledger[SLOT['lowSwitch.overlap']] += cycles * overlapOff(low, design.lowParallel, controller, state.inputVoltage, -a);
+  ledger[SLOT['highSwitch.recovery']] +=
+    cycles * recovery(low, design.lowParallel, lowOutput[OUTPUT_CHARGE], state.inputVoltage, a);
+  edgeEnergy(low, design.lowParallel, lowOutput, high, design.highParallel, highOutput, state.inputVoltage, toHigh);
+  ledger[SLOT['highSwitch.outputCharge']] += cycles * partial[0];
+
+  // Into the low switch: the mirror image.
+  ledger[SLOT['highSwitch.overlap']] +=
+    cycles * overlapOff(high, design.highParallel, controller, state.inputVoltage, b);
+  ledger[SLOT['lowSwitch.overlap']] += cycles * overlapOn(low, design.lowParallel, controller, state.inputVoltage, -b);
+  ledger[SLOT['lowSwitch.recovery']] +=
+    cycles * recovery(high, design.highParallel, highOutput[OUTPUT_CHARGE], state.inputVoltage, -b);
+  edgeEnergy(high, design.highParallel, highOutput, low, design.lowParallel, lowOutput, state.inputVoltage, toLow);
+  ledger[SLOT['lowSwitch.outputCharge']] += cycles * partial[0];
+
+  addGap(ledger, cycles, design, a, a > 0, nodeCharge);
+  addGap(ledger, cycles, design, b, b < 0, nodeCharge);
+  addGates(ledger, cycles, design, state, toHigh, toLow);
+}
+
+/** How far the node has swung by itself when the high switch turns on, 0 … 1. */
+function rising(design: Design, state: StageState, nodeCharge: number): number {
+  return swingFraction(
+    state.valleyCurrent,
+    state.effectiveInductance,
+    nodeCharge,
+    state.inputVoltage,
+    state.outputVoltage,
+    design.controller.deadTime,
+  );
+}
+
+/** How far it has swung by itself when the low switch turns on. */
+function falling(design: Design, state: StageState, nodeCharge: number): number {
+  return swingFraction(
+    -state.peakCurrent,
+    state.effectiveInductance,
+    nodeCharge,
+    state.inputVoltage,
+    state.inputVoltage - state.outputVoltage,
+    design.controller.deadTime,
+  );
+}
+
+/** Writes to `partial[0]` what the switch `own` burns as it turns on after the node has swung by `fraction`. */
+function edgeEnergy(
+  partner: Switch,
+  partnerDice: number,
+  partnerOutput: Float64Array,
+  own: Switch,
+  ownDice: number,
+  ownOutput: Float64Array,
+  volts: number,
+  fraction: number,
+): void {
+  if (fraction >= 1) {
+    partial[0] = 0;
+  } else if (fraction > 0) {
+    partialEdgeEnergyAt(partner, partnerDice, own, ownDice, volts, fraction, partial);
+  } else {
+    partial[0] = hardEdgeEnergy(
+      partnerDice * partnerOutput[OUTPUT_CHARGE],
+      partnerDice * partnerOutput[OUTPUT_ENERGY],
+      ownDice * ownOutput[OUTPUT_ENERGY],
+      volts,
+    );
+  }
+}
+
+function overlapOn(row: Switch, dice: number, controller: Controller, volts: number, current: number): number {
+  if (current <= 0) return 0;
+  const resistance = sharedGateResistance(controller.driverSourceResistance, row.gateResistance, dice);
+  const time = edgeTime(
+    dice * row.gateChargeSwitch,
+    dice * row.gateDrainCharge,
+    driveOverPlateau(row, controller),
+    resistance,
+    row.commonSourceInductance / dice,
+    current,
+  );
+  return overlapEnergy(volts, current, time);
+}
+
+function overlapOff(row: Switch, dice: number, controller: Controller, volts: number, current: number): number {
+  if (current <= 0) return 0;
+  const resistance = sharedGateResistance(controller.driverSinkResistance, row.gateResistance, dice);
+  const time = edgeTime(
+    dice * row.gateChargeSwitch,
+    dice * row.gateDrainCharge,
+    row.plateauVoltage,
+    resistance,
+    row.commonSourceInductance / dice,
+    current,
+  );
+  return overlapEnergy(volts, current, time);
+}
+
+/** Drive above the plateau, V; at least a tenth of a volt, so that a controller that cannot drive a row stays finite. */
+function driveOverPlateau(row: Switch, controller: Controller): number {
+  return Math.max(0.1, controller.driveVoltage - row.plateauVoltage);
+}
+
+function recovery(row: Switch, dice: number, outputCharge: number, volts: number, current: number): number {
+  return (
+    volts *
+    dice *
+    recoveryCharge(row.recoveryCharge, row.recoveryCurrent, row.recoveryHoldsOutput, outputCharge, current / dice)
+  );
+}
+
+/**
+ * Adds the body-diode loss of the gap before one edge, in the position that the current's sign chooses. Before a hard edge
+ * the diode conducts through the whole gap; before a soft one it waits for the node to arrive.
+ */
+function addGap(
+  ledger: Float64Array,
+  energyScale: number,
+  design: Design,
+  current: number,
+  hard: boolean,
+  node: number,
+): void {
+  const gap = design.controller.deadTime;
+  const wait = hard ? 0 : transitionTime(node, current, gap);
+  const slot = current >= 0 ? SLOT['lowSwitch.deadTime'] : SLOT['highSwitch.deadTime'];
+  const drop = current >= 0 ? design.low.bodyDrop : design.high.bodyDrop;
+  ledger[slot] += energyScale * deadTimeEnergy(drop, current, gap, wait);
+}
+
+/** Adds gate charge of both positions; a linear drive supply burns the rest of the input in the controller. */
+function addGates(
+  ledger: Float64Array,
+  cycles: number,
+  design: Design,
+  state: StageState,
+  toHigh: number,
+  toLow: number,
+): void {
+  const { controller } = design;
+  const high = cycles * gateCharge(design.high, design.highParallel, controller, toHigh);
+  const low = design.diode === undefined ? cycles * gateCharge(design.low, design.lowParallel, controller, toLow) : 0;
+  ledger[SLOT['highSwitch.gate']] += high * controller.driveVoltage;
+  ledger[SLOT['lowSwitch.gate']] += low * controller.driveVoltage;
+  if (controller.linearDriveSupply) {
+    const drop = state.inputVoltage - controller.driveVoltage;
+    ledger[SLOT['controller.driveSupply']] += drop > 0 ? (high + low) * drop : 0;
+  }
+}
+
+function gateCharge(row: Switch, dice: number, controller: Controller, fraction: number): number {
+  const charge = gateChargeAfterSwing(row.gateCharge, row.gateDrainCharge, fraction);
+  return dice * gateChargeAt(charge, row.driveVoltage, controller.driveVoltage);
+}
+
+function addDiodeEdges(design: Design, state: StageState, ledger: Float64Array): void {
+  const { diode, high, controller } = design;
+  if (diode === undefined) return;
+  const cycles = state.frequency * state.activePhases;
+  const a = state.valleyCurrent;
+  const volts = state.inputVoltage;
+  ledger[SLOT['highSwitch.overlap']] +=
+    cycles *
+    (overlapOn(high, design.highParallel, controller, volts, a) +
+      overlapOff(high, design.highParallel, controller, volts, state.peakCurrent));
+  ledger[SLOT['highSwitch.outputCharge']] +=
+    cycles *
+    (design.highParallel * highOutput[OUTPUT_ENERGY] +
+      diodeChargeEnergy(diode.junctionCharge, diode.chargeVoltage, volts));
+  ledger[SLOT['highSwitch.recovery']] +=
+    cycles * volts * recoveryCharge(diode.recoveryCharge, diode.recoveryCurrent, false, 0, a);
+  addGates(ledger, cycles, design, state, 0, 0);
+}

@@ -1,0 +1,189 @@
+/**
+ * Judges one design: every operating point solved, every limit noted, every objective summed. The search calls this
+ * millions of times; the assessment calls the same function with a listener that sees each point as it stands.
+ */
+import { Assembly, assemble } from './assembly.ts';
+import type { Catalogue } from './catalogue.ts';
+import { boardConductance, sinkBox, sinkCost, sinkMass } from './cooling.ts';
+import { Design, resolveDesign } from './design.ts';
+import { Flavour, prepareFlavour } from './flavour.ts';
+import { LOSS_SLOTS } from './ledger.ts';
+import { LimitBook } from './limits/book.ts';
+import { judgeConstruction } from './limits/construction.ts';
+import { limitsOf } from './limits/list.ts';
+import { type LimitPlaces, limitPlaces } from './limits/places.ts';
+import { judgePoint, judgeRipple } from './limits/point.ts';
+import { inductorThermalResistance, prepareInductor } from './magnetics/index.ts';
+import { type PlannedPoint, type PointPlan, planPoints } from './plan.ts';
+import { PointSolver, solvePoint, solveRipple } from './point.ts';
+import type { Rail } from './rail/rail.ts';
+import type { Stage } from './stages/contract.ts';
+
+/** Rise over ambient at which the skin depth of the windings is taken, K. */
+const WINDING_RISE = 30;
+
+/** Sees each solved point: `index` counts usual points first, then worst points. */
+export type PointListener = (solver: PointSolver, planned: PlannedPoint, index: number) => void;
+
+/** Everything that one rail's designs are judged with. One per thread; holds the scratch. */
+export class Evaluator {
+  readonly rail: Rail;
+  readonly catalogue: Catalogue;
+  readonly stages: readonly Stage[];
+  readonly plan: PointPlan;
+  readonly book: LimitBook;
+  readonly places: LimitPlaces;
+  readonly design: Design;
+  readonly assembly = new Assembly();
+  readonly usual = new Flavour(false);
+  readonly worst = new Flavour(true);
+  readonly solver: PointSolver;
+  /** Conductance of the bare board, W/K. */
+  readonly bareBoard: number;
+  /** W by slot, profile-weighted. */
+  readonly weighted = new Float64Array(LOSS_SLOTS.length);
+  /** Conductance of the heat sink of the design at hand, W/K; 0 without one. */
+  sink = 0.5;
+  /** W, profile-weighted loss and power that flows in. */
+  loss = 0.5;
+  inflow = 0.5;
+  /** W, loss at full load, usual values. */
+  fullLoss = 0.5;
+
+  constructor(rail: Rail, catalogue: Catalogue, stages: readonly Stage[]) {
+    this.rail = rail;
+    this.catalogue = catalogue;
+    this.stages = stages;
+    this.plan = planPoints(rail);
+    this.book = new LimitBook(limitsOf(rail));
+    this.places = limitPlaces(this.book, rail);
+    this.design = new Design(rail, catalogue, stages);
+    this.solver = new PointSolver(rail);
+    this.bareBoard = boardConductance(rail.coolingArea, rail.airSpeed, rail.ambient);
+  }
+}
+
+/** Judges the design of snapped `genes`; results stand in `e`. `listener` is for the assessment alone. */
+export function judgeDesign(e: Evaluator, genes: Float64Array, listener?: PointListener): void {
+  prepare(e, genes);
+  sizeSink(e);
+  judgeWorst(e, listener);
+  judgeBetween(e);
+  sumUsual(e, listener);
+  addSink(e);
+  judgeConstruction(e);
+}
+
+function prepare(e: Evaluator, genes: Float64Array): void {
+  const { design } = e;
+  resolveDesign(design, genes, e.rail, e.catalogue, e.stages);
+  const { inductor } = design;
+  prepareInductor(inductor, design.frequency, e.rail.ambient + WINDING_RISE, design.inductorAt);
+  design.inductorThermalResistance = inductorThermalResistance(
+    inductor.ratedCurrent,
+    inductor.ratedRise,
+    inductor.dcResistance,
+  );
+  prepareFlavour(e.usual, design, e.rail);
+  prepareFlavour(e.worst, design, e.rail);
+  assemble(e.assembly, design, e.rail.quantity);
+  e.book.clear();
+}
+
+/** Finds the heat sink that the worst points need beside the board. */
+function sizeSink(e: Evaluator): void {
+  e.sink = 0;
+  const points = e.plan.worst;
+  for (let i = 0; i < points.length; i++) {
+    solvePoint(e.solver, e.design, e.worst, points[i], e.design.phases, e.bareBoard);
+    if (e.solver.heat.sinkNeeded > e.sink) e.sink = e.solver.heat.sinkNeeded;
+  }
+}
+
+function judgeWorst(e: Evaluator, listener?: PointListener): void {
+  const points = e.plan.worst;
+  const from = e.plan.usual.length;
+  for (let i = 0; i < points.length; i++) {
+    solveActive(e, e.worst, points[i]);
+    judgePoint(e, points[i], from + i);
+    listener?.(e.solver, points[i], from + i);
+  }
+}
+
+/** Judges ripple at input voltages inside the range where phases cancel worst, near D = (2j − 1)/(2N). */
+function judgeBetween(e: Evaluator): void {
+  const { phases, stage } = e.design;
+  if (phases < 2) return;
+  for (const span of e.plan.spans) {
+    for (let j = 1; j <= phases; j++) {
+      const ideal = stage.idealDuty(1, span.outputVoltage);
+      const inputVoltage = (ideal * 2 * phases) / (2 * j - 1);
+      if (!(inputVoltage > span.low && inputVoltage < span.high)) continue;
+      solveRipple(e.solver, e.design, e.worst, inputVoltage, span.outputVoltage);
+      judgeRipple(e);
+    }
+  }
+}
+
+/** Sums the profile at nominal input with usual values. */
+function sumUsual(e: Evaluator, listener?: PointListener): void {
+  const { solver, weighted } = e;
+  weighted.fill(0);
+  e.loss = 0;
+  e.inflow = 0;
+  for (let i = 0; i < e.plan.usual.length; i++) {
+    const planned = e.plan.usual[i];
+    solveActive(e, e.usual, planned);
+    const power = solver.outputPower >= 0 ? solver.outputPower + solver.loss : -solver.outputPower;
+    e.loss += planned.share * solver.loss;
+    e.inflow += planned.share * power;
+    if (planned.load === 1) e.fullLoss = solver.loss;
+    if (planned.share > 0) for (let k = 0; k < weighted.length; k++) weighted[k] += planned.share * solver.ledger[k];
+    judgeUsual(e, planned, power, i);
+    listener?.(solver, planned, i);
+  }
+}
+
+/** Efficiency and no-load limits at a usual point. */
+function judgeUsual(e: Evaluator, planned: PlannedPoint, inflow: number, index: number): void {
+  const { rail, places, book, solver } = e;
+  if (planned.load === 0) {
+    const allowed = rail.limits.noLoadPower;
+    if (allowed !== undefined) book.judge(places.noLoadPower, solver.loss, allowed, allowed, index);
+    return;
+  }
+  const limits = rail.limits.efficiency;
+  for (let k = 0; k < limits.length; k++) {
+    if (limits[k].load !== planned.load) continue;
+    const efficiency = 1 - solver.loss / inflow;
+    book.judge(places.efficiency[k], efficiency, limits[k].atLeast, 1 - limits[k].atLeast, index);
+  }
+}
+
+/** Solves a point with the phase count that the light-load policy asks for: all, or the one with the least loss. */
+function solveActive(e: Evaluator, flavour: Flavour, planned: PlannedPoint): void {
+  const { design, solver } = e;
+  const board = e.bareBoard + e.sink;
+  let best = design.phases;
+  if (design.sheds) {
+    const fewest = Math.max(1, Math.ceil(design.phases * Math.abs(planned.load)));
+    let least = Number.POSITIVE_INFINITY;
+    for (let n = design.phases; n >= fewest; n--) {
+      solvePoint(solver, design, flavour, planned, n, board);
+      if (!(solver.loss < least)) continue;
+      least = solver.loss;
+      best = n;
+    }
+    if (best === fewest) return;
+  }
+  solvePoint(solver, design, flavour, planned, best, board);
+}
+
+/** Adds the heat sink to volume, mass and cost. */
+function addSink(e: Evaluator): void {
+  if (!(e.sink > 0)) return;
+  const volume = sinkBox(e.sink, e.rail.airSpeed);
+  e.assembly.volume += volume;
+  e.assembly.mass += sinkMass(volume);
+  e.assembly.cost += sinkCost(volume);
+}

@@ -1,0 +1,119 @@
+/** What can be said of a sheet before any search: derived facts, which architectures can serve it, the baseline, cautions. */
+import { cautionsOf, NOT_COVERED } from './cautions.ts';
+import type { Outcome } from './outcome.ts';
+import { good } from './outcome.ts';
+import type { PartsTables } from './parts/tables.ts';
+import { createRailProblem } from './problem.ts';
+import { formatQuantity } from './quantity/index.ts';
+import type { Architecture, Rail } from './rail/rail.ts';
+import { stageOf } from './stages/list.ts';
+
+/** A named line of text. */
+export interface Fact {
+  readonly name: string;
+  readonly text: string;
+}
+
+/** Whether an architecture can serve the rail, and why not. */
+export interface ArchitectureVerdict {
+  readonly name: Architecture;
+  readonly possible: boolean;
+  /** Duty range where it can; the reason where it cannot. */
+  readonly reason: string;
+}
+
+export interface RailExplanation {
+  readonly facts: readonly Fact[];
+  readonly architectures: readonly ArchitectureVerdict[];
+  /** The series regulator that the converter must beat: efficiency Vo/Vi and loss at full load, nominal input. */
+  readonly baseline: { readonly efficiency: number; readonly loss: number };
+  /** Number of designs in the space (frequency at three digits). */
+  readonly spaceSize: number;
+  readonly cautions: readonly string[];
+  readonly notCovered: readonly string[];
+}
+
+/** Explains `rail` over `tables`; the findings of a rail that no design can serve come back as they are. */
+export function explainRail(rail: Rail, tables: PartsTables): Outcome<RailExplanation> {
+  const problem = createRailProblem(rail, tables);
+  if (!problem.ok) return problem;
+  const efficiency = rail.output.nominal / rail.input.nominal;
+  const power = rail.output.nominal * rail.output.current;
+  return good({
+    facts: facts(rail),
+    architectures: rail.search.architectures.map((name) => verdict(rail, name)),
+    baseline: { efficiency, loss: power * (1 / efficiency - 1) },
+    spaceSize: spaceSize(problem.value.genes),
+    cautions: cautionsOf(rail),
+    notCovered: NOT_COVERED,
+  });
+}
+
+function facts(rail: Rail): Fact[] {
+  const power = rail.output.nominal * rail.output.current;
+  const ratio = (vi: number, vo: number): string => (vi / vo).toPrecision(3);
+  const list: Fact[] = [
+    { name: 'full-load power', text: formatQuantity(power, 'W') },
+    {
+      name: 'step-down ratio',
+      text: `${ratio(rail.input.minimum, rail.output.maximum)} to ${ratio(rail.input.maximum, rail.output.minimum)}`,
+    },
+    {
+      name: 'full-load input current at minimum input, without loss',
+      text: formatQuantity((rail.output.maximum * rail.output.current) / rail.input.minimum, 'A'),
+    },
+    { name: 'mean load of the profile', text: `${(meanLoad(rail) * 100).toPrecision(3)} %` },
+  ];
+  const { frequency } = rail.search;
+  const shortest = rail.output.minimum / (rail.input.maximum * frequency.maximum);
+  list.push({
+    name: 'on-time of a plain buck at maximum input and the highest frequency searched',
+    text: formatQuantity(shortest, 's'),
+  });
+  if (rail.step !== undefined) {
+    list.push({
+      name: 'capacitance that would carry the load step alone for one period of the lowest frequency searched',
+      text: formatQuantity(rail.step.current / (rail.step.deviation * frequency.minimum), 'F'),
+    });
+  }
+  return list;
+}
+
+function meanLoad(rail: Rail): number {
+  return rail.profile.reduce((sum, point) => sum + point.share * Math.abs(point.fraction), 0);
+}
+
+function verdict(rail: Rail, name: Architecture): ArchitectureVerdict {
+  const stage = stageOf(name);
+  if (stage === undefined) return { name, possible: false, reason: 'this architecture is not modelled yet' };
+  const refusal = stage.refusal(rail);
+  if (refusal !== undefined) return { name, possible: false, reason: refusal };
+  const low = stage.idealDuty(rail.input.maximum, rail.output.minimum);
+  const high = stage.idealDuty(rail.input.minimum, rail.output.maximum);
+  return { name, possible: true, reason: `duty ${(low * 100).toPrecision(3)} % to ${(high * 100).toPrecision(3)} %` };
+}
+
+function spaceSize(genes: readonly { kind: string; low: number; high: number; name: string }[]): number {
+  let size = 1;
+  for (const gene of genes) {
+    if (gene.name === 'inductance') continue;
+    if (gene.name === 'frequency') size *= threeDigitValues(gene.low, gene.high);
+    else size *= gene.high - gene.low + 1;
+  }
+  return size;
+}
+
+/** How many three-digit values lie between two frequencies. */
+function threeDigitValues(low: number, high: number): number {
+  let count = 1;
+  let decade = 1;
+  while (decade * 1000 <= low) decade *= 10;
+  for (let value = low; value < high; ) {
+    const step = decade;
+    const end = Math.min(high, decade * 1000);
+    count += Math.floor((end - value) / step);
+    value = end;
+    decade *= 10;
+  }
+  return count;
+}

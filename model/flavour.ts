@@ -1,0 +1,108 @@
+/**
+ * Values of one design under one assumption: usual (rows as printed, at bias) or worst (inductance and capacitance low,
+ * resistances high, phases unequal). Filled once a design; every operating point then reads it.
+ */
+import {
+  type Bank,
+  ceramicCapacitance,
+  ceramicWorstFactor,
+  createBank,
+  setGroup1,
+  setGroup2,
+} from './capacitors/index.ts';
+import type { Design } from './design.ts';
+import type { Bulk } from './parts/bulk.ts';
+import type { Ceramic } from './parts/ceramic.ts';
+import type { Rail } from './rail/rail.ts';
+
+/** Hours of service after which ceramic ageing is judged: about ten years. */
+const AGED_HOURS = 1e5;
+/** Most copies of a phase. */
+const PHASES = 16;
+
+export class Flavour {
+  readonly worst: boolean;
+  /** Zero-bias inductance of one choke, H. */
+  inductance = 0.5;
+  /** Factor on on-resistances. */
+  resistanceScale = 1.5;
+  readonly output: Bank = createBank();
+  readonly input: Bank = createBank();
+  /** Ripple of each phase over that of the phase with the lowest inductance; all 1 in the usual flavour. */
+  readonly scales = new Float64Array(PHASES).fill(1);
+
+  constructor(worst: boolean) {
+    this.worst = worst;
+  }
+}
+
+/** Fills `flavour` for `design`. */
+export function prepareFlavour(flavour: Flavour, design: Design, rail: Rail): void {
+  const low = flavour.worst ? Math.max(rail.tolerances.inductance, design.inductor.tolerance) : 0;
+  flavour.inductance = design.inductance * (1 - low);
+  flavour.resistanceScale = flavour.worst ? 1 + rail.tolerances.onResistance : 1;
+  spreadPhases(flavour, design.phases, low);
+  bank(
+    flavour,
+    flavour.output,
+    rail,
+    rail.output.nominal,
+    design.outputCeramic,
+    design.outputCeramicCount,
+    design.outputBulk,
+    design.outputBulkCount,
+  );
+  bank(
+    flavour,
+    flavour.input,
+    rail,
+    rail.input.nominal,
+    design.inputCeramic,
+    design.inputCeramicCount,
+    design.inputBulk,
+    design.inputBulkCount,
+  );
+}
+
+/**
+ * Half the phases at the low end of the inductance's tolerance and half at the high end, side by side: the arrangement that
+ * leaves the lowest frequency uncancelled.
+ */
+function spreadPhases(flavour: Flavour, phases: number, low: number): void {
+  const high = (1 - low) / (1 + low);
+  for (let i = 0; i < phases; i++) flavour.scales[i] = 2 * i < phases ? 1 : high;
+}
+
+function bank(
+  flavour: Flavour,
+  into: Bank,
+  rail: Rail,
+  volts: number,
+  ceramic: Ceramic,
+  ceramicCount: number,
+  bulk: Bulk | undefined,
+  bulkCount: number,
+): void {
+  const biased = ceramicCapacitance(
+    ceramic.capacitance,
+    ceramic.smallSignalFactor,
+    ceramic.halvingVoltage,
+    ceramic.biasExponent,
+    volts,
+  );
+  const factor = flavour.worst
+    ? ceramicWorstFactor(
+        Math.max(rail.tolerances.capacitance, ceramic.tolerance),
+        ceramic.temperatureDrop,
+        ceramic.ageing,
+        AGED_HOURS,
+      )
+    : 1;
+  setGroup1(into, ceramicCount, biased * factor, ceramic.seriesResistance, ceramic.seriesInductance);
+  if (bulk === undefined) {
+    setGroup2(into, 0, 0, 0, 0);
+    return;
+  }
+  const drop = flavour.worst ? Math.max(rail.tolerances.capacitance, bulk.tolerance) : 0;
+  setGroup2(into, bulkCount, bulk.capacitance * (1 - drop), bulk.seriesResistance, bulk.seriesInductance);
+}

@@ -1,0 +1,120 @@
+/** The genes of a converter design: one fixed list, with the place of each by name. */
+import type { Gene } from '../optimizer/problem.ts';
+import type { Catalogue } from './catalogue.ts';
+import type { Part } from './parts/common.ts';
+import type { Rail } from './rail/rail.ts';
+
+/** Order of the genes in a gene vector. */
+export const GENE_NAMES = [
+  'architecture',
+  'phases',
+  'frequency',
+  'inductance',
+  'inductorSeries',
+  'highSwitch',
+  'highParallel',
+  'lowSwitch',
+  'lowParallel',
+  'diode',
+  'controller',
+  'outputCeramic',
+  'outputCeramicCount',
+  'outputBulk',
+  'outputBulkCount',
+  'inputCeramic',
+  'inputCeramicCount',
+  'inputBulk',
+  'inputBulkCount',
+] as const;
+export type GeneName = (typeof GENE_NAMES)[number];
+
+/** Place of each gene in a gene vector. */
+export const GENE = Object.fromEntries(GENE_NAMES.map((name, index) => [name, index])) as Readonly<
+  Record<GeneName, number>
+>;
+
+/** Genes whose value names a part (or an architecture), so that a record holds the name and not the number. */
+export const NAMED_GENES: readonly GeneName[] = [
+  'architecture',
+  'inductorSeries',
+  'highSwitch',
+  'lowSwitch',
+  'diode',
+  'controller',
+  'outputCeramic',
+  'outputBulk',
+  'inputCeramic',
+  'inputBulk',
+];
+
+/** Genes with a number that a person reads, in the order of a record. */
+export const NUMERIC_GENES: readonly GeneName[] = GENE_NAMES.filter((name) => !NAMED_GENES.includes(name));
+
+/** SI unit of each numeric gene that is not a count. */
+export const GENE_UNITS: Readonly<Partial<Record<GeneName, string>>> = { frequency: 'Hz', inductance: 'H' };
+
+/** The genes of `rail`'s space over the options of `catalogue`, in the order of `GENE_NAMES`. */
+export function createGenes(rail: Rail, catalogue: Catalogue): readonly Gene[] {
+  const { search } = rail;
+  const ordered = (name: GeneName, rows: readonly { name: string }[]): Gene => ({
+    name,
+    unit: '',
+    kind: 'whole',
+    low: 0,
+    high: Math.max(0, rows.length - 1),
+    options: rows.map((row) => row.name),
+  });
+  const count = (name: GeneName, low: number, high: number): Gene => ({ name, unit: '', kind: 'whole', low, high });
+  const genes: Record<GeneName, Gene> = {
+    architecture: {
+      name: 'architecture',
+      unit: '',
+      kind: 'choice',
+      low: 0,
+      high: search.architectures.length - 1,
+      options: search.architectures,
+    },
+    phases: count('phases', search.phases.minimum, search.phases.maximum),
+    frequency: {
+      name: 'frequency',
+      unit: 'Hz',
+      kind: 'log',
+      low: search.frequency.minimum,
+      high: search.frequency.maximum,
+    },
+    inductance: { name: 'inductance', unit: 'H', kind: 'log', ...inductanceSpan(catalogue) },
+    inductorSeries: ordered('inductorSeries', catalogue.inductorSeries),
+    highSwitch: ordered('highSwitch', catalogue.highSwitches),
+    highParallel: count('highParallel', 1, search.parallelSwitches),
+    lowSwitch: ordered('lowSwitch', catalogue.lowSwitches),
+    lowParallel: count('lowParallel', 1, search.parallelSwitches),
+    diode: ordered('diode', catalogue.diodes),
+    controller: ordered('controller', catalogue.controllers),
+    outputCeramic: ordered('outputCeramic', catalogue.outputCeramics),
+    outputCeramicCount: count('outputCeramicCount', 1, search.ceramics),
+    outputBulk: ordered('outputBulk', catalogue.outputBulks),
+    outputBulkCount: count('outputBulkCount', 0, catalogue.outputBulks.length > 0 ? search.bulks : 0),
+    inputCeramic: ordered('inputCeramic', catalogue.inputCeramics),
+    inputCeramicCount: count('inputCeramicCount', 1, search.ceramics),
+    inputBulk: ordered('inputBulk', catalogue.inputBulks),
+    inputBulkCount: count('inputBulkCount', 0, catalogue.inputBulks.length > 0 ? search.bulks : 0),
+  };
+  return GENE_NAMES.map((name) => genes[name]);
+}
+
+function inductanceSpan(catalogue: Catalogue): { low: number; high: number } {
+  let low = Number.MAX_VALUE;
+  let high = 0;
+  for (const series of catalogue.inductorSeries) {
+    for (const row of series.rows) {
+      low = Math.min(low, row.inductance);
+      high = Math.max(high, row.inductance);
+    }
+  }
+  return { low, high };
+}
+
+/** Name of the part that a gene's value stands for. */
+export function optionName(options: readonly Part[], value: number): string {
+  return options[value]?.name ?? '';
+}

@@ -1,0 +1,84 @@
+/**
+ * Temperatures of one operating point. Losses rise with temperature and temperatures with losses; where every loss is a
+ * straight line in its own temperature the whole balance is a set of linear equations, so it is solved, not iterated: no
+ * convergence to wait for, and thermal runaway shows as a denominator that reaches zero.
+ */
+
+/** Parts that have a junction or hot spot of their own. */
+export const HOT = { high: 0, low: 1, inductor: 2 } as const;
+/** How many there are. */
+export const HOT_PARTS = 3;
+/** Highest board temperature, K: 105 °C, the usual rating of glass-epoxy board material (common practice, no source). */
+export const BOARD_MAXIMUM = 378.15;
+/** Kelvin by which a sink is sized below the limit, so that rounding never turns a kept limit into a missed one. */
+const SINK_RESERVE = 1;
+/** Least denominator: beyond it the balance has run away, and figures are only kept finite. */
+const LEAST = 0.02;
+
+/** The balance of one point: what goes in and what comes out. Reused. */
+export class HeatBalance {
+  /** Loss of each hot part at zero kelvin of its straight line, W, all its pieces together. */
+  readonly constant = new Float64Array(HOT_PARTS);
+  /** Slope of the loss, W/K. */
+  readonly slope = new Float64Array(HOT_PARTS);
+  /** Part to board, K/W, all its pieces together. */
+  readonly resistance = new Float64Array(HOT_PARTS);
+  /** Highest allowed temperature, K. */
+  readonly allowed = new Float64Array(HOT_PARTS);
+  /** Loss that heats the board alone, W, and its slope with board temperature, W/K. */
+  boardConstant = 0.5;
+  boardSlope = 0.5;
+  /** K. */
+  ambient = 300.5;
+  /** Board and sink to ambient, W/K. */
+  conductance = 0.5;
+
+  /** K. */
+  readonly temperature = new Float64Array(HOT_PARTS);
+  boardTemperature = 300.5;
+  /** W, everything. */
+  total = 0.5;
+  /** Largest loop gain of heating, 0 … : at 1 the balance runs away. */
+  runaway = 0.5;
+  /** Conductance of a heat sink that would bring every part within its limit, W/K; 0 where none is needed. */
+  sinkNeeded = 0.5;
+}
+
+/** Solves `h` in place. */
+export function solveHeat(h: HeatBalance): void {
+  let constant = h.boardConstant;
+  let slope = h.boardSlope;
+  let runaway = 0;
+  let boardAllowed = BOARD_MAXIMUM;
+  for (let i = 0; i < HOT_PARTS; i++) {
+    const gain = h.resistance[i] * h.slope[i];
+    if (gain > runaway) runaway = gain;
+    const rest = gain < 1 - LEAST ? 1 - gain : LEAST;
+    constant += h.constant[i] / rest;
+    slope += h.slope[i] / rest;
+    const most = h.allowed[i] * rest - h.resistance[i] * h.constant[i];
+    if (most < boardAllowed) boardAllowed = most;
+  }
+  const gain = slope / h.conductance;
+  if (gain > runaway) runaway = gain;
+  const rest = gain < 1 - LEAST ? 1 - gain : LEAST;
+  h.runaway = runaway;
+  h.boardTemperature = (h.ambient + constant / h.conductance) / rest;
+  h.total = constant + slope * h.boardTemperature;
+  for (let i = 0; i < HOT_PARTS; i++) {
+    const own = h.resistance[i] * h.slope[i];
+    const left = own < 1 - LEAST ? 1 - own : LEAST;
+    const watts = (h.constant[i] + h.slope[i] * h.boardTemperature) / left;
+    h.temperature[i] = h.boardTemperature + h.resistance[i] * watts;
+  }
+  h.sinkNeeded = sinkFor(h, constant, slope, boardAllowed);
+}
+
+function sinkFor(h: HeatBalance, constant: number, slope: number, boardAllowed: number): number {
+  if (h.boardTemperature <= boardAllowed) return 0;
+  const target = boardAllowed - SINK_RESERVE;
+  const head = target - h.ambient;
+  // Where a part is too hot even on a board at ambient, no sink helps: none is sized, and the part's own limit tells.
+  if (head <= 1) return 0;
+  return (constant + slope * target) / head - h.conductance;
+}

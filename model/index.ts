@@ -1,0 +1,25 @@
+/** The model's face: sheet and parts in, space and assessments out. */
+export type {
+  Assessment,
+  Corner,
+  DesignRecord,
+  LimitFigure,
+  LossItem,
+  Mode,
+  ObjectiveFigure,
+  PartUse,
+  PointReport,
+  Share,
+  Trace,
+} from './assessment.ts';
+export { cautionsOf, NOT_COVERED, STANDING_CAUTION, TOUCH_VOLTAGE } from './cautions.ts';
+export { type ArchitectureVerdict, explainRail, type Fact, type RailExplanation } from './explain.ts';
+export { type FrontDesign, type FrontFile, frontCsv, frontFile, quoteCell } from './front-file.ts';
+export { bad, describeFinding, type Finding, good, type Outcome } from './outcome.ts';
+export type { PartKind, PartsTables } from './parts/tables.ts';
+export { createRailProblem, type Judgement, type RailProblem } from './problem.ts';
+export * from './quantity/index.ts';
+export type { Architecture, ObjectiveName, Rail } from './rail/rail.ts';
+export { ARCHITECTURES, OBJECTIVES } from './rail/rail.ts';
+export { readSpec, recordOfSpec, SPEC_SCHEMA, type Spec, writeSpec } from './spec.ts';
+export { MODEL_VERSION } from './version.ts';

@@ -1,0 +1,80 @@
+/** Limits that depend on the choice of parts alone: ratings, controller abilities, avoided bands, size, mass, cost. */
+import type { Evaluator } from '../evaluate.ts';
+import type { Switch } from '../parts/switch.ts';
+import type { AvoidedBand } from '../rail/rail.ts';
+
+/** Share of the drive voltage a row is specified at that a controller must at least give. */
+const DRIVE_SHARE = 0.9;
+
+/** Notes every limit of the construction. */
+export function judgeConstruction(e: Evaluator): void {
+  judgeVoltages(e);
+  judgeController(e);
+  judgeBands(e);
+  judgeSize(e);
+}
+
+function judgeVoltages(e: Evaluator): void {
+  const { book, places, design, rail } = e;
+  const share = rail.derating.switchVoltage;
+  const high = design.high.voltageRating * share;
+  book.judge(places.highVoltage, rail.input.maximum, high, high, -1);
+  const low = (design.diode === undefined ? design.low : design.diode).voltageRating * share;
+  book.judge(places.lowVoltage, rail.input.maximum, low, low, -1);
+  judgeGate(e, design.high);
+  if (design.diode === undefined) judgeGate(e, design.low);
+}
+
+function judgeGate(e: Evaluator, row: Switch): void {
+  const drive = e.design.controller.driveVoltage;
+  e.book.judge(e.places.gateVoltage, drive, row.gateRating, row.gateRating, -1);
+  const least = row.driveVoltage * DRIVE_SHARE;
+  e.book.judge(e.places.driveVoltage, drive, least, least, -1);
+}
+
+function judgeController(e: Evaluator): void {
+  const { book, places, design, rail } = e;
+  const { controller } = design;
+  book.judge(places.phases, design.phases, controller.phasesMaximum, controller.phasesMaximum, -1);
+  const { oscillator } = rail.tolerances;
+  const highest = design.frequency * (1 + oscillator);
+  book.judge(places.controllerFrequency, highest, controller.frequencyMaximum, controller.frequencyMaximum, -1);
+  const lowest = design.frequency * (1 - oscillator);
+  book.judge(places.controllerLowestFrequency, lowest, controller.frequencyMinimum, controller.frequencyMinimum, -1);
+  book.judge(places.controllerAbilities, controller.stages.includes('buck') ? 1 : 0, 1, 1, -1);
+}
+
+function judgeBands(e: Evaluator): void {
+  const { book, places, design, rail } = e;
+  const { oscillator } = rail.tolerances;
+  for (const band of rail.avoid) {
+    const clear = bandClearance(design.frequency, oscillator, band);
+    book.judge(places.avoidedBands, clear, 0, 1, -1);
+  }
+}
+
+/**
+ * Smallest distance of the frequency (and its harmonics, as the band asks) to the band as a fraction of the frequency;
+ * below 0 inside. `oscillator` is the tolerance of the frequency, a fraction.
+ */
+export function bandClearance(frequency: number, oscillator: number, band: AvoidedBand): number {
+  let least = Number.MAX_VALUE;
+  for (let k = 1; k <= band.harmonics; k++) {
+    const below = band.from / (k * frequency) - (1 + oscillator);
+    const above = 1 - oscillator - band.to / (k * frequency);
+    least = Math.min(least, Math.max(below, above));
+  }
+  return least;
+}
+
+function judgeSize(e: Evaluator): void {
+  const { book, places, assembly } = e;
+  const { limits } = e.rail;
+  if (limits.height !== undefined) book.judge(places.height, assembly.height, limits.height, limits.height, -1);
+  if (limits.boardArea !== undefined) {
+    book.judge(places.boardArea, assembly.boardArea, limits.boardArea, limits.boardArea, -1);
+  }
+  if (limits.volume !== undefined) book.judge(places.volume, assembly.volume, limits.volume, limits.volume, -1);
+  if (limits.mass !== undefined) book.judge(places.mass, assembly.mass, limits.mass, limits.mass, -1);
+  if (limits.cost !== undefined) book.judge(places.cost, assembly.cost, limits.cost, limits.cost, -1);
+}

@@ -1,0 +1,76 @@
+/** Every limit that can bind, in one list: name, unit, sense, and when a rail has it. */
+import type { Rail } from '../rail/rail.ts';
+import type { LimitDefinition } from './book.ts';
+
+interface Offer extends LimitDefinition {
+  readonly when: (rail: Rail) => boolean;
+}
+
+const always = (): boolean => true;
+const most = (name: string, unit: string, when: (rail: Rail) => boolean = always): Offer => ({
+  name,
+  unit,
+  sense: 'most',
+  when,
+});
+const least = (name: string, unit: string, when: (rail: Rail) => boolean = always): Offer => ({
+  name,
+  unit,
+  sense: 'least',
+  when,
+});
+
+const OFFERS: readonly Offer[] = [
+  most('outputRipple', 'V'),
+  most('inputRipple', 'V', (rail) => rail.input.ripple !== undefined),
+  most('loadStep', 'V', (rail) => rail.step !== undefined),
+  most('highJunction', 'K'),
+  most('lowJunction', 'K'),
+  most('inductorTemperature', 'K'),
+  most('boardTemperature', 'K'),
+  most('thermalRunaway', ''),
+  most('saturation', 'A'),
+  most('switchCurrent', 'A'),
+  least('minimumOnTime', 's'),
+  least('minimumOffTime', 's'),
+  most('outputCeramicCurrent', 'A'),
+  most('outputBulkCurrent', 'A'),
+  most('inputCeramicCurrent', 'A'),
+  most('inputBulkCurrent', 'A'),
+  most('bulkTemperature', 'K'),
+  most('highVoltage', 'V'),
+  most('lowVoltage', 'V'),
+  most('gateVoltage', 'V'),
+  least('driveVoltage', 'V'),
+  most('phases', ''),
+  most('controllerFrequency', 'Hz'),
+  least('controllerLowestFrequency', 'Hz'),
+  least('controllerAbilities', ''),
+  least('avoidedBands', '', (rail) => rail.avoid.length > 0),
+  most('height', 'm', (rail) => rail.limits.height !== undefined),
+  most('boardArea', 'm²', (rail) => rail.limits.boardArea !== undefined),
+  most('volume', 'm³', (rail) => rail.limits.volume !== undefined),
+  most('mass', 'kg', (rail) => rail.limits.mass !== undefined),
+  most('cost', 'currency', (rail) => rail.limits.cost !== undefined),
+  most('noLoadPower', 'W', (rail) => rail.limits.noLoadPower !== undefined),
+];
+
+/** The limits of `rail`, always in the same order; one for each load with a least efficiency comes last. */
+export function limitsOf(rail: Rail): readonly LimitDefinition[] {
+  const listed = OFFERS.filter((offer) => offer.when(rail)).map(({ name, unit, sense }) => ({
+    name,
+    unit: unit === 'currency' ? rail.currency : unit,
+    sense,
+  }));
+  const efficiency = rail.limits.efficiency.map((limit) => ({
+    name: efficiencyLimitName(limit.load),
+    unit: '',
+    sense: 'least' as const,
+  }));
+  return [...listed, ...efficiency];
+}
+
+/** Name of the efficiency limit at a load fraction: `efficiency@100%`. */
+export function efficiencyLimitName(load: number): string {
+  return `efficiency@${Math.round(load * 1000) / 10}%`;
+}

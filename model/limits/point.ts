@@ -1,0 +1,135 @@
+/** Limits that depend on the operating point: ripple, load step, heat, saturation, on-time, capacitor current. */
+import { createBank } from '../capacitors/index.ts';
+import type { Design } from '../design.ts';
+import type { Evaluator } from '../evaluate.ts';
+import { BOARD_MAXIMUM, HOT } from '../heat-balance.ts';
+import type { Bulk } from '../parts/bulk.ts';
+import type { PlannedPoint } from '../plan.ts';
+import type { StageState } from '../stages/state.ts';
+import { stepExcursionOf } from '../step-response.ts';
+
+/** Largest loop gain of heating that is still accepted; at 1 the temperature has no end. */
+const RUNAWAY_MAXIMUM = 0.9;
+
+/** Reused from point to point. */
+const stepCase = { inputVoltage: 0.5, outputVoltage: 0.5, inductance: 0.5, bank: createBank(), ripple: 0.5 };
+
+/** Notes every limit at the worst point that the solver holds; `index` names it in the report. */
+export function judgePoint(e: Evaluator, planned: PlannedPoint, index: number): void {
+  judgeHeat(e, index);
+  judgeCurrents(e, index);
+  judgeTimes(e, index);
+  judgeRippleAt(e, index);
+  judgeCapacitors(e, index);
+  if (planned.load === 1) judgeStep(e, planned, index);
+}
+
+/** Notes ripple and capacitor limits of a line between the corners. */
+export function judgeRipple(e: Evaluator): void {
+  judgeRippleAt(e, -1);
+  judgeCapacitors(e, -1);
+}
+
+function judgeHeat(e: Evaluator, index: number): void {
+  const { book, places } = e;
+  const { heat } = e.solver;
+  judgeTemperature(e, places.highJunction, heat.temperature[HOT.high], heat.allowed[HOT.high], index);
+  judgeTemperature(e, places.lowJunction, heat.temperature[HOT.low], heat.allowed[HOT.low], index);
+  judgeTemperature(e, places.inductorTemperature, heat.temperature[HOT.inductor], heat.allowed[HOT.inductor], index);
+  judgeTemperature(e, places.boardTemperature, heat.boardTemperature, BOARD_MAXIMUM, index);
+  book.judge(places.thermalRunaway, heat.runaway, RUNAWAY_MAXIMUM, RUNAWAY_MAXIMUM, index);
+}
+
+/** A temperature is missed by a fraction of the rise that was allowed. */
+function judgeTemperature(e: Evaluator, place: number, value: number, allowed: number, index: number): void {
+  e.book.judge(place, value, allowed, Math.max(1, allowed - e.rail.ambient), index);
+}
+
+/** Peak of one phase with unequal sharing, A, signless. */
+function phasePeak(state: StageState, design: Design): number {
+  const sharing = design.phases > 1 ? Math.abs(state.meanCurrent) * design.controller.sharingError : 0;
+  const jitter = (state.inputVoltage * design.controller.jitter) / state.effectiveInductance;
+  return Math.max(Math.abs(state.peakCurrent), Math.abs(state.valleyCurrent)) + sharing + jitter;
+}
+
+function judgeCurrents(e: Evaluator, index: number): void {
+  const { design, book, places } = e;
+  const peak = phasePeak(e.solver.state, design);
+  const limited = peak * design.controller.currentLimitSpread;
+  book.judge(places.saturation, limited, design.inductor.saturationCurrent, design.inductor.saturationCurrent, index);
+  const { high, low, diode } = design;
+  book.judge(places.switchCurrent, peak / design.highParallel, high.currentRating, high.currentRating, index);
+  if (diode === undefined) {
+    book.judge(places.switchCurrent, peak / design.lowParallel, low.currentRating, low.currentRating, index);
+  } else {
+    book.judge(places.switchCurrent, e.solver.state.lowMean, diode.currentRating, diode.currentRating, index);
+  }
+}
+
+function judgeTimes(e: Evaluator, index: number): void {
+  const { design, book, places, rail } = e;
+  const { controller } = design;
+  const period = 1 / (design.frequency * (1 + rail.tolerances.oscillator));
+  const on = e.solver.state.dutyCycle * period;
+  if (controller.minimumOnTime > 0) {
+    book.judge(places.minimumOnTime, on, controller.minimumOnTime, controller.minimumOnTime, index);
+  }
+  if (controller.minimumOffTime > 0) {
+    book.judge(places.minimumOffTime, period - on, controller.minimumOffTime, controller.minimumOffTime, index);
+  }
+}
+
+function judgeRippleAt(e: Evaluator, index: number): void {
+  const { book, places, rail, solver } = e;
+  book.judge(places.outputRipple, solver.outputRipple.ripple, rail.output.ripple, rail.output.ripple, index);
+  const allowed = rail.input.ripple;
+  if (allowed !== undefined) book.judge(places.inputRipple, solver.inputRipple.ripple, allowed, allowed, index);
+}
+
+function judgeCapacitors(e: Evaluator, index: number): void {
+  const { book, places, design, solver } = e;
+  const output = solver.outputRipple;
+  const input = solver.inputRipple;
+  const { outputCeramic, inputCeramic } = design;
+  const out = Math.sqrt(output.meanSquare1) / design.outputCeramicCount;
+  book.judge(places.outputCeramicCurrent, out, outputCeramic.rippleRating, outputCeramic.rippleRating, index);
+  const into = Math.sqrt(input.meanSquare1) / design.inputCeramicCount;
+  book.judge(places.inputCeramicCurrent, into, inputCeramic.rippleRating, inputCeramic.rippleRating, index);
+  judgeBulk(e, places.outputBulkCurrent, design.outputBulk, design.outputBulkCount, output.meanSquare2, index);
+  judgeBulk(e, places.inputBulkCurrent, design.inputBulk, design.inputBulkCount, input.meanSquare2, index);
+}
+
+function judgeBulk(
+  e: Evaluator,
+  place: number,
+  bulk: Bulk | undefined,
+  count: number,
+  square: number,
+  index: number,
+): void {
+  if (bulk === undefined) return;
+  const each = square / (count * count);
+  const allowed = bulk.rippleRating * e.rail.derating.rippleCurrent;
+  e.book.judge(place, Math.sqrt(each), allowed, allowed, index);
+  const rise = (bulk.ratedRise * each) / (bulk.rippleRating * bulk.rippleRating);
+  const temperature = e.solver.heat.boardTemperature + rise;
+  judgeTemperature(
+    e,
+    e.places.bulkTemperature,
+    temperature,
+    bulk.maximumTemperature - e.rail.derating.temperature,
+    index,
+  );
+}
+
+function judgeStep(e: Evaluator, planned: PlannedPoint, index: number): void {
+  const { rail, book, places, design, worst } = e;
+  if (rail.step === undefined) return;
+  stepCase.inputVoltage = planned.inputVoltage;
+  stepCase.outputVoltage = planned.outputVoltage;
+  stepCase.inductance = 2 * design.inductance - worst.inductance;
+  stepCase.bank = worst.output;
+  stepCase.ripple = e.solver.outputRipple.ripple;
+  const excursion = stepExcursionOf(design, rail, stepCase);
+  book.judge(places.loadStep, excursion, rail.step.deviation, rail.step.deviation, index);
+}

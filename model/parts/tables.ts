@@ -1,0 +1,20 @@
+/** All parts that a rail may choose from, by kind. */
+import type { Bulk } from './bulk.ts';
+import type { Ceramic } from './ceramic.ts';
+import type { Controller } from './controller.ts';
+import type { Diode } from './diode.ts';
+import type { Inductor } from './inductor.ts';
+import type { Switch } from './switch.ts';
+
+/** Rows of every kind; names are unique over all of them. */
+export interface PartsTables {
+  readonly switches: readonly Switch[];
+  readonly diodes: readonly Diode[];
+  readonly inductors: readonly Inductor[];
+  readonly ceramics: readonly Ceramic[];
+  readonly bulks: readonly Bulk[];
+  readonly controllers: readonly Controller[];
+}
+
+/** A kind of parts table. */
+export type PartKind = keyof PartsTables;

@@ -1,0 +1,346 @@
+/**
+ * One operating point of one design, solved: waveforms, losses, temperatures, ripple. The one place where the physics of
+ * all parts comes together; the search's fast path and the full assessment both go through here.
+ */
+import { powAt } from '../optimizer/maths/index.ts';
+import { type BankRipple, bankRipple, createBankRipple } from './capacitors/index.ts';
+import type { Design } from './design.ts';
+import { addEdgeLosses } from './edges.ts';
+import type { Flavour } from './flavour.ts';
+import { HeatBalance, HOT, solveHeat } from './heat-balance.ts';
+import { LOSS_SLOTS, SLOT, sumSlots } from './ledger.ts';
+import { COPPER_TEMPCO, RIPPLE_HARMONICS, stockedCoreLossAt, triangleLoss } from './magnetics/index.ts';
+import type { PlannedPoint } from './plan.ts';
+import type { Rail } from './rail/rail.ts';
+import { StageState } from './stages/state.ts';
+import { diodeLeakageLoss, onResistance, RESISTANCE_REFERENCE } from './switches/index.ts';
+import { createWaveform, sumShifted, sumUnequal } from './waveform/index.ts';
+
+/** Rounds of temperature → resistance → duty → loss → temperature. The heat balance itself is exact in each. */
+const ROUNDS = 2;
+/** Rise over ambient from which the first round starts, K. */
+const FIRST_RISE = 30;
+/** Resistance of the board copper in one phase's path at 20 °C, Ω: one square of 70 µm copper, 1.7241e-8 Ω·m / 70 µm. */
+const BOARD_SQUARE = 2.463e-4;
+/** Temperature coefficient of copper taken at 25 °C, where inductor rows state their resistance, 1/K. */
+const WINDING_TEMPCO = COPPER_TEMPCO / (1 + 5 * COPPER_TEMPCO);
+/** Load under which a blocking stage is solved as if it carried this share of full load: its pulses still come. */
+const LEAST_LOAD = 1e-6;
+
+const watts = new Float64Array(2);
+const scratch = new Float64Array(2);
+
+/** Everything one operating point yields. Reused from point to point. */
+export class PointSolver {
+  readonly rail: Rail;
+  readonly state = new StageState();
+  readonly heat = new HeatBalance();
+  readonly ledger = new Float64Array(LOSS_SLOTS.length);
+  /** Summed choke current and summed draw from the input. */
+  readonly summed = createWaveform(64);
+  readonly drawn = createWaveform(64);
+  readonly outputRipple: BankRipple = createBankRipple();
+  readonly inputRipple: BankRipple = createBankRipple();
+  /** W, all losses. */
+  loss = 0.5;
+  /** W, delivered to the load; negative in reverse flow. */
+  outputPower = 0.5;
+
+  constructor(rail: Rail) {
+    this.rail = rail;
+  }
+}
+
+/**
+ * Solves `planned` for `design` under `flavour` with `phases` active phases; `boardConductance` is that of board and sink
+ * to ambient, W/K. Results stand in `solver`.
+ */
+export function solvePoint(
+  solver: PointSolver,
+  design: Design,
+  flavour: Flavour,
+  planned: PlannedPoint,
+  phases: number,
+  boardConductance: number,
+): void {
+  const { state, heat, rail } = solver;
+  ask(solver, design, flavour, planned, phases);
+  heat.ambient = rail.ambient;
+  heat.conductance = boardConductance;
+  heatPaths(solver, design);
+  for (let round = 0; round < ROUNDS; round++) {
+    state.round = round;
+    resistances(state, design);
+    design.stage.solve(design, state);
+    solver.ledger.fill(0);
+    addEdgeLosses(design, state, solver.ledger);
+    addInductorLosses(design, state, solver.ledger);
+    addController(solver, design);
+    if (round === ROUNDS - 1) addCapacitors(solver, flavour);
+    balance(solver, design);
+  }
+  writeResistiveLosses(solver, design);
+  solver.outputPower = planned.outputVoltage * planned.load * rail.output.current;
+  solver.loss = sumSlots(solver.ledger, 0, solver.ledger.length);
+}
+
+/** Summed ripple and capacitor stress alone, at a line in between: no heat. The last temperatures stay in force. */
+export function solveRipple(
+  solver: PointSolver,
+  design: Design,
+  flavour: Flavour,
+  inputVoltage: number,
+  outputVoltage: number,
+): void {
+  const { state } = solver;
+  state.inputVoltage = inputVoltage;
+  state.outputVoltage = outputVoltage;
+  state.loadCurrent = solver.rail.output.current;
+  state.activePhases = design.phases;
+  state.round = 0;
+  design.stage.solve(design, state);
+  sumOutput(solver, flavour);
+  bankRipple(flavour.output, solver.summed, solver.outputRipple);
+  sumShifted(state.draw, state.activePhases, solver.drawn);
+  bankRipple(flavour.input, solver.drawn, solver.inputRipple);
+}
+
+function ask(solver: PointSolver, design: Design, flavour: Flavour, planned: PlannedPoint, phases: number): void {
+  const { state, rail } = solver;
+  const full = rail.output.current;
+  const blocking = design.stage.diode || design.emulates;
+  state.inputVoltage = planned.inputVoltage;
+  state.outputVoltage = planned.outputVoltage;
+  state.loadCurrent = planned.load * full;
+  if (blocking && Math.abs(planned.load) < LEAST_LOAD) state.loadCurrent = LEAST_LOAD * full;
+  state.activePhases = phases;
+  state.inductance = flavour.inductance;
+  state.resistanceScale = flavour.resistanceScale;
+  const guess = rail.ambient + FIRST_RISE;
+  state.highTemperature = guess;
+  state.lowTemperature = guess;
+  state.inductorTemperature = guess;
+  state.boardTemperature = guess;
+}
+
+function heatPaths(solver: PointSolver, design: Design): void {
+  const { heat, state, rail } = solver;
+  const spare = rail.derating.temperature;
+  const phases = state.activePhases;
+  heat.resistance[HOT.high] = design.high.thermalResistance / (phases * design.highParallel);
+  heat.allowed[HOT.high] = design.high.maximumJunction - spare;
+  if (design.diode !== undefined) {
+    heat.resistance[HOT.low] = design.diode.thermalResistance / phases;
+    heat.allowed[HOT.low] = design.diode.maximumJunction - spare;
+  } else {
+    heat.resistance[HOT.low] = design.low.thermalResistance / (phases * design.lowParallel);
+    heat.allowed[HOT.low] = design.low.maximumJunction - spare;
+  }
+  heat.resistance[HOT.inductor] = design.inductorThermalResistance / phases;
+  heat.allowed[HOT.inductor] = design.inductor.maximumTemperature - spare;
+}
+
+function resistances(state: StageState, design: Design): void {
+  const { high, low, diode, inductor } = design;
+  state.highResistance =
+    state.resistanceScale *
+    onResistance(
+      high.onResistance,
+      high.resistanceTempco,
+      high.dynamicFactor,
+      state.highTemperature,
+      design.highParallel,
+    );
+  state.lowResistance =
+    diode === undefined
+      ? state.resistanceScale *
+        onResistance(
+          low.onResistance,
+          low.resistanceTempco,
+          low.dynamicFactor,
+          state.lowTemperature,
+          design.lowParallel,
+        )
+      : diode.slopeResistance;
+  state.pathResistance =
+    inductor.dcResistance * (1 + WINDING_TEMPCO * (state.inductorTemperature - RESISTANCE_REFERENCE)) +
+    BOARD_SQUARE * (1 + COPPER_TEMPCO * (state.boardTemperature - 293.15));
+}
+
+/**
+ * Ac winding loss and core loss. A ripple with a pause is taken as its own triangle for the share of time that it lasts: the
+ * same as the whole triangle where the pause closes.
+ */
+function addInductorLosses(design: Design, state: StageState, ledger: Float64Array): void {
+  const { inductor, inductorAt } = design;
+  const n = state.activePhases;
+  const lasts = state.highShare + state.lowShare;
+  const share = lasts > 0 ? state.highShare / lasts : 0.5;
+  triangleLoss(
+    state.rippleCurrent,
+    share,
+    inductorAt.factors,
+    RIPPLE_HARMONICS,
+    inductorAt.x1,
+    inductorAt.layers,
+    watts,
+  );
+  const square = (state.rippleCurrent * state.rippleCurrent) / 12;
+  const resistance = inductor.dcResistance * (1 + WINDING_TEMPCO * (state.inductorTemperature - RESISTANCE_REFERENCE));
+  ledger[SLOT['inductor.windingAc']] += n * lasts * Math.max(0, watts[0] - square) * resistance;
+  stockedCoreLossAt(inductor, inductorAt.coreScale, state.rippleCurrent, share, 1 - share, watts);
+  ledger[SLOT['inductor.core']] += n * pulseShare(design, state) * watts[0];
+}
+
+/**
+ * Share of the set frequency's core loss that a ripple with a pause has: each slope burns k·(ΔI/t)^α·t, so squeezing the
+ * triangle into a share s of the period at the set frequency leaves s^(1 − α), and skipped pulses thin it out.
+ */
+function pulseShare(design: Design, state: StageState): number {
+  const skipped = state.frequency / design.frequency;
+  const lasts = (state.highShare + state.lowShare) / (skipped > 0 ? skipped : 1);
+  if (!(lasts < 1)) return skipped;
+  scratch[0] = lasts;
+  scratch[1] = 1 - design.inductor.coreFrequencyExponent;
+  powAt(scratch, 0);
+  return skipped * scratch[0];
+}
+
+function addController(solver: PointSolver, design: Design): void {
+  const { controller } = design;
+  solver.ledger[SLOT['controller.quiescent']] += solver.state.inputVoltage * controller.quiescentCurrent;
+}
+
+function addCapacitors(solver: PointSolver, flavour: Flavour): void {
+  const { state, ledger } = solver;
+  sumOutput(solver, flavour);
+  bankRipple(flavour.output, solver.summed, solver.outputRipple);
+  sumShifted(state.draw, state.activePhases, solver.drawn);
+  bankRipple(flavour.input, solver.drawn, solver.inputRipple);
+  ledger[SLOT['outputCeramic.seriesResistance']] += solver.outputRipple.meanSquare1 * flavour.output.r1;
+  ledger[SLOT['outputBulk.seriesResistance']] += solver.outputRipple.meanSquare2 * flavour.output.r2;
+  ledger[SLOT['inputCeramic.seriesResistance']] += solver.inputRipple.meanSquare1 * flavour.input.r1;
+  ledger[SLOT['inputBulk.seriesResistance']] += solver.inputRipple.meanSquare2 * flavour.input.r2;
+}
+
+function sumOutput(solver: PointSolver, flavour: Flavour): void {
+  const { state } = solver;
+  if (flavour.worst && state.activePhases > 1) {
+    sumUnequal(state.choke, state.activePhases, flavour.scales, solver.summed);
+  } else {
+    sumShifted(state.choke, state.activePhases, solver.summed);
+  }
+}
+
+/** Splits losses into constants and slopes with temperature, solves the balance, and takes over the temperatures. */
+function balance(solver: PointSolver, design: Design): void {
+  const { state, heat, ledger } = solver;
+  const n = state.activePhases;
+  resistive(
+    heat,
+    HOT.high,
+    n * state.highMeanSquare * highReference(state, design),
+    design.high.resistanceTempco,
+    RESISTANCE_REFERENCE,
+  );
+  heat.constant[HOT.high] += sumSlots(ledger, SLOT['highSwitch.conduction'], SLOT['lowSwitch.conduction']);
+  if (design.diode === undefined) {
+    resistive(
+      heat,
+      HOT.low,
+      n * state.lowMeanSquare * lowReference(state, design),
+      design.low.resistanceTempco,
+      RESISTANCE_REFERENCE,
+    );
+    heat.constant[HOT.low] += sumSlots(ledger, SLOT['lowSwitch.conduction'], SLOT['diode.conduction']);
+  } else {
+    diodeHeat(solver, design);
+  }
+  resistive(
+    heat,
+    HOT.inductor,
+    n * state.chokeMeanSquare * design.inductor.dcResistance,
+    WINDING_TEMPCO,
+    RESISTANCE_REFERENCE,
+  );
+  heat.constant[HOT.inductor] += ledger[SLOT['inductor.windingAc']] + ledger[SLOT['inductor.core']];
+  const copper = n * state.chokeMeanSquare * BOARD_SQUARE;
+  heat.boardSlope = copper * COPPER_TEMPCO;
+  heat.boardConstant =
+    copper * (1 - COPPER_TEMPCO * 293.15) + sumSlots(ledger, SLOT['outputCeramic.seriesResistance'], ledger.length);
+  solveHeat(heat);
+  state.highTemperature = heat.temperature[HOT.high];
+  state.lowTemperature = heat.temperature[HOT.low];
+  state.inductorTemperature = heat.temperature[HOT.inductor];
+  state.boardTemperature = heat.boardTemperature;
+}
+
+/** On-resistance of the high position at the reference temperature, with tolerance, Ω. */
+function highReference(state: StageState, design: Design): number {
+  return (state.resistanceScale * design.high.onResistance * design.high.dynamicFactor) / design.highParallel;
+}
+
+function lowReference(state: StageState, design: Design): number {
+  return (state.resistanceScale * design.low.onResistance * design.low.dynamicFactor) / design.lowParallel;
+}
+
+/** A resistive loss `watts` at `reference` (K) as constant and slope of hot part `part`. */
+function resistive(heat: HeatBalance, part: number, watts: number, tempco: number, reference: number): void {
+  heat.slope[part] = watts * tempco;
+  heat.constant[part] = watts * (1 - tempco * reference);
+}
+
+/** A diode's drop falls with temperature, its leakage doubles: the straight line through the round's temperature. */
+function diodeHeat(solver: PointSolver, design: Design): void {
+  const { state, heat, ledger } = solver;
+  const { diode } = design;
+  if (diode === undefined) return;
+  const n = state.activePhases;
+  const t = state.lowTemperature;
+  const forward = n * (design.diodeDrop(t) * state.lowMean + diode.slopeResistance * state.lowMeanSquare);
+  const leakage =
+    n *
+    diodeLeakageLoss(state.inputVoltage, diode.leakage, diode.leakageDoubling, state.highShare, Math.min(t, 473.15));
+  ledger[SLOT['diode.conduction']] = forward;
+  ledger[SLOT['diode.leakage']] = leakage;
+  const slope = n * diode.dropTempco * state.lowMean + (leakage * Math.LN2) / diode.leakageDoubling;
+  heat.slope[HOT.low] = slope;
+  heat.constant[HOT.low] = forward + leakage - slope * t;
+}
+
+/** Writes the losses that the balance settled at its final temperatures. */
+function writeResistiveLosses(solver: PointSolver, design: Design): void {
+  const { state, heat, ledger } = solver;
+  const n = state.activePhases;
+  ledger[SLOT['highSwitch.conduction']] = heated(
+    n * state.highMeanSquare * highReference(state, design),
+    design.high.resistanceTempco,
+    heat.temperature[HOT.high],
+    RESISTANCE_REFERENCE,
+  );
+  if (design.diode === undefined) {
+    ledger[SLOT['lowSwitch.conduction']] = heated(
+      n * state.lowMeanSquare * lowReference(state, design),
+      design.low.resistanceTempco,
+      heat.temperature[HOT.low],
+      RESISTANCE_REFERENCE,
+    );
+  }
+  ledger[SLOT['inductor.winding']] = heated(
+    n * state.chokeMeanSquare * design.inductor.dcResistance,
+    WINDING_TEMPCO,
+    heat.temperature[HOT.inductor],
+    RESISTANCE_REFERENCE,
+  );
+  ledger[SLOT['board.copper']] = heated(
+    n * state.chokeMeanSquare * BOARD_SQUARE,
+    COPPER_TEMPCO,
+    heat.boardTemperature,
+    293.15,
+  );
+}
+
+/** A resistive loss `watts` at `reference` (K), W at `temperature` (K). */
+function heated(watts: number, tempco: number, temperature: number, reference: number): number {
+  return watts * (1 + tempco * (temperature - reference));
+}

@@ -1,0 +1,196 @@
+/** The converter space of one rail as the search sees it, with its rich twin for a person. */
+import type { Families, Problem } from '../optimizer/problem.ts';
+import { assessDesign } from './assess.ts';
+import type { Assessment, DesignRecord } from './assessment.ts';
+import { type Catalogue, createCatalogue, usesLowSwitch } from './catalogue.ts';
+import { Evaluator, judgeDesign } from './evaluate.ts';
+import { createGenes, GENE, type GeneName } from './genes.ts';
+import type { LimitDefinition } from './limits/book.ts';
+import { objectiveReaders, objectivesOf } from './objectives.ts';
+import { bad, type Finding, good, type Outcome } from './outcome.ts';
+import type { PartsTables } from './parts/tables.ts';
+import type { Architecture, Rail } from './rail/rail.ts';
+import { fromRecord, type RecordSpace, recordId, toRecord } from './record.ts';
+import { nearestRow, snapGenes } from './snap.ts';
+import type { Stage } from './stages/contract.ts';
+import { stageOf } from './stages/list.ts';
+
+/** Figures of one design. */
+export interface Judgement {
+  readonly objectives: readonly number[];
+  /** By limit name, in the limit's unit; a limit that does not apply to the design is absent. */
+  readonly margins: Readonly<Record<string, number>>;
+  /** Smallest margin as a fraction of what is allowed. */
+  readonly worstMargin: number;
+  readonly feasible: boolean;
+}
+
+/** A rail's design space: a problem for the search, and everything a person asks of one design. */
+export interface RailProblem extends Problem {
+  readonly rail: Rail;
+  readonly catalogue: Catalogue;
+  /** Architectures that can serve the rail, in the order in which the `architecture` gene counts them. */
+  readonly architectures: readonly Architecture[];
+  /** Limits with unit and sense, in the order of `limits`. */
+  readonly limitDefinitions: readonly LimitDefinition[];
+  /** Objectives and margins of the design of snapped `genes`, without its story. */
+  judge(genes: Float64Array): Judgement;
+  /** Everything about the design of `genes`, which are snapped first in a copy. */
+  assess(genes: Float64Array): Assessment;
+  /** Names and numbers of the design of snapped `genes`. */
+  record(genes: Float64Array): DesignRecord;
+  /** Snapped genes of a record; every name or value that this space does not know is a finding in `file`. */
+  genesFrom(record: DesignRecord, file?: string): Outcome<Float64Array>;
+  /** The design's id. */
+  id(genes: Float64Array): string;
+}
+
+/** The space of `rail` over `tables`, or why there is none. */
+export function createRailProblem(rail: Rail, tables: PartsTables): Outcome<RailProblem> {
+  const serving = servingStages(rail);
+  if (!serving.ok) return serving;
+  const stages = serving.value;
+  const architectures = stages.map((stage) => stage.architecture);
+  const narrowed: Rail = { ...rail, search: { ...rail.search, architectures } };
+  const catalogue = createCatalogue(narrowed, tables);
+  if (!catalogue.ok) return catalogue;
+  return good(new ConverterSpace(narrowed, catalogue.value, stages));
+}
+
+/** The stages that can serve `rail`, or one finding for each that cannot where none can. */
+function servingStages(rail: Rail): Outcome<readonly Stage[]> {
+  const findings: Finding[] = [];
+  const stages: Stage[] = [];
+  for (const architecture of rail.search.architectures) {
+    const stage = stageOf(architecture);
+    const refusal = stage === undefined ? 'this architecture is not modelled yet' : stage.refusal(rail);
+    if (stage !== undefined && refusal === undefined) stages.push(stage);
+    else {
+      const field = 'search.architectures';
+      findings.push({ file: rail.name, line: 0, column: 0, field, found: architecture, allowed: refusal ?? '' });
+    }
+  }
+  return stages.length > 0 ? good(stages) : bad(findings);
+}
+
+class ConverterSpace implements RailProblem {
+  readonly name: string;
+  readonly rail: Rail;
+  readonly catalogue: Catalogue;
+  readonly architectures: readonly Architecture[];
+  readonly genes;
+  readonly objectives;
+  readonly limits: readonly string[];
+  readonly limitDefinitions: readonly LimitDefinition[];
+  readonly families: Families;
+  readonly seeds: readonly Float64Array[] = [];
+  private readonly evaluator: Evaluator;
+  private readonly readers;
+  private readonly space: RecordSpace;
+
+  constructor(rail: Rail, catalogue: Catalogue, stages: readonly Stage[]) {
+    this.name = rail.name;
+    this.rail = rail;
+    this.catalogue = catalogue;
+    this.architectures = rail.search.architectures;
+    this.genes = createGenes(rail, catalogue);
+    this.objectives = objectivesOf(rail);
+    this.readers = objectiveReaders(rail);
+    this.evaluator = new Evaluator(rail, catalogue, stages);
+    this.limitDefinitions = this.evaluator.book.definitions;
+    this.limits = this.limitDefinitions.map((definition) => definition.name);
+    this.families = familiesOf(rail);
+    this.space = recordSpace(this);
+  }
+
+  snap(genes: Float64Array): void {
+    snapGenes(genes, this.genes, this.catalogue, this.architectures);
+  }
+
+  evaluate(genes: Float64Array, objectives: Float64Array, violations: Float64Array): void {
+    const { evaluator, readers } = this;
+    judgeDesign(evaluator, genes);
+    for (let i = 0; i < readers.length; i++) objectives[i] = readers[i](evaluator);
+    evaluator.book.violations(violations);
+  }
+
+  judge(genes: Float64Array): Judgement {
+    const objectives = new Float64Array(this.objectives.length);
+    const violations = new Float64Array(this.limits.length);
+    this.evaluate(genes, objectives, violations);
+    const { book } = this.evaluator;
+    const margins: Record<string, number> = {};
+    let worstMargin = Number.POSITIVE_INFINITY;
+    for (const [i, { name, sense }] of book.definitions.entries()) {
+      if (book.slack[i] === Number.POSITIVE_INFINITY) continue;
+      margins[name] = sense === 'most' ? book.allowed[i] - book.value[i] : book.value[i] - book.allowed[i];
+      worstMargin = Math.min(worstMargin, book.slack[i]);
+    }
+    const feasible = violations.every((violation) => violation === 0) && objectives.every(Number.isFinite);
+    return { objectives: [...objectives], margins, worstMargin, feasible };
+  }
+
+  assess(genes: Float64Array): Assessment {
+    const snapped = Float64Array.from(genes);
+    this.snap(snapped);
+    return assessDesign(this, this.evaluator, snapped);
+  }
+
+  record(genes: Float64Array): DesignRecord {
+    return toRecord(this.space, genes);
+  }
+
+  genesFrom(record: DesignRecord, file = 'design'): Outcome<Float64Array> {
+    const outcome = fromRecord(this.space, record, file);
+    if (outcome.ok) this.snap(outcome.value);
+    return outcome;
+  }
+
+  id(genes: Float64Array): string {
+    return recordId(this.record(genes));
+  }
+}
+
+function familiesOf(rail: Rail): Families {
+  const { architectures, phases } = rail.search;
+  const span = phases.maximum - phases.minimum + 1;
+  const names = architectures.flatMap((architecture) =>
+    Array.from({ length: span }, (_, i) => `${architecture} ×${phases.minimum + i}`),
+  );
+  return {
+    names,
+    of: (genes) => genes[GENE.architecture] * span + genes[GENE.phases] - phases.minimum,
+    confine: (genes, family) => {
+      genes[GENE.architecture] = Math.floor(family / span);
+      genes[GENE.phases] = phases.minimum + (family % span);
+    },
+  };
+}
+
+function recordSpace(problem: RailProblem): RecordSpace {
+  const { catalogue, architectures } = problem;
+  const low = (genes: Float64Array): boolean => usesLowSwitch(architectures[genes[GENE.architecture]]);
+  const active = (genes: Float64Array, name: GeneName): boolean => {
+    if (name === 'lowSwitch' || name === 'lowParallel') return low(genes);
+    if (name === 'diode') return !low(genes);
+    if (name === 'outputBulk') return genes[GENE.outputBulkCount] > 0;
+    if (name === 'inputBulk') return genes[GENE.inputBulkCount] > 0;
+    return true;
+  };
+  return {
+    genes: problem.genes,
+    architectures,
+    active,
+    inductorName: (genes) => {
+      const series = catalogue.inductorSeries[genes[GENE.inductorSeries]];
+      return series.rows[nearestRow(series, genes[GENE.inductance])].name;
+    },
+    inductorPlace: (name) => {
+      for (const series of catalogue.inductorSeries) {
+        const row = series.rows.find((candidate) => candidate.name === name);
+        if (row !== undefined) return { series: series.name, inductance: row.inductance };
+      }
+      return undefined;
+    },
+  };
+}

@@ -1,0 +1,61 @@
+/** Moves a gene vector onto the nearest buildable design, and gives genes that play no part one canonical value. */
+import type { Gene } from '../optimizer/problem.ts';
+import type { Catalogue, InductorSeries } from './catalogue.ts';
+import { usesLowSwitch } from './catalogue.ts';
+import { GENE } from './genes.ts';
+import type { Architecture } from './rail/rail.ts';
+
+/** Powers of ten as literals: a computed one could differ in its last digit between engines. */
+const DECADES = [1, 1e1, 1e2, 1e3, 1e4, 1e5, 1e6, 1e7, 1e8];
+
+/** Snaps `genes` in place; idempotent. A gene that is not a number takes its lowest value. */
+export function snapGenes(
+  genes: Float64Array,
+  list: readonly Gene[],
+  catalogue: Catalogue,
+  architectures: readonly Architecture[],
+): void {
+  for (let i = 0; i < list.length; i++) genes[i] = clampGene(genes[i], list[i]);
+  genes[GENE.frequency] = clampGene(significant(genes[GENE.frequency]), list[GENE.frequency]);
+  const series = catalogue.inductorSeries[genes[GENE.inductorSeries]];
+  genes[GENE.inductance] = series.rows[nearestRow(series, genes[GENE.inductance])].inductance;
+  rest(genes, list, architectures[genes[GENE.architecture]]);
+}
+
+/** Index of the row of `series` whose inductance is nearest to `inductance` on a logarithmic scale. */
+export function nearestRow(series: InductorSeries, inductance: number): number {
+  const { rows } = series;
+  let index = 0;
+  while (index + 1 < rows.length && inductance * inductance > rows[index].inductance * rows[index + 1].inductance)
+    index++;
+  return index;
+}
+
+/** `value`, at least 100, at three significant digits: finer than any oscillator is set. */
+export function significant(value: number): number {
+  let unit = 0;
+  while (unit + 1 < DECADES.length && value >= DECADES[unit + 1] * 100) unit++;
+  // A whole number times an exact power of ten is the double nearest to the decimal, so the text reads back the same.
+  return round(value / DECADES[unit]) * DECADES[unit];
+}
+
+function rest(genes: Float64Array, list: readonly Gene[], architecture: Architecture): void {
+  if (usesLowSwitch(architecture)) {
+    genes[GENE.diode] = list[GENE.diode].low;
+  } else {
+    genes[GENE.lowSwitch] = list[GENE.lowSwitch].low;
+    genes[GENE.lowParallel] = list[GENE.lowParallel].low;
+  }
+  if (genes[GENE.outputBulkCount] === 0) genes[GENE.outputBulk] = list[GENE.outputBulk].low;
+  if (genes[GENE.inputBulkCount] === 0) genes[GENE.inputBulk] = list[GENE.inputBulk].low;
+}
+
+function clampGene(value: number, gene: Gene): number {
+  if (!(value > gene.low)) return gene.low;
+  if (value > gene.high) return gene.high;
+  return gene.kind === 'whole' || gene.kind === 'choice' ? round(value) : value;
+}
+
+function round(value: number): number {
+  return Math.floor(value + 0.5);
+}

@@ -1,0 +1,109 @@
+/** The buck stage, interleaved, with a switch or a diode in the low position. */
+import type { Design } from '../design.ts';
+import { inductanceAt, meanInductanceAt } from '../magnetics/index.ts';
+import { applyForward, applyReverse, ChokeSteadyState, solveChoke } from '../modes.ts';
+import type { Rail } from '../rail/rail.ts';
+import { addSegment, clearWaveform } from '../waveform/index.ts';
+import type { Stage } from './contract.ts';
+import { MODE, type StageState } from './state.ts';
+
+const steady = new ChokeSteadyState();
+const henries = new Float64Array(1);
+
+export const buckSynchronous: Stage = {
+  architecture: 'buck-synchronous',
+  twoWay: true,
+  diode: false,
+  idealDuty: (inputVoltage, outputVoltage) => outputVoltage / inputVoltage,
+  refusal: stepsDown,
+  solve: solveBuck,
+};
+
+export const buckDiode: Stage = {
+  architecture: 'buck-diode',
+  twoWay: false,
+  diode: true,
+  idealDuty: (inputVoltage, outputVoltage) => outputVoltage / inputVoltage,
+  refusal: (rail) => {
+    if (rail.profile.some((point) => point.fraction < 0)) return 'a diode carries no current back from output to input';
+    if (rail.output.battery && rail.input.takesPower) return "a diode cannot return the battery's energy to the input";
+    return stepsDown(rail);
+  },
+  solve: solveBuck,
+};
+
+function stepsDown(rail: Rail): string | undefined {
+  if (rail.output.maximum < rail.input.minimum) return undefined;
+  return `the highest output, ${rail.output.maximum} V, is not below the lowest input, ${rail.input.minimum} V`;
+}
+
+/** Solves one operating point of a buck; see `Stage.solve`. */
+function solveBuck(design: Design, state: StageState): void {
+  const current = state.loadCurrent / state.activePhases;
+  state.meanCurrent = current;
+  steady.frequency = design.frequency;
+  steady.inductance = chokeInductance(design, state, current);
+  if (current >= 0) solveForward(design, state, current);
+  else solveReverse(design, state, -current);
+  state.effectiveInductance = steady.inductance;
+  writeCurrents(state);
+}
+
+/** Inductance at the mean current in the first round; in later ones its mean over the ripple that the round before found. */
+function chokeInductance(design: Design, state: StageState, current: number): number {
+  const half = 0.5 * state.rippleCurrent;
+  if (state.round === 0) inductanceAt(design.inductor, current, henries);
+  else meanInductanceAt(design.inductor, current - half, current + half, henries);
+  return henries[0] * (state.inductance / design.inductance);
+}
+
+function solveForward(design: Design, state: StageState, current: number): void {
+  steady.current = current;
+  steady.blocking = design.stage.diode || design.emulates;
+  steady.shortestRise = design.controller.minimumOnTime;
+  const drop = design.stage.diode ? design.diodeDrop(state.lowTemperature) : 0;
+  forwardVoltages(state, drop, current);
+  solveChoke(steady);
+  // With gaps the drops follow the current that flows while it flows: the geometric mean of load and boundary current,
+  // which is half the peak of an ideal discontinuous triangle and equals the load at the boundary itself.
+  if (steady.mode !== MODE.continuous && steady.mode !== MODE.forced) {
+    forwardVoltages(state, drop, 0.5 * steady.ripple);
+    solveChoke(steady);
+  }
+  applyForward(steady, state);
+}
+
+function forwardVoltages(state: StageState, drop: number, current: number): void {
+  steady.rise = state.inputVoltage - state.outputVoltage - current * (state.highResistance + state.pathResistance);
+  steady.fall = state.outputVoltage + drop + current * (state.lowResistance + state.pathResistance);
+}
+
+function solveReverse(design: Design, state: StageState, current: number): void {
+  steady.current = current;
+  steady.blocking = design.emulates;
+  steady.shortestRise = design.controller.minimumOnTime;
+  steady.rise = state.outputVoltage - current * (state.lowResistance + state.pathResistance);
+  steady.fall = state.inputVoltage - state.outputVoltage + current * (state.highResistance + state.pathResistance);
+  solveChoke(steady);
+  applyReverse(steady, state);
+}
+
+/** Writes the choke's and the input's waveform of one phase and the moments that losses need. */
+function writeCurrents(state: StageState): void {
+  const { valleyCurrent: a, peakCurrent: b, highShare, lowShare } = state;
+  const square = (a * a + a * b + b * b) / 3;
+  state.highMeanSquare = highShare * square;
+  state.lowMeanSquare = lowShare * square;
+  state.chokeMeanSquare = state.highMeanSquare + state.lowMeanSquare;
+  state.highMean = 0.5 * highShare * (a + b);
+  state.lowMean = 0.5 * lowShare * (a + b);
+  const period = state.frequency > 0 ? 1 / state.frequency : 1;
+  const idle = (1 - highShare - lowShare) * period;
+  clearWaveform(state.choke);
+  addSegment(state.choke, highShare * period, a, b);
+  addSegment(state.choke, lowShare * period, b, a);
+  if (idle > 0) addSegment(state.choke, idle, 0, 0);
+  clearWaveform(state.draw);
+  addSegment(state.draw, highShare * period, a, b);
+  addSegment(state.draw, period - highShare * period, 0, 0);
+}

@@ -1,0 +1,11 @@
+/** Every architecture that the model knows, by name. Adding one is a file beside this and a line here. */
+import type { Architecture } from '../rail/rail.ts';
+import { buckDiode, buckSynchronous } from './buck.ts';
+import type { Stage } from './contract.ts';
+
+export const STAGES: readonly Stage[] = [buckSynchronous, buckDiode];
+
+/** The stage of `architecture`; undefined where the model does not have it yet. */
+export function stageOf(architecture: Architecture): Stage | undefined {
+  return STAGES.find((stage) => stage.architecture === architecture);
+}
