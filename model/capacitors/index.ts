@@ -9,5 +9,6 @@ export {
   setGroup2,
 } from './bank.ts';
 export { ceramicCapacitance, ceramicWorstFactor } from './ceramic.ts';
+export { electrolyticCost, filmCost } from './cost.ts';
 export { cancellation, capacitiveRipple, inputChargeRipple, inputMeanSquare } from './ripple.ts';
 export { electrolyticLife, selfHeating, seriesLoss } from './stress.ts';

@@ -30,6 +30,8 @@ export {
 export { fluxOfCurrent, fluxSwing, saturationFlux } from './flux.ts';
 export { gamma } from './gamma.ts';
 export { fringingFactor, gapFor } from './gap.ts';
+export { idleLayerFactor } from './idle-layer.ts';
+export { leakageInductance, magnetizingInductance } from './leakage.ts';
 export { roundWireProximity, roundWireSkin } from './round-wire.ts';
 export {
   type Bend,
@@ -49,6 +51,7 @@ export {
   windingResistance,
 } from './stocked.ts';
 export { triangleLoss } from './triangle-loss.ts';
+export { createWinding, gapKeepOut, layWinding, type Winding, windowFill } from './winding-layout.ts';
 export {
   effectiveResistanceFactor,
   harmonicLoss,
@@ -57,3 +60,4 @@ export {
   WINDING_BOUND,
 } from './winding-loss.ts';
 export { gaugeDiameter, litzLoss, roundArea } from './wire.ts';
+export { copperMass, coreTemperatureFactor, hotSpotRise, materialViolation, woundCost } from './wound-part.ts';

@@ -1,0 +1,83 @@
+/** How turns of a conductor lie in a window: layers, build, copper area, and the layer that Dowell's law sees. Once a design. */
+import type { Conductor } from '../parts/conductor.ts';
+
+/** A laid winding. Filled in place. */
+export interface Winding {
+  turns: number;
+  /** Whole layers of conductors. */
+  layers: number;
+  /** Height across the layers, m. */
+  build: number;
+  /** Copper area of one turn, all parallel conductors, m². */
+  copperArea: number;
+  /** Thickness of the equal foil with porosity, m: over the skin depth it is Dowell's x. */
+  dowellThickness: number;
+  /** Dowell's m: layers of conductors, or of strands in a litz. */
+  dowellLayers: number;
+}
+
+/** A winding to be filled. */
+export function createWinding(): Winding {
+  return { turns: 1, layers: 1, build: 0, copperArea: 0, dowellThickness: 0, dowellLayers: 1 };
+}
+
+const ROUND = 0.5 * Math.sqrt(Math.PI);
+
+/**
+ * Lays `turns` of `parallel` conductors side by side over `breadth` m and fills `into`. A conductor wider than the breadth
+ * yields one to a layer: the build tells that it does not fit. `sections` (1, or 2 where the other winding lies between two
+ * halves) divides the layers that build up field.
+ * Round wire by Dowell's porosity; a litz of n strands as √n × √n layers of strands.
+ * @source dowell-1966, porosity; litz as square strand layers after wojda-2012
+ * @valid turns, parallel, sections ≥ 1
+ */
+export function layWinding(
+  conductor: Conductor,
+  turns: number,
+  parallel: number,
+  breadth: number,
+  sections: number,
+  into: Winding,
+): void {
+  into.turns = turns;
+  if (conductor.kind === 'foil') {
+    into.layers = turns * parallel;
+    into.build = into.layers * conductor.outerSize;
+    into.copperArea = conductor.size * breadth * parallel;
+    into.dowellThickness = conductor.size;
+    into.dowellLayers = into.layers / sections;
+    return;
+  }
+  const wires = turns * parallel;
+  const perLayer = Math.max(1, Math.floor(breadth / conductor.outerSize));
+  into.layers = Math.ceil(wires / perLayer);
+  into.build = into.layers * conductor.outerSize;
+  into.copperArea = 0.25 * Math.PI * conductor.size * conductor.size * conductor.strands * parallel;
+  const root = Math.sqrt(conductor.strands);
+  const pitch = conductor.kind === 'litz' ? conductor.outerSize / root : breadth / Math.min(perLayer, wires);
+  const equal = ROUND * conductor.size;
+  into.dowellThickness = equal * Math.sqrt(Math.min(1, equal / pitch));
+  into.dowellLayers = (into.layers * root) / sections;
+}
+
+/**
+ * Share of the window's height that windings take: Σ build over height less the insulation. Above 1 they do not fit. `build` m of all
+ * windings, `insulation` m in all, `windowHeight` m.
+ * @derivation heights add
+ * @valid insulation below the window's height
+ * @example windowFill(4e-3, 1e-3, 6e-3) = 0.8
+ */
+export function windowFill(build: number, insulation: number, windowHeight: number): number {
+  return build / (windowHeight - insulation);
+}
+
+/**
+ * Distance that windings keep from a gap, m: three gap lengths, so that the fringing field does not heat them.
+ * `gap` m.
+ * @derivation common practice, no source
+ * @valid one gap in the centre leg
+ * @example gapKeepOut(5e-4) = 1.5e-3
+ */
+export function gapKeepOut(gap: number): number {
+  return 3 * gap;
+}
