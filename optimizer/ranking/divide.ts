@@ -14,8 +14,8 @@ export interface DivideRanking {
 }
 
 /** Up to this many rows, or pairs of rows, comparing them all is cheaper than splitting. */
-const FEW_ROWS = 10;
-const FEW_PAIRS = 120;
+const FEW_ROWS = 48;
+const FEW_PAIRS = 2500;
 
 /** A ranking for up to `capacity` rows of `m` objectives (3 or 4). */
 export function createDivideRanking(capacity: number, m: number): DivideRanking {
@@ -99,37 +99,45 @@ export function createDivideRanking(capacity: number, m: number): DivideRanking 
     updateSet(lowSplit, middle, highSplit, end, c, end);
   }
 
+  // The differences of dense ranks are or-ed: the sign tells in one well-predicted branch whether any of them is negative.
+
   function compareWithin(from: number, to: number, c: number): void {
-    for (let i = from + 1; i < to; i++) {
-      const row = stack[i];
-      const b = second[row];
-      let rank = ranks[row];
-      for (let j = from; j < i; j++) {
-        const other = stack[j];
-        if (second[other] > b || ranks[other] < rank) continue;
-        if (c > 1 && third[other] > third[row]) continue;
-        if (c > 2 && fourth[other] > fourth[row]) continue;
-        rank = ranks[other] + 1;
-      }
-      ranks[row] = rank;
-    }
+    for (let i = from + 1; i < to; i++) compareOne(stack[i], from, i, c);
   }
 
   function compareAcross(l0: number, l1: number, h0: number, h1: number, c: number): void {
+    let end = l0;
     for (let i = h0; i < h1; i++) {
       const row = stack[i];
-      const b = second[row];
-      let rank = ranks[row];
-      for (let j = l0; j < l1; j++) {
-        const other = stack[j];
-        if (other > row) break;
-        if (second[other] > b || ranks[other] < rank) continue;
-        if (c > 1 && third[other] > third[row]) continue;
-        if (c > 2 && fourth[other] > fourth[row]) continue;
-        rank = ranks[other] + 1;
-      }
-      ranks[row] = rank;
+      while (end < l1 && stack[end] < row) end++;
+      compareOne(row, l0, end, c);
     }
+  }
+
+  function compareOne(row: number, from: number, to: number, c: number): void {
+    const x = second[row];
+    let rank = ranks[row];
+    if (c === 1) {
+      for (let j = from; j < to; j++) {
+        const other = stack[j];
+        if (((x - second[other]) | (ranks[other] - rank)) >= 0) rank = ranks[other] + 1;
+      }
+    } else if (c === 2) {
+      const y = third[row];
+      for (let j = from; j < to; j++) {
+        const other = stack[j];
+        if (((x - second[other]) | (y - third[other]) | (ranks[other] - rank)) >= 0) rank = ranks[other] + 1;
+      }
+    } else {
+      const y = third[row];
+      const z = fourth[row];
+      for (let j = from; j < to; j++) {
+        const other = stack[j];
+        const sign = (x - second[other]) | (y - third[other]) | (z - fourth[other]) | (ranks[other] - rank);
+        if (sign >= 0) rank = ranks[other] + 1;
+      }
+    }
+    ranks[row] = rank;
   }
 
   function sweepWithin(from: number, to: number): void {

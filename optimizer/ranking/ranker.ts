@@ -25,7 +25,7 @@ export interface Ranker {
 }
 
 /** Most distinct rows ranked by sets of bits, by number of objectives; where the two ways cost the same (bench). */
-const BITSET_ROWS = [0, 0, 0, 1500, 3000] as const;
+const BITSET_ROWS = [0, 0, 0, 3000, 6000] as const;
 
 /** A ranker for up to `capacity` rows of `m` objectives (2 to 4). */
 export function createRanker(capacity: number, m: number): Ranker {
@@ -66,11 +66,11 @@ function createSpaceRanker(capacity: number, m: number, order: RowOrder, sorted:
         order.sort(objectives, m, c, n, sorted);
         numberColumn(objectives, m, c, n, sorted, distinctOf, columns[c], columnOrders[c]);
       }
-      bitsets ??= createBitsetRanking(few);
-      const fronts =
-        distinct <= few
-          ? bitsets.rank(columns, columnOrders, distinct, distinctRanks)
-          : divide.rank(columns, distinct, distinctRanks);
+      let fronts: number;
+      if (distinct <= few) {
+        bitsets ??= createBitsetRanking(few);
+        fronts = bitsets.rank(columns, columnOrders, distinct, distinctRanks);
+      } else fronts = divide.rank(columns, distinct, distinctRanks);
       for (let i = 0; i < n; i++) ranks[i] = distinctRanks[distinctOf[i]];
       return fronts;
     },
