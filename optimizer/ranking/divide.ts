@@ -30,8 +30,14 @@ export function createDivideRanking(capacity: number, m: number): DivideRanking 
 
   /** Ranks the rows stack[from … to) among themselves, looking at objectives 1 … c; `free` is where the stack is unused. */
   function sortSet(from: number, to: number, c: number, free: number): void {
-    if (to - from <= FEW_ROWS) return compareWithin(from, to, c);
-    if (c === 1) return sweepWithin(from, to);
+    if (to - from <= FEW_ROWS) {
+      compareWithin(from, to, c);
+      return;
+    }
+    if (c === 1) {
+      sweepWithin(from, to);
+      return;
+    }
     const column = c === 2 ? third : fourth;
     let least = column[stack[from]];
     let most = least;
@@ -40,7 +46,10 @@ export function createDivideRanking(capacity: number, m: number): DivideRanking 
       if (value < least) least = value;
       else if (value > most) most = value;
     }
-    if (least === most) return sortSet(from, to, c - 1, free);
+    if (least === most) {
+      sortSet(from, to, c - 1, free);
+      return;
+    }
     const cut = (least + most) >> 1;
     const split = divide(column, from, to, cut, free);
     const end = free + to - from;
@@ -70,8 +79,14 @@ export function createDivideRanking(capacity: number, m: number): DivideRanking 
   /** Raises the ranks of rows H = stack[h0 … h1) that rows L = stack[l0 … l1), already ranked, dominate in objectives 1 … c. */
   function updateSet(l0: number, l1: number, h0: number, h1: number, c: number, free: number): void {
     if (l0 === l1 || h0 === h1) return;
-    if ((l1 - l0) * (h1 - h0) <= FEW_PAIRS) return compareAcross(l0, l1, h0, h1, c);
-    if (c === 1) return sweepAcross(l0, l1, h0, h1);
+    if ((l1 - l0) * (h1 - h0) <= FEW_PAIRS) {
+      compareAcross(l0, l1, h0, h1, c);
+      return;
+    }
+    if (c === 1) {
+      sweepAcross(l0, l1, h0, h1);
+      return;
+    }
     const column = c === 2 ? third : fourth;
     let lowMin = column[stack[l0]];
     let lowMax = lowMin;
@@ -87,9 +102,14 @@ export function createDivideRanking(capacity: number, m: number): DivideRanking 
       if (value < highMin) highMin = value;
       else if (value > highMax) highMax = value;
     }
-    if (lowMax <= highMin) return updateSet(l0, l1, h0, h1, c - 1, free);
+    if (lowMax <= highMin) {
+      updateSet(l0, l1, h0, h1, c - 1, free);
+      return;
+    }
     if (lowMin > highMax) return;
-    const cut = (Math.max(lowMin, highMin) + Math.min(lowMax, highMax)) >> 1;
+    let cut = (Math.max(lowMin, highMin) + Math.min(lowMax, highMax)) >> 1;
+    // Some row must fall above the cut, or the halves would be the whole again.
+    if (cut === Math.max(lowMax, highMax)) cut--;
     const lowSplit = divide(column, l0, l1, cut, free);
     const middle = free + l1 - l0;
     const highSplit = divide(column, h0, h1, cut, middle);
