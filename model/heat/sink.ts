@@ -9,7 +9,7 @@ export const VOLUMETRIC_RESISTANCE: readonly { readonly airSpeed: number; readon
 
 /**
  * Volumetric thermal resistance of an extruded heat sink, m³·K/W, at `airSpeed` m/s: straight between the table's points, constant beyond 2.5 m/s.
- * @source seri-1999, table of volumetric resistance by air speed
+ * @source lee-1995, table of volumetric resistance by air speed
  * @valid 0 to 2.5 m/s; sinks of about 0.1 to 1 L, 50 K rise
  * @example volumetricResistance(0.5) = 4.25e-4
  */
@@ -20,7 +20,7 @@ export function volumetricResistance(airSpeed: number): number {
 
 /**
  * Heat sink volume, m³: volumetric resistance over wanted resistance. `resistance` K/W; 0 where none is needed (Infinity).
- * @source seri-1999
+ * @source lee-1995
  * @valid as `volumetricResistance`
  * @example sinkVolume(2, 1) = 1e-4
  */

@@ -28,7 +28,7 @@ const ROUND = 0.5 * Math.sqrt(Math.PI);
  * yields one to a layer: the build tells that it does not fit. `sections` (1, or 2 where the other winding lies between two
  * halves) divides the layers that build up field.
  * Round wire by Dowell's porosity; a litz of n strands as √n × √n layers of strands.
- * @source dowell-1966, porosity; litz as square strand layers after wojda-2012
+ * @source dowell-1966, porosity; litz as square strand layers after Wojda and Kazimierczuk (2012)
  * @valid turns, parallel, sections ≥ 1
  */
 export function layWinding(
