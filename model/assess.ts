@@ -44,7 +44,7 @@ export function assessDesign(problem: RailProblem, e: Evaluator, genes: Float64A
     feasible: violations.every((violation) => violation === 0) && objectives.every(Number.isFinite),
     objectives: problem.objectives.map(({ name, unit }, i) => ({ name, unit, value: objectives[i] })),
     limits,
-    worstMargin: Math.min(...limits.map((limit) => limit.slack)),
+    worstMargin: problem.judge(genes).worstMargin,
     points,
     losses,
     parts,

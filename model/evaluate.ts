@@ -66,8 +66,7 @@ export class Evaluator {
 /** Judges the design of snapped `genes`; results stand in `e`. `listener` is for the assessment alone. */
 export function judgeDesign(e: Evaluator, genes: Float64Array, listener?: PointListener): void {
   prepare(e, genes);
-  sizeSink(e);
-  judgeWorst(e, listener);
+  judgeAllWorst(e, listener);
   judgeBetween(e);
   sumUsual(e, listener);
   addSink(e);
@@ -90,24 +89,29 @@ function prepare(e: Evaluator, genes: Float64Array): void {
   e.book.clear();
 }
 
-/** Finds the heat sink that the worst points need beside the board. */
-function sizeSink(e: Evaluator): void {
+/** Judges the worst points on the bare board, and again with the heat sink where any of them needs one. */
+function judgeAllWorst(e: Evaluator, listener?: PointListener): void {
   e.sink = 0;
-  const points = e.plan.worst;
-  for (let i = 0; i < points.length; i++) {
-    solvePoint(e.solver, e.design, e.worst, points[i], e.design.phases, e.bareBoard);
-    if (e.solver.heat.sinkNeeded > e.sink) e.sink = e.solver.heat.sinkNeeded;
+  const needed = judgeWorst(e);
+  if (needed > 0) {
+    e.sink = needed;
+    e.book.clear();
   }
+  if (needed > 0 || listener !== undefined) judgeWorst(e, listener);
 }
 
-function judgeWorst(e: Evaluator, listener?: PointListener): void {
+/** Judges every worst point; returns the conductance of the heat sink that they would still need, W/K. */
+function judgeWorst(e: Evaluator, listener?: PointListener): number {
   const points = e.plan.worst;
   const from = e.plan.usual.length;
+  let needed = 0;
   for (let i = 0; i < points.length; i++) {
     solveActive(e, e.worst, points[i]);
     judgePoint(e, points[i], from + i);
+    needed = Math.max(needed, e.solver.heat.sinkNeeded);
     listener?.(e.solver, points[i], from + i);
   }
+  return needed;
 }
 
 /** Judges ripple at input voltages inside the range where phases cancel worst, near D = (2j − 1)/(2N). */

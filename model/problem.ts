@@ -121,10 +121,10 @@ class ConverterSpace implements RailProblem {
     const { book } = this.evaluator;
     const margins: Record<string, number> = {};
     let worstMargin = Number.POSITIVE_INFINITY;
-    for (const [i, { name, sense }] of book.definitions.entries()) {
+    for (const [i, { name, sense, whole }] of book.definitions.entries()) {
       if (book.slack[i] === Number.POSITIVE_INFINITY) continue;
       margins[name] = sense === 'most' ? book.allowed[i] - book.value[i] : book.value[i] - book.allowed[i];
-      worstMargin = Math.min(worstMargin, book.slack[i]);
+      if (whole !== true || book.slack[i] < 0) worstMargin = Math.min(worstMargin, book.slack[i]);
     }
     const feasible = violations.every((violation) => violation === 0) && objectives.every(Number.isFinite);
     return { objectives: [...objectives], margins, worstMargin, feasible };

@@ -9,6 +9,8 @@ export interface LimitDefinition {
   readonly unit: string;
   /** Whether the value must stay below or above what is allowed. */
   readonly sense: 'most' | 'least';
+  /** Whether it counts whole things or abilities: met exactly, it leaves no margin, and that is no worry. */
+  readonly whole?: boolean;
 }
 
 /** Limits of one rail with the worst figures of one design. Reused from design to design. */

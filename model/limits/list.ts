@@ -42,10 +42,10 @@ const OFFERS: readonly Offer[] = [
   most('lowVoltage', 'V'),
   most('gateVoltage', 'V'),
   least('driveVoltage', 'V'),
-  most('phases', ''),
+  { ...most('phases', ''), whole: true },
   most('controllerFrequency', 'Hz'),
   least('controllerLowestFrequency', 'Hz'),
-  least('controllerAbilities', ''),
+  { ...least('controllerAbilities', ''), whole: true },
   least('avoidedBands', '', (rail) => rail.avoid.length > 0),
   most('height', 'm', (rail) => rail.limits.height !== undefined),
   most('boardArea', 'm²', (rail) => rail.limits.boardArea !== undefined),
@@ -57,7 +57,8 @@ const OFFERS: readonly Offer[] = [
 
 /** The limits of `rail`, always in the same order; one for each load with a least efficiency comes last. */
 export function limitsOf(rail: Rail): readonly LimitDefinition[] {
-  const listed = OFFERS.filter((offer) => offer.when(rail)).map(({ name, unit, sense }) => ({
+  const listed = OFFERS.filter((offer) => offer.when(rail)).map(({ name, unit, sense, whole }) => ({
+    ...(whole === true ? { whole } : {}),
     name,
     unit: unit === 'currency' ? rail.currency : unit,
     sense,
