@@ -1,0 +1,134 @@
+/**
+ * Every refusal a person can meet, in one table: a code, the exit status, and the text with the next step in it.
+ * Commands throw a `Refusal`; `main` prints its one line and leaves with its status. Anything else that is thrown is an
+ * internal fault.
+ */
+
+/** Exit statuses. Stable: scripts and schedulers rely on them. */
+export const STATUS = {
+  done: 0,
+  fault: 1,
+  badInput: 2,
+  noDesign: 3,
+  locked: 4,
+  requeue: 75,
+  hangUp: 129,
+  interrupt: 130,
+  terminate: 143,
+} as const;
+
+/** Code → exit status and text; `{name}` is filled in. */
+export const ERRORS = {
+  usage: [2, '{text}; see: chopfront {command}--help'],
+  findings: [2, '{text}'],
+  'file-missing': [2, '{file}: no such file; give the path of {what}'],
+  'file-folder': [2, '{file}: is a folder; give the path of {what}'],
+  'file-unreadable': [2, '{file}: cannot be read ({reason})'],
+  'file-large': [2, '{file}: is {size} MB; {what} is never above {limit} MB, so this is some other file'],
+  'file-exists': [2, '{file}: exists already; choose another name, or add --force to replace it'],
+  'file-unwritable': [2, '{file}: cannot be written ({reason}); choose another place'],
+  'not-a-spec': [2, '{file}: is not a design in spec form: {reason}'],
+  'unknown-part': [2, '{file}: this design cannot stand in this sheet: {reason}'],
+  'unknown-scenario': [2, 'no scenario named {name}; there are: {names}'],
+  'folder-not-run': [2, '{folder}: holds files but no run; give a new or empty folder to --out'],
+  'folder-has-run': [
+    2,
+    '{folder}: holds a run already; add --resume to go on with it, or give another folder to --out',
+  ],
+  'run-missing': [2, '{folder}: no such run; make one with: chopfront sweep SHEET --out {folder}'],
+  'run-empty': [2, '{folder}: this run has no front yet; go on with: chopfront sweep --resume --out {folder}'],
+  'run-damaged': [2, '{folder}/{file}: cannot be understood ({reason}); restore it, or start a new run'],
+  'resume-nothing': [2, '{folder}: nothing to resume here; leave --resume out to start a run'],
+  'resume-sheet': [
+    2,
+    '{folder}: the sheet has changed since this run began:\n{difference}\nrestore it, or sweep into another folder',
+  ],
+  'resume-parts': [
+    2,
+    '{folder}: the parts tables have changed since this run began ({difference}); restore them, or sweep into another folder',
+  ],
+  'resume-settings': [
+    2,
+    '{folder}: this run began with {name} {was}, not {now}; leave the option out to go on as it began',
+  ],
+  'resume-version': [
+    2,
+    '{folder}: this run was made by version {was}; this is {now}, whose figures may differ: sweep into another folder',
+  ],
+  'checkpoint-none': [
+    2,
+    '{folder}: no checkpoint is whole any more; leave --resume out and start again in another folder',
+  ],
+  locked: [
+    4,
+    '{folder}: in use by another sweep (process {pid} on {host}, last seen {age} ago); wait for it, or stop it first',
+  ],
+  'no-design': [3, 'no design keeps every limit after {evaluations} evaluations\n{explanation}'],
+  'no-space': [3, 'this sheet leaves nothing to search: {reason}'],
+  'unknown-design': [2, '{folder}: no design {id} in this run{nearest}'],
+  'ambiguous-design': [2, '{folder}: {id} begins more than one design id: {ids}'],
+  'disk-full': [
+    1,
+    '{folder}: the disk is full; the last whole checkpoint ({checkpoint}) is kept: free some space, then go on with: {command}',
+  ],
+  'folder-read-only': [
+    1,
+    '{folder}: may not be written ({reason}); the last whole checkpoint ({checkpoint}) is kept; then go on with: {command}',
+  ],
+  'folder-vanished': [1, '{folder}: has vanished while the sweep ran; what was saved there is gone with it'],
+  'lock-lost': [4, '{folder}: another sweep has taken this folder over; this one ends without writing'],
+  'folder-unusable': [2, '{folder}: cannot be made or written ({reason}); choose another folder'],
+  'all-islands-failed': [1, 'every island of the search has failed; first: {reason}'],
+  'worker-missing': [1, 'the worker program is not where it was built ({path}); run: npm run build'],
+  'merge-differs': [
+    2,
+    '{folder}: was made from another {what} than {first}; only runs of one sheet and one set of parts can be merged',
+  ],
+  'objectives-differ': [
+    2,
+    '{folder}: this run has the objectives {names}; the sheet has {ours}: give a run of the same sheet',
+  ],
+  'shard-range': [2, 'shard {shard} is not one of {shards}; shards count from 0 to {last}'],
+  'shards-differ': [2, '--shard {shard} and --shards {shards} contradict each other; give one of them'],
+  'no-index': [2, 'no scheduler has set an index here; give --shard I/K, or submit this as an array job'],
+  'shards-missing': [1, 'shards {missing} of {shards} are not done; submit them again with: {command}'],
+  'slurm-missing': [
+    2,
+    'no sbatch here; run this where the scheduler is installed, or leave --on out to sweep on this machine',
+  ],
+  'slurm-refused': [1, 'the scheduler refused the job: {reason}'],
+  'page-failed': [1, 'the page could not be drawn: {reason}'],
+} as const satisfies Record<string, readonly [number, string]>;
+
+/** Name of a row of the table. */
+export type ErrorCode = keyof typeof ERRORS;
+
+/** A refusal with its row and text; what it says is meant for a person. */
+export class Refusal extends Error {
+  readonly code: ErrorCode;
+  /** Exit status of the process. */
+  readonly status: number;
+  constructor(code: ErrorCode, text: string, status: number) {
+    super(text);
+    this.code = code;
+    this.status = status;
+  }
+}
+
+/** The refusal of that code; each `{name}` in its text is taken from `values`. */
+export function refusal(code: ErrorCode, values: Readonly<Record<string, string | number>> = {}): Refusal {
+  const [status, template] = ERRORS[code];
+  const text = template.replace(/\{(\w+)\}/g, (_, name: string) => String(values[name] ?? `{${name}}`));
+  return new Refusal(code, text, status);
+}
+
+/** The code that Node or the system gave to an error, such as `ENOENT`; empty where it gave none. */
+export function systemCode(error: unknown): string {
+  return error instanceof Error && 'code' in error && typeof error.code === 'string' ? error.code : '';
+}
+
+/** The first line of what went wrong, whatever was thrown. */
+export function reasonOf(error: unknown): string {
+  const text = error instanceof Error ? error.message : String(error);
+  return text.split('\n', 1)[0] ?? '';
+}

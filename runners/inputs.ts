@@ -1,0 +1,109 @@
+/**
+ * A sheet and its parts tables as texts: what a run keeps as its snapshot, what a worker gets to rebuild the problem from, and
+ * what the readers of the model turn into a rail and tables.
+ */
+import { dirname, resolve } from 'node:path';
+import {
+  BUILT_IN_TABLES,
+  createRailProblem,
+  describeFinding,
+  type Finding,
+  joinTables,
+  type Outcome,
+  type PartKind,
+  type PartsTables,
+  type Rail,
+  type RailProblem,
+  readRail,
+  readTable,
+} from '../model/index.ts';
+import { refusal } from './errors.ts';
+import { packagePath } from './package-path.ts';
+import { readText } from './run-folder/files.ts';
+
+/** A text with the name that messages about it use. */
+export interface NamedText {
+  readonly file: string;
+  readonly text: string;
+}
+
+/** A parts table as text. */
+export interface TableText extends NamedText {
+  readonly kind: PartKind;
+}
+
+/** Everything that a problem is made from. Plain data. */
+export interface InputTexts {
+  readonly rail: NamedText;
+  readonly tables: readonly TableText[];
+}
+
+/** The texts, read. */
+export interface Inputs {
+  readonly texts: InputTexts;
+  readonly rail: Rail;
+  readonly tables: PartsTables;
+  /** Remarks that do not forbid anything. */
+  readonly remarks: readonly string[];
+}
+
+/** Largest sheet; a person's is a few kilobytes. */
+const LARGEST_SHEET = 1024 * 1024;
+
+/** Reads the sheet at `path` and the tables it names. Throws refusals that name every problem found. */
+export function readSheet(path: string): Inputs {
+  const text = { file: path, text: readText(path, 'a rail sheet', LARGEST_SHEET) };
+  const rail = take(readRail(text.text, text.file));
+  const tables = rail.parts.tables.flatMap((name) =>
+    name === 'built-in' ? builtIn() : [ownTable(name, dirname(path))],
+  );
+  return readInputs({ rail: text, tables });
+}
+
+/** Reads texts that were gathered before, such as a run's snapshot. Throws refusals that name every problem found. */
+export function readInputs(texts: InputTexts): Inputs {
+  const rail = readRail(texts.rail.text, texts.rail.file);
+  const rows = texts.tables.map(({ kind, text, file }) => ({ kind, outcome: readTable(kind, text, file) }));
+  const findings = [rail, ...rows.map((row) => row.outcome)].flatMap((outcome) => (outcome.ok ? [] : outcome.findings));
+  if (findings.length > 0) throw refuseFindings(findings);
+  const parts = rows.flatMap(({ kind, outcome }) => (outcome.ok ? [{ kind, rows: outcome.value }] : []));
+  const tables = joinTables(parts);
+  const remarks = [rail, ...rows.map((row) => row.outcome), tables].flatMap((outcome) =>
+    outcome.ok ? outcome.remarks : [],
+  );
+  return { texts, rail: take(rail), tables: take(tables), remarks: remarks.map(describeFinding) };
+}
+
+/** The problem that the inputs pose. Throws the refusal `no-space` where nothing can be searched. */
+export function problemOf(inputs: Inputs): RailProblem {
+  const outcome = createRailProblem(inputs.rail, inputs.tables);
+  if (outcome.ok) return outcome.value;
+  throw refusal('no-space', { reason: outcome.findings.map(describeFinding).join('\n  ') });
+}
+
+/** The value of an outcome. Throws the refusal `findings` with a line for each problem where there is none. */
+export function take<T>(outcome: Outcome<T>): T {
+  if (outcome.ok) return outcome.value;
+  throw refuseFindings(outcome.findings);
+}
+
+/** Most problems that are listed; a file of noise has thousands. */
+const MOST_LISTED = 20;
+
+function refuseFindings(findings: readonly Finding[]): Error {
+  const lines = findings.slice(0, MOST_LISTED).map(describeFinding);
+  if (findings.length > MOST_LISTED) lines.push(`and ${findings.length - MOST_LISTED} more`);
+  return refusal('findings', { text: lines.join('\n  ') });
+}
+
+function builtIn(): TableText[] {
+  return BUILT_IN_TABLES.map(({ kind, file }) => {
+    const text = readText(packagePath('model', 'tables', file), 'a built-in parts table');
+    return { kind, file, text };
+  });
+}
+
+function ownTable(name: string, folder: string): TableText {
+  const path = resolve(folder, name);
+  return { kind: kindOf(name), file: name, text: readText(path, 'a parts table named in the sheet') };
+}

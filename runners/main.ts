@@ -1,0 +1,94 @@
+/** From command line to exit status: builds the commands, runs the one asked for, turns whatever it throws into one line. */
+import { Command, CommanderError } from 'commander';
+import { defineAssess } from './commands/assess.ts';
+import { defineCheck } from './commands/check.ts';
+import { defineCompare } from './commands/compare.ts';
+import { defineDraft } from './commands/draft.ts';
+import { defineHandoff } from './commands/handoff.ts';
+import { defineMerge } from './commands/merge.ts';
+import { definePage } from './commands/page.ts';
+import { defineShow } from './commands/show.ts';
+import { defineStatus } from './commands/status.ts';
+import { defineSweep } from './commands/sweep.ts';
+import { Refusal, reasonOf, refusal, STATUS } from './errors.ts';
+import { plainLines } from './terminal/text.ts';
+import { VERSION } from './version.ts';
+
+/** Each command's file; the order is that of `--help`. */
+const DEFINITIONS = [
+  defineDraft,
+  defineCheck,
+  defineSweep,
+  definePage,
+  defineShow,
+  defineAssess,
+  defineHandoff,
+  defineMerge,
+  defineStatus,
+  defineCompare,
+];
+
+const AFTER_HELP = `
+Exit status: 0 done, 1 internal fault, 2 bad input, 3 no feasible design, 4 run folder in use,
+129/130/143 stopped by HUP/INT/TERM with everything saved, 75 stopped inside a cluster shard (run it again).
+
+Examples:
+  chopfront draft rail.yaml                     a commented sheet to start from
+  chopfront check rail.yaml                     what the sheet means, before any search
+  chopfront sweep rail.yaml --out runs/first    search; Ctrl-C saves, --resume goes on
+`;
+
+/** Runs the command line `args` (without node and script); returns the exit status. Never throws. */
+export async function main(args: readonly string[]): Promise<number> {
+  let status: number = STATUS.done;
+  const program = build((result) => {
+    status = result;
+  });
+  try {
+    await program.parseAsync([...args], { from: 'user' });
+    return status;
+  } catch (error) {
+    return explain(error);
+  }
+}
+
+/** What a command gets to say how it ended, where that is not 0. */
+export type SetStatus = (status: number) => void;
+
+function build(setStatus: SetStatus): Command {
+  const program = new Command('chopfront')
+    .description('Searches the design space of a step-down DC-DC rail and leaves its whole trade-off to choose from.')
+    .version(VERSION, '-V, --version', 'print the version')
+    .helpCommand('help [command]', 'explain a command')
+    .addHelpText('after', AFTER_HELP);
+  for (const define of DEFINITIONS) define(program, setStatus);
+  for (const command of [program, ...program.commands]) {
+    command
+      .exitOverride()
+      .showSuggestionAfterError(true)
+      .configureOutput({ outputError: () => {} });
+  }
+  return program;
+}
+
+/** Writes the one line that an error deserves; returns its exit status. */
+export function explain(error: unknown): number {
+  if (error instanceof CommanderError) return explainUsage(error);
+  if (error instanceof Refusal) {
+    process.stderr.write(`chopfront: ${plainLines(error.message)}\n`);
+    return error.status;
+  }
+  const trace = (process.env.CHOPFRONT_TRACE ?? '') !== '';
+  const more = trace ? '' : ' (set CHOPFRONT_TRACE=1 to see where)';
+  process.stderr.write(`chopfront: internal fault: ${plainLines(reasonOf(error))}${more}\n`);
+  if (trace && error instanceof Error) process.stderr.write(`${plainLines(error.stack ?? '')}\n`);
+  return STATUS.fault;
+}
+
+// Commander ends `--help` and `--version` by an error with status 0, and shows help with status 1 where no command is named.
+function explainUsage(error: CommanderError): number {
+  if (error.exitCode === 0) return STATUS.done;
+  if (error.code === 'commander.help') return STATUS.badInput;
+  const text = error.message.replace(/^error: /, '').replace(/\n\(?Did you mean ([^)]*)\)?$/, '; did you mean $1');
+  return explain(refusal('usage', { text: text.replace(/\n/g, ' '), command: '' }));
+}

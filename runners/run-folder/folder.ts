@@ -1,0 +1,61 @@
+/** Finding, making and refusing run folders; what each file in one is called is decided here and nowhere else. */
+import { accessSync, constants, existsSync, mkdirSync, readdirSync, statSync } from 'node:fs';
+import { join } from 'node:path';
+import { reasonOf, refusal, systemCode } from '../errors.ts';
+
+/** Files of a run, beside checkpoints, `run.json` and the lock. */
+export const RUN_FILES = {
+  rail: 'rail.yaml',
+  parts: 'parts',
+  frontCsv: 'front.csv',
+  frontJson: 'front.json',
+  nearMisses: 'near-misses.csv',
+  archive: 'archive.bin',
+  history: 'history.csv',
+  page: 'page.html',
+} as const;
+
+/** What stands at a path that shall become or is a run. */
+export type FolderState = 'absent' | 'empty' | 'run' | 'other';
+
+/** Looks at a path. Throws the refusal `folder-unusable` where it is a file or cannot be read. */
+export function lookAt(folder: string): FolderState {
+  try {
+    if (!existsSync(folder)) return 'absent';
+    const names = readdirSync(folder).filter((name) => !isOurs(name));
+    if (names.length === 0) return 'empty';
+    return names.includes('run.json') && names.includes(RUN_FILES.rail) ? 'run' : 'other';
+  } catch (error) {
+    const reason = systemCode(error) === 'ENOTDIR' ? 'it is a file' : reasonOf(error);
+    throw refusal('folder-unusable', { folder, reason });
+  }
+}
+
+/** Makes a folder for a new run, or checks that one can be resumed. Throws the refusals of both. */
+export function prepareFolder(folder: string, resume: boolean): void {
+  const state = lookAt(folder);
+  if (state === 'other') throw refusal('folder-not-run', { folder });
+  if (state === 'run' && !resume) throw refusal('folder-has-run', { folder });
+  if (state !== 'run' && resume) throw refusal('resume-nothing', { folder });
+  try {
+    mkdirSync(folder, { recursive: true });
+    accessSync(folder, constants.W_OK | constants.X_OK);
+  } catch (error) {
+    throw refusal('folder-unusable', { folder, reason: reasonOf(error) });
+  }
+}
+
+/** Path of a file of the run. */
+export function runFile(folder: string, name: keyof typeof RUN_FILES): string {
+  return join(folder, RUN_FILES[name]);
+}
+
+/** Whether a path is a folder. */
+export function isFolder(path: string): boolean {
+  return statSync(path, { throwIfNoEntry: false })?.isDirectory() ?? false;
+}
+
+// A lock and half-written files do not make a folder count as used: they may be all that a killed start left behind.
+function isOurs(name: string): boolean {
+  return name.startsWith('lock.json') || /^\..*\.tmp$/.test(name);
+}

@@ -1,0 +1,43 @@
+/** Reading the front of a run, and finding a design in it by the beginning of its id. */
+import { readFileSync } from 'node:fs';
+import type { FrontFile } from '../../model/index.ts';
+import { reasonOf, refusal, systemCode } from '../errors.ts';
+import { RUN_FILES, runFile } from './folder.ts';
+
+/** One design of a front. */
+export type FrontDesign = FrontFile['designs'][number];
+
+/** `front.json` of a run. Throws the refusals `run-empty` and `run-damaged`. */
+export function readFront(folder: string): FrontFile {
+  try {
+    const front: FrontFile = JSON.parse(readFileSync(runFile(folder, 'frontJson'), 'utf8'));
+    if (front.format !== 'chopfront-front' || !Array.isArray(front.designs)) throw new Error('not a front');
+    return front;
+  } catch (error) {
+    if (systemCode(error) === 'ENOENT') throw refusal('run-empty', { folder });
+    throw refusal('run-damaged', { folder, file: RUN_FILES.frontJson, reason: reasonOf(error) });
+  }
+}
+
+/** The design whose id is, or begins with, `id`. Throws `unknown-design` and `ambiguous-design`. */
+export function findDesign(folder: string, front: FrontFile, id: string): FrontDesign {
+  const exact = front.designs.find((design) => design.id === id);
+  if (exact !== undefined) return exact;
+  const close = id.length < 2 ? [] : front.designs.filter((design) => design.id.startsWith(id));
+  if (close.length === 1 && close[0] !== undefined) return close[0];
+  if (close.length > 1) {
+    const ids = close.slice(0, 5).map((design) => design.id);
+    throw refusal('ambiguous-design', { folder, id, ids: ids.join(', ') });
+  }
+  const some = front.designs.slice(0, 3).map((design) => design.id);
+  throw refusal('unknown-design', {
+    folder,
+    id,
+    nearest: some.length === 0 ? '' : `; it holds, for example, ${some.join(', ')}`,
+  });
+}
+
+/** Whether objectives `a` dominate `b`: nowhere worse, somewhere better. */
+export function dominates(a: readonly number[], b: readonly number[]): boolean {
+  return a.every((value, i) => value <= (b[i] ?? value)) && a.some((value, i) => value < (b[i] ?? value));
+}

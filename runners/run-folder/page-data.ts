@@ -1,0 +1,96 @@
+/** Gathers what a page embeds from the files of a run. */
+import { explainRail, frontFile, type RailExplanation, type RailProblem } from '../../model/index.ts';
+import type { Designs } from '../../optimizer/index.ts';
+import type { Cloud, FamilyNote, NearMiss, PageData, RunRecord as PageRun } from '../../viz/data.ts';
+import { type Inputs, problemOf, take } from '../inputs.ts';
+import { genesOf } from '../sweep/grid.ts';
+import { type Found, readFound } from './found.ts';
+import { readFront } from './front.ts';
+import { type RunRecord, readRecord } from './record.ts';
+import { readSnapshot } from './snapshot.ts';
+
+/** Everything that the page of a run shows. Throws refusals where the run has nothing to show. */
+export function gatherPage(folder: string): PageData {
+  const record = readRecord(folder);
+  const inputs: Inputs = readSnapshot(folder, record);
+  const problem = problemOf(inputs);
+  const found = readFound(folder);
+  const front = readFront(folder);
+  const explanation = take(explainRail(inputs.rail, inputs.tables));
+  return {
+    run: pageRun(record),
+    rail: inputs.rail,
+    tables: inputs.tables,
+    front,
+    cloud: cloudOf(problem, found.archive),
+    history: found.sources.flatMap((source) => source.history).map((row) => ({ ...row, islands: [] })),
+    nearMisses: nearMissesOf(problem, found),
+    families: familyNotes(
+      problem,
+      found,
+      front.designs.map((design) => design.family),
+      explanation.architectures,
+    ),
+    cautions: explanation.cautions,
+    notCovered: explanation.notCovered,
+  };
+}
+
+function pageRun(record: RunRecord): PageRun {
+  const { status, seed, evaluations, epochs, seconds, threads, feasibleShare, hypervolume } = record;
+  const { version, railHash, partsHash } = record;
+  const built = new Date().toISOString();
+  const counts = { evaluations, epochs, seconds, threads, feasibleShare, hypervolume };
+  return { status, seed, ...counts, version, railHash, partsHash, built };
+}
+
+/** Most points behind the front. */
+const CLOUD = 50_000;
+
+function cloudOf(problem: RailProblem, designs: Designs): Cloud {
+  const step = Math.max(1, Math.ceil(designs.count / CLOUD));
+  const m = problem.objectives.length;
+  const family: number[] = [];
+  const objectives: number[] = [];
+  for (let i = 0; i < designs.count; i += step) {
+    family.push(problem.families.of(genesOf(designs, problem.genes.length, i)));
+    objectives.push(...designs.objectives.subarray(i * m, (i + 1) * m));
+  }
+  return { families: problem.families.names, family, objectives };
+}
+
+function nearMissesOf(problem: RailProblem, found: Found): NearMiss[] {
+  const { nearMisses } = found;
+  const genes = Array.from({ length: nearMisses.count }, (_, i) => genesOf(nearMisses, problem.genes.length, i));
+  const designs = new Map(frontFile(problem, genes).designs.map((design) => [design.id, design]));
+  return genes.flatMap((row, i) => {
+    const limit = problem.limits[nearMisses.limit[i] ?? -1] ?? '';
+    const figure = problem.assess(row).limits.find((one) => one.name === limit);
+    const design = designs.get(problem.id(row));
+    if (figure === undefined || design === undefined) return [];
+    return [{ limit, value: figure.value, allowed: figure.allowed, design }];
+  });
+}
+
+function familyNotes(
+  problem: RailProblem,
+  found: Found,
+  onFront: readonly string[],
+  architectures: RailExplanation['architectures'],
+): FamilyNote[] {
+  const tallies = found.sources.map((source) => source.families ?? []);
+  return problem.families.names.map((family, i) => {
+    const sum = (k: 'evaluated' | 'feasible'): number => tallies.reduce((all, tally) => all + (tally[i]?.[k] ?? 0), 0);
+    const counts = { evaluated: sum('evaluated'), feasible: sum('feasible') };
+    const front = onFront.filter((name) => name === family).length;
+    const impossible = architectures.find((one) => family.startsWith(one.name) && !one.possible);
+    return { family, ...counts, front, reason: impossible?.reason ?? reasonFor({ ...counts, front }) };
+  });
+}
+
+function reasonFor(counts: { evaluated: number; feasible: number; front: number }): string {
+  if (counts.front > 0) return `${counts.front} of its designs are on the front`;
+  if (counts.evaluated === 0) return 'not tried yet';
+  if (counts.feasible === 0) return 'none of its designs kept every limit';
+  return 'its designs keep every limit, but others are better in every objective';
+}

@@ -1,0 +1,80 @@
+/** What of a sweep's rings goes into a checkpoint beside the islands, and the rings that come back out of it. */
+import { z } from 'zod';
+import { refusal } from '../errors.ts';
+import { type Checkpoint, readCheckpoint } from '../run-folder/checkpoint.ts';
+import type { Fault } from '../run-folder/record.ts';
+import type { History } from './history.ts';
+import { createRing, type IslandState, islandsOf, type Ring, settledFaults } from './ring.ts';
+
+/** A ring without its islands; plain data. */
+export interface RingState {
+  readonly shard: number;
+  readonly epoch: number;
+  readonly epochEvaluations: number;
+  readonly islands: number;
+  readonly history: History;
+  readonly faults: readonly Fault[];
+}
+
+/** A sweep as a checkpoint gives it back. */
+export interface Resumed {
+  readonly rings: Ring[];
+  /** Swept before, s. */
+  readonly seconds: number;
+  /** ISO 8601. */
+  readonly started: string;
+  /** Number of the checkpoint. */
+  readonly number: number;
+  readonly warnings: readonly string[];
+}
+
+const STATE = z.object({
+  seconds: z.number(),
+  started: z.string(),
+  rings: z.array(
+    z.object({
+      shard: z.number(),
+      epoch: z.number(),
+      epochEvaluations: z.number(),
+      islands: z.number(),
+      history: z.custom<History>((value) => typeof value === 'object' && value !== null && 'rows' in value),
+      faults: z.array(z.custom<Fault>((value) => typeof value === 'object' && value !== null && 'island' in value)),
+    }),
+  ),
+});
+
+/** What to save of a ring. */
+export function ringState(ring: Ring): RingState {
+  const { shard, epoch, epochEvaluations, slots, history } = ring;
+  return { shard, epoch, epochEvaluations, islands: slots.length, history, faults: settledFaults(ring) };
+}
+
+/** Packed islands of all rings, ring by ring, as they were when each ring's epoch was complete. */
+export function packedIslands(rings: readonly Ring[]): Uint8Array[] {
+  return rings.flatMap((ring) => islandsOf(ring).map((state) => state.bytes));
+}
+
+/** The newest whole checkpoint of a folder as rings. Throws the refusal `checkpoint-none` where there is none. */
+export function resumeFrom(folder: string, tally: (bytes: Uint8Array) => Omit<IslandState, 'bytes'>): Resumed {
+  const { checkpoint, warnings } = readCheckpoint(folder);
+  if (checkpoint === undefined) throw refusal('checkpoint-none', { folder });
+  const { seconds, started, rings } = STATE.parse(checkpoint.state);
+  let at = 0;
+  const made = rings.map((ring) => {
+    const islands = checkpoint.islands.slice(at, at + ring.islands).map((bytes) => ({ bytes, ...tally(bytes) }));
+    at += ring.islands;
+    return createRing({ ...ring, islands });
+  });
+  return {
+    rings: made,
+    seconds,
+    started,
+    number: checkpoint.number,
+    warnings: [...warnings, ...nodeWarning(checkpoint)],
+  };
+}
+
+function nodeWarning(checkpoint: Checkpoint): string[] {
+  if (checkpoint.node === process.version) return [];
+  return [`this run was begun under Node ${checkpoint.node} and goes on under ${process.version}`];
+}
