@@ -25,8 +25,13 @@ export interface TakeAwayFile {
 
 /** The model as the page sees it. */
 export interface Assessor {
-  /** Judges `design` on `rail`; parts and genes that are unknown there, or a rail without any space, give a reason. */
-  assess(design: DesignRecord, rail: Rail): Verdict;
+  /**
+   * Judges `design` on `rail` after `moves` (by gene name: a number, or an option's name), moved onto the nearest
+   * buildable design. Parts and genes that are unknown there, or a rail without any space, give a reason.
+   */
+  assess(design: DesignRecord, rail: Rail, moves: Readonly<Record<string, number | string>>): Verdict;
+  /** What `design` has of each movable gene that plays a part in it: a number, or an option's name. */
+  values(design: DesignRecord): Readonly<Record<string, number | string>>;
   /** What may be moved on the sheet's own rail. */
   readonly genes: readonly Movable[];
   /** Files of one design, such as its spec and parts list. */

@@ -10,7 +10,7 @@ export interface State {
   readonly third: string;
   readonly as: 'size' | 'shade';
   /** Visible window of the picture, SI: x from, x to, y from, y to; absent for all. */
-  readonly window?: readonly [number, number, number, number];
+  readonly window?: readonly [number, number, number, number] | undefined;
   /** Id of the open design. */
   readonly open: string;
   /** Ids side by side, in the order they were pinned. */

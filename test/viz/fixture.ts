@@ -258,10 +258,13 @@ function pick<T>(items: readonly T[], draw: () => number): T {
 /** The invented model behind the page's face of one. */
 export function fixtureAssessor(): Assessor {
   return {
-    assess: (design, rail): Verdict =>
-      (design.genes.frequency ?? 0) > rail.search.frequency.maximum
+    assess: (design, rail, moves): Verdict => {
+      const moved = withMoves(design, moves);
+      return (moved.genes.frequency ?? 0) > rail.search.frequency.maximum
         ? { ok: false, why: 'frequency above the sheet’s range' }
-        : { ok: true, value: judge(design, rail) },
+        : { ok: true, value: judge(moved, rail) };
+    },
+    values: (design) => ({ ...design.genes, ...design.parts }),
     genes: movables(),
     takeAway: (design) => [
       { name: 'spec.json', type: 'application/json', text: `${JSON.stringify(design)}\n` },
@@ -269,6 +272,16 @@ export function fixtureAssessor(): Assessor {
     ],
     frontCsv: (ids) => `id\n${[...ids].join('\n')}\n`,
   };
+}
+
+function withMoves(design: DesignRecord, moves: Readonly<Record<string, number | string>>): DesignRecord {
+  const genes: Record<string, number> = { ...design.genes };
+  const parts: Record<string, string> = { ...design.parts };
+  for (const [name, value] of Object.entries(moves)) {
+    if (typeof value === 'number') genes[name] = value;
+    else parts[name] = value;
+  }
+  return { ...design, genes, parts };
 }
 
 function movables(): readonly Movable[] {
@@ -496,7 +509,15 @@ function limitsOf(
   const corner = { inputVoltage: full.inputVoltage, outputVoltage: full.outputVoltage, load: full.load };
   return LIMITS.map(([name, unit], i) => {
     const [value = 0, allowed = 1] = figures[i] ?? [];
-    const figure = { name, unit, value, allowed, margin: allowed - value, violation: Math.max(0, value / allowed - 1) };
+    const figure = {
+      name,
+      unit,
+      value,
+      allowed,
+      margin: allowed - value,
+      slack: 1 - value / allowed,
+      violation: Math.max(0, value / allowed - 1),
+    };
     return i < 5 ? { ...figure, corner } : figure;
   });
 }

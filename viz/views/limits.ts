@@ -11,7 +11,7 @@ export const limitsDefaults = {
 };
 
 export function renderLimits<E extends Element>(root: Root<E>, design: Assessment, options = limitsDefaults): void {
-  const rows = [...design.limits].sort((a, b) => relative(a) - relative(b));
+  const rows = [...design.limits].sort((a, b) => a.slack - b.slack);
   const table = clear(root).append('table').attr('class', 'ledger limits');
   table
     .append('caption')
@@ -32,7 +32,7 @@ export function renderLimits<E extends Element>(root: Root<E>, design: Assessmen
         .text(state === 'broken' ? 'broken' : 'tight');
     row.append('td').text(show(limit.value, limit.unit));
     row.append('td').text(show(limit.allowed, limit.unit));
-    bar(row.append('td').text(showDifference(limit.margin, limit.unit)), Math.abs(relative(limit)), state);
+    bar(row.append('td').text(showDifference(limit.margin, limit.unit)), Math.abs(limit.slack), state);
     row
       .append('td')
       .attr('class', 'where')
@@ -53,13 +53,7 @@ export function brokenLimits(limits: readonly LimitFigure[]): readonly string[] 
 
 function verdict(limit: LimitFigure, tight: number): 'broken' | 'tight' | 'holds' {
   if (limit.violation > 0) return 'broken';
-  return relative(limit) < tight ? 'tight' : 'holds';
-}
-
-/** Margin over what is allowed; temperatures, whose zero means nothing, over 100 K. */
-function relative(limit: LimitFigure): number {
-  const base = limit.unit === 'K' ? 100 : Math.abs(limit.allowed);
-  return limit.margin / (base || 1);
+  return limit.slack < tight ? 'tight' : 'holds';
 }
 
 function cornerText(corner: Corner): string {

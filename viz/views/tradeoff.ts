@@ -69,13 +69,28 @@ export function renderTradeoff(
   clear(root).attr('viewBox', `0 0 ${options.width} ${options.height}`);
   clip(root, options);
   if (input.cloud !== undefined) coarseCloud(root, input, input.cloud, scales, options);
-  axes(root, input, scales, options);
+  root.append('g').attr('class', 'axes');
+  renderAxes(root, input, scales, options);
   const plot = root.append('g').attr('clip-path', 'url(#plot-clip)').append('g').attr('class', 'plot-marks');
-  if (input.open !== undefined) band(plot, input, input.open, scales);
+  plot.append('g').attr('class', 'under');
   marks(plot, input, scales, options);
-  rings(plot, input, scales, options);
-  if (input.changed !== undefined) change(plot, input, input.changed, scales);
+  plot.append('g').attr('class', 'over');
+  renderOverlay(root, input, scales, options);
   return scales;
+}
+
+/** Redraws what follows the open, pinned and moved designs, and leaves the thousands of marks alone. */
+export function renderOverlay(
+  root: Root<SVGSVGElement>,
+  input: TradeoffInput,
+  scales: TradeoffScales,
+  options: TradeoffOptions = tradeoffDefaults,
+): void {
+  const under = clear(root.select<SVGGElement>('g.under') as unknown as Root<SVGGElement>);
+  const over = clear(root.select<SVGGElement>('g.over') as unknown as Root<SVGGElement>);
+  if (input.open !== undefined) band(under, input, input.open, scales);
+  rings(over, input, scales, options);
+  if (input.changed !== undefined) change(over, input, input.changed, scales);
 }
 
 /** Scales over the window, or over all designs with a little room around. */
@@ -114,11 +129,18 @@ function clip(root: Root<SVGSVGElement>, o: TradeoffOptions): void {
     .attr('height', o.height - o.top - o.bottom + 6);
 }
 
-function axes(root: Root<SVGSVGElement>, input: TradeoffInput, { x, y }: TradeoffScales, o: TradeoffOptions): void {
+/** Redraws the axes alone, as during a pan. */
+export function renderAxes(
+  root: Root<SVGSVGElement>,
+  input: TradeoffInput,
+  { x, y }: Pick<TradeoffScales, 'x' | 'y' | 'frame'>,
+  o: TradeoffOptions = tradeoffDefaults,
+): void {
+  const group = clear(root.select<SVGGElement>('g.axes') as unknown as Root<SVGGElement>);
   const unit = (q: Quantity, scale: Scale) => axisUnit(q.unit, scale.domain()[1] ?? q.high);
   const ticks = Math.max(3, Math.round((o.ticks * o.width) / 680));
-  bottomAxis(root, x, o, { title: titled(input.x.label), unit: unit(input.x, x), ticks });
-  leftAxis(root, y, o, { title: titled(input.y.label), unit: unit(input.y, y), ticks: 7 });
+  bottomAxis(group, x, o, { title: titled(input.x.label), unit: unit(input.x, x), ticks });
+  leftAxis(group, y, o, { title: titled(input.y.label), unit: unit(input.y, y), ticks: 7 });
 }
 
 function marks(plot: Root<SVGGElement>, input: TradeoffInput, scales: TradeoffScales, o: TradeoffOptions): void {

@@ -1,0 +1,16 @@
+/** Hands a text to the reader as a file, without any network. */
+import type { TakeAwayFile } from './assessor.ts';
+
+/** Offers `file` for saving under its name. */
+export function download(document: Document, file: TakeAwayFile): void {
+  const view = document.defaultView;
+  if (view === null) return;
+  const address = view.URL.createObjectURL(new view.Blob([file.text], { type: `${file.type};charset=utf-8` }));
+  const link = document.createElement('a');
+  link.href = address;
+  link.download = file.name;
+  document.body.append(link);
+  link.click();
+  link.remove();
+  view.setTimeout(() => view.URL.revokeObjectURL(address), 10_000);
+}

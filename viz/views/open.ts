@@ -1,0 +1,65 @@
+/** The open design's head: what it is, its figures, and what can be done with it. */
+import type { Assessment } from '../../model/assessment.ts';
+import { counted, spoken } from '../labels.ts';
+import { clear, type Root } from '../marks/root.ts';
+import { percent, show } from '../units.ts';
+import { familyMark, familyName } from './legend.ts';
+
+export interface OpenInput {
+  readonly design: Assessment;
+  readonly isPinned: boolean;
+  readonly isLeft: boolean;
+  readonly isIncumbent: boolean;
+  /** How many others the model cannot tell from it. */
+  readonly alike: number;
+}
+
+export function renderOpenHead<E extends Element>(root: Root<E>, input: OpenInput): void {
+  const { design } = input;
+  const head = clear(root).append('div').attr('class', 'card-head');
+  const name = head.append('h2');
+  name.append('span').attr('class', 'kicker').text('Open design');
+  name.append('bdi').attr('class', 'id').text(design.id);
+  const actions = head.append('div').attr('class', 'controls');
+  actions
+    .append('button')
+    .attr('type', 'button')
+    .attr('data-act', 'pin')
+    .attr('aria-pressed', String(input.isPinned))
+    .text(input.isPinned ? 'Pinned' : 'Pin');
+  const line = root.append('p').attr('class', 'family-line');
+  familyMark(line, design.family);
+  line.append('span').text(`${familyName(design.family)} · ${genesText(design)}`);
+  figures(root, design);
+  root.append('p').attr('class', 'note').text(remarks(input));
+}
+
+/** `404 kHz, 10 µH`: the genes with a unit, in the record's order. */
+function genesText(design: Assessment): string {
+  const { frequency, inductance, phases } = design.design.genes;
+  const words: string[] = [];
+  if (frequency !== undefined) words.push(show(frequency, 'Hz'));
+  if (inductance !== undefined) words.push(`${show(inductance, 'H')}${(phases ?? 1) > 1 ? ' a phase' : ''}`);
+  return words.join(', ');
+}
+
+function figures<E extends Element>(root: Root<E>, design: Assessment): void {
+  const list = root.append('dl').attr('class', 'figures');
+  const full = design.points.find((point) => point.load === 1);
+  const pairs = design.objectives.map((figure) => [spoken(figure.name), show(figure.value, figure.unit)]);
+  if (full !== undefined) pairs.push(['efficiency at full load', percent(full.efficiency)]);
+  for (const [name = '', value = ''] of pairs) {
+    const pair = list.append('div');
+    pair.append('dt').text(name);
+    pair.append('dd').text(value);
+  }
+}
+
+function remarks(input: OpenInput): string {
+  const words = [`Tightest margin ${percent(input.design.worstMargin)}.`];
+  if (input.alike > 0)
+    words.push(`${counted(input.alike, 'other design')} cannot be told from it within the model’s error.`);
+  if (!input.isLeft) words.push('It lies outside the ranges you set.');
+  if (input.isIncumbent) words.push('It is one of the sheet’s existing designs.');
+  return words.join(' ');
+}
