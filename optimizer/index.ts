@@ -1,0 +1,42 @@
+/**
+ * The search engine as a library. It searches any `Problem` (problem.ts): real, logarithmic, whole-number and choice genes, two to four
+ * objectives, limits as violations.
+ *
+ * In one thread:
+ *
+ *     const { front } = search(problem, { evaluations: 25_000, seed: 1, keep: 100 });
+ *
+ * Over threads or machines, each island is plain data and an epoch a pure function, so anyone may run it:
+ *
+ *     const plan = createPlan(problem, { seed: 1, shard: 0, shards: 1, evaluations: 200_000 });  // plain data: store it
+ *     let islands = startIslands(problem, plan);                                    // nothing evaluated yet
+ *     for (let epoch = 0; epoch < plan.epochs; epoch++) {
+ *       const before = islands;                                                     // all of epoch e − 1
+ *       islands = before.map((island, i) => step(problem, island, immigrantsFor(before, i)));  // in any order, anywhere
+ *     }
+ *     const front = mergeArchives(problem, islands);                                // any order: same bytes
+ *
+ *     createPlan(problem: Problem, options?: PlanOptions): Plan
+ *     startIslands(problem: Problem, plan: Plan): Island[]
+ *     immigrantsFor(islands: readonly Island[], i: number): Designs
+ *     step(problem: Problem, island: Island, immigrants?: Designs, watch?: Watch): Island
+ *     packIsland(island: Island): Uint8Array        unpackIsland(bytes: Uint8Array): Island      (throws on damage)
+ *     packDesigns(designs: Designs): Uint8Array     unpackDesigns(bytes: Uint8Array): Designs
+ *     mergeArchives(problem, parts: readonly (Island | Designs)[]): Designs
+ *     mergeNearMisses(problem, parts: readonly (Island | Designs)[], front: Designs): NearMissDesigns
+ *     chooseSubset(front: Designs, count: number, reference?: Float64Array): Designs
+ *     hypervolumeOf(problem, front: Designs): number                                 // 0 … 1
+ *
+ * An epoch takes `plan.epochGenerations × plan.population` evaluations an island; `Island.counters`, `.record` (family by family), `.shares` (of
+ * `OPERATORS`) tell how it goes. `watch` = { now, spent: { variation, model, ranking, archive } } adds up where the time went.
+ */
+export type { Designs, NearMissDesigns } from './archive/index.ts';
+export { chooseSubset, hypervolumeOf, mergeArchives, mergeNearMisses } from './front.ts';
+export { type Counters, type FamilyRecord, type Island, OPERATORS, startIslands } from './island.ts';
+export { PACK_VERSION, packDesigns, packIsland, unpackDesigns, unpackIsland } from './pack.ts';
+export { createPlan, type Plan, type PlanOptions } from './plan.ts';
+export { type Families, type Gene, type GeneKind, type Objective, ONE_FAMILY, type Problem } from './problem.ts';
+export { immigrantsFor, joinDesigns, NO_DESIGNS } from './ring.ts';
+export { type SearchOptions, type SearchResult, search } from './search.ts';
+export { step } from './step.ts';
+export type { TimeSplit, Watch } from './world.ts';

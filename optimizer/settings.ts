@@ -1,0 +1,35 @@
+/**
+ * Every constant that steers the search, in one place. They hold for all problems alike: the rules below read the budget, the number of
+ * genes and the number of families, nothing else.
+ */
+
+/** Designs an island breeds from. */
+export const POPULATION = 100;
+/** Children made between two selections. */
+export const BATCH = 20;
+/** Generations (of `population` evaluations each) in an epoch, the unit of checkpoints and migration. */
+export const EPOCH_GENERATIONS = 25;
+/** Epochs in which each family is searched by itself, when the budget is not known. */
+export const TRIAL_EPOCHS = 2;
+/** Evaluations that justify one more island. */
+export const EVALUATIONS_PER_ISLAND = 25_000;
+/** Most islands of a shard, unless asked for. */
+export const MOST_ISLANDS = 16;
+/** Smallest part of an island's population that each of its families has while families are tried. */
+export const NICHE = 4;
+/** Immigrants from each of the two neighbours, as a part of the population. */
+export const IMMIGRATION = 0.1;
+/** Generations over which the ε-relaxed start tightens to zero. */
+export const RELAXED_GENERATIONS = 10;
+/** Part of a first population that counts as feasible in the ε-relaxed start when nothing is feasible. */
+export const RELAXED_SHARE = 0.2;
+/** Generations without one archive entry after which an island restarts. */
+export const STALLED_GENERATIONS = 8;
+/** Slots for the hashes of designs seen, a power of two. */
+export const SEEN_SLOTS = 1 << 16;
+/** Tries at a child that was not seen before. */
+export const TRIES = 8;
+/** Largest violation, as a fraction of the limit, of a near miss. */
+export const NEAR_MISS_SHARE = 0.25;
+/** How far beyond the worst member of a front its hypervolume reference lies, as a part of the front's range. */
+export const REFERENCE_MARGIN = 0.1;

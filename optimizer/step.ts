@@ -1,0 +1,57 @@
+/** One epoch of one island, as a pure function: same island, same immigrants, same result to the bit, on any engine. */
+import type { Designs } from './archive/index.ts';
+import { breed, createNursery, type Nursery, settle } from './breed.ts';
+import type { Island } from './island.ts';
+import { type Bench, createBench, judge } from './judge.ts';
+import type { Problem } from './problem.ts';
+import { NO_DESIGNS } from './ring.ts';
+import { BATCH, STALLED_GENERATIONS } from './settings.ts';
+import { createSurvival, type Survival, survive } from './survive.ts';
+import { learn } from './variation/index.ts';
+import { addRows, closeWorld, openWorld, type Watch, type World } from './world.ts';
+
+/**
+ * The island after one more epoch of `epochGenerations × population` evaluations (fewer only when no unseen design can be made). `island` is not
+ * changed. `watch` measures where the time went and never influences the result.
+ */
+export function step(problem: Problem, island: Island, immigrants: Designs = NO_DESIGNS, watch?: Watch): Island {
+  const world = openWorld(problem, island, immigrants.count, watch);
+  const tools = { nursery: createNursery(world), bench: createBench(world), survival: createSurvival(world) };
+  const { plan } = island;
+  const target = world.counters.evaluations + plan.epochGenerations * plan.population;
+  addRows(world, immigrants);
+  if (world.count > 0) survive(world, tools.survival, world.count);
+  let idle = 0;
+  while (world.counters.evaluations < target && idle < STALLED_GENERATIONS) {
+    const left = target - world.counters.evaluations;
+    const made = world.count === 0 ? founders(world, tools, left) : batch(world, tools, Math.min(BATCH, left));
+    idle = made === 0 ? idle + 1 : 0;
+  }
+  return closeWorld(world);
+}
+
+interface Tools {
+  readonly nursery: Nursery;
+  readonly bench: Bench;
+  readonly survival: Survival;
+}
+
+/** A first population. */
+function founders(world: World, tools: Tools, most: number): number {
+  const made = settle(world, tools.nursery, Math.min(world.keep, most));
+  judge(world, tools.bench, 0, made);
+  survive(world, tools.survival, made);
+  return made;
+}
+
+/** One batch of children, from breeding to survival. */
+function batch(world: World, tools: Tools, size: number): number {
+  const from = world.count;
+  const made = breed(world, tools.nursery, size);
+  world.tried.fill(0);
+  world.entered.fill(0);
+  judge(world, tools.bench, from, from + made);
+  learn(world.shares, world.quality, world.tried, world.entered);
+  survive(world, tools.survival, from + made);
+  return made;
+}

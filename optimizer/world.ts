@@ -1,0 +1,223 @@
+/** The island opened for work: its data in rows with room for children, its archives live, its scratch allocated once an epoch. */
+import {
+  type Archive,
+  type ArchiveGrid,
+  createNearMisses,
+  type Designs,
+  insertAllNearMisses,
+  type NearMisses,
+  type NearMissGrid,
+  packArchive,
+  packNearMisses,
+  unpackArchive,
+} from './archive/index.ts';
+import { createTruncation, type Truncation } from './hypervolume/index.ts';
+import type { Island } from './island.ts';
+import type { Problem } from './problem.ts';
+import { type Random, restoreRandom } from './random.ts';
+import { type ConstrainedRanker, createConstrainedRanker } from './ranking/index.ts';
+import { BATCH, NEAR_MISS_SHARE, NICHE } from './settings.ts';
+import { createSpace, type Space, toCoordinates } from './variation/index.ts';
+
+/** Where an epoch's time went, in the unit of the caller's clock. */
+export interface TimeSplit {
+  variation: number;
+  model: number;
+  ranking: number;
+  archive: number;
+}
+
+/** A caller's clock and the record it fills. It never influences a result. */
+export interface Watch {
+  readonly now: () => number;
+  readonly spent: TimeSplit;
+}
+
+/** An open island. Rows 0 … count − 1 are the population, the rows behind them children. */
+export interface World {
+  readonly problem: Problem;
+  readonly island: Island;
+  readonly watch: Watch | undefined;
+  readonly space: Space;
+  readonly n: number;
+  readonly m: number;
+  readonly limits: number;
+  /** Rows there is room for. */
+  readonly capacity: number;
+  /** Members kept at a selection. */
+  readonly keep: number;
+  readonly genes: Float64Array;
+  readonly coordinates: Float64Array;
+  readonly objectives: Float64Array;
+  readonly violations: Float64Array;
+  /** Total normalised violation of each row; Infinity for what cannot be computed. */
+  readonly total: Float64Array;
+  readonly rank: Int32Array;
+  readonly family: Int32Array;
+  /** Operator that made a row. */
+  readonly maker: Int32Array;
+  readonly archive: Archive;
+  readonly near: NearMisses;
+  readonly seen: Uint32Array;
+  readonly random: Random;
+  readonly ranker: ConstrainedRanker;
+  readonly truncation: Truncation;
+  readonly shares: Float64Array;
+  readonly quality: Float64Array;
+  readonly tried: Float64Array;
+  readonly entered: Float64Array;
+  readonly violationSum: Float64Array;
+  readonly violationCount: Float64Array;
+  readonly record: {
+    readonly evaluated: Float64Array;
+    readonly feasible: Float64Array;
+    readonly best: Float64Array;
+    readonly violated: Float64Array;
+  };
+  readonly counters: {
+    evaluations: number;
+    feasible: number;
+    notComputable: number;
+    duplicates: number;
+    restarts: number;
+  };
+  /** Members of the population. */
+  count: number;
+  /** True while each family is searched by itself. */
+  trial: boolean;
+  relaxation: number;
+  relaxedGenerations: number;
+  stalled: number;
+}
+
+/** The grid of a problem's archive: from the problem alone. */
+export function archiveGrid(problem: Problem): ArchiveGrid {
+  return {
+    genes: problem.genes.length,
+    objectives: problem.objectives.length,
+    violations: problem.limits.length,
+    ideal: Float64Array.from(problem.objectives, (objective) => objective.ideal),
+    resolution: Float64Array.from(problem.objectives, (objective) => objective.resolution),
+  };
+}
+
+/** The scale of a problem's near misses: from the problem alone. */
+export function nearMissGrid(problem: Problem): NearMissGrid {
+  return {
+    genes: problem.genes.length,
+    objectives: problem.objectives.length,
+    violations: problem.limits.length,
+    ideal: Float64Array.from(problem.objectives, (objective) => objective.ideal),
+    reference: Float64Array.from(problem.objectives, (objective) => objective.reference),
+    share: NEAR_MISS_SHARE,
+  };
+}
+
+/** Opens an island with room for `guests` more rows. */
+export function openWorld(problem: Problem, island: Island, guests: number, watch: Watch | undefined): World {
+  const n = problem.genes.length;
+  const m = problem.objectives.length;
+  const limits = problem.limits.length;
+  const trial = island.epoch < island.plan.trialEpochs && problem.families.names.length > 1;
+  const keep = trial ? Math.max(island.plan.population, NICHE * island.families.length) : island.plan.population;
+  const capacity = Math.max(keep, island.population.count) + Math.max(guests, BATCH, keep);
+  const near = createNearMisses(nearMissGrid(problem));
+  insertAllNearMisses(near, island.nearMisses);
+  const world: World = {
+    problem,
+    island,
+    watch,
+    space: createSpace(problem.genes),
+    n,
+    m,
+    limits,
+    capacity,
+    keep,
+    genes: new Float64Array(capacity * n),
+    coordinates: new Float64Array(capacity * n),
+    objectives: new Float64Array(capacity * m),
+    violations: new Float64Array(capacity * limits),
+    total: new Float64Array(capacity),
+    rank: new Int32Array(capacity),
+    family: new Int32Array(capacity),
+    maker: new Int32Array(capacity).fill(-1),
+    archive: unpackArchive(archiveGrid(problem), island.archive),
+    near,
+    seen: island.seen.slice(),
+    random: restoreRandom(island.random),
+    ranker: createConstrainedRanker(capacity, m),
+    truncation: createTruncation(capacity, m),
+    shares: island.shares.slice(),
+    quality: island.quality.slice(),
+    tried: new Float64Array(island.shares.length),
+    entered: new Float64Array(island.shares.length),
+    violationSum: island.violationSum.slice(),
+    violationCount: island.violationCount.slice(),
+    record: {
+      evaluated: island.record.evaluated.slice(),
+      feasible: island.record.feasible.slice(),
+      best: island.record.best.slice(),
+      violated: island.record.violated.slice(),
+    },
+    counters: { ...island.counters },
+    count: 0,
+    trial,
+    relaxation: island.relaxation,
+    relaxedGenerations: island.relaxedGenerations,
+    stalled: island.stalled,
+  };
+  addRows(world, island.population);
+  return world;
+}
+
+/** True when every objective of a row is finite and no violation NaN. */
+export function computable(world: World, row: number): boolean {
+  const { m, limits, objectives, violations } = world;
+  for (let c = 0; c < m; c++) if (!Number.isFinite(objectives[row * m + c])) return false;
+  for (let k = 0; k < limits; k++) if (Number.isNaN(violations[row * limits + k])) return false;
+  return true;
+}
+
+/** Appends evaluated designs to the population. */
+export function addRows(world: World, designs: Designs): void {
+  const { n, m, limits, count } = world;
+  world.genes.set(designs.genes.subarray(0, designs.count * n), count * n);
+  world.objectives.set(designs.objectives.subarray(0, designs.count * m), count * m);
+  world.violations.set(designs.violations.subarray(0, designs.count * limits), count * limits);
+  for (let row = count; row < count + designs.count; row++) {
+    toCoordinates(world.space, world.genes, row * n, world.coordinates, row * n);
+    world.total[row] = computable(world, row) ? 0 : Number.POSITIVE_INFINITY;
+    world.family[row] = world.problem.families.of(world.genes.subarray(row * n, row * n + n));
+  }
+  world.count += designs.count;
+}
+
+/** Closes the world into the island's next state. */
+export function closeWorld(world: World): Island {
+  const { n, m, limits, count, island } = world;
+  return {
+    plan: island.plan,
+    index: island.index,
+    epoch: island.epoch + 1,
+    random: world.random.state(),
+    families: island.families,
+    population: {
+      count,
+      genes: world.genes.slice(0, count * n),
+      objectives: world.objectives.slice(0, count * m),
+      violations: world.violations.slice(0, count * limits),
+    },
+    archive: packArchive(world.archive),
+    nearMisses: packNearMisses(world.near),
+    seen: world.seen,
+    shares: world.shares,
+    quality: world.quality,
+    violationSum: world.violationSum,
+    violationCount: world.violationCount,
+    relaxation: world.relaxation,
+    relaxedGenerations: world.relaxedGenerations,
+    stalled: world.stalled,
+    counters: { ...world.counters },
+    record: world.record,
+  };
+}
