@@ -10,7 +10,7 @@ export class Solids {
   readonly x: Float64Array;
   readonly y: Float64Array;
   readonly z: Float64Array;
-  /** Whose point each is; never read here. */
+  /** Whose point each is. */
   readonly owner: Int32Array;
   /** Scratch: the staircase inside the asked point's quadrant, x rising, y falling. */
   private readonly stairX: Float64Array;
@@ -40,6 +40,14 @@ export class Solids {
     this.y[i] = points[at + 1];
     this.z[i] = z;
     this.owner[i] = owner;
+  }
+
+  /** Index of the point with that owner, which must be there. */
+  find(owner: number): number {
+    const owners = this.owner;
+    let i = 0;
+    while (owners[i] !== owner) i++;
+    return i;
   }
 
   /** Removes the `index`th point. */

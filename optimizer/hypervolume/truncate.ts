@@ -1,5 +1,15 @@
-/** Environmental truncation: shrinks a front by dropping, one after the other, the design whose loss costs least hypervolume. */
-import { createContributions } from './contributions.ts';
+/**
+ * Environmental truncation: shrinks a front by dropping, one after the other, the design whose loss costs least hypervolume (the selection of
+ * Beume, Naujoks, Emmerich 2007, applied until enough are gone).
+ *
+ * Contributions only grow as others leave, so an old value is a lower bound: only the entry that looks least is measured again, and it goes if it
+ * still is the least (the lazy scheme of Chen, Ishibuchi, Shang 2020 for removal).
+ */
+import { createRowOrder } from '../ranking/order.ts';
+import { createBoxedContribution } from './boxed.ts';
+import { gatherInside } from './inside.ts';
+import { Solids } from './solids.ts';
+import { createSpaceContributions } from './space-contributions.ts';
 
 /** Drops least contributors; owns its scratch. */
 export interface Truncation {
@@ -10,6 +20,9 @@ export interface Truncation {
    * Reorders `rows` in place: the kept come first, in their old order; the removed follow, the last removed first. Among equal contributions
    * the one that stands last in `rows` goes first. Rows not better than `reference` contribute 0, so choose a reference beyond the
    * front's worst values to hold its ends. Returns `keep` (or `count` if that is smaller), or −1 (rows untouched) when a value is not finite.
+   *
+   * Cost: one sweep for all contributions (15 µs for 100 rows, 30 µs for 200), then a few single contributions a removal (about 2 µs at
+   * m = 2 or 3 and 200 rows; about 50 µs at m = 4, where the first step takes some milliseconds).
    */
   truncate(objectives: Float64Array, rows: Int32Array, count: number, keep: number, reference: Float64Array): number;
   /** Position in `rows` of the least contributor, by the same rule, or −1 when `count` is 0 or a value is not finite. */
@@ -18,27 +31,144 @@ export interface Truncation {
 
 /** A truncation for up to `capacity` rows of `m` objectives (2 to 4). */
 export function createTruncation(capacity: number, m: number): Truncation {
-  const contributions = createContributions(capacity, m);
+  const points = new Float64Array(capacity * m + m);
+  const entryOf = new Int32Array(capacity + 1);
+  const shrinking = m === 4 ? createBoxedShrinking(capacity) : createSweptShrinking(capacity, m);
   const values = new Float64Array(capacity);
-  function least(objectives: Float64Array, rows: Int32Array, count: number, reference: Float64Array): number {
-    if (!contributions.measure(objectives, rows, count, reference, values)) return -1;
+  /** The point of each entry of `rows`, −1 when it is not inside the reference. */
+  const pointOf = new Int32Array(capacity);
+  /** Number of removals after which each value was measured; −1 when the entry is gone. */
+  const measuredAt = new Int32Array(capacity);
+  const removed = new Int32Array(capacity);
+
+  function begin(objectives: Float64Array, rows: Int32Array, count: number, reference: Float64Array): boolean {
+    const inside = gatherInside(objectives, rows, count, reference, m, points, entryOf);
+    if (inside < 0) return false;
+    measuredAt.fill(0, 0, count);
+    pointOf.fill(-1, 0, count);
+    for (let k = 0; k < inside; k++) pointOf[entryOf[k]] = k;
+    shrinking.load(points, inside, reference);
+    for (let i = 0; i < count; i++) values[i] = pointOf[i] < 0 ? 0 : shrinking.values[pointOf[i]];
+    return true;
+  }
+
+  function smallest(count: number): number {
     let at = -1;
-    for (let i = 0; i < count; i++) if (at < 0 || values[i] <= values[at]) at = i;
+    let least = Number.POSITIVE_INFINITY;
+    for (let i = 0; i < count; i++) {
+      if (values[i] <= least && measuredAt[i] >= 0) {
+        at = i;
+        least = values[i];
+      }
+    }
     return at;
   }
+
+  function removeOne(count: number, gone: number): void {
+    let at = smallest(count);
+    while (measuredAt[at] !== gone && pointOf[at] >= 0) {
+      values[at] = shrinking.remeasure(pointOf[at]);
+      measuredAt[at] = gone;
+      at = smallest(count);
+    }
+    if (pointOf[at] >= 0) shrinking.drop(pointOf[at]);
+    measuredAt[at] = -1;
+    removed[gone] = at;
+  }
+
   return {
     capacity,
     m,
-    least,
+    least(objectives, rows, count, reference) {
+      return begin(objectives, rows, count, reference) ? smallest(count) : -1;
+    },
     truncate(objectives, rows, count, keep, reference) {
-      for (let left = count; left > keep; left--) {
-        const at = least(objectives, rows, left, reference);
-        if (at < 0) return -1;
-        const row = rows[at];
-        rows.copyWithin(at, at + 1, left);
-        rows[left - 1] = row;
+      if (!begin(objectives, rows, count, reference)) return -1;
+      const surplus = Math.max(0, count - keep);
+      for (let gone = 0; gone < surplus; gone++) removeOne(count, gone);
+      for (let gone = 0; gone < surplus; gone++) removed[gone] = rows[removed[gone]];
+      let kept = 0;
+      for (let i = 0; i < count; i++) if (measuredAt[i] >= 0) rows[kept++] = rows[i];
+      for (let gone = 0; gone < surplus; gone++) rows[count - 1 - gone] = removed[gone];
+      return kept;
+    },
+  };
+}
+
+/** A set of points, all inside the reference, that only ever shrinks. */
+interface Shrinking {
+  /** Contributions of all points right after `load`. */
+  readonly values: Float64Array;
+  load(points: Float64Array, n: number, reference: Float64Array): void;
+  /** The point's contribution among those not dropped. */
+  remeasure(point: number): number;
+  drop(point: number): void;
+}
+
+/** Two or three objectives; two are three with a flat third. */
+function createSweptShrinking(capacity: number, m: number): Shrinking {
+  const space = createSpaceContributions(capacity);
+  const solids = new Solids(capacity);
+  const lifted = new Float64Array(3 * capacity + 3);
+  const corner = new Float64Array(3);
+  const volume = new Float64Array(1);
+  const values = new Float64Array(capacity);
+  return {
+    values,
+    load(points, n, reference) {
+      corner[2] = 1;
+      corner.set(reference.subarray(0, m));
+      for (let k = 0; k < n; k++) {
+        for (let c = 0; c < m; c++) lifted[3 * k + c] = points[m * k + c];
       }
-      return Math.min(keep, count);
+      space.load(points, n, m, reference);
+      space.measure(values);
+      solids.count = n;
+      for (let k = 0; k < n; k++) {
+        const point = space.risingPoint(k);
+        solids.x[k] = lifted[3 * point];
+        solids.y[k] = lifted[3 * point + 1];
+        solids.z[k] = lifted[3 * point + 2];
+        solids.owner[k] = point;
+      }
+    },
+    remeasure(point) {
+      solids.exclusive(lifted, 3 * point, corner, solids.find(point), volume);
+      return volume[0];
+    },
+    drop(point) {
+      solids.removeAt(solids.find(point));
+    },
+  };
+}
+
+/** Four objectives. */
+function createBoxedShrinking(capacity: number): Shrinking {
+  const order = createRowOrder(capacity);
+  const boxed = createBoxedContribution(capacity);
+  const rising = new Int32Array(capacity);
+  const values = new Float64Array(capacity);
+  const corner = new Float64Array(4);
+  const volume = new Float64Array(1);
+  let held: Float64Array = values;
+  let left = 0;
+  return {
+    values,
+    load(points, n, reference) {
+      held = points;
+      left = n;
+      corner.set(reference.subarray(0, 4));
+      order.sort(points, 4, 3, n, rising);
+      for (let k = 0; k < n; k++) values[k] = this.remeasure(k);
+    },
+    remeasure(point) {
+      boxed.measure(held, point, rising, left, corner, volume);
+      return volume[0];
+    },
+    drop(point) {
+      const at = rising.indexOf(point);
+      rising.copyWithin(at, at + 1, left);
+      left--;
     },
   };
 }
