@@ -15,7 +15,10 @@ export function bandOf(objective: string, value: number, rail: Rail): number {
   return objective === 'cost' ? 0 : VOLUME_BAND * value;
 }
 
-/** Designs whose every banded objective lies within the band about design `open`, itself not counted. */
+/**
+ * Designs that the model cannot tell from design `open`: every objective that carries a band lies within it. What is
+ * known without the model, the price, may still tell them apart.
+ */
 export function indistinguishable(
   names: readonly string[],
   rows: readonly { readonly objectives: readonly number[] }[],
@@ -23,7 +26,8 @@ export function indistinguishable(
   rail: Rail,
 ): readonly number[] {
   const centre = rows[open]?.objectives ?? [];
-  const widths = names.map((name, k) => Math.max(bandOf(name, centre[k] ?? 0, rail), Math.abs(centre[k] ?? 0) * 0.005));
+  const widths = names.map((name, k) => bandOf(name, centre[k] ?? 0, rail) || Number.POSITIVE_INFINITY);
+  if (!widths.some(Number.isFinite)) return [];
   return rows.flatMap((row, i) => {
     const near = widths.every((width, k) => Math.abs((row.objectives[k] ?? 0) - (centre[k] ?? 0)) <= width);
     return near && i !== open ? [i] : [];

@@ -78,7 +78,7 @@ function fill(
       data[4 * at] = red;
       data[4 * at + 1] = green;
       data[4 * at + 2] = blue;
-      data[4 * at + 3] = Math.min(150, (data[4 * at + 3] ?? 0) + 34);
+      data[4 * at + 3] = Math.min(170, (data[4 * at + 3] ?? 0) + 60);
     }
   }
   brush.putImageData(image, 0, 0);

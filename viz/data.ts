@@ -2,50 +2,14 @@
  * Everything one page embeds: what a runner gathers from the run folder and hands to `buildPage`. All values are SI base
  * units and the sheet's currency. `pack.ts` turns it into the compact island inside the page and back.
  */
-import type { Bulk } from '../model/parts/bulk.ts';
-import type { Ceramic } from '../model/parts/ceramic.ts';
-import type { Controller } from '../model/parts/controller.ts';
-import type { Diode } from '../model/parts/diode.ts';
-import type { Inductor } from '../model/parts/inductor.ts';
-import type { Switch } from '../model/parts/switch.ts';
+import type { FrontDesign, FrontFile } from '../model/front-file.ts';
+import type { PartsTables } from '../model/parts/tables.ts';
 import type { Rail } from '../model/rail/rail.ts';
 
-/** Rows of every parts table, joined. */
-export interface PartsTables {
-  readonly switches: readonly Switch[];
-  readonly diodes: readonly Diode[];
-  readonly inductors: readonly Inductor[];
-  readonly ceramics: readonly Ceramic[];
-  readonly bulks: readonly Bulk[];
-  readonly controllers: readonly Controller[];
-}
-
-/** A named column. */
-export interface Column {
-  readonly name: string;
-  readonly unit: string;
-}
-
-/** One design of the front, as `front.json` holds it. */
-export interface FrontDesign {
-  readonly id: string;
-  readonly family: string;
-  readonly genes: Readonly<Record<string, number>>;
-  readonly parts: Readonly<Record<string, string>>;
-  /** In the order of the file's `objectives`. */
-  readonly objectives: readonly number[];
-  /** By limit name; ≥ 0 holds. */
-  readonly margins: Readonly<Record<string, number>>;
-  readonly worstMargin: number;
-}
+export type { FrontDesign };
 
 /** The part of `front.json` that the page needs. */
-export interface Front {
-  readonly objectives: readonly Column[];
-  readonly limits: readonly Column[];
-  readonly genes: readonly Column[];
-  readonly designs: readonly FrontDesign[];
-}
+export type Front = Pick<FrontFile, 'objectives' | 'limits' | 'genes' | 'designs'>;
 
 /** How the sweep went. */
 export interface RunRecord {

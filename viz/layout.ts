@@ -44,7 +44,7 @@ export function layout(): string {
 <section id="first" aria-label="Choose">
 <div id="picture-card" class="card">
 <div class="card-head"><h2>The trade-off</h2><div id="axes" class="controls">${axesControls()}</div></div>
-<p class="how">Each mark is one buildable design. Further left and further down is better. Open one with a click, or walk along with the arrow keys.</p>
+<p class="how">Each mark is one buildable design; further left and down is better. Click one to open it.</p>
 <div id="picks" class="picks" role="group" aria-label="A few to start from"></div>
 <div id="picture" class="plot" tabindex="0" role="slider" aria-label="Designs of the front, in the order of the horizontal axis" aria-orientation="horizontal" aria-valuemin="1" aria-valuemax="1" aria-valuenow="1" aria-describedby="keys"><canvas class="cloud" aria-hidden="true"></canvas><svg class="drawing" aria-hidden="true" focusable="false"></svg></div>
 <div id="hover" class="hover" hidden></div>
@@ -80,7 +80,7 @@ function focusable(name: string): string {
 
 function axesControls(): string {
   const select = (id: string, label: string) => `<label for="${id}">${label}</label><select id="${id}"></select>`;
-  return `${select('axis-x', 'Across')}${select('axis-y', 'Up')}${select('axis-third', 'Third')}<label for="axis-as" class="unseen">Third shown as</label><select id="axis-as"><option value="size">as size</option><option value="shade">as shade</option></select>`;
+  return `${select('axis-x', 'Across')}${select('axis-y', 'Up')}${select('axis-third', 'Mark')}`;
 }
 
 function whatIfPlaces(): string {

@@ -8,7 +8,7 @@ import { picksOf } from './picks.ts';
 import type { Bench, Scene } from './scene.ts';
 import { renderAway } from './views/away.ts';
 import { renderCompare } from './views/compare.ts';
-import { renderEfficiency } from './views/efficiency.ts';
+import { efficiencyDefaults, renderEfficiency } from './views/efficiency.ts';
 import { renderFamilies } from './views/families.ts';
 import { renderLegend } from './views/legend.ts';
 import { renderLimits } from './views/limits.ts';
@@ -30,8 +30,8 @@ import {
   type TradeoffScales,
   tradeoffDefaults,
 } from './views/tradeoff.ts';
-import { renderTrust } from './views/trust.ts';
-import { operatingPoint, renderWaveforms } from './views/waveforms.ts';
+import { renderTrust, trustDefaults } from './views/trust.ts';
+import { operatingPoint, renderWaveforms, waveformsDefaults } from './views/waveforms.ts';
 import { renderKnobs, renderMove } from './views/whatif.ts';
 
 /** Designs in the table behind the picture until it is opened. */
@@ -44,13 +44,19 @@ export function placeOf(document: Document, id: string): Root<HTMLElement> {
   return select(element) as unknown as Root<HTMLElement>;
 }
 
+/** A chart's width on this screen, so that its text keeps its size; none where nothing is laid out, as at build time. */
+function measured(document: Document, id: string): { readonly width?: number } {
+  const width = Math.min(620, document.getElementById(id)?.clientWidth ?? 0);
+  return width > 0 ? { width } : {};
+}
+
 /** Everything that does not change with the reader's choices. */
 export function paintFixed(document: Document, { data, known }: Bench): void {
   const place = (id: string) => placeOf(document, id);
   renderMasthead(place('masthead'), data.rail, data.run, data.front.designs.length, known.objectives);
   renderPrices(place('prices'), data.front, data.nearMisses, data.rail);
   renderFamilies(place('families'), data.families);
-  renderTrust(place('trust'), data.run, data.history);
+  renderTrust(place('trust'), data.run, data.history, { ...trustDefaults, ...measured(document, 'trust') });
   renderMind(place('mind'), data.cautions, data.notCovered);
   clear(place('colophon'))
     .append('p')
@@ -148,11 +154,19 @@ export function paintDesigns(document: Document, bench: Bench, scene: Scene, isW
 }
 
 function axisChoices(document: Document, { dataset }: Bench, { state }: Scene): void {
-  const names = dataset.objectives.map((objective) => [objective.name, titled(objective.name)] as const);
+  const names = dataset.objectives.map((objective) => [objective.name, short(objective.name)] as const);
   fill(document, 'axis-x', names, state.x);
   fill(document, 'axis-y', names, state.y);
-  fill(document, 'axis-third', [['', 'none'], ...names], state.third);
-  choose(document, 'axis-as', state.as);
+  const thirds = names.flatMap(([name, text]) => [
+    [`size ${name}`, `size: ${text.toLowerCase()}`] as const,
+    [`shade ${name}`, `shade: ${text.toLowerCase()}`] as const,
+  ]);
+  fill(document, 'axis-third', [['', 'plain'], ...thirds], state.third === '' ? '' : `${state.as} ${state.third}`);
+}
+
+/** `Loss` for `loss, profile mean`: what stands after a comma is said elsewhere. */
+function short(name: string): string {
+  return titled(name).split(',')[0] ?? '';
 }
 
 function fill(document: Document, id: string, options: readonly (readonly [string, string])[], chosen: string): void {
@@ -212,7 +226,10 @@ export function paintOpen(document: Document, bench: Bench, scene: Scene): void 
   const { rail } = bench.data;
   renderLosses(place('losses'), own.value, rail.profile.length);
   renderLimits(place('limits'), own.value);
-  renderEfficiency(place('efficiency'), own.value, rail);
+  renderEfficiency(place('efficiency'), own.value, rail, {
+    ...efficiencyDefaults,
+    ...measured(document, 'efficiency'),
+  });
   renderMakeup(place('makeup'), own.value, rail.currency);
   renderParts(place('parts'), own.value, rail.currency);
   paintPoint(document, bench, scene);
@@ -243,7 +260,7 @@ export function paintPoint(document: Document, bench: Bench, scene: Scene): void
     design.points.map((one, i) => [String(i), operatingPoint(one)] as const),
     String(at),
   );
-  renderWaveforms(placeOf(document, 'waveforms'), point);
+  renderWaveforms(placeOf(document, 'waveforms'), point, { ...waveformsDefaults, ...measured(document, 'waveforms') });
   renderTemperatures(placeOf(document, 'temperatures'), design, point, bench.data.rail.ambient);
 }
 

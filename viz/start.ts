@@ -190,8 +190,10 @@ function choose(desk: Desk, input: HTMLInputElement | HTMLSelectElement): void {
   const { value } = input;
   if (input.id === 'axis-x') desk.set({ x: value, y: value === state.y ? state.x : state.y, ...noWindow(state) });
   if (input.id === 'axis-y') desk.set({ y: value, x: value === state.x ? state.y : state.x, ...noWindow(state) });
-  if (input.id === 'axis-third') desk.set({ third: value });
-  if (input.id === 'axis-as') desk.set({ as: value === 'shade' ? 'shade' : 'size' });
+  if (input.id === 'axis-third') {
+    const [as, ...third] = value.split(' ');
+    desk.set({ as: as === 'shade' ? 'shade' : 'size', third: third.join(' ') });
+  }
   if (input.id === 'point') desk.set({ point: Number(value) });
   if (input.id !== 'add-range') return;
   const quantity = desk.bench.dataset.byKey.get(value);

@@ -1,5 +1,7 @@
 /** Quantities as an engineer writes them, and one common prefix for a whole axis. */
 
+import { formatQuantity } from '../model/quantity/format.ts';
+
 const PREFIXES: readonly (readonly [string, number])[] = [
   ['G', 1e9],
   ['M', 1e6],
@@ -58,16 +60,21 @@ function pick(steps: readonly (readonly [string, number])[], size: number, unit:
 
 /** A difference of two quantities: like `show`, but kelvin stay kelvin; with a sign. */
 export function showDifference(value: number, unit: string): string {
-  const text = unit === 'K' ? `${digits(Math.abs(value))} K` : show(Math.abs(value), unit);
+  const text = unit === 'K' ? `${digits(Math.abs(value))}\u00a0K` : show(Math.abs(value), unit);
   return `${value < 0 ? '−' : '+'}${text}`;
 }
 
-/** `value` in engineering units with three digits: `4.70 µH`, `55.0 °C`, `3.21 EUR`. Not a number: `none`. */
+/** `value` as the model writes it for people, to three digits: `4.7 µH`, `55 °C`, `3.21 EUR`. Not a number: `none`. */
 export function show(value: number, unit: string): string {
   if (!Number.isFinite(value)) return 'none';
-  const scale = axisUnit(unit, value);
-  const text = digits((value - scale.offset) / scale.factor);
-  return scale.label === '' ? text : `${text}\u00a0${scale.label}`;
+  const isMoney = /^[A-Z]{3}$/.test(unit);
+  const rounded = unit === 'K' ? Math.round((value - 273.15) * 10) / 10 + 273.15 : isMoney ? value : threeDigits(value);
+  return minus(formatQuantity(rounded, unit).replace(' ', '\u00a0'));
+}
+
+/** Three digits; whole numbers of four stay whole. */
+function threeDigits(value: number): number {
+  return Number.isInteger(value) && Math.abs(value) < 1e4 ? value : Number(value.toPrecision(3));
 }
 
 /** A fraction in percent. */

@@ -144,7 +144,17 @@ function around(front: Front, everyone: readonly Assessment[]): Omit<PageData, '
       built: '2026-12-01T09:00:00Z',
     },
     rail: RAIL,
-    tables: { switches: [], diodes: [], inductors: [], ceramics: [], bulks: [], controllers: [] },
+    tables: {
+      switches: [],
+      diodes: [],
+      inductors: [],
+      ceramics: [],
+      bulks: [],
+      controllers: [],
+      cores: [],
+      materials: [],
+      conductors: [],
+    },
     history: Array.from({ length: 40 }, (_, epoch) => ({
       evaluations: (epoch + 1) * 6000,
       hypervolume: 0.6612 * (1 - Math.exp(-(epoch + 2) / 6)),

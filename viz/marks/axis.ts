@@ -41,13 +41,19 @@ export function bottomAxis(
 ): void {
   const base = frame.height - frame.bottom;
   const group = (svg as Root<SVGGElement>).append('g').attr('class', 'axis').attr('transform', moved(0, base));
-  for (const tick of ticksOf(scale, options)) {
+  const ticks = ticksOf(scale, options);
+  for (const tick of ticks) {
     const x = px(scale(tick));
     group
       .append('path')
       .attr('class', 'grid')
       .attr('d', `M${x} 0V${px(frame.top - base)}`);
-    group.append('text').attr('x', x).attr('y', 16).attr('text-anchor', 'middle').text(written(tick, options.unit));
+    group
+      .append('text')
+      .attr('x', x)
+      .attr('y', 16)
+      .attr('text-anchor', 'middle')
+      .text(written(tick, ticks, options.unit));
   }
   group
     .append('path')
@@ -64,7 +70,8 @@ export function leftAxis(
   options: AxisOptions,
 ): void {
   const group = (svg as Root<SVGGElement>).append('g').attr('class', 'axis').attr('transform', moved(frame.left, 0));
-  for (const tick of ticksOf(scale, options)) {
+  const ticks = ticksOf(scale, options);
+  for (const tick of ticks) {
     const y = px(scale(tick));
     group
       .append('path')
@@ -76,7 +83,7 @@ export function leftAxis(
       .attr('y', y)
       .attr('dy', '0.32em')
       .attr('text-anchor', 'end')
-      .text(written(tick, options.unit));
+      .text(written(tick, ticks, options.unit));
   }
   title(group, -frame.left + 2, frame.top - 10, 'start', options);
 }
@@ -113,7 +120,10 @@ function leading(value: number): string {
   return value.toExponential().charAt(0);
 }
 
-function written(tick: number, unit: AxisUnit): string {
-  const value = (tick - unit.offset) / unit.factor;
-  return digits(Number(value.toPrecision(6)));
+/** A tick in the axis' unit, with as many decimals as its neighbours need; far-apart values each with their own. */
+function written(tick: number, ticks: readonly number[], unit: AxisUnit): string {
+  const shown = (value: number) => Number(((value - unit.offset) / unit.factor).toPrecision(6));
+  const places = Math.max(...ticks.map((one) => String(shown(one)).split('.')[1]?.length ?? 0));
+  const isWide = Math.max(...ticks.map(Math.abs)) > 100 * Math.min(...ticks.map(Math.abs)) && !ticks.includes(0);
+  return isWide ? digits(shown(tick)) : shown(tick).toFixed(Math.min(places, 6)).replace('-', '−');
 }

@@ -6,7 +6,7 @@ export interface Look {
   readonly phases: number;
 }
 
-/** Order of the architectures: colour class `kind-0` … and the cut of the same number. */
+/** Order of the architectures, which numbers the cuts. */
 const ORDER = [
   'buck-synchronous',
   'buck-diode',
@@ -24,15 +24,19 @@ export function lookOf(family: string): Look {
   return { architecture, phases: Number.isInteger(count) && count > 0 ? count : 1 };
 }
 
-/** Colour class number of an architecture, 0 … 6; unknown ones share the last. */
-export function kindOf(architecture: string): number {
+/** Colour class number of a family, 0 … 6: neighbours in phases differ, and so do architectures of equal phases. */
+export function colourOf({ architecture, phases }: Look): number {
+  return (phases - 1 + 3 * rankOf(architecture)) % 7;
+}
+
+function rankOf(architecture: string): number {
   const rank = ORDER.indexOf(architecture);
   return rank < 0 ? ORDER.length - 1 : rank;
 }
 
 /** Path of a family's mark about the origin, with about the area of a circle of radius `r`; fill with `evenodd`. */
 export function markPath(look: Look, r: number): string {
-  return `${outline(look.phases, r)}${cut(kindOf(look.architecture), r)}`;
+  return `${outline(look.phases, r)}${cut(rankOf(look.architecture), r)}`;
 }
 
 function outline(phases: number, r: number): string {

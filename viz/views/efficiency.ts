@@ -8,8 +8,8 @@ import { clear, px, type Root } from '../marks/root.ts';
 import { percent, show } from '../units.ts';
 
 export const efficiencyDefaults = {
-  width: 440,
-  height: 250,
+  width: 560,
+  height: 260,
   left: 44,
   right: 64,
   top: 30,

@@ -1,7 +1,7 @@
 /** Families with their marks: a press hides or shows one. */
 import type { Dataset } from '../dataset.ts';
 import { thousands, titled } from '../labels.ts';
-import { kindOf, lookOf, markPath } from '../marks/mark.ts';
+import { colourOf, lookOf, markPath } from '../marks/mark.ts';
 import type { Root } from '../marks/root.ts';
 
 export function renderLegend<E extends Element>(
@@ -42,7 +42,7 @@ function drawMark(svg: MarkSelection): void {
   svg.attr('class', 'mark-sample').attr('viewBox', '-9 -9 18 18').attr('aria-hidden', 'true');
   svg
     .append('path')
-    .attr('class', (family) => `mark kind-${kindOf(lookOf(family).architecture)}`)
+    .attr('class', (family) => `mark kind-${colourOf(lookOf(family))}`)
     .attr('fill-rule', 'evenodd')
     .attr('d', (family) => markPath(lookOf(family), 5.4));
 }
@@ -54,8 +54,8 @@ export function familyMark<E extends Element>(root: Root<E>, family: string): vo
   );
 }
 
-/** `Buck synchronous ×2` → `Buck synchronous, 2 phases`. */
+/** `buck-synchronous ×2` → `Buck synchronous ×2`. */
 export function familyName(family: string): string {
   const { architecture, phases } = lookOf(family);
-  return `${titled(architecture)}, ${phases} ${phases === 1 ? 'phase' : 'phases'}`;
+  return `${titled(architecture)} ×${phases}`;
 }

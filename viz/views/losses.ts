@@ -3,7 +3,7 @@ import type { Assessment, LossItem } from '../../model/assessment.ts';
 import { spoken, titled } from '../labels.ts';
 import { bar } from '../marks/bar.ts';
 import { clear, type Root } from '../marks/root.ts';
-import { percent, show } from '../units.ts';
+import { type AxisUnit, axisUnit, digits, percent } from '../units.ts';
 
 export const lossesDefaults = {
   /** Effects below this share of the largest cell are summed into one row per part. */
@@ -25,6 +25,7 @@ export function renderLosses<E extends Element>(
   const points = design.points.slice(0, profilePoints);
   const columns = [design.losses, ...points.map((point) => point.losses)];
   const lines = linesOf(columns, options.smallest);
+  const unit = axisUnit('W', Math.max(...lines.map((line) => line.watts[0] ?? 0)));
   const largest = Math.max(...lines.filter((line) => line.whole).flatMap((line) => line.watts), 1e-12);
   const table = clear(root).append('table').attr('class', 'ledger');
   table
@@ -32,19 +33,20 @@ export function renderLosses<E extends Element>(
     .attr('class', 'unseen')
     .text('Loss by part and effect, at nominal input: mean over the load profile, then each load point');
   const head = table.append('thead').append('tr');
-  for (const word of ['Loss', 'mean', ...points.map((point) => percent(point.load, 0))])
+  for (const word of [`Loss, ${unit.label}`, 'mean', ...points.map((point) => percent(point.load, 0))])
     head.append('th').attr('scope', 'col').text(word);
   const body = table.append('tbody');
   for (const line of lines) {
     const row = body.append('tr').attr('class', line.whole ? 'whole' : 'within');
     row.append('th').attr('scope', 'row').text(line.label);
     for (const watts of line.watts) {
-      const cell = row.append('td').text(watts === 0 ? '·' : show(watts, 'W'));
+      const cell = row.append('td').text(written(watts, unit));
       if (line.whole) bar(cell, watts / largest);
     }
   }
   totals(
     table.append('tfoot'),
+    unit,
     columns,
     points.map((point) => point.efficiency),
   );
@@ -52,22 +54,26 @@ export function renderLosses<E extends Element>(
 
 function totals(
   foot: Root<HTMLTableSectionElement>,
+  unit: AxisUnit,
   columns: readonly (readonly LossItem[])[],
   efficiencies: readonly number[],
 ): void {
   const sums = foot.append('tr');
   sums.append('th').attr('scope', 'row').text('All');
-  for (const items of columns)
-    sums.append('td').text(
-      show(
-        items.reduce((sum, item) => sum + item.watts, 0),
-        'W',
-      ),
-    );
+  for (const items of columns) {
+    const sum = items.reduce((total, item) => total + item.watts, 0);
+    sums.append('td').text(written(sum, unit));
+  }
   const last = foot.append('tr');
   last.append('th').attr('scope', 'row').text('Efficiency');
   last.append('td').text('');
   for (const efficiency of efficiencies) last.append('td').text(percent(efficiency));
+}
+
+/** Watts in the table's unit; what would read as zero is a dot. */
+function written(watts: number, unit: AxisUnit): string {
+  const value = watts / unit.factor;
+  return value < 5e-4 ? '·' : digits(value < 0.01 ? Number(value.toFixed(3)) : value);
 }
 
 /** Parts by falling mean loss, each followed by its effects. */

@@ -17,11 +17,11 @@ export function renderMasthead<E extends Element>(
   head.append('h1').append('bdi').text(rail.name);
   head.append('p').text(requirement(rail));
   const found = root.append('p').attr('class', 'found');
-  found.append('strong').text(`${thousands(front)} designs`);
+  found.append('strong').text(`${thousands(front)} designs to choose from.`);
   found
     .append('span')
     .text(
-      ` from ${thousands(run.evaluations)} judged keep every limit, and none is beaten by another in ${listed(objectives.map(spoken))} at once.`,
+      ` Of ${thousands(run.evaluations)} judged, ${percent(run.feasibleShare, 0)} keep every limit; none of these is beaten by another in ${listed(objectives.map((name) => spoken(name).split(',')[0] ?? ''))} at once.`,
     );
 }
 

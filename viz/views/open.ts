@@ -58,7 +58,9 @@ function figures<E extends Element>(root: Root<E>, design: Assessment): void {
 function remarks(input: OpenInput): string {
   const words = [`Tightest margin ${percent(input.design.worstMargin)}.`];
   if (input.alike > 0)
-    words.push(`${counted(input.alike, 'other design')} cannot be told from it within the model’s error.`);
+    words.push(
+      `Within the model’s error ${counted(input.alike, 'other design')} ${input.alike === 1 ? 'is' : 'are'} as good.`,
+    );
   if (!input.isLeft) words.push('It lies outside the ranges you set.');
   if (input.isIncumbent) words.push('It is one of the sheet’s existing designs.');
   return words.join(' ');

@@ -1,6 +1,7 @@
 /** Words around the trade-off picture: first picks, the note under it, the spoken value, the hover card, the table. */
+import { bandOf } from '../bands.ts';
 import type { Dataset } from '../dataset.ts';
-import { counted, spoken, titled } from '../labels.ts';
+import { counted, listed, spoken, titled } from '../labels.ts';
 import { plainTable } from '../marks/numbers.ts';
 import { clear, type Root } from '../marks/root.ts';
 import type { Pick as FirstPick } from '../picks.ts';
@@ -35,13 +36,18 @@ export function pictureNote(input: TradeoffInput): string {
     const how = input.as === 'size' ? 'A larger mark has more' : 'A darker mark has less';
     words.push(`${how} ${label}: ${show(low, unit)} to ${show(high, unit)}.`);
   }
-  if (input.open !== undefined) {
-    words.push(
-      `The tinted box is the model’s own error around the open design; ${input.alike.length === 0 ? 'no other design lies' : `${counted(input.alike.length, 'ringed design')} ${input.alike.length === 1 ? 'lies' : 'lie'}`} within it in every objective.`,
-    );
-  }
-  if (input.dataset.designs.length > 0) words.push('Grey behind: other designs that keep every limit.');
+  if (input.open !== undefined)
+    words.push(`Tinted box: the model’s own error around the open design; ${alikeWords(input)}.`);
+  if (input.dataset.designs.length > 0) words.push('Grey: other designs that keep every limit.');
   return words.join(' ');
+}
+
+function alikeWords({ alike, dataset, rail }: TradeoffInput): string {
+  const banded = dataset.objectives
+    .filter(({ name, high }) => bandOf(name, high, rail) > 0)
+    .map(({ name }) => spoken(name).split(',')[0] ?? '');
+  if (alike.length === 0) return `no other lies in it in ${listed(banded)}`;
+  return `the ${counted(alike.length, 'ringed design')} cannot be told from it in ${listed(banded)}`;
 }
 
 /** One design in a breath, for the hover card and for screen readers. */

@@ -6,7 +6,7 @@ import type { Cloud } from '../data.ts';
 import type { Dataset, Quantity } from '../dataset.ts';
 import { titled } from '../labels.ts';
 import { bottomAxis, type Frame, leftAxis, type Scale } from '../marks/axis.ts';
-import { kindOf, lookOf, markPath } from '../marks/mark.ts';
+import { colourOf, lookOf, markPath } from '../marks/mark.ts';
 import { clear, moved, px, type Root } from '../marks/root.ts';
 import { axisUnit } from '../units.ts';
 
@@ -33,19 +33,19 @@ export interface TradeoffInput {
 }
 
 export const tradeoffDefaults = {
-  width: 680,
-  height: 520,
+  width: 570,
+  height: 390,
   left: 52,
   right: 14,
   top: 34,
   bottom: 42,
   /** Radius of a mark, px; with a third quantity as size, from the smallest to the largest. */
-  radius: 4.6,
-  smallest: 3.2,
-  largest: 8.2,
+  radius: 4,
+  smallest: 2.5,
+  largest: 6.6,
   ticks: 8,
   /** Cells of the coarse cloud across and down. */
-  across: 68,
+  across: 84,
   down: 52,
 };
 export type TradeoffOptions = typeof tradeoffDefaults;
@@ -137,8 +137,8 @@ export function renderAxes(
   o: TradeoffOptions = tradeoffDefaults,
 ): void {
   const group = clear(root.select<SVGGElement>('g.axes') as unknown as Root<SVGGElement>);
-  const unit = (q: Quantity, scale: Scale) => axisUnit(q.unit, scale.domain()[1] ?? q.high);
-  const ticks = Math.max(3, Math.round((o.ticks * o.width) / 680));
+  const unit = (q: Quantity, scale: Scale) => axisUnit(q.unit, Math.max(...scale.domain()) * 0.7);
+  const ticks = Math.max(3, Math.round((o.ticks * o.width) / 570));
   bottomAxis(group, x, o, { title: titled(input.x.label), unit: unit(input.x, x), ticks });
   leftAxis(group, y, o, { title: titled(input.y.label), unit: unit(input.y, y), ticks: 7 });
 }
@@ -167,7 +167,7 @@ function drawingOrder(input: TradeoffInput, left: ReadonlySet<number>): readonly
 
 function markClass(input: TradeoffInput, i: number, isLeft: boolean): string {
   if (!isLeft) return 'mark out';
-  const kind = kindOf(lookOf(input.dataset.designs[i]?.family ?? '').architecture);
+  const kind = colourOf(lookOf(input.dataset.designs[i]?.family ?? ''));
   if (input.third === undefined || input.as === 'size') return `mark kind-${kind}`;
   return `mark shade-${Math.min(SHADES - 1, Math.floor(share(input.third, i) * SHADES))}`;
 }

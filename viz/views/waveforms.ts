@@ -7,7 +7,7 @@ import { numbersTable } from '../marks/numbers.ts';
 import { clear, px, type Root } from '../marks/root.ts';
 import { axisUnit, percent, show } from '../units.ts';
 
-export const waveformsDefaults = { width: 440, left: 50, right: 14, top: 44, bottom: 26, panel: 104, foot: 18 };
+export const waveformsDefaults = { width: 560, left: 50, right: 14, top: 44, bottom: 26, panel: 104, foot: 18 };
 
 export function renderWaveforms<E extends Element>(root: Root<E>, point: PointReport, o = waveformsDefaults): void {
   const units = [...new Set(point.traces.map((trace) => trace.unit))];
