@@ -11,6 +11,12 @@ export interface Designs {
   readonly violations: Float64Array;
 }
 
+/** Near misses with the limit each breaks. */
+export interface NearMissDesigns extends Designs {
+  /** Index of the broken limit of each design. */
+  readonly limit: Int32Array;
+}
+
 /** Widths of the rows of a set of designs. */
 export interface Widths {
   readonly genes: number;

@@ -1,8 +1,15 @@
 /**
  * The archive of feasible designs on an ε-grid (after Laumanns, Thiele, Deb, Zitzler 2002): what it holds depends on the set of designs
  * shown to it and never on their order, so archives of shards merge in any order to the same bytes.
+ *
+ * A cell is floor((f − ideal) / resolution). Held are, of all designs ever shown: the first by a fixed order in each cell that no other cell
+ * dominates, and the first in each objective. The fixed order is: smaller sum of (f − ideal) / resolution, then objectives, then genes
+ * lexicographically; it agrees with domination. A design that dominates another lies in a cell that is at most the other's, so members never
+ * dominate one another: the whole archive is the front.
  */
+import { CellTree } from './cell-tree.ts';
 import type { Designs, Widths } from './designs.ts';
+import { compareRows, copyRow, gatherRows, rowIsFinite } from './rows.ts';
 
 /** What fixes an archive's grid. It comes from the problem, never from values found. */
 export interface ArchiveGrid extends Widths {
@@ -18,66 +25,27 @@ export interface Archive {
   /** Number of members. */
   size(): number;
   /**
-   * Shows row `row` of `designs` to the archive. Returns 1 when the archive changed, 0 when not: infeasible, not finite, in a dominated cell, or no
-   * better than its cell's member. Copies what it keeps.
+   * Shows row `row` of the arrays to the archive. Returns 1 when its members changed, 0 when not: infeasible, not finite, in a dominated cell, or no
+   * better than its cell's member. Copies what it keeps. A microsecond or so with thousands of members.
    */
   insert(genes: Float64Array, objectives: Float64Array, violations: Float64Array, row: number): number;
+  /** All members in canonical order: by objectives, then by genes, lexicographically. */
+  pack(): Designs;
+  /**
+   * Upper corners of the held cells, row-major: what the archive guarantees. Their hypervolume never falls as designs are shown (that of the members
+   * can, by less than a cell's worth, when a cell changes its member).
+   */
+  corners(): Float64Array;
 }
-
-interface PlainMember {
-  genes: Float64Array;
-  objectives: Float64Array;
-  cell: Float64Array;
-  merit: number;
-}
-
-const plain = new WeakMap<Archive, PlainMember[]>();
 
 /** An empty archive on `grid`. */
 export function createArchive(grid: ArchiveGrid): Archive {
-  let members: PlainMember[] = [];
-  const archive: Archive = {
-    grid,
-    size: () => members.length,
-    insert(genes, objectives, violations, row) {
-      const { genes: g, objectives: m, violations: v } = grid;
-      for (let k = 0; k < v; k++) if (!(violations[row * v + k] <= 0)) return 0;
-      const member: PlainMember = {
-        genes: genes.slice(row * g, row * g + g).map((x) => x + 0),
-        objectives: objectives.slice(row * m, row * m + m).map((x) => x + 0),
-        cell: new Float64Array(m),
-        merit: 0,
-      };
-      for (let c = 0; c < m; c++) {
-        if (!Number.isFinite(member.objectives[c])) return 0;
-        const offset = (member.objectives[c] - grid.ideal[c]) / grid.resolution[c];
-        member.merit += offset;
-        member.cell[c] = Math.floor(offset);
-      }
-      const next = settle([...members, member], m);
-      if (next.length === members.length && !next.includes(member)) return 0;
-      members = next;
-      plain.set(archive, members);
-      return 1;
-    },
-  };
-  plain.set(archive, members);
-  return archive;
+  return new EpsilonArchive(grid);
 }
 
 /** All members in canonical order: by objectives, then by genes, lexicographically. */
 export function packArchive(archive: Archive): Designs {
-  const { genes: g, objectives: m, violations: v } = archive.grid;
-  const members = (plain.get(archive) ?? [])
-    .slice()
-    .sort((a, b) => compare(a.objectives, b.objectives) || compare(a.genes, b.genes));
-  const genes = new Float64Array(members.length * g);
-  const objectives = new Float64Array(members.length * m);
-  members.forEach((member, i) => {
-    genes.set(member.genes, i * g);
-    objectives.set(member.objectives, i * m);
-  });
-  return { count: members.length, genes, objectives, violations: new Float64Array(members.length * v) };
+  return archive.pack();
 }
 
 /** The archive whose members are what `designs` leaves on `grid`; the inverse of `packArchive`. */
@@ -90,38 +58,164 @@ export function unpackArchive(grid: ArchiveGrid, designs: Designs): Archive {
 /** Shows every design to the archive; returns how many changed it. */
 export function insertAll(archive: Archive, designs: Designs): number {
   let changed = 0;
-  for (let i = 0; i < designs.count; i++)
+  for (let i = 0; i < designs.count; i++) {
     changed += archive.insert(designs.genes, designs.objectives, designs.violations, i);
+  }
   return changed;
 }
 
 /** Shows all members of `from` to `into` (same grid): what `into` then holds does not depend on the order of merging. */
 export function mergeArchive(into: Archive, from: Archive): void {
-  insertAll(into, packArchive(from));
+  insertAll(into, from.pack());
 }
 
-function settle(all: PlainMember[], m: number): PlainMember[] {
-  const kept = new Set<PlainMember>();
-  for (const a of all) {
-    const beaten = all.some((b) => {
-      if (a === b) return false;
-      const same = a.cell.every((v, c) => v === b.cell[c]);
-      if (same) return order(b, a) < 0 || (order(b, a) === 0 && all.indexOf(b) < all.indexOf(a));
-      return b.cell.every((v, c) => v <= a.cell[c]);
-    });
-    if (!beaten) kept.add(a);
+class EpsilonArchive implements Archive {
+  readonly grid: ArchiveGrid;
+  /** Slots 0 … m − 1 hold the best in each objective, the slots above hold the cells' members. */
+  private genes: Float64Array;
+  private objectives: Float64Array;
+  private merit: Float64Array;
+  private cells: Float64Array;
+  private readonly tree: CellTree;
+  private readonly free: number[] = [];
+  private used: number;
+  private started = false;
+  private readonly query: Float64Array;
+  private readonly queryMerit = new Float64Array(1);
+  private readonly removed: number[] = [];
+
+  constructor(grid: ArchiveGrid) {
+    const m = grid.objectives;
+    const room = 256;
+    this.grid = grid;
+    this.genes = new Float64Array(room * grid.genes);
+    this.objectives = new Float64Array(room * m);
+    this.merit = new Float64Array(room);
+    this.cells = new Float64Array(room * m);
+    this.tree = new CellTree(m, this.cells);
+    this.used = m;
+    this.query = new Float64Array(m);
   }
-  for (let c = 0; c < m; c++) {
-    kept.add(all.reduce((best, a) => ((a.objectives[c] - best.objectives[c] || order(a, best)) < 0 ? a : best)));
+
+  insert(genes: Float64Array, objectives: Float64Array, violations: Float64Array, row: number): number {
+    const { grid, query } = this;
+    for (let k = 0; k < grid.violations; k++) if (!(violations[row * grid.violations + k] <= 0)) return 0;
+    if (!rowIsFinite(genes, row, grid.genes) || !this.locate(objectives, row)) return 0;
+    const changed = this.offerExtremes(genes, objectives, row);
+    const found = this.tree.atMost(query);
+    if (found >= 0) {
+      if (compareRows(query, 0, this.cells, found, grid.objectives) !== 0) return changed;
+      if (!this.precedes(genes, objectives, row, found)) return changed;
+      this.write(genes, objectives, row, found);
+      return 1;
+    }
+    this.tree.removeAtLeast(query, this.removed);
+    for (const slot of this.removed) this.free.push(slot);
+    const slot = this.takeSlot();
+    this.write(genes, objectives, row, slot);
+    this.tree.insert(slot);
+    return 1;
   }
-  return all.filter((a) => kept.has(a));
+
+  size(): number {
+    return this.memberSlots().length;
+  }
+
+  pack(): Designs {
+    const { grid } = this;
+    const slots = this.memberSlots();
+    return {
+      count: slots.length,
+      genes: gatherRows(this.genes, slots, grid.genes),
+      objectives: gatherRows(this.objectives, slots, grid.objectives),
+      violations: new Float64Array(slots.length * grid.violations),
+    };
+  }
+
+  corners(): Float64Array {
+    const m = this.grid.objectives;
+    const corners = gatherRows(this.cells, this.tree.slots(), m);
+    for (let k = 0; k < corners.length; k++) {
+      corners[k] = this.grid.ideal[k % m] + (corners[k] + 1) * this.grid.resolution[k % m];
+    }
+    return corners;
+  }
+
+  /** Members in canonical order, each once: a best in an objective may be its cell's member too. */
+  private memberSlots(): number[] {
+    const { genes: g, objectives: m } = this.grid;
+    const slots = this.tree.slots();
+    if (this.started) for (let c = 0; c < m; c++) slots.push(c);
+    const order = (a: number, b: number): number =>
+      compareRows(this.objectives, a, this.objectives, b, m) || compareRows(this.genes, a, this.genes, b, g);
+    slots.sort(order);
+    return slots.filter((slot, i) => i === 0 || order(slots[i - 1], slot) !== 0);
+  }
+
+  /** Writes the row's cell to `query` and its place in the fixed order to `queryMerit`; false when it lies off any grid. */
+  private locate(objectives: Float64Array, row: number): boolean {
+    const { grid, query } = this;
+    const m = grid.objectives;
+    let merit = 0;
+    for (let c = 0; c < m; c++) {
+      const offset = (objectives[row * m + c] - grid.ideal[c]) / grid.resolution[c];
+      merit += offset;
+      query[c] = Math.floor(offset);
+    }
+    this.queryMerit[0] = merit;
+    return merit - merit === 0;
+  }
+
+  /** Whether the row comes before the slot's design in the fixed order. */
+  private precedes(genes: Float64Array, objectives: Float64Array, row: number, slot: number): boolean {
+    const merit = this.queryMerit[0];
+    if (merit !== this.merit[slot]) return merit < this.merit[slot];
+    const order = compareRows(objectives, row, this.objectives, slot, this.grid.objectives);
+    return (order || compareRows(genes, row, this.genes, slot, this.grid.genes)) < 0;
+  }
+
+  private offerExtremes(genes: Float64Array, objectives: Float64Array, row: number): number {
+    const m = this.grid.objectives;
+    let changed = 0;
+    for (let c = 0; c < m; c++) {
+      if (this.started) {
+        const value = objectives[row * m + c];
+        const held = this.objectives[c * m + c];
+        if (value > held || (value === held && !this.precedes(genes, objectives, row, c))) continue;
+      }
+      this.write(genes, objectives, row, c);
+      changed = 1;
+    }
+    this.started = true;
+    return changed;
+  }
+
+  private write(genes: Float64Array, objectives: Float64Array, row: number, slot: number): void {
+    const { genes: g, objectives: m } = this.grid;
+    copyRow(genes, row, this.genes, slot, g);
+    copyRow(objectives, row, this.objectives, slot, m);
+    copyRow(this.query, 0, this.cells, slot, m);
+    this.merit[slot] = this.queryMerit[0];
+  }
+
+  private takeSlot(): number {
+    const slot = this.free.pop();
+    if (slot !== undefined) return slot;
+    if (this.used === this.merit.length) this.grow();
+    return this.used++;
+  }
+
+  private grow(): void {
+    this.genes = longer(this.genes);
+    this.objectives = longer(this.objectives);
+    this.merit = longer(this.merit);
+    this.cells = longer(this.cells);
+    this.tree.useCells(this.cells);
+  }
 }
 
-function order(a: PlainMember, b: PlainMember): number {
-  return a.merit - b.merit || compare(a.objectives, b.objectives) || compare(a.genes, b.genes);
-}
-
-function compare(a: Float64Array, b: Float64Array): number {
-  for (let i = 0; i < a.length; i++) if (a[i] !== b[i]) return a[i] < b[i] ? -1 : 1;
-  return 0;
+function longer(from: Float64Array): Float64Array {
+  const to = new Float64Array(2 * from.length);
+  to.set(from);
+  return to;
 }

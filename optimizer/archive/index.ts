@@ -1,4 +1,4 @@
-export type { Designs, Widths } from './designs.ts';
+export type { Designs, NearMissDesigns, Widths } from './designs.ts';
 export {
   type Archive,
   type ArchiveGrid,
@@ -11,7 +11,6 @@ export {
 export {
   createNearMisses,
   insertAllNearMisses,
-  type NearMissDesigns,
   type NearMisses,
   type NearMissGrid,
   packNearMisses,

@@ -2,7 +2,9 @@
  * The archive of near misses: designs that break exactly one limit by a little. They tell what a requirement costs. It holds, for each
  * limit, band of violation and fixed direction of compromise, the one best design shown to it, so archives merge in any order to the same bytes.
  */
-import type { Designs, Widths } from './designs.ts';
+import type { Designs, NearMissDesigns, Widths } from './designs.ts';
+import { DirectionSlots } from './direction-slots.ts';
+import { gatherRows, rowIsFinite } from './rows.ts';
 
 /** What fixes an archive of near misses. It comes from the problem, never from values found. */
 export interface NearMissGrid extends Widths {
@@ -21,90 +23,73 @@ export interface NearMisses {
    * `share`, not finite, or no better than what is held. Copies what it keeps.
    */
   insert(genes: Float64Array, objectives: Float64Array, violations: Float64Array, row: number): number;
+  /** All near misses held, each design once, in canonical order: by limit, then objectives, violations and genes. */
+  pack(): NearMissDesigns;
 }
 
-/** Near misses with the limit each breaks. */
-export interface NearMissDesigns extends Designs {
-  /** Index of the broken limit of each design. */
-  readonly limit: Int32Array;
-}
-
-/** Bands of violation, as parts of `share`; each band holds the best design that misses by at most that much. */
+/** Bands of violation, as parts of `share`; each band holds the best designs that miss by at most that much. */
 const BANDS = [0.1, 0.4, 1] as const;
-/** Steps along an edge of the lattice of directions, by number of objectives. */
+/** Steps along an edge of the lattice of directions, by number of objectives: 15 directions for 2 and 3, 20 for 4. */
 const LATTICE = [0, 0, 14, 4, 3] as const;
 
 /** An empty archive of near misses. */
 export function createNearMisses(grid: NearMissGrid): NearMisses {
   const directions = latticeDirections(grid.objectives, LATTICE[grid.objectives]);
-  const slots = createSlots(grid, grid.violations * BANDS.length * directions.length);
-  const near: NearMisses = {
+  const perLimit = BANDS.length * directions.length;
+  const slots = new DirectionSlots(grid, grid.violations * perLimit);
+  return {
     grid,
     insert(genes, objectives, violations, row) {
-      const limit = brokenLimit(grid, objectives, violations, row);
+      if (!rowIsFinite(objectives, row, grid.objectives) || !rowIsFinite(genes, row, grid.genes)) return 0;
+      const limit = brokenLimit(grid, violations, row);
       if (limit < 0) return 0;
+      const part = violations[row * grid.violations + limit] / grid.share;
       let changed = 0;
-      for (let band = 0; band < BANDS.length; band++) {
-        if (violations[row * grid.violations + limit] > BANDS[band] * grid.share) continue;
-        for (let d = 0; d < directions.length; d++) {
-          const slot = (limit * BANDS.length + band) * directions.length + d;
-          const merit = meritAlong(grid, directions[d], objectives, row);
-          changed |= offer(slots, slot, merit, genes, objectives, violations, row);
+      for (let d = 0; d < directions.length; d++) {
+        slots.merit[0] = meritAlong(grid, directions[d], objectives, row);
+        for (let band = 0; band < BANDS.length; band++) {
+          if (part > BANDS[band]) continue;
+          changed |= slots.offer(limit * perLimit + d * BANDS.length + band, genes, objectives, violations, row);
         }
       }
       return changed;
     },
+    pack: () => slots.pack(perLimit),
   };
-  held.set(near, slots);
-  return near;
 }
 
-/** All near misses held, each design once, in canonical order: by limit, then objectives, then genes. */
+/** All near misses held, each design once, in canonical order: by limit, then objectives, violations and genes. */
 export function packNearMisses(near: NearMisses): NearMissDesigns {
-  return collect(near, () => true);
+  return near.pack();
 }
 
 /** The near misses that no design of `front` dominates or equals in objectives: those that show what their limit costs. */
 export function selectNearMisses(near: NearMisses, front: Designs): NearMissDesigns {
-  const m = near.grid.objectives;
-  return collect(near, (objectives, row) => !weaklyDominated(objectives, row, front, m));
+  const { genes: g, objectives: m, violations: v } = near.grid;
+  const all = near.pack();
+  const rows = Array.from({ length: all.count }, (_, i) => i).filter(
+    (i) => !weaklyDominated(all.objectives, i, front, m),
+  );
+  return {
+    count: rows.length,
+    genes: gatherRows(all.genes, rows, g),
+    objectives: gatherRows(all.objectives, rows, m),
+    violations: gatherRows(all.violations, rows, v),
+    limit: Int32Array.from(rows, (row) => all.limit[row]),
+  };
 }
 
 /** Shows every design to the archive; returns how many changed it. Merging is `insertAllNearMisses(into, packNearMisses(from))`. */
 export function insertAllNearMisses(near: NearMisses, designs: Designs): number {
   let changed = 0;
-  for (let i = 0; i < designs.count; i++)
+  for (let i = 0; i < designs.count; i++) {
     changed += near.insert(designs.genes, designs.objectives, designs.violations, i);
+  }
   return changed;
 }
 
-interface Slots extends Widths {
-  readonly filled: Uint8Array;
-  readonly merit: Float64Array;
-  readonly geneRows: Float64Array;
-  readonly objectiveRows: Float64Array;
-  readonly violationRows: Float64Array;
-}
-
-const held = new WeakMap<NearMisses, Slots>();
-
-function createSlots(widths: Widths, count: number): Slots {
-  return {
-    genes: widths.genes,
-    objectives: widths.objectives,
-    violations: widths.violations,
-    filled: new Uint8Array(count),
-    merit: new Float64Array(count),
-    geneRows: new Float64Array(count * widths.genes),
-    objectiveRows: new Float64Array(count * widths.objectives),
-    violationRows: new Float64Array(count * widths.violations),
-  };
-}
-
-/** Index of the one limit that row breaks by at most `share`, or −1. */
-function brokenLimit(grid: NearMissGrid, objectives: Float64Array, violations: Float64Array, row: number): number {
-  const m = grid.objectives;
-  for (let c = 0; c < m; c++) if (!Number.isFinite(objectives[row * m + c])) return -1;
+/** Index of the one limit that the row breaks, by at most `share`; −1 when there is no such one. */
+function brokenLimit(grid: NearMissGrid, violations: Float64Array, row: number): number {
   let limit = -1;
   for (let k = 0; k < grid.violations; k++) {
     const violation = violations[row * grid.violations + k];
@@ -138,46 +123,6 @@ function meritAlong(grid: NearMissGrid, weights: Float64Array, objectives: Float
   return worst + 0.001 * sum;
 }
 
-/** Takes the row into the slot if it comes before what is there: by merit, then objectives, violations and genes. */
-function offer(
-  slots: Slots,
-  slot: number,
-  merit: number,
-  genes: Float64Array,
-  objectives: Float64Array,
-  violations: Float64Array,
-  row: number,
-): number {
-  if (slots.filled[slot] === 1) {
-    const order =
-      merit - slots.merit[slot] ||
-      compareRows(objectives, row, slots.objectiveRows, slot, slots.objectives) ||
-      compareRows(violations, row, slots.violationRows, slot, slots.violations) ||
-      compareRows(genes, row, slots.geneRows, slot, slots.genes);
-    if (!(order < 0)) return 0;
-  }
-  slots.filled[slot] = 1;
-  slots.merit[slot] = merit;
-  copyRow(genes, row, slots.geneRows, slot, slots.genes);
-  copyRow(objectives, row, slots.objectiveRows, slot, slots.objectives);
-  copyRow(violations, row, slots.violationRows, slot, slots.violations);
-  return 1;
-}
-
-function compareRows(a: Float64Array, i: number, b: Float64Array, j: number, width: number): number {
-  for (let k = 0; k < width; k++) {
-    const x = a[i * width + k];
-    const y = b[j * width + k];
-    if (x !== y) return x < y ? -1 : 1;
-  }
-  return 0;
-}
-
-/** Copies a row; adding 0 turns −0 into 0, so that equal designs have equal bytes. */
-function copyRow(from: Float64Array, i: number, to: Float64Array, j: number, width: number): void {
-  for (let k = 0; k < width; k++) to[j * width + k] = from[i * width + k] + 0;
-}
-
 function weaklyDominated(objectives: Float64Array, row: number, front: Designs, m: number): boolean {
   for (let i = 0; i < front.count; i++) {
     let c = 0;
@@ -185,43 +130,4 @@ function weaklyDominated(objectives: Float64Array, row: number, front: Designs, 
     if (c === m) return true;
   }
   return false;
-}
-
-function collect(near: NearMisses, wanted: (objectives: Float64Array, row: number) => boolean): NearMissDesigns {
-  const slots = held.get(near);
-  if (!slots)
-    return {
-      count: 0,
-      genes: new Float64Array(0),
-      objectives: new Float64Array(0),
-      violations: new Float64Array(0),
-      limit: new Int32Array(0),
-    };
-  const perLimit = slots.filled.length / Math.max(1, slots.violations);
-  const chosen: number[] = [];
-  for (let slot = 0; slot < slots.filled.length; slot++) {
-    if (slots.filled[slot] === 1 && wanted(slots.objectiveRows, slot)) chosen.push(slot);
-  }
-  const limitOf = (slot: number): number => Math.floor(slot / perLimit);
-  const order = (a: number, b: number): number =>
-    limitOf(a) - limitOf(b) ||
-    compareRows(slots.objectiveRows, a, slots.objectiveRows, b, slots.objectives) ||
-    compareRows(slots.violationRows, a, slots.violationRows, b, slots.violations) ||
-    compareRows(slots.geneRows, a, slots.geneRows, b, slots.genes);
-  chosen.sort(order);
-  const distinct = chosen.filter((slot, i) => i === 0 || order(chosen[i - 1], slot) !== 0);
-  const gather = (from: Float64Array, width: number): Float64Array => {
-    const to = new Float64Array(distinct.length * width);
-    distinct.forEach((slot, i) => {
-      to.set(from.subarray(slot * width, slot * width + width), i * width);
-    });
-    return to;
-  };
-  return {
-    count: distinct.length,
-    genes: gather(slots.geneRows, slots.genes),
-    objectives: gather(slots.objectiveRows, slots.objectives),
-    violations: gather(slots.violationRows, slots.violations),
-    limit: Int32Array.from(distinct, limitOf),
-  };
 }
