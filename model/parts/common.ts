@@ -19,6 +19,8 @@ export interface Part {
   readonly mass: number;
   /** At least one, by rising `from`. */
   readonly prices: readonly PriceBreak[];
+  /** Three letters of the prices' currency, where the row came from a table. */
+  readonly currency?: string;
   /** Pieces in stock, where the table says. */
   readonly stock?: number;
 }

@@ -11,4 +11,6 @@ export interface Conductor {
   readonly outerSize: number;
   /** Price of one kilogram of copper in this form, currency. */
   readonly pricePerMass: number;
+  /** Three letters of the price's currency, where the row came from a table. */
+  readonly currency?: string;
 }

@@ -27,4 +27,6 @@ export interface Material {
   readonly density: number;
   /** Price of one kilogram of finished core, currency. */
   readonly pricePerMass: number;
+  /** Three letters of the price's currency, where the row came from a table. */
+  readonly currency?: string;
 }

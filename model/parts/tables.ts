@@ -1,9 +1,12 @@
 /** All parts that a rail may choose from, by kind. */
 import type { Bulk } from './bulk.ts';
 import type { Ceramic } from './ceramic.ts';
+import type { Conductor } from './conductor.ts';
 import type { Controller } from './controller.ts';
+import type { Core } from './core.ts';
 import type { Diode } from './diode.ts';
 import type { Inductor } from './inductor.ts';
+import type { Material } from './material.ts';
 import type { Switch } from './switch.ts';
 
 /** Rows of every kind; names are unique over all of them. */
@@ -14,6 +17,9 @@ export interface PartsTables {
   readonly ceramics: readonly Ceramic[];
   readonly bulks: readonly Bulk[];
   readonly controllers: readonly Controller[];
+  readonly cores: readonly Core[];
+  readonly materials: readonly Material[];
+  readonly conductors: readonly Conductor[];
 }
 
 /** A kind of parts table. */

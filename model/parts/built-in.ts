@@ -1,0 +1,14 @@
+/** The shipped parts tables: file names inside model/tables/. */
+import type { PartKind } from './tables.ts';
+
+export const BUILT_IN_TABLES: readonly { readonly kind: PartKind; readonly file: string }[] = [
+  { kind: 'switches', file: 'switches.csv' },
+  { kind: 'diodes', file: 'diodes.csv' },
+  { kind: 'inductors', file: 'inductors.csv' },
+  { kind: 'ceramics', file: 'ceramics.csv' },
+  { kind: 'bulks', file: 'bulks.csv' },
+  { kind: 'controllers', file: 'controllers.csv' },
+  { kind: 'cores', file: 'cores.csv' },
+  { kind: 'materials', file: 'materials.csv' },
+  { kind: 'conductors', file: 'conductors.csv' },
+];
