@@ -37,7 +37,7 @@ export interface PlanOptions {
 }
 
 /**
- * Makes a plan. By rule: one island for every 25,000 evaluations, 1 … 16 (4 when no budget is given); an epoch of 25 generations, fewer
+ * Makes a plan. By rule: one island for every 25,000 evaluations, 1 … 16 (4 when no budget is given); an epoch of 50 generations, fewer
  * when the budget would not fill four epochs; a fifth of the epochs to try families one by one, none when there is only one.
  */
 export function createPlan(problem: Problem, options: PlanOptions = {}): Plan {

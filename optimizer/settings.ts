@@ -4,11 +4,11 @@
  */
 
 /** Designs an island breeds from. */
-export const POPULATION = 100;
+export const POPULATION = 50;
 /** Children made between two selections. */
-export const BATCH = 20;
+export const BATCH = 10;
 /** Generations (of `population` evaluations each) in an epoch, the unit of checkpoints and migration. */
-export const EPOCH_GENERATIONS = 25;
+export const EPOCH_GENERATIONS = 50;
 /** Epochs in which each family is searched by itself, when the budget is not known. */
 export const TRIAL_EPOCHS = 2;
 /** Evaluations that justify one more island. */

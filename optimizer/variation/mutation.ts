@@ -5,12 +5,15 @@
 import type { Random } from '../random.ts';
 import { CHOICE, LINE, type Space } from './space.ts';
 
+/** Part of the mutated genes on lines that land anywhere, so that separate pieces of a front find each other. */
+const FAR = 0.1;
+
 /** Mutates the child at `child[at …]` in place; `rate` is the chance of each gene, 0 … 1. */
 export function mutate(space: Space, child: Float64Array, at: number, rate: number, random: Random): void {
   const { n, kind } = space;
   for (let g = 0; g < n; g++) {
     if (random.uniform() >= rate || !(space.span[g] > 0)) continue;
-    if (kind[g] === LINE) child[at + g] = polynomial(child[at + g], random.uniform());
+    if (kind[g] === LINE) child[at + g] = random.uniform() < FAR ? random.uniform() : polynomial(child[at + g], random.uniform());
     else if (kind[g] === CHOICE) child[at + g] = otherOption(space, g, child[at + g], random);
     else child[at + g] += geometricStep(space.span[g], random);
   }
