@@ -5,6 +5,7 @@
 import { boxVolume, priceAt } from './catalogue.ts';
 import { controllerCost, type Design } from './design.ts';
 import type { Part } from './parts/common.ts';
+import { listParts, PartsList } from './parts-list.ts';
 
 /** Board area over the footprints of the parts: spacing, routing, vias. */
 export const AREA_FACTOR = 1.4;
@@ -21,6 +22,7 @@ export const PLACEMENT_PRICE = 0.008;
 
 /** Sums over the parts of one design. Reused. */
 export class Assembly {
+  readonly list = new PartsList();
   /** m³: boxed parts with packing and the board under them. */
   volume = 0.5;
   /** m². */
@@ -46,16 +48,12 @@ export function assemble(assembly: Assembly, design: Design, quantity: number): 
   assembly.mass = 0;
   assembly.cost = 0;
   assembly.placements = 0;
-  const { phases } = design;
-  add(assembly, design.high, phases * design.highParallel, quantity);
-  if (design.diode !== undefined) add(assembly, design.diode, phases, quantity);
-  else add(assembly, design.low, phases * design.lowParallel, quantity);
-  add(assembly, design.inductor, phases, quantity);
-  add(assembly, design.outputCeramic, design.outputCeramicCount, quantity);
-  if (design.outputBulk !== undefined) add(assembly, design.outputBulk, design.outputBulkCount, quantity);
-  add(assembly, design.inputCeramic, design.inputCeramicCount, quantity);
-  if (design.inputBulk !== undefined) add(assembly, design.inputBulk, design.inputBulkCount, quantity);
-  add(assembly, design.controller, 1, quantity);
+  const { list } = assembly;
+  listParts(list, design);
+  for (let i = 0; i < list.length; i++) {
+    const part = list.parts[i];
+    if (part !== undefined) add(assembly, part, list.counts[i], quantity);
+  }
   assembly.cost += controllerCost(design, quantity) - priceAt(design.controller, quantity);
   assembly.boardArea = assembly.footprints * AREA_FACTOR;
   assembly.volume = assembly.boxes * PACKING_FACTOR + assembly.boardArea * BOARD_THICKNESS;

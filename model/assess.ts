@@ -9,6 +9,7 @@ import { controllerCost, type Design } from './design.ts';
 import { type Evaluator, judgeDesign } from './evaluate.ts';
 import { HOT } from './heat-balance.ts';
 import { LOSS_SLOTS } from './ledger.ts';
+import { listParts, PartsList } from './parts-list.ts';
 import type { PlannedPoint } from './plan.ts';
 import { type PointSolver, solvePoint } from './point.ts';
 import type { RailProblem } from './problem.ts';
@@ -113,6 +114,7 @@ function reportPoint(
       highSwitch: heat.temperature[HOT.high],
       [design.diode === undefined ? 'lowSwitch' : 'diode']: heat.temperature[HOT.low],
       inductor: heat.temperature[HOT.inductor],
+      ...(design.stage.form === undefined ? {} : { transformer: heat.temperature[HOT.transformer] }),
       board: heat.boardTemperature,
     },
     traces: planned.share > 0 || planned.load === 1 ? tracesOf(solver, flavour) : [],
@@ -125,34 +127,26 @@ function lossItems(ledger: Float64Array): LossItem[] {
 
 /** The parts list of `design`, prices at `quantity` pieces. */
 export function partUses(design: Design, quantity: number): PartUse[] {
-  const n = design.phases;
-  const list: [string, Parameters<typeof boxVolume>[0] | undefined, number][] = [
-    ['highSwitch', design.high, n * design.highParallel],
-    ['lowSwitch', design.diode === undefined ? design.low : undefined, n * design.lowParallel],
-    ['diode', design.diode, n],
-    ['inductor', design.inductor, n],
-    ['outputCeramic', design.outputCeramic, design.outputCeramicCount],
-    ['outputBulk', design.outputBulk, design.outputBulkCount],
-    ['inputCeramic', design.inputCeramic, design.inputCeramicCount],
-    ['inputBulk', design.inputBulk, design.inputBulkCount],
-    ['controller', design.controller, 1],
-  ];
-  return list.flatMap(([slot, part, count]) => {
-    if (part === undefined || count === 0) return [];
-    const cost = slot === 'controller' ? controllerCost(design, quantity) : count * priceAt(part, quantity);
-    return [
-      {
-        slot,
-        name: part.name,
-        count,
-        volume: count * boxVolume(part),
-        area: count * part.length * part.width,
-        height: part.height,
-        mass: count * part.mass,
-        cost,
-      },
-    ];
-  });
+  const list = new PartsList();
+  listParts(list, design);
+  const uses: PartUse[] = [];
+  for (let i = 0; i < list.length; i++) {
+    const part = list.parts[i];
+    const count = list.counts[i];
+    if (part === undefined || count === 0) continue;
+    const slot = list.slots[i];
+    uses.push({
+      slot,
+      name: part.name,
+      count,
+      volume: count * boxVolume(part),
+      area: count * part.length * part.width,
+      height: part.height,
+      mass: count * part.mass,
+      cost: slot === 'controller' ? controllerCost(design, quantity) : count * priceAt(part, quantity),
+    });
+  }
+  return uses;
 }
 
 function volumeShares(e: Evaluator, parts: readonly PartUse[]): Share[] {

@@ -7,9 +7,12 @@ import { bad, type Finding, good, type Outcome } from './outcome.ts';
 import type { Bulk } from './parts/bulk.ts';
 import type { Ceramic } from './parts/ceramic.ts';
 import type { Part } from './parts/common.ts';
+import type { Conductor } from './parts/conductor.ts';
 import type { Controller } from './parts/controller.ts';
+import type { Core } from './parts/core.ts';
 import type { Diode } from './parts/diode.ts';
 import type { Inductor } from './parts/inductor.ts';
+import type { Material } from './parts/material.ts';
 import type { Switch } from './parts/switch.ts';
 import type { PartsTables } from './parts/tables.ts';
 import type { Architecture, Rail } from './rail/rail.ts';
@@ -38,6 +41,15 @@ export interface Catalogue {
   readonly inputBulks: readonly Bulk[];
   /** By rising price. */
   readonly controllers: readonly Controller[];
+  /** By rising volume; empty unless the sheet asks for wound chokes. */
+  readonly chokeCores: readonly Core[];
+  /** By rising volume; empty without a transformer architecture. */
+  readonly transformerCores: readonly Core[];
+  readonly materials: readonly Material[];
+  /** Materials without a distributed gap. */
+  readonly transformerMaterials: readonly Material[];
+  /** By kind, then rising size. */
+  readonly conductors: readonly Conductor[];
 }
 
 /** Ratings beyond this multiple of the need are left out: they only widen the search. */
@@ -48,9 +60,13 @@ export function createCatalogue(rail: Rail, tables: PartsTables): Outcome<Catalo
   const switchNeed = rail.input.maximum / rail.derating.switchVoltage;
   const switches = usable(rail, tables.switches).filter((row) => within(row.voltageRating, switchNeed, RATING_SPAN));
   const byResistance = sortBy(switches, (row) => -row.onResistance);
+  const transformers = rail.search.architectures.some(hasTransformer);
+  const cores = sortBy(usable(rail, tables.cores), (row) => boxVolume(row));
   const catalogue: Catalogue = {
     highSwitches: byResistance,
-    lowSwitches: byResistance,
+    lowSwitches: transformers
+      ? sortBy(rectifierSwitches(rail, tables.switches), (row) => -row.onResistance)
+      : byResistance,
     diodes: sortBy(
       usable(rail, tables.diodes).filter((row) => within(row.voltageRating, switchNeed, RATING_SPAN)),
       (row) => row.currentRating,
@@ -61,6 +77,13 @@ export function createCatalogue(rail: Rail, tables: PartsTables): Outcome<Catalo
     inputCeramics: ceramicsFor(rail, tables.ceramics, rail.input.maximum),
     inputBulks: bulksFor(rail, tables.bulks, rail.input.maximum),
     controllers: controllersFor(rail, tables.controllers),
+    chokeCores: rail.search.woundChokes === true ? cores : [],
+    transformerCores: transformers ? cores.filter((row) => row.shape !== 'ring') : [],
+    materials: tables.materials,
+    transformerMaterials: transformers ? tables.materials.filter((row) => row.kind !== 'powder') : [],
+    conductors: [...tables.conductors].sort((a, b) =>
+      a.kind < b.kind ? -1 : a.kind > b.kind ? 1 : a.size * a.size * a.strands - b.size * b.size * b.strands,
+    ),
   };
   const findings = missingKinds(rail, catalogue);
   return findings.length > 0 ? bad(findings) : good(catalogue);
@@ -140,7 +163,20 @@ function controllersFor(rail: Rail, rows: readonly Controller[]): readonly Contr
   return sortBy(usable(rail, rows).filter(fits), (row) => priceAt(row, rail.quantity));
 }
 
-/** Whether any of the sheet's architectures rectifies with a switch. */
+/** Whether an architecture has a transformer. */
+export function hasTransformer(architecture: Architecture): boolean {
+  return !architecture.startsWith('buck');
+}
+
+/** Switches that may rectify behind a transformer: from twice the output up to what a plain buck needs. */
+function rectifierSwitches(rail: Rail, rows: readonly Switch[]): readonly Switch[] {
+  const least = (2 * rail.output.maximum) / rail.derating.switchVoltage;
+  const buck = rail.search.architectures.some((architecture) => !hasTransformer(architecture));
+  const most = (buck ? RATING_SPAN * rail.input.maximum : 16 * rail.output.maximum) / rail.derating.switchVoltage + 60;
+  return usable(rail, rows).filter((row) => row.voltageRating >= least && row.voltageRating <= most);
+}
+
+/** Whether an architecture rectifies with a switch. */
 export function usesLowSwitch(architecture: Architecture): boolean {
   return architecture !== 'buck-diode';
 }
@@ -150,13 +186,18 @@ function missingKinds(rail: Rail, catalogue: Catalogue): Finding[] {
     ['switches', catalogue.highSwitches.length, `a rating of at least ${rail.input.maximum} V with derating`],
     [
       'inductors',
-      catalogue.inductorSeries.length,
+      catalogue.inductorSeries.length + catalogue.chokeCores.length,
       'an inductance inside the search range and a height inside the limit',
     ],
     ['ceramics', catalogue.outputCeramics.length, 'a rating for the output voltage with derating'],
     ['ceramics', catalogue.inputCeramics.length, 'a rating for the input voltage with derating'],
     ['controllers', catalogue.controllers.length, "limits that hold the sheet's input and output"],
   ];
+  if (rail.search.architectures.some(hasTransformer)) {
+    wanted.push(['cores', catalogue.transformerCores.length, 'a height inside the limit']);
+    wanted.push(['materials', catalogue.transformerMaterials.length, 'no distributed gap']);
+    wanted.push(['conductors', catalogue.conductors.length, 'any size']);
+  }
   if (rail.search.architectures.includes('buck-diode')) {
     wanted.push(['diodes', catalogue.diodes.length, `a rating of at least ${rail.input.maximum} V with derating`]);
   }

@@ -4,16 +4,22 @@
  */
 import { type Catalogue, priceAt } from './catalogue.ts';
 import { GENE } from './genes.ts';
-import { createInductorAtFrequency } from './magnetics/index.ts';
+import { createInductorAtFrequency, inductorThermalResistance, prepareInductor } from './magnetics/index.ts';
 import type { Bulk } from './parts/bulk.ts';
 import type { Ceramic } from './parts/ceramic.ts';
 import type { Controller } from './parts/controller.ts';
 import type { Diode } from './parts/diode.ts';
 import type { Inductor } from './parts/inductor.ts';
+import type { Material } from './parts/material.ts';
 import type { Switch } from './parts/switch.ts';
 import type { Rail } from './rail/rail.ts';
 import { nearestRow } from './snap.ts';
 import type { Stage } from './stages/contract.ts';
+import { Transformer, type TransformerChoice, type WindingForm, windTransformer } from './transformer.ts';
+import { WoundChoke, windChoke } from './wound-choke.ts';
+
+/** Rise over ambient at which the skin depth of the windings is taken, K. */
+const WINDING_RISE = 30;
 
 /** One design. Counts are whole numbers stored as doubles; SI units. */
 export class Design {
@@ -38,6 +44,12 @@ export class Design {
   inputCeramicCount = 1;
   inputBulk: Bulk | undefined;
   inputBulkCount = 0;
+  /** The transformer of a phase; its fields mean nothing in a stage without one. */
+  readonly transformer = new Transformer();
+  readonly transformerChoice: TransformerChoice | undefined;
+  /** The choke's own wound form; `inductor` is this object where the choke is wound to order. */
+  readonly woundChoke = new WoundChoke();
+  chokeMaterial: Material | undefined;
   /** Whether the low switch turns off at zero current at light load (the sheet's policy and the controller's ability). */
   emulates = false;
   /** Whether phases are dropped at light load. */
@@ -50,7 +62,7 @@ export class Design {
 
   constructor(rail: Rail, catalogue: Catalogue, stages: readonly Stage[]) {
     this.stage = stages[0];
-    this.inductor = catalogue.inductorSeries[0].rows[0];
+    this.inductor = this.woundChoke;
     this.high = catalogue.highSwitches[0];
     this.low = catalogue.lowSwitches[0];
     this.diode = catalogue.diodes[0];
@@ -60,6 +72,20 @@ export class Design {
     this.outputBulk = catalogue.outputBulks[0];
     this.inputBulk = catalogue.inputBulks[0];
     this.emulates = rail.lightLoad !== 'forced-continuous';
+    const core = catalogue.transformerCores[0];
+    const material = catalogue.transformerMaterials[0];
+    const wire = catalogue.conductors[0];
+    if (core !== undefined && material !== undefined && wire !== undefined) {
+      this.transformerChoice = {
+        core,
+        material,
+        primary: wire,
+        secondary: wire,
+        primaryTurns: 1,
+        secondaryTurns: 1,
+        form: 'forward',
+      };
+    }
   }
 
   /** Drop of the diode at zero current and junction temperature `temperature` (K), V; 0 without a diode. */
@@ -81,9 +107,7 @@ export function resolveDesign(
   design.stage = stages[genes[GENE.architecture]];
   design.phases = genes[GENE.phases];
   design.frequency = genes[GENE.frequency];
-  const series = catalogue.inductorSeries[genes[GENE.inductorSeries]];
-  design.inductor = series.rows[nearestRow(series, genes[GENE.inductance])];
-  design.inductance = design.inductor.inductance;
+  resolveChoke(design, genes, rail, catalogue);
   design.high = catalogue.highSwitches[genes[GENE.highSwitch]];
   design.highParallel = genes[GENE.highParallel];
   design.low = catalogue.lowSwitches[genes[GENE.lowSwitch]];
@@ -99,8 +123,65 @@ export function resolveDesign(
   design.inputBulkCount = genes[GENE.inputBulkCount];
   design.inputBulk = design.inputBulkCount > 0 ? catalogue.inputBulks[genes[GENE.inputBulk]] : undefined;
   const asked = rail.lightLoad !== 'forced-continuous';
+  if (design.stage.windings !== undefined) resolveTransformer(design, genes, rail, catalogue, design.stage.windings);
   design.emulates = !design.stage.diode && asked && design.controller.diodeEmulation;
   design.sheds = rail.lightLoad === 'phase-shedding' && design.controller.phaseShedding && design.phases > 1;
+}
+
+function resolveChoke(design: Design, genes: Float64Array, rail: Rail, catalogue: Catalogue): void {
+  if (genes[GENE.chokeBuild] < woundIndex(catalogue)) {
+    const series = catalogue.inductorSeries[genes[GENE.inductorSeries]];
+    design.inductor = series.rows[nearestRow(series, genes[GENE.inductance])];
+    design.chokeMaterial = undefined;
+    design.inductorThermalResistance = inductorThermalResistance(
+      design.inductor.ratedCurrent,
+      design.inductor.ratedRise,
+      design.inductor.dcResistance,
+    );
+  } else {
+    design.chokeMaterial = catalogue.materials[genes[GENE.chokeMaterial]];
+    windChoke(
+      design.woundChoke,
+      catalogue.chokeCores[genes[GENE.chokeCore]],
+      design.chokeMaterial,
+      catalogue.conductors[genes[GENE.chokeConductor]],
+      genes[GENE.chokeTurns],
+      genes[GENE.inductance],
+      rail.airSpeed,
+      rail.ambient,
+    );
+    design.inductor = design.woundChoke;
+    design.inductorThermalResistance = design.woundChoke.surfaceResistance;
+  }
+  design.inductance = design.inductor.inductance;
+  const ripple = design.frequency * design.stage.chokeMultiple;
+  prepareInductor(design.inductor, ripple, rail.ambient + WINDING_RISE, design.inductorAt);
+}
+
+/** Value of the gene `chokeBuild` from which on chokes are wound. */
+function woundIndex(catalogue: Catalogue): number {
+  return catalogue.inductorSeries.length > 0 ? 1 : 0;
+}
+
+function resolveTransformer(
+  design: Design,
+  genes: Float64Array,
+  rail: Rail,
+  catalogue: Catalogue,
+  form: WindingForm,
+): void {
+  const choice = design.transformerChoice;
+  if (choice === undefined) return;
+  choice.core = catalogue.transformerCores[genes[GENE.transformerCore]];
+  choice.material = catalogue.transformerMaterials[genes[GENE.transformerMaterial]];
+  choice.primary = catalogue.conductors[genes[GENE.primaryConductor]];
+  choice.secondary = catalogue.conductors[genes[GENE.secondaryConductor]];
+  choice.primaryTurns = genes[GENE.primaryTurns];
+  choice.secondaryTurns = genes[GENE.secondaryTurns];
+  choice.form = form;
+  const ratio = choice.primaryTurns / choice.secondaryTurns;
+  const duty = design.stage.idealDuty(rail.input.nominal, rail.output.nominal, ratio) / design.stage.chokeMultiple;
+  windTransformer(design.transformer, choice, design.frequency, duty, rail.airSpeed, rail.ambient);
 }
 
 /** Cost of the controller and its drivers for all phases, in the sheet's currency. */

@@ -4,24 +4,19 @@
  * continuous operation and everything between, without a jump.
  */
 import type { Design } from './design.ts';
+import { addGateLosses, cycleCharge, overlapOff, overlapOn } from './gate-drive.ts';
 import { SLOT } from './ledger.ts';
-import type { Controller } from './parts/controller.ts';
 import type { Switch } from './parts/switch.ts';
 import type { StageState } from './stages/state.ts';
 import {
   deadTimeEnergy,
   diodeChargeEnergy,
-  edgeTime,
-  gateChargeAfterSwing,
-  gateChargeAt,
   hardEdgeEnergy,
   OUTPUT_CHARGE,
   OUTPUT_ENERGY,
   outputAt,
-  overlapEnergy,
   partialEdgeEnergyAt,
   recoveryCharge,
-  sharedGateResistance,
   swingFraction,
   transitionTime,
 } from './switches/index.ts';
@@ -119,39 +114,6 @@ function edgeEnergy(
   }
 }
 
-function overlapOn(row: Switch, dice: number, controller: Controller, volts: number, current: number): number {
-  if (current <= 0) return 0;
-  const resistance = sharedGateResistance(controller.driverSourceResistance, row.gateResistance, dice);
-  const time = edgeTime(
-    dice * row.gateChargeSwitch,
-    dice * row.gateDrainCharge,
-    driveOverPlateau(row, controller),
-    resistance,
-    row.commonSourceInductance / dice,
-    current,
-  );
-  return overlapEnergy(volts, current, time);
-}
-
-function overlapOff(row: Switch, dice: number, controller: Controller, volts: number, current: number): number {
-  if (current <= 0) return 0;
-  const resistance = sharedGateResistance(controller.driverSinkResistance, row.gateResistance, dice);
-  const time = edgeTime(
-    dice * row.gateChargeSwitch,
-    dice * row.gateDrainCharge,
-    row.plateauVoltage,
-    resistance,
-    row.commonSourceInductance / dice,
-    current,
-  );
-  return overlapEnergy(volts, current, time);
-}
-
-/** Drive above the plateau, V; at least a tenth of a volt, so that a controller that cannot drive a row stays finite. */
-function driveOverPlateau(row: Switch, controller: Controller): number {
-  return Math.max(0.1, controller.driveVoltage - row.plateauVoltage);
-}
-
 function recovery(row: Switch, dice: number, outputCharge: number, volts: number, current: number): number {
   return (
     volts *
@@ -179,7 +141,6 @@ function addGap(
   ledger[slot] += energyScale * deadTimeEnergy(drop, current, gap, wait);
 }
 
-/** Adds gate charge of both positions; a linear drive supply burns the rest of the input in the controller. */
 function addGates(
   ledger: Float64Array,
   cycles: number,
@@ -189,19 +150,9 @@ function addGates(
   toLow: number,
 ): void {
   const { controller } = design;
-  const high = cycles * gateCharge(design.high, design.highParallel, controller, toHigh);
-  const low = design.diode === undefined ? cycles * gateCharge(design.low, design.lowParallel, controller, toLow) : 0;
-  ledger[SLOT['highSwitch.gate']] += high * controller.driveVoltage;
-  ledger[SLOT['lowSwitch.gate']] += low * controller.driveVoltage;
-  if (controller.linearDriveSupply) {
-    const drop = state.inputVoltage - controller.driveVoltage;
-    ledger[SLOT['controller.driveSupply']] += drop > 0 ? (high + low) * drop : 0;
-  }
-}
-
-function gateCharge(row: Switch, dice: number, controller: Controller, fraction: number): number {
-  const charge = gateChargeAfterSwing(row.gateCharge, row.gateDrainCharge, fraction);
-  return dice * gateChargeAt(charge, row.driveVoltage, controller.driveVoltage);
+  const high = cycles * cycleCharge(design.high, design.highParallel, controller, toHigh);
+  const low = design.diode === undefined ? cycles * cycleCharge(design.low, design.lowParallel, controller, toLow) : 0;
+  addGateLosses(ledger, controller, state.inputVoltage, high, low);
 }
 
 function addDiodeEdges(design: Design, state: StageState, ledger: Float64Array): void {

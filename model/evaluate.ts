@@ -13,14 +13,10 @@ import { judgeConstruction } from './limits/construction.ts';
 import { limitsOf } from './limits/list.ts';
 import { type LimitPlaces, limitPlaces } from './limits/places.ts';
 import { judgePoint, judgeRipple } from './limits/point.ts';
-import { inductorThermalResistance, prepareInductor } from './magnetics/index.ts';
 import { type PlannedPoint, type PointPlan, planPoints } from './plan.ts';
 import { PointSolver, solvePoint, solveRipple } from './point.ts';
 import type { Rail } from './rail/rail.ts';
 import type { Stage } from './stages/contract.ts';
-
-/** Rise over ambient at which the skin depth of the windings is taken, K. */
-const WINDING_RISE = 30;
 
 /** Sees each solved point: `index` counts usual points first, then worst points. */
 export type PointListener = (solver: PointSolver, planned: PlannedPoint, index: number) => void;
@@ -76,13 +72,6 @@ export function judgeDesign(e: Evaluator, genes: Float64Array, listener?: PointL
 function prepare(e: Evaluator, genes: Float64Array): void {
   const { design } = e;
   resolveDesign(design, genes, e.rail, e.catalogue, e.stages);
-  const { inductor } = design;
-  prepareInductor(inductor, design.frequency, e.rail.ambient + WINDING_RISE, design.inductorAt);
-  design.inductorThermalResistance = inductorThermalResistance(
-    inductor.ratedCurrent,
-    inductor.ratedRise,
-    inductor.dcResistance,
-  );
   prepareFlavour(e.usual, design, e.rail);
   prepareFlavour(e.worst, design, e.rail);
   assemble(e.assembly, design, e.rail.quantity);
@@ -114,14 +103,15 @@ function judgeWorst(e: Evaluator, listener?: PointListener): number {
   return needed;
 }
 
-/** Judges ripple at input voltages inside the range where phases cancel worst, near D = (2j − 1)/(2N). */
+/** Judges ripple at input voltages inside the range where N chokes cancel worst, near D = (2j − 1)/(2N). */
 function judgeBetween(e: Evaluator): void {
-  const { phases, stage } = e.design;
-  if (phases < 2) return;
+  const { phases, stage, transformer } = e.design;
+  const copies = phases * stage.chokes;
+  if (copies < 2) return;
   for (const span of e.plan.spans) {
-    for (let j = 1; j <= phases; j++) {
-      const ideal = stage.idealDuty(1, span.outputVoltage);
-      const inputVoltage = (ideal * 2 * phases) / (2 * j - 1);
+    const dutyAtOne = stage.idealDuty(1, span.outputVoltage, transformer.ratio);
+    for (let j = 1; j <= copies; j++) {
+      const inputVoltage = (dutyAtOne * 2 * copies) / (2 * j - 1);
       if (!(inputVoltage > span.low && inputVoltage < span.high)) continue;
       solveRipple(e.solver, e.design, e.worst, inputVoltage, span.outputVoltage);
       judgeRipple(e);

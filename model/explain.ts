@@ -6,6 +6,7 @@ import type { PartsTables } from './parts/tables.ts';
 import { createRailProblem } from './problem.ts';
 import { formatQuantity } from './quantity/index.ts';
 import type { Architecture, Rail } from './rail/rail.ts';
+import type { Stage } from './stages/contract.ts';
 import { stageOf } from './stages/list.ts';
 
 /** A named line of text. */
@@ -88,9 +89,18 @@ function verdict(rail: Rail, name: Architecture): ArchitectureVerdict {
   if (stage === undefined) return { name, possible: false, reason: 'this architecture is not modelled yet' };
   const refusal = stage.refusal(rail);
   if (refusal !== undefined) return { name, possible: false, reason: refusal };
-  const low = stage.idealDuty(rail.input.maximum, rail.output.minimum);
-  const high = stage.idealDuty(rail.input.minimum, rail.output.maximum);
+  if (stage.form !== undefined) return { name, possible: true, reason: turnsReason(rail, stage) };
+  const low = stage.idealDuty(rail.input.maximum, rail.output.minimum, 1);
+  const high = stage.idealDuty(rail.input.minimum, rail.output.maximum, 1);
   return { name, possible: true, reason: `duty ${(low * 100).toPrecision(3)} % to ${(high * 100).toPrecision(3)} %` };
+}
+
+/** Turns ratio with which a transformer stage reaches its highest duty at minimum input, and the duty left at maximum input. */
+function turnsReason(rail: Rail, stage: Stage): string {
+  const perRatio = stage.idealDuty(rail.input.minimum, rail.output.maximum, 1);
+  const ratio = (0.9 * stage.highestDuty) / perRatio;
+  const low = stage.idealDuty(rail.input.maximum, rail.output.minimum, ratio);
+  return `turns ratio up to about ${ratio.toPrecision(3)}; duty then ${(low * 100).toPrecision(3)} % at maximum input`;
 }
 
 function spaceSize(genes: readonly { kind: string; low: number; high: number; name: string }[]): number {

@@ -41,7 +41,7 @@ export function prepareFlavour(flavour: Flavour, design: Design, rail: Rail): vo
   const low = flavour.worst ? Math.max(rail.tolerances.inductance, design.inductor.tolerance) : 0;
   flavour.inductance = design.inductance * (1 - low);
   flavour.resistanceScale = flavour.worst ? 1 + rail.tolerances.onResistance : 1;
-  spreadPhases(flavour, design.phases, low);
+  spreadPhases(flavour, design.phases * design.stage.chokes, low);
   bank(
     flavour,
     flavour.output,

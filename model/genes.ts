@@ -25,8 +25,28 @@ export const GENE_NAMES = [
   'inputCeramicCount',
   'inputBulk',
   'inputBulkCount',
+  'chokeBuild',
+  'chokeCore',
+  'chokeMaterial',
+  'chokeTurns',
+  'chokeConductor',
+  'transformerCore',
+  'transformerMaterial',
+  'primaryTurns',
+  'secondaryTurns',
+  'primaryConductor',
+  'secondaryConductor',
 ] as const;
 export type GeneName = (typeof GENE_NAMES)[number];
+
+/** Options of the gene `chokeBuild`. */
+export const STOCKED = 'stocked';
+export const WOUND = 'wound';
+
+/** Most turns that a gene counts. */
+const MOST_CHOKE_TURNS = 60;
+const MOST_PRIMARY_TURNS = 96;
+const MOST_SECONDARY_TURNS = 8;
 
 /** Place of each gene in a gene vector. */
 export const GENE = Object.fromEntries(GENE_NAMES.map((name, index) => [name, index])) as Readonly<
@@ -45,6 +65,14 @@ export const NAMED_GENES: readonly GeneName[] = [
   'outputBulk',
   'inputCeramic',
   'inputBulk',
+  'chokeBuild',
+  'chokeCore',
+  'chokeMaterial',
+  'chokeConductor',
+  'transformerCore',
+  'transformerMaterial',
+  'primaryConductor',
+  'secondaryConductor',
 ];
 
 /** Genes with a number that a person reads, in the order of a record. */
@@ -64,6 +92,10 @@ export function createGenes(rail: Rail, catalogue: Catalogue): readonly Gene[] {
     high: Math.max(0, rows.length - 1),
     options: rows.map((row) => row.name),
   });
+  const unordered = (name: GeneName, rows: readonly { name: string }[]): Gene => ({
+    ...ordered(name, rows),
+    kind: 'choice',
+  });
   const count = (name: GeneName, low: number, high: number): Gene => ({ name, unit: '', kind: 'whole', low, high });
   const genes: Record<GeneName, Gene> = {
     architecture: {
@@ -82,7 +114,7 @@ export function createGenes(rail: Rail, catalogue: Catalogue): readonly Gene[] {
       low: search.frequency.minimum,
       high: search.frequency.maximum,
     },
-    inductance: { name: 'inductance', unit: 'H', kind: 'log', ...inductanceSpan(catalogue) },
+    inductance: { name: 'inductance', unit: 'H', kind: 'log', ...inductanceSpan(rail, catalogue) },
     inductorSeries: ordered('inductorSeries', catalogue.inductorSeries),
     highSwitch: ordered('highSwitch', catalogue.highSwitches),
     highParallel: count('highParallel', 1, search.parallelSwitches),
@@ -98,11 +130,36 @@ export function createGenes(rail: Rail, catalogue: Catalogue): readonly Gene[] {
     inputCeramicCount: count('inputCeramicCount', 1, search.ceramics),
     inputBulk: ordered('inputBulk', catalogue.inputBulks),
     inputBulkCount: count('inputBulkCount', 0, catalogue.inputBulks.length > 0 ? search.bulks : 0),
+    chokeBuild: { name: 'chokeBuild', unit: '', kind: 'choice', ...buildOptions(catalogue) },
+    chokeCore: ordered('chokeCore', catalogue.chokeCores),
+    chokeMaterial: unordered('chokeMaterial', catalogue.chokeCores.length > 0 ? catalogue.materials : []),
+    chokeTurns: count('chokeTurns', 1, catalogue.chokeCores.length > 0 ? MOST_CHOKE_TURNS : 1),
+    chokeConductor: ordered('chokeConductor', catalogue.chokeCores.length > 0 ? catalogue.conductors : []),
+    transformerCore: ordered('transformerCore', catalogue.transformerCores),
+    transformerMaterial: unordered('transformerMaterial', catalogue.transformerMaterials),
+    primaryTurns: count('primaryTurns', 1, catalogue.transformerCores.length > 0 ? MOST_PRIMARY_TURNS : 1),
+    secondaryTurns: count('secondaryTurns', 1, catalogue.transformerCores.length > 0 ? MOST_SECONDARY_TURNS : 1),
+    primaryConductor: ordered('primaryConductor', catalogue.transformerCores.length > 0 ? catalogue.conductors : []),
+    secondaryConductor: ordered(
+      'secondaryConductor',
+      catalogue.transformerCores.length > 0 ? catalogue.conductors : [],
+    ),
   };
   return GENE_NAMES.map((name) => genes[name]);
 }
 
-function inductanceSpan(catalogue: Catalogue): { low: number; high: number } {
+/** How a choke is had: from stock, wound to order, or either. */
+function buildOptions(catalogue: Catalogue): { low: number; high: number; options: readonly string[] } {
+  const options = [
+    ...(catalogue.inductorSeries.length > 0 ? [STOCKED] : []),
+    ...(catalogue.chokeCores.length > 0 ? [WOUND] : []),
+  ];
+  return { low: 0, high: options.length - 1, options };
+}
+
+function inductanceSpan(rail: Rail, catalogue: Catalogue): { low: number; high: number } {
+  if (catalogue.chokeCores.length > 0)
+    return { low: rail.search.inductance.minimum, high: rail.search.inductance.maximum };
   let low = Number.MAX_VALUE;
   let high = 0;
   for (const series of catalogue.inductorSeries) {

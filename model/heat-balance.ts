@@ -5,9 +5,9 @@
  */
 
 /** Parts that have a junction or hot spot of their own. */
-export const HOT = { high: 0, low: 1, inductor: 2 } as const;
+export const HOT = { high: 0, low: 1, inductor: 2, transformer: 3 } as const;
 /** How many there are. */
-export const HOT_PARTS = 3;
+export const HOT_PARTS = 4;
 /** Highest board temperature, K: 105 °C, the usual rating of glass-epoxy board material (common practice, no source). */
 export const BOARD_MAXIMUM = 378.15;
 /** Kelvin by which a sink is sized below the limit, so that rounding never turns a kept limit into a missed one. */
@@ -23,6 +23,8 @@ export class HeatBalance {
   readonly slope = new Float64Array(HOT_PARTS);
   /** Part to board, K/W, all its pieces together. */
   readonly resistance = new Float64Array(HOT_PARTS);
+  /** 1 where the part gives its heat to the air by its own surface, 0 where the board carries it. */
+  readonly toAir = new Uint8Array(HOT_PARTS);
   /** Highest allowed temperature, K. */
   readonly allowed = new Float64Array(HOT_PARTS);
   /** Loss that heats the board alone, W, and its slope with board temperature, W/K. */
@@ -50,10 +52,17 @@ export function solveHeat(h: HeatBalance): void {
   let slope = h.boardSlope;
   let runaway = 0;
   let boardAllowed = BOARD_MAXIMUM;
+  let toAir = 0;
   for (let i = 0; i < HOT_PARTS; i++) {
     const gain = h.resistance[i] * h.slope[i];
     if (gain > runaway) runaway = gain;
-    const rest = gain < 1 - LEAST ? 1 - gain : LEAST;
+    const rest = left(gain);
+    if (h.toAir[i] === 1) {
+      const watts = (h.constant[i] + h.slope[i] * h.ambient) / rest;
+      h.temperature[i] = h.ambient + h.resistance[i] * watts;
+      toAir += watts;
+      continue;
+    }
     constant += h.constant[i] / rest;
     slope += h.slope[i] / rest;
     const most = h.allowed[i] * rest - h.resistance[i] * h.constant[i];
@@ -61,17 +70,20 @@ export function solveHeat(h: HeatBalance): void {
   }
   const gain = slope / h.conductance;
   if (gain > runaway) runaway = gain;
-  const rest = gain < 1 - LEAST ? 1 - gain : LEAST;
   h.runaway = runaway;
-  h.boardTemperature = (h.ambient + constant / h.conductance) / rest;
-  h.total = constant + slope * h.boardTemperature;
+  h.boardTemperature = (h.ambient + constant / h.conductance) / left(gain);
+  h.total = constant + slope * h.boardTemperature + toAir;
   for (let i = 0; i < HOT_PARTS; i++) {
-    const own = h.resistance[i] * h.slope[i];
-    const left = own < 1 - LEAST ? 1 - own : LEAST;
-    const watts = (h.constant[i] + h.slope[i] * h.boardTemperature) / left;
+    if (h.toAir[i] === 1) continue;
+    const watts = (h.constant[i] + h.slope[i] * h.boardTemperature) / left(h.resistance[i] * h.slope[i]);
     h.temperature[i] = h.boardTemperature + h.resistance[i] * watts;
   }
   h.sinkNeeded = sinkFor(h, constant, slope, boardAllowed);
+}
+
+/** What a heating loop of gain `gain` leaves of one: never so little that figures become infinite. */
+function left(gain: number): number {
+  return gain < 1 - LEAST ? 1 - gain : LEAST;
 }
 
 function sinkFor(h: HeatBalance, constant: number, slope: number, boardAllowed: number): number {

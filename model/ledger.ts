@@ -23,6 +23,8 @@ export const LOSS_SLOTS = [
   ['inductor', 'winding'],
   ['inductor', 'windingAc'],
   ['inductor', 'core'],
+  ['transformer', 'winding'],
+  ['transformer', 'core'],
   ['board', 'copper'],
   ['outputCeramic', 'seriesResistance'],
   ['outputBulk', 'seriesResistance'],

@@ -5,11 +5,16 @@
 import { powAt } from '../optimizer/maths/index.ts';
 import { type BankRipple, bankRipple, createBankRipple } from './capacitors/index.ts';
 import type { Design } from './design.ts';
-import { addEdgeLosses } from './edges.ts';
 import type { Flavour } from './flavour.ts';
 import { HeatBalance, HOT, solveHeat } from './heat-balance.ts';
 import { LOSS_SLOTS, SLOT, sumSlots } from './ledger.ts';
-import { COPPER_TEMPCO, RIPPLE_HARMONICS, stockedCoreLossAt, triangleLoss } from './magnetics/index.ts';
+import {
+  COPPER_TEMPCO,
+  coreTemperatureFactor,
+  RIPPLE_HARMONICS,
+  stockedCoreLossAt,
+  triangleLoss,
+} from './magnetics/index.ts';
 import type { PlannedPoint } from './plan.ts';
 import type { Rail } from './rail/rail.ts';
 import { StageState } from './stages/state.ts';
@@ -73,8 +78,9 @@ export function solvePoint(
     resistances(state, design);
     design.stage.solve(design, state);
     solver.ledger.fill(0);
-    addEdgeLosses(design, state, solver.ledger);
+    design.stage.addEdgeLosses(design, state, solver.ledger);
     addInductorLosses(design, state, solver.ledger);
+    if (design.stage.form !== undefined) addTransformerCore(design, state, solver.ledger);
     addController(solver, design);
     if (round === ROUNDS - 1) addCapacitors(solver, flavour);
     balance(solver, design);
@@ -101,7 +107,7 @@ export function solveRipple(
   design.stage.solve(design, state);
   sumOutput(solver, flavour);
   bankRipple(flavour.output, solver.summed, solver.outputRipple);
-  sumShifted(state.draw, state.activePhases, solver.drawn);
+  sumShifted(state.draw, state.drawCopies, solver.drawn);
   bankRipple(flavour.input, solver.drawn, solver.inputRipple);
 }
 
@@ -120,6 +126,7 @@ function ask(solver: PointSolver, design: Design, flavour: Flavour, planned: Pla
   state.highTemperature = guess;
   state.lowTemperature = guess;
   state.inductorTemperature = guess;
+  state.transformerTemperature = guess;
   state.boardTemperature = guess;
 }
 
@@ -127,16 +134,21 @@ function heatPaths(solver: PointSolver, design: Design): void {
   const { heat, state, rail } = solver;
   const spare = rail.derating.temperature;
   const phases = state.activePhases;
-  heat.resistance[HOT.high] = design.high.thermalResistance / (phases * design.highParallel);
+  const { stage, transformer } = design;
+  heat.resistance[HOT.high] = design.high.thermalResistance / (phases * stage.highDevices * design.highParallel);
   heat.allowed[HOT.high] = design.high.maximumJunction - spare;
   if (design.diode !== undefined) {
     heat.resistance[HOT.low] = design.diode.thermalResistance / phases;
     heat.allowed[HOT.low] = design.diode.maximumJunction - spare;
   } else {
-    heat.resistance[HOT.low] = design.low.thermalResistance / (phases * design.lowParallel);
+    heat.resistance[HOT.low] = design.low.thermalResistance / (phases * stage.lowDevices * design.lowParallel);
     heat.allowed[HOT.low] = design.low.maximumJunction - spare;
   }
-  heat.resistance[HOT.inductor] = design.inductorThermalResistance / phases;
+  heat.resistance[HOT.inductor] = design.inductorThermalResistance / (phases * stage.chokes);
+  heat.toAir[HOT.inductor] = design.chokeMaterial === undefined ? 0 : 1;
+  heat.toAir[HOT.transformer] = 1;
+  heat.resistance[HOT.transformer] = stage.form === undefined ? 0 : transformer.surfaceResistance / phases;
+  heat.allowed[HOT.transformer] = transformer.maximumTemperature - spare;
   heat.allowed[HOT.inductor] = design.inductor.maximumTemperature - spare;
 }
 
@@ -165,6 +177,11 @@ function resistances(state: StageState, design: Design): void {
   state.pathResistance =
     inductor.dcResistance * (1 + WINDING_TEMPCO * (state.inductorTemperature - RESISTANCE_REFERENCE)) +
     BOARD_SQUARE * (1 + COPPER_TEMPCO * (state.boardTemperature - 293.15));
+  if (design.stage.form === undefined) return;
+  const { transformer } = design;
+  const hot = 1 + WINDING_TEMPCO * (state.transformerTemperature - RESISTANCE_REFERENCE);
+  state.primaryResistance = transformer.primaryResistance * transformer.primaryFactor * hot;
+  state.secondaryResistance = transformer.secondaryResistance * transformer.secondaryFactor * hot;
 }
 
 /**
@@ -173,7 +190,7 @@ function resistances(state: StageState, design: Design): void {
  */
 function addInductorLosses(design: Design, state: StageState, ledger: Float64Array): void {
   const { inductor, inductorAt } = design;
-  const n = state.activePhases;
+  const n = state.activePhases * state.chokes;
   const lasts = state.highShare + state.lowShare;
   const share = lasts > 0 ? state.highShare / lasts : 0.5;
   triangleLoss(
@@ -192,12 +209,30 @@ function addInductorLosses(design: Design, state: StageState, ledger: Float64Arr
   ledger[SLOT['inductor.core']] += n * pulseShare(design, state) * watts[0];
 }
 
+/** Core loss of the transformers: a trapezoid of flux, two ramps a period; pulses that are skipped lose nothing. */
+function addTransformerCore(design: Design, state: StageState, ledger: Float64Array): void {
+  const { transformer, transformerChoice, frequency, stage } = design;
+  if (transformerChoice === undefined) return;
+  const ramp = Math.max(1e-6, state.fluxRamp);
+  scratch[0] = state.fluxSwing;
+  scratch[1] = transformer.fluxExponent;
+  powAt(scratch, 0);
+  const swing = scratch[0];
+  scratch[0] = ramp;
+  scratch[1] = 1 - transformer.frequencyExponent;
+  powAt(scratch, 0);
+  const skipped = state.frequency / (frequency * stage.chokeMultiple);
+  const factor = coreTemperatureFactor(transformerChoice.material, state.transformerTemperature);
+  ledger[SLOT['transformer.core']] +=
+    state.activePhases * transformer.coreScale * swing * 2 * scratch[0] * skipped * factor;
+}
+
 /**
  * Share of the set frequency's core loss that a ripple with a pause has: each slope burns k·(ΔI/t)^α·t, so squeezing the
  * triangle into a share s of the period at the set frequency leaves s^(1 − α), and skipped pulses thin it out.
  */
 function pulseShare(design: Design, state: StageState): number {
-  const skipped = state.frequency / design.frequency;
+  const skipped = state.frequency / (design.frequency * design.stage.chokeMultiple);
   const lasts = (state.highShare + state.lowShare) / (skipped > 0 ? skipped : 1);
   if (!(lasts < 1)) return skipped;
   scratch[0] = lasts;
@@ -215,7 +250,7 @@ function addCapacitors(solver: PointSolver, flavour: Flavour): void {
   const { state, ledger } = solver;
   sumOutput(solver, flavour);
   bankRipple(flavour.output, solver.summed, solver.outputRipple);
-  sumShifted(state.draw, state.activePhases, solver.drawn);
+  sumShifted(state.draw, state.drawCopies, solver.drawn);
   bankRipple(flavour.input, solver.drawn, solver.inputRipple);
   ledger[SLOT['outputCeramic.seriesResistance']] += solver.outputRipple.meanSquare1 * flavour.output.r1;
   ledger[SLOT['outputBulk.seriesResistance']] += solver.outputRipple.meanSquare2 * flavour.output.r2;
@@ -225,46 +260,30 @@ function addCapacitors(solver: PointSolver, flavour: Flavour): void {
 
 function sumOutput(solver: PointSolver, flavour: Flavour): void {
   const { state } = solver;
-  if (flavour.worst && state.activePhases > 1) {
-    sumUnequal(state.choke, state.activePhases, flavour.scales, solver.summed);
+  const copies = state.activePhases * state.chokes;
+  if (flavour.worst && copies > 1) {
+    sumUnequal(state.choke, copies, flavour.scales, solver.summed);
   } else {
-    sumShifted(state.choke, state.activePhases, solver.summed);
+    sumShifted(state.choke, copies, solver.summed);
   }
 }
 
 /** Splits losses into constants and slopes with temperature, solves the balance, and takes over the temperatures. */
 function balance(solver: PointSolver, design: Design): void {
   const { state, heat, ledger } = solver;
-  const n = state.activePhases;
-  resistive(
-    heat,
-    HOT.high,
-    n * state.highMeanSquare * highReference(state, design),
-    design.high.resistanceTempco,
-    RESISTANCE_REFERENCE,
-  );
+  resistive(heat, HOT.high, highWatts(state, design), design.high.resistanceTempco);
   heat.constant[HOT.high] += sumSlots(ledger, SLOT['highSwitch.conduction'], SLOT['lowSwitch.conduction']);
   if (design.diode === undefined) {
-    resistive(
-      heat,
-      HOT.low,
-      n * state.lowMeanSquare * lowReference(state, design),
-      design.low.resistanceTempco,
-      RESISTANCE_REFERENCE,
-    );
+    resistive(heat, HOT.low, lowWatts(state, design), design.low.resistanceTempco);
     heat.constant[HOT.low] += sumSlots(ledger, SLOT['lowSwitch.conduction'], SLOT['diode.conduction']);
   } else {
     diodeHeat(solver, design);
   }
-  resistive(
-    heat,
-    HOT.inductor,
-    n * state.chokeMeanSquare * design.inductor.dcResistance,
-    WINDING_TEMPCO,
-    RESISTANCE_REFERENCE,
-  );
+  resistive(heat, HOT.inductor, chokeWatts(state, design), WINDING_TEMPCO);
   heat.constant[HOT.inductor] += ledger[SLOT['inductor.windingAc']] + ledger[SLOT['inductor.core']];
-  const copper = n * state.chokeMeanSquare * BOARD_SQUARE;
+  resistive(heat, HOT.transformer, transformerWatts(state, design), WINDING_TEMPCO);
+  heat.constant[HOT.transformer] += ledger[SLOT['transformer.core']];
+  const copper = copperWatts(state);
   heat.boardSlope = copper * COPPER_TEMPCO;
   heat.boardConstant =
     copper * (1 - COPPER_TEMPCO * 293.15) + sumSlots(ledger, SLOT['outputCeramic.seriesResistance'], ledger.length);
@@ -272,22 +291,49 @@ function balance(solver: PointSolver, design: Design): void {
   state.highTemperature = heat.temperature[HOT.high];
   state.lowTemperature = heat.temperature[HOT.low];
   state.inductorTemperature = heat.temperature[HOT.inductor];
+  state.transformerTemperature = heat.temperature[HOT.transformer];
   state.boardTemperature = heat.boardTemperature;
 }
 
-/** On-resistance of the high position at the reference temperature, with tolerance, Ω. */
-function highReference(state: StageState, design: Design): number {
-  return (state.resistanceScale * design.high.onResistance * design.high.dynamicFactor) / design.highParallel;
+/** Conduction loss of the high position at the reference temperature, with tolerance, all phases, W. */
+function highWatts(state: StageState, design: Design): number {
+  const { high, highParallel } = design;
+  const resistance = (state.resistanceScale * high.onResistance * high.dynamicFactor) / highParallel;
+  return state.activePhases * state.highDevices * state.highMeanSquare * resistance;
 }
 
-function lowReference(state: StageState, design: Design): number {
-  return (state.resistanceScale * design.low.onResistance * design.low.dynamicFactor) / design.lowParallel;
+/** The same of a switch in the low position. */
+function lowWatts(state: StageState, design: Design): number {
+  const { low, lowParallel } = design;
+  const resistance = (state.resistanceScale * low.onResistance * low.dynamicFactor) / lowParallel;
+  return state.activePhases * state.lowDevices * state.lowMeanSquare * resistance;
 }
 
-/** A resistive loss `watts` at `reference` (K) as constant and slope of hot part `part`. */
-function resistive(heat: HeatBalance, part: number, watts: number, tempco: number, reference: number): void {
-  heat.slope[part] = watts * tempco;
-  heat.constant[part] = watts * (1 - tempco * reference);
+/** Dc-resistance loss of all chokes at the reference temperature, W. */
+function chokeWatts(state: StageState, design: Design): number {
+  return state.activePhases * state.chokes * state.chokeMeanSquare * design.inductor.dcResistance;
+}
+
+/** Winding loss of all transformers at the reference temperature, ac included, W; a centre tap has two secondary windings. */
+function transformerWatts(state: StageState, design: Design): number {
+  const { form } = design.stage;
+  if (form === undefined) return 0;
+  const t = design.transformer;
+  const secondaries = form.centreTap ? 2 : 1;
+  const primary = state.primaryMeanSquare * t.primaryResistance * t.primaryFactor;
+  const secondary = secondaries * state.secondaryMeanSquare * t.secondaryResistance * t.secondaryFactor;
+  return state.activePhases * (primary + secondary);
+}
+
+/** Loss of the board copper at 20 °C, W. */
+function copperWatts(state: StageState): number {
+  return state.activePhases * state.chokes * state.chokeMeanSquare * BOARD_SQUARE;
+}
+
+/** A resistive loss `loss` (W at the reference temperature of rows) as constant and slope of hot part `part`. */
+function resistive(heat: HeatBalance, part: number, loss: number, tempco: number): void {
+  heat.slope[part] = loss * tempco;
+  heat.constant[part] = loss * (1 - tempco * RESISTANCE_REFERENCE);
 }
 
 /** A diode's drop falls with temperature, its leakage doubles: the straight line through the round's temperature. */
@@ -311,33 +357,19 @@ function diodeHeat(solver: PointSolver, design: Design): void {
 /** Writes the losses that the balance settled at its final temperatures. */
 function writeResistiveLosses(solver: PointSolver, design: Design): void {
   const { state, heat, ledger } = solver;
-  const n = state.activePhases;
-  ledger[SLOT['highSwitch.conduction']] = heated(
-    n * state.highMeanSquare * highReference(state, design),
-    design.high.resistanceTempco,
-    heat.temperature[HOT.high],
-    RESISTANCE_REFERENCE,
-  );
+  const { temperature } = heat;
+  const reference = RESISTANCE_REFERENCE;
+  const high = design.high.resistanceTempco;
+  ledger[SLOT['highSwitch.conduction']] = heated(highWatts(state, design), high, temperature[HOT.high], reference);
   if (design.diode === undefined) {
-    ledger[SLOT['lowSwitch.conduction']] = heated(
-      n * state.lowMeanSquare * lowReference(state, design),
-      design.low.resistanceTempco,
-      heat.temperature[HOT.low],
-      RESISTANCE_REFERENCE,
-    );
+    const low = design.low.resistanceTempco;
+    ledger[SLOT['lowSwitch.conduction']] = heated(lowWatts(state, design), low, temperature[HOT.low], reference);
   }
-  ledger[SLOT['inductor.winding']] = heated(
-    n * state.chokeMeanSquare * design.inductor.dcResistance,
-    WINDING_TEMPCO,
-    heat.temperature[HOT.inductor],
-    RESISTANCE_REFERENCE,
-  );
-  ledger[SLOT['board.copper']] = heated(
-    n * state.chokeMeanSquare * BOARD_SQUARE,
-    COPPER_TEMPCO,
-    heat.boardTemperature,
-    293.15,
-  );
+  const choke = chokeWatts(state, design);
+  ledger[SLOT['inductor.winding']] = heated(choke, WINDING_TEMPCO, temperature[HOT.inductor], reference);
+  const windings = transformerWatts(state, design);
+  ledger[SLOT['transformer.winding']] = heated(windings, WINDING_TEMPCO, temperature[HOT.transformer], reference);
+  ledger[SLOT['board.copper']] = heated(copperWatts(state), COPPER_TEMPCO, heat.boardTemperature, 293.15);
 }
 
 /** A resistive loss `watts` at `reference` (K), W at `temperature` (K). */

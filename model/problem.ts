@@ -2,7 +2,7 @@
 import type { Families, Problem } from '../optimizer/problem.ts';
 import { assessDesign } from './assess.ts';
 import type { Assessment, DesignRecord } from './assessment.ts';
-import { type Catalogue, createCatalogue, usesLowSwitch } from './catalogue.ts';
+import { type Catalogue, createCatalogue, hasTransformer, usesLowSwitch } from './catalogue.ts';
 import { Evaluator, judgeDesign } from './evaluate.ts';
 import { createGenes, GENE, type GeneName } from './genes.ts';
 import type { LimitDefinition } from './limits/book.ts';
@@ -11,7 +11,7 @@ import { bad, type Finding, good, type Outcome } from './outcome.ts';
 import type { PartsTables } from './parts/tables.ts';
 import type { Architecture, Rail } from './rail/rail.ts';
 import { fromRecord, type RecordSpace, recordId, toRecord } from './record.ts';
-import { nearestRow, snapGenes } from './snap.ts';
+import { isWound, nearestRow, snapGenes } from './snap.ts';
 import type { Stage } from './stages/contract.ts';
 import { stageOf } from './stages/list.ts';
 
@@ -167,6 +167,9 @@ function familiesOf(rail: Rail): Families {
   };
 }
 
+/** Names of the genes of a transformer. */
+const TRANSFORMER = /^(transformer|primary|secondary)/;
+
 function recordSpace(problem: RailProblem): RecordSpace {
   const { catalogue, architectures } = problem;
   const low = (genes: Float64Array): boolean => usesLowSwitch(architectures[genes[GENE.architecture]]);
@@ -175,6 +178,9 @@ function recordSpace(problem: RailProblem): RecordSpace {
     if (name === 'diode') return !low(genes);
     if (name === 'outputBulk') return genes[GENE.outputBulkCount] > 0;
     if (name === 'inputBulk') return genes[GENE.inputBulkCount] > 0;
+    if (name === 'inductorSeries') return !isWound(genes, problem.genes);
+    if (name.startsWith('choke')) return name !== 'chokeBuild' && isWound(genes, problem.genes);
+    if (TRANSFORMER.test(name)) return hasTransformer(architectures[genes[GENE.architecture]]);
     return true;
   };
   return {

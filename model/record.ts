@@ -1,7 +1,7 @@
 /** A design as names and numbers, and back: what files hold, what a person reads, and what a design's id is made of. */
 import type { Gene } from '../optimizer/problem.ts';
 import type { DesignRecord } from './assessment.ts';
-import { GENE, type GeneName, NAMED_GENES, NUMERIC_GENES } from './genes.ts';
+import { GENE, type GeneName, NAMED_GENES, NUMERIC_GENES, STOCKED, WOUND } from './genes.ts';
 import { shortHash } from './hash.ts';
 import { bad, type Finding, good, type Outcome } from './outcome.ts';
 import type { Architecture } from './rail/rail.ts';
@@ -17,6 +17,13 @@ const SLOTS: readonly (readonly [GeneName, string])[] = [
   ['outputBulk', 'outputBulk'],
   ['inputCeramic', 'inputCeramic'],
   ['inputBulk', 'inputBulk'],
+  ['chokeCore', 'chokeCore'],
+  ['chokeMaterial', 'chokeMaterial'],
+  ['chokeConductor', 'chokeConductor'],
+  ['transformerCore', 'transformerCore'],
+  ['transformerMaterial', 'transformerMaterial'],
+  ['primaryConductor', 'primaryConductor'],
+  ['secondaryConductor', 'secondaryConductor'],
 ];
 
 /** What a record needs to know of the space. */
@@ -68,8 +75,10 @@ export function fromRecord(space: RecordSpace, record: DesignRecord, file: strin
     if ((NUMERIC_GENES as readonly string[]).includes(name)) genes[GENE[name as GeneName]] = value;
     else refuse(`genes.${name}`, String(value), NUMERIC_GENES.join(', '));
   }
+  const build = record.parts.chokeCore === undefined ? STOCKED : WOUND;
+  genes[GENE.chokeBuild] = Math.max(0, space.genes[GENE.chokeBuild].options?.indexOf(build) ?? 0);
   for (const [slot, part] of Object.entries(record.parts)) readSlot(space, genes, slot, part, refuse);
-  outsideRange(space, record, refuse);
+  outsideRange(space, record, build, refuse);
   return findings.length > 0 ? bad(findings) : good(genes);
 }
 
@@ -100,11 +109,12 @@ function readSlot(
 function outsideRange(
   space: RecordSpace,
   record: DesignRecord,
+  build: string,
   refuse: (field: string, found: string, allowed: string) => void,
 ): void {
   for (const name of NUMERIC_GENES) {
     const value = record.genes[name];
-    if (value === undefined || name === 'inductance') continue;
+    if (value === undefined || (name === 'inductance' && build === STOCKED)) continue;
     const gene = space.genes[GENE[name]];
     if (value >= gene.low && value <= gene.high) continue;
     refuse(`genes.${name}`, `${value} ${gene.unit}`.trim(), `${gene.low} to ${gene.high} ${gene.unit}`.trim());

@@ -1,8 +1,8 @@
 /** Moves a gene vector onto the nearest buildable design, and gives genes that play no part one canonical value. */
 import type { Gene } from '../optimizer/problem.ts';
 import type { Catalogue, InductorSeries } from './catalogue.ts';
-import { usesLowSwitch } from './catalogue.ts';
-import { GENE } from './genes.ts';
+import { hasTransformer, usesLowSwitch } from './catalogue.ts';
+import { GENE, WOUND } from './genes.ts';
 import type { Architecture } from './rail/rail.ts';
 
 /** Powers of ten as literals: a computed one could differ in its last digit between engines. */
@@ -17,8 +17,13 @@ export function snapGenes(
 ): void {
   for (let i = 0; i < list.length; i++) genes[i] = clampGene(genes[i], list[i]);
   genes[GENE.frequency] = clampGene(significant(genes[GENE.frequency]), list[GENE.frequency]);
-  const series = catalogue.inductorSeries[genes[GENE.inductorSeries]];
-  genes[GENE.inductance] = series.rows[nearestRow(series, genes[GENE.inductance])].inductance;
+  if (isWound(genes, list)) {
+    // Whole nanohenries over 1e9 give the double nearest to the decimal, so the text reads back the same.
+    genes[GENE.inductance] = clampGene(significant(genes[GENE.inductance] * 1e9) / 1e9, list[GENE.inductance]);
+  } else {
+    const series = catalogue.inductorSeries[genes[GENE.inductorSeries]];
+    genes[GENE.inductance] = series.rows[nearestRow(series, genes[GENE.inductance])].inductance;
+  }
   rest(genes, list, architectures[genes[GENE.architecture]]);
 }
 
@@ -39,6 +44,25 @@ export function significant(value: number): number {
   return round(value / DECADES[unit]) * DECADES[unit];
 }
 
+/** Whether the choke of snapped `genes` is wound to order. */
+export function isWound(genes: Float64Array, list: readonly Gene[]): boolean {
+  return list[GENE.chokeBuild].options?.[genes[GENE.chokeBuild]] === WOUND;
+}
+
+const CHOKE_GENES = [GENE.chokeCore, GENE.chokeMaterial, GENE.chokeTurns, GENE.chokeConductor];
+const TRANSFORMER_GENES = [
+  GENE.transformerCore,
+  GENE.transformerMaterial,
+  GENE.primaryTurns,
+  GENE.secondaryTurns,
+  GENE.primaryConductor,
+  GENE.secondaryConductor,
+];
+
+function reset(genes: Float64Array, list: readonly Gene[], places: readonly number[]): void {
+  for (const place of places) genes[place] = list[place].low;
+}
+
 function rest(genes: Float64Array, list: readonly Gene[], architecture: Architecture): void {
   if (usesLowSwitch(architecture)) {
     genes[GENE.diode] = list[GENE.diode].low;
@@ -46,6 +70,9 @@ function rest(genes: Float64Array, list: readonly Gene[], architecture: Architec
     genes[GENE.lowSwitch] = list[GENE.lowSwitch].low;
     genes[GENE.lowParallel] = list[GENE.lowParallel].low;
   }
+  if (isWound(genes, list)) genes[GENE.inductorSeries] = list[GENE.inductorSeries].low;
+  else reset(genes, list, CHOKE_GENES);
+  if (!hasTransformer(architecture)) reset(genes, list, TRANSFORMER_GENES);
   if (genes[GENE.outputBulkCount] === 0) genes[GENE.outputBulk] = list[GENE.outputBulk].low;
   if (genes[GENE.inputBulkCount] === 0) genes[GENE.inputBulk] = list[GENE.inputBulk].low;
 }

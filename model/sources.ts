@@ -53,7 +53,7 @@ export const SOURCES = {
     year: 2006,
     place: 'International Conference on Integrated Power Systems',
   },
-  'erickson-maksimovic': {
+  'erickson-maksimovic-2001': {
     author: 'R. W. Erickson, D. Maksimović',
     title: 'Fundamentals of Power Electronics',
     year: 2001,

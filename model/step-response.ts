@@ -28,10 +28,15 @@ export function stepExcursionOf(design: Design, rail: Rail, at: StepCase): numbe
   const capacitance = bank.c1 + bank.c2;
   const resistance = bank.c2 > 0 ? (bank.r1 * bank.r2) / (bank.r1 + bank.r2) : bank.r1;
   const esl = bank.c2 > 0 ? (bank.l1 * bank.l2) / (bank.l1 + bank.l2) : bank.l1;
-  const together = at.inductance / design.phases;
-  const delay = 1 / (design.phases * design.frequency);
-  const longest = Math.max(0, 1 - design.frequency * design.controller.minimumOffTime);
-  const rising = Math.max(1e-3 * at.outputVoltage, at.inputVoltage * longest - at.outputVoltage);
+  const { stage } = design;
+  const copies = design.phases * stage.chokes;
+  const ripple = design.frequency * stage.chokeMultiple;
+  const together = at.inductance / copies;
+  const delay = 1 / (copies * ripple);
+  const longest = Math.min(stage.highestDuty, Math.max(0, 1 - ripple * design.controller.minimumOffTime));
+  // Mean voltage on the chokes at the longest duty: what the ideal duty says of the source behind them, times that duty.
+  const source = at.outputVoltage / stage.idealDuty(at.inputVoltage, at.outputVoltage, design.transformer.ratio);
+  const rising = Math.max(1e-3 * at.outputVoltage, source * longest - at.outputVoltage);
   const half = 0.5 * at.ripple;
   const up = slewedExcursion(step.current, step.slew, rising / together, delay, capacitance, resistance, esl, half);
   const down = slewedExcursion(
@@ -44,7 +49,7 @@ export function stepExcursionOf(design: Design, rail: Rail, at: StepCase): numbe
     esl,
     half,
   );
-  const crossover = crossoverLimit(design.frequency, design.phases, CROSSOVER_SHARE);
+  const crossover = crossoverLimit(ripple, copies, CROSSOVER_SHARE);
   const bandwidth = bandwidthExcursion(step.current, crossover, capacitance) + half;
   return Math.max(up, down, bandwidth);
 }

@@ -3,6 +3,8 @@ import type { Evaluator } from '../evaluate.ts';
 import type { Switch } from '../parts/switch.ts';
 import type { AvoidedBand } from '../rail/rail.ts';
 
+/** Ringing of a rectifier over what it blocks, with a snubber: 1.5 to 2 without a clamp (common practice, no source). */
+const RINGING = 1.5;
 /** Share of the drive voltage a row is specified at that a controller must at least give. */
 const DRIVE_SHARE = 0.9;
 
@@ -20,7 +22,9 @@ function judgeVoltages(e: Evaluator): void {
   const high = design.high.voltageRating * share;
   book.judge(places.highVoltage, rail.input.maximum, high, high, -1);
   const low = (design.diode === undefined ? design.low : design.diode).voltageRating * share;
-  book.judge(places.lowVoltage, rail.input.maximum, low, low, -1);
+  const { form } = design.stage;
+  const blocked = design.stage.lowBlocking(rail.input.maximum, design.transformer.ratio);
+  book.judge(places.lowVoltage, form === undefined ? blocked : RINGING * blocked, low, low, -1);
   judgeGate(e, design.high);
   if (design.diode === undefined) judgeGate(e, design.low);
 }
@@ -41,7 +45,7 @@ function judgeController(e: Evaluator): void {
   book.judge(places.controllerFrequency, highest, controller.frequencyMaximum, controller.frequencyMaximum, -1);
   const lowest = design.frequency * (1 - oscillator);
   book.judge(places.controllerLowestFrequency, lowest, controller.frequencyMinimum, controller.frequencyMinimum, -1);
-  book.judge(places.controllerAbilities, controller.stages.includes('buck') ? 1 : 0, 1, 1, -1);
+  book.judge(places.controllerAbilities, controller.stages.includes(design.stage.control) ? 1 : 0, 1, 1, -1);
 }
 
 function judgeBands(e: Evaluator): void {

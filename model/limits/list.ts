@@ -1,4 +1,5 @@
 /** Every limit that can bind, in one list: name, unit, sense, and when a rail has it. */
+import { hasTransformer } from '../catalogue.ts';
 import type { Rail } from '../rail/rail.ts';
 import type { LimitDefinition } from './book.ts';
 
@@ -7,6 +8,8 @@ interface Offer extends LimitDefinition {
 }
 
 const always = (): boolean => true;
+const wound = (rail: Rail): boolean => rail.search.woundChokes === true;
+const transformer = (rail: Rail): boolean => rail.search.architectures.some(hasTransformer);
 const most = (name: string, unit: string, when: (rail: Rail) => boolean = always): Offer => ({
   name,
   unit,
@@ -47,6 +50,14 @@ const OFFERS: readonly Offer[] = [
   least('controllerLowestFrequency', 'Hz'),
   { ...least('controllerAbilities', ''), whole: true },
   least('avoidedBands', '', (rail) => rail.avoid.length > 0),
+  most('chokeWindow', '', wound),
+  { ...most('chokeReach', '', wound), whole: true },
+  { ...most('chokeMaterial', '', wound), whole: true },
+  most('transformerWindow', '', transformer),
+  { ...most('transformerMaterial', '', transformer), whole: true },
+  most('transformerFlux', 'T', transformer),
+  most('transformerDuty', '', transformer),
+  most('transformerTemperature', 'K', transformer),
   most('height', 'm', (rail) => rail.limits.height !== undefined),
   most('boardArea', 'm²', (rail) => rail.limits.boardArea !== undefined),
   most('volume', 'm³', (rail) => rail.limits.volume !== undefined),

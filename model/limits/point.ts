@@ -7,6 +7,7 @@ import type { Bulk } from '../parts/bulk.ts';
 import type { PlannedPoint } from '../plan.ts';
 import type { StageState } from '../stages/state.ts';
 import { stepExcursionOf } from '../step-response.ts';
+import { judgeMagnetics } from './magnetics.ts';
 
 /** Largest loop gain of heating that is still accepted; at 1 the temperature has no end. */
 const RUNAWAY_MAXIMUM = 0.9;
@@ -21,6 +22,7 @@ export function judgePoint(e: Evaluator, planned: PlannedPoint, index: number): 
   judgeTimes(e, index);
   judgeRippleAt(e, index);
   judgeCapacitors(e, index);
+  judgeMagnetics(e, index);
   if (planned.load === 1) judgeStep(e, planned, index);
 }
 
@@ -58,9 +60,12 @@ function judgeCurrents(e: Evaluator, index: number): void {
   const limited = peak * design.controller.currentLimitSpread;
   book.judge(places.saturation, limited, design.inductor.saturationCurrent, design.inductor.saturationCurrent, index);
   const { high, low, diode } = design;
-  book.judge(places.switchCurrent, peak / design.highParallel, high.currentRating, high.currentRating, index);
+  const { stage } = design;
+  const drawn = stage.form === undefined ? peak : peak / design.transformer.ratio + e.solver.state.magnetizingPeak;
+  book.judge(places.switchCurrent, drawn / design.highParallel, high.currentRating, high.currentRating, index);
   if (diode === undefined) {
-    book.judge(places.switchCurrent, peak / design.lowParallel, low.currentRating, low.currentRating, index);
+    const rectified = (stage.form?.doubler === true ? 2 * peak : peak) / design.lowParallel;
+    book.judge(places.switchCurrent, rectified, low.currentRating, low.currentRating, index);
   } else {
     book.judge(places.switchCurrent, e.solver.state.lowMean, diode.currentRating, diode.currentRating, index);
   }
@@ -70,12 +75,13 @@ function judgeTimes(e: Evaluator, index: number): void {
   const { design, book, places, rail } = e;
   const { controller } = design;
   const period = 1 / (design.frequency * (1 + rail.tolerances.oscillator));
-  const on = e.solver.state.dutyCycle * period;
+  const on = (e.solver.state.dutyCycle * period) / design.stage.chokeMultiple;
   if (controller.minimumOnTime > 0) {
     book.judge(places.minimumOnTime, on, controller.minimumOnTime, controller.minimumOnTime, index);
   }
   if (controller.minimumOffTime > 0) {
-    book.judge(places.minimumOffTime, period - on, controller.minimumOffTime, controller.minimumOffTime, index);
+    const whole = design.stage.form?.doubleEnded === true ? 0.5 * period : period;
+    book.judge(places.minimumOffTime, whole - on, controller.minimumOffTime, controller.minimumOffTime, index);
   }
 }
 

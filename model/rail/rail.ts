@@ -114,6 +114,8 @@ export interface SearchRange {
   readonly frequency: { readonly minimum: number; readonly maximum: number };
   /** Per-phase inductance, H. */
   readonly inductance: { readonly minimum: number; readonly maximum: number };
+  /** Whether chokes wound to order on a core of the tables are searched beside stocked ones. */
+  readonly woundChokes?: boolean;
   /** Most dice in parallel in one switch position. */
   readonly parallelSwitches: number;
   /** Most ceramic capacitors at output and at input, each. */

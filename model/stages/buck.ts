@@ -1,35 +1,47 @@
 /** The buck stage, interleaved, with a switch or a diode in the low position. */
 import type { Design } from '../design.ts';
-import { inductanceAt, meanInductanceAt } from '../magnetics/index.ts';
+import { addEdgeLosses } from '../edges.ts';
 import { applyForward, applyReverse, ChokeSteadyState, solveChoke } from '../modes.ts';
 import type { Rail } from '../rail/rail.ts';
 import { addSegment, clearWaveform } from '../waveform/index.ts';
+import { chokeInductance } from './choke.ts';
 import type { Stage } from './contract.ts';
 import { MODE, type StageState } from './state.ts';
 
 const steady = new ChokeSteadyState();
-const henries = new Float64Array(1);
+
+/** What both rectifiers share. */
+const BUCK = {
+  control: 'buck',
+  highDevices: 1,
+  lowDevices: 1,
+  chokes: 1,
+  chokeMultiple: 1,
+  highestDuty: 1,
+  idealDuty: (inputVoltage: number, outputVoltage: number): number => outputVoltage / inputVoltage,
+  lowBlocking: (inputVoltage: number): number => inputVoltage,
+  solve: solveBuck,
+  addEdgeLosses,
+} as const;
 
 export const buckSynchronous: Stage = {
+  ...BUCK,
   architecture: 'buck-synchronous',
   twoWay: true,
   diode: false,
-  idealDuty: (inputVoltage, outputVoltage) => outputVoltage / inputVoltage,
   refusal: stepsDown,
-  solve: solveBuck,
 };
 
 export const buckDiode: Stage = {
+  ...BUCK,
   architecture: 'buck-diode',
   twoWay: false,
   diode: true,
-  idealDuty: (inputVoltage, outputVoltage) => outputVoltage / inputVoltage,
   refusal: (rail) => {
     if (rail.profile.some((point) => point.fraction < 0)) return 'a diode carries no current back from output to input';
     if (rail.output.battery && rail.input.takesPower) return "a diode cannot return the battery's energy to the input";
     return stepsDown(rail);
   },
-  solve: solveBuck,
 };
 
 function stepsDown(rail: Rail): string | undefined {
@@ -47,14 +59,6 @@ function solveBuck(design: Design, state: StageState): void {
   else solveReverse(design, state, -current);
   state.effectiveInductance = steady.inductance;
   writeCurrents(state);
-}
-
-/** Inductance at the mean current in the first round; in later ones its mean over the ripple that the round before found. */
-function chokeInductance(design: Design, state: StageState, current: number): number {
-  const half = 0.5 * state.rippleCurrent;
-  if (state.round === 0) inductanceAt(design.inductor, current, henries);
-  else meanInductanceAt(design.inductor, current - half, current + half, henries);
-  return henries[0] * (state.inductance / design.inductance);
 }
 
 function solveForward(design: Design, state: StageState, current: number): void {
@@ -90,6 +94,14 @@ function solveReverse(design: Design, state: StageState, current: number): void 
 
 /** Writes the choke's and the input's waveform of one phase and the moments that losses need. */
 function writeCurrents(state: StageState): void {
+  state.highDevices = 1;
+  state.lowDevices = 1;
+  state.chokes = 1;
+  state.drawCopies = state.activePhases;
+  state.primaryMeanSquare = 0;
+  state.secondaryMeanSquare = 0;
+  state.fluxSwing = 0;
+  state.lostDuty = 0;
   const { valleyCurrent: a, peakCurrent: b, highShare, lowShare } = state;
   const square = (a * a + a * b + b * b) / 3;
   state.highMeanSquare = highShare * square;

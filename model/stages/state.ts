@@ -33,6 +33,7 @@ export class StageState {
   highTemperature = 300.5;
   lowTemperature = 300.5;
   inductorTemperature = 300.5;
+  transformerTemperature = 300.5;
   boardTemperature = 300.5;
 
   // Resistances of the round, Ω, for one phase.
@@ -40,6 +41,9 @@ export class StageState {
   lowResistance = 0.5;
   /** Choke and board copper. */
   pathResistance = 0.5;
+  /** Primary and one secondary winding, ac loss included. */
+  primaryResistance = 0.5;
+  secondaryResistance = 0.5;
 
   // Results.
   mode = 0;
@@ -70,8 +74,32 @@ export class StageState {
   /** Mean over the period of the current drawn from the input by one phase, A. */
   highMean = 0.5;
 
+  // What an architecture multiplies, for one phase.
+  /** Switches in the high position, each with `highMeanSquare`. */
+  highDevices = 1;
+  /** Switches or diodes in the low position, each with `lowMeanSquare`. */
+  lowDevices = 1;
+  /** Chokes, each with `chokeMeanSquare`. */
+  chokes = 1;
+  /** Copies of `draw` that the input sees over its period, all phases. */
+  drawCopies = 1;
+
+  // What a transformer stage adds, for one phase.
+  /** Mean square current of the primary, and of each secondary winding, A². */
+  primaryMeanSquare = 0.5;
+  secondaryMeanSquare = 0.5;
+  /** Peak-to-peak swing of flux density, T, and the share of the switching period that one ramp of it takes. */
+  fluxSwing = 0.5;
+  fluxRamp = 0.5;
+  /** Peak magnetizing current, primary side, A. */
+  magnetizingPeak = 0.5;
+  /** Duty lost while the current commutates through the leakage, of the rectified wave, 0 … 1. */
+  lostDuty = 0.5;
+  /** Volts across the rectifier while it blocks, without ringing. */
+  rectifierVoltage = 0.5;
+
   /** Choke current of one phase over its effective period. */
   readonly choke: Waveform = createWaveform(4);
-  /** Current that one phase draws from the input over its effective period. */
+  /** Current that one phase draws from the input over its repetition period. */
   readonly draw: Waveform = createWaveform(4);
 }

@@ -1,0 +1,145 @@
+/**
+ * What every transformer stage has in common: the rectified secondary wave drives one or two chokes, so the choke is solved
+ * as a buck's, and currents, flux and stresses are carried back through the turns ratio. The forms differ in a few numbers.
+ */
+import type { Design } from '../design.ts';
+import { applyForward, ChokeSteadyState, solveChoke } from '../modes.ts';
+import type { Rail } from '../rail/rail.ts';
+import type { Transformer } from '../transformer.ts';
+import { addSegment, clearWaveform } from '../waveform/index.ts';
+import { chokeInductance } from './choke.ts';
+import type { StageState } from './state.ts';
+
+/** The numbers that tell one transformer stage from another. */
+export interface IsolatedForm {
+  /** Share of the input that stands on the primary: 1, or 1/2 in a half bridge. */
+  readonly share: number;
+  /** Switches in series with the primary. */
+  readonly inSeries: number;
+  /** Whether pulses of both signs drive the transformer. */
+  readonly doubleEnded: boolean;
+  /** Whether two chokes of half the current each follow the secondary. */
+  readonly doubler: boolean;
+  /** Whether the rectifier is centre-tapped. */
+  readonly centreTap: boolean;
+}
+
+const steady = new ChokeSteadyState();
+
+/** Why no transformer stage can serve `rail`; undefined where one can. */
+export function isolatedRefusal(rail: Rail): string | undefined {
+  if (rail.profile.some((point) => point.fraction < 0)) {
+    return 'a transformer stage of this kind carries no power from output to input: its rectifiers only follow the primary';
+  }
+  return undefined;
+}
+
+/** Solves one operating point of a transformer stage of `form`; see `Stage.solve`. */
+export function solveIsolated(form: IsolatedForm, design: Design, state: StageState): void {
+  const { transformer } = design;
+  const chokes = form.doubler ? 2 : 1;
+  const phaseCurrent = state.loadCurrent / state.activePhases;
+  const current = phaseCurrent / chokes;
+  state.meanCurrent = current;
+  steady.frequency = design.frequency * (form.doubleEnded && !form.doubler ? 2 : 1);
+  steady.inductance = chokeInductance(design, state, current);
+  steady.current = current;
+  // The chokes of a doubler couple through the winding: a pause in one is not a pause of the stage, so it always runs through.
+  steady.blocking = design.emulates && !form.doubler;
+  steady.shortestRise = design.controller.minimumOnTime;
+  voltages(form, transformer, state, phaseCurrent, current);
+  solveChoke(steady);
+  applyForward(steady, state);
+  state.effectiveInductance = steady.inductance;
+  writeCurrents(form, transformer, state, chokes);
+  writeFlux(form, design, transformer, state, current);
+}
+
+/** Volts across the choke in both intervals, after the drops of switches, windings, rectifiers and choke. */
+function voltages(form: IsolatedForm, t: Transformer, state: StageState, phaseCurrent: number, current: number): void {
+  const n = t.ratio;
+  const pulse = current / n;
+  const primaryDrop = pulse * (form.inSeries * state.highResistance + state.primaryResistance);
+  const secondary = (form.share * state.inputVoltage - primaryDrop) / n;
+  const path = current * state.pathResistance;
+  const winding = current * state.secondaryResistance;
+  const driving = form.doubler ? phaseCurrent : current;
+  steady.rise = secondary - winding - driving * state.lowResistance - path - state.outputVoltage;
+  const idle = form.centreTap
+    ? 0.5 * current * (state.lowResistance + state.secondaryResistance)
+    : current * state.lowResistance;
+  steady.fall = state.outputVoltage + path + idle;
+  // A secondary below the output cannot drive the choke: a duty of one and a broken limit tell, not a negative voltage.
+  if (!(steady.rise > 1e-6 * state.inputVoltage)) steady.rise = 1e-6 * state.inputVoltage;
+}
+
+/** Moments of every current of one phase, and the waveforms of choke and input. */
+function writeCurrents(form: IsolatedForm, t: Transformer, state: StageState, chokes: number): void {
+  const { valleyCurrent: a, peakCurrent: b, highShare: h, lowShare: l } = state;
+  const square = (a * a + a * b + b * b) / 3;
+  const n2 = t.ratio * t.ratio;
+  // Share of the switching period in which the primary carries a pulse.
+  const driven = form.doubler ? 2 * h : h;
+  state.primaryMeanSquare = (driven * square) / n2;
+  state.highMeanSquare = form.doubleEnded ? 0.5 * state.primaryMeanSquare : state.primaryMeanSquare;
+  if (form.doubler) {
+    state.secondaryMeanSquare = driven * square;
+    state.lowMeanSquare = square * (1 + 2 * h);
+  } else if (form.centreTap) {
+    state.secondaryMeanSquare = square * (0.5 * h + 0.25 * l);
+    state.lowMeanSquare = state.secondaryMeanSquare;
+  } else {
+    state.secondaryMeanSquare = square * h;
+    state.lowMeanSquare = 0.5 * square * (h + l);
+  }
+  state.chokeMeanSquare = square * (h + l);
+  state.highMean = (driven * 0.5 * (a + b) * form.share) / t.ratio;
+  state.lowMean = 0.5 * (a + b) * 0.5 * (h + l) * chokes;
+  state.highDevices = form.doubleEnded && form.inSeries === 2 ? 4 : 2;
+  state.lowDevices = 2;
+  state.chokes = chokes;
+  state.drawCopies = state.activePhases;
+  writeWaveforms(form, t, state);
+}
+
+function writeWaveforms(form: IsolatedForm, t: Transformer, state: StageState): void {
+  const { valleyCurrent: a, peakCurrent: b, highShare: h, lowShare: l } = state;
+  const period = state.frequency > 0 ? 1 / state.frequency : 1;
+  const idle = (1 - h - l) * period;
+  clearWaveform(state.choke);
+  addSegment(state.choke, h * period, a, b);
+  addSegment(state.choke, l * period, b, a);
+  if (idle > 0) addSegment(state.choke, idle, 0, 0);
+  // The input sees one pulse each half period of a bridge: a doubler's choke alone runs at the switching frequency.
+  const repeat = form.doubler ? 0.5 * period : period;
+  const pulse = Math.min(h * period, repeat);
+  const scale = form.share / t.ratio;
+  clearWaveform(state.draw);
+  addSegment(state.draw, pulse, a * scale, b * scale);
+  addSegment(state.draw, repeat - pulse, 0, 0);
+}
+
+/** Flux, magnetizing current, duty lost to leakage, rectifier stress. */
+function writeFlux(form: IsolatedForm, design: Design, t: Transformer, state: StageState, current: number): void {
+  const on = form.doubleEnded && !form.doubler ? 0.5 * state.dutyCycle : state.dutyCycle;
+  const volts = form.share * state.inputVoltage;
+  const voltSeconds = (volts * on) / design.frequency;
+  state.fluxSwing = voltSeconds / (t.primaryTurns * t.area);
+  state.fluxRamp = on;
+  const swing = voltSeconds / t.magnetizing;
+  state.magnetizingPeak = form.doubleEnded ? 0.5 * swing : swing;
+  const edges = form.doubleEnded ? 2 : 1;
+  state.lostDuty = (edges * t.leakage * design.frequency * current) / (t.ratio * volts);
+  state.rectifierVoltage = rectifierVoltage(form, state.inputVoltage, t.ratio);
+}
+
+/** Volts that one rectifier blocks, without ringing. `inputVoltage` V, `ratio` Np/Ns. */
+export function rectifierVoltage(form: IsolatedForm, inputVoltage: number, ratio: number): number {
+  const secondary = (form.share * inputVoltage) / ratio;
+  return form.centreTap ? 2 * secondary : secondary;
+}
+
+/** Ideal duty of the choke's rising interval. */
+export function isolatedDuty(form: IsolatedForm, inputVoltage: number, outputVoltage: number, ratio: number): number {
+  return (outputVoltage * ratio) / (form.share * inputVoltage);
+}
