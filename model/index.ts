@@ -16,7 +16,11 @@ export { cautionsOf, NOT_COVERED, STANDING_CAUTION, TOUCH_VOLTAGE } from './caut
 export { type ArchitectureVerdict, explainRail, type Fact, type RailExplanation } from './explain.ts';
 export { type FrontDesign, type FrontFile, frontCsv, frontFile, quoteCell } from './front-file.ts';
 export { bad, describeFinding, type Finding, good, type Outcome } from './outcome.ts';
+export { BUILT_IN_TABLES } from './parts/built-in.ts';
+export { canonicalParts, joinTables } from './parts/join.ts';
+export { readTable } from './parts/read-table.ts';
 export type { PartKind, PartsTables } from './parts/tables.ts';
+export { tableTemplate } from './parts/template.ts';
 export { createRailProblem, type Judgement, type RailProblem } from './problem.ts';
 export * from './quantity/index.ts';
 export type { Architecture, ObjectiveName, Rail } from './rail/rail.ts';
