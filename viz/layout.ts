@@ -38,26 +38,26 @@ const DETAILS: readonly (readonly [string, string])[] = [
 
 /** Body of the page, without data. */
 export function layout(): string {
-  return `<a class="skip" href="#picture">To the picture</a>
+  return `<button type="button" class="skip" data-act="go" data-to="picture">To the picture</button>
 <header id="masthead"></header>
 <main>
 <section id="first" aria-label="Choose">
 <div id="picture-card" class="card">
 <div class="card-head"><h2>The trade-off</h2><div id="axes" class="controls">${axesControls()}</div></div>
-<p class="how">Each mark is one buildable design; further left and down is better. Click one to open it.</p>
+<p class="how">Each mark is one buildable design. Left and down is better.</p>
 <div id="picks" class="picks" role="group" aria-label="A few to start from"></div>
 <div id="picture" class="plot" tabindex="0" role="slider" aria-label="Designs of the front, in the order of the horizontal axis" aria-orientation="horizontal" aria-valuemin="1" aria-valuemax="1" aria-valuenow="1" aria-describedby="keys"><canvas class="cloud" aria-hidden="true"></canvas><svg class="drawing" aria-hidden="true" focusable="false"></svg></div>
 <div id="hover" class="hover" hidden></div>
+<div id="legend" role="group" aria-label="Families: press to hide or show"></div>
 <p id="picture-note" class="note"></p>
 <div class="foot"><div class="zoom" role="group" aria-label="Zoom"><button type="button" data-act="closer" aria-label="Closer">+</button><button type="button" data-act="further" aria-label="Further">−</button><button type="button" data-act="whole">All</button></div><p id="keys" class="keys">Arrow keys: next design along an axis · P: pin · + − 0: zoom</p></div>
 <details id="picture-numbers" class="numbers"><summary>Designs as a table</summary><div class="scroll" tabindex="0" role="region" aria-label="Designs as a table"></div></details>
 </div>
 <div id="narrow" class="card">
-<div class="card-head"><h2>Narrow it down</h2><button type="button" class="quiet" data-act="clear" disabled>Clear</button></div>
+<div class="card-head"><h2>Narrow down</h2><button type="button" class="quiet" data-act="clear" disabled>Clear</button></div>
 <p id="count" class="count" role="status" aria-live="polite"></p>
 <div id="ranges"></div>
 <div class="adder"><label for="add-range">Another range</label><select id="add-range"></select></div>
-<h3>Families</h3><div id="legend"></div>
 </div>
 <div id="open" class="card">
 <div id="open-head"></div>
@@ -84,5 +84,5 @@ function axesControls(): string {
 }
 
 function whatIfPlaces(): string {
-  return `<div id="knobs"></div><div class="moves"><div id="move" role="status" aria-live="polite"></div><button type="button" data-act="reset" disabled>Back to the design as chosen</button></div>`;
+  return `<div id="knobs"></div><div class="moves"><svg id="move-picture" class="drawing" aria-hidden="true" focusable="false"></svg><div id="move" role="status" aria-live="polite"></div><button type="button" data-act="reset" disabled>Back to the design as chosen</button></div>`;
 }

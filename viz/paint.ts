@@ -25,10 +25,12 @@ import { renderTemperatures } from './views/temperatures.ts';
 import {
   renderOverlay,
   renderTradeoff,
+  smallTradeoff,
   type TradeoffInput,
   type TradeoffOptions,
   type TradeoffScales,
   tradeoffDefaults,
+  tradeoffScales,
 } from './views/tradeoff.ts';
 import { renderTrust, trustDefaults } from './views/trust.ts';
 import { operatingPoint, renderWaveforms, waveformsDefaults } from './views/waveforms.ts';
@@ -274,10 +276,31 @@ export function paintWhatIf(document: Document, bench: Bench, scene: Scene): voi
     { genes: bench.assessor.genes, own: bench.assessor.values(scene.own.value.design) },
     scene.state.changes,
   );
+  paintMovePicture(document, bench, scene);
   renderMove(placeOf(document, 'move'), scene.own.value, scene.moved);
   placeOf(document, 'whatif')
     .select('[data-act=reset]')
     .attr('disabled', scene.moved === undefined ? '' : null);
+}
+
+/** The small picture beside the knobs; its marks are drawn anew only where they changed. */
+export function paintMovePicture(document: Document, bench: Bench, scene: Scene): void {
+  const input = pictureInput(bench, { ...scene, state: { ...scene.state, window: undefined }, pinned: [] }, false);
+  if (input === undefined) return;
+  const svg = placeOf(document, 'move-picture') as unknown as Root<SVGSVGElement>;
+  const key = JSON.stringify([
+    scene.state.x,
+    scene.state.y,
+    scene.state.third,
+    scene.state.as,
+    scene.state.ranges,
+    scene.state.hidden,
+  ]);
+  if (svg.attr('data-drawn') === key) renderOverlay(svg, input, tradeoffScales(input, smallTradeoff), smallTradeoff);
+  else {
+    renderTradeoff(svg, input, smallTradeoff);
+    svg.attr('data-drawn', key);
+  }
 }
 
 export function paintCompare(document: Document, { dataset }: Bench, scene: Scene): void {

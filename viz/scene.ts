@@ -42,7 +42,7 @@ export function benchOf(data: PageData, assessor: Assessor): Bench {
 }
 
 /** The view that a page opens with: volume (or the second objective) across, the first up, the balanced design open. */
-export function firstState({ dataset }: Bench): State {
+export function firstState({ dataset, data }: Bench): State {
   const [first, second, third] = dataset.objectives.map((objective) => objective.name);
   const balanced = picksOf(
     dataset,
@@ -57,9 +57,18 @@ export function firstState({ dataset }: Bench): State {
     pinned: [],
     ranges: {},
     hidden: [],
-    point: 0,
+    point: heaviest(data.rail),
     changes: {},
   };
+}
+
+/** Place of the profile's heaviest load, the point that stresses a design most. */
+function heaviest({ profile }: PageData['rail']): number {
+  const most = Math.max(...profile.map((point) => point.fraction));
+  return Math.max(
+    0,
+    profile.findIndex((point) => point.fraction === most),
+  );
 }
 
 /** Works out `state`; `judge` may remember verdicts between states. */

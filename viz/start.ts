@@ -36,7 +36,12 @@ export function start(document: Document, data: PageData, assessor: Assessor): D
   const first = firstState(bench);
   const read = () => fromFragment(document.location.hash, first, bench.known);
   let scene = sceneOf(bench, read(), judge);
-  for (const id of ['ranges', 'legend', 'knobs']) document.getElementById(id)?.replaceChildren();
+  for (const id of ['ranges', 'legend', 'knobs', 'move-picture']) {
+    const place = document.getElementById(id);
+    place?.replaceChildren();
+    place?.removeAttribute('data-drawn');
+    place?.removeAttribute('data-design');
+  }
   paintAll(document, bench, scene, false);
   const desk: Desk = { bench, scene: () => scene, set: (part) => show({ ...scene.state, ...part }, true) };
   const picture = attachPicture(document, desk);
@@ -80,7 +85,7 @@ function repaint(
   if (has('open')) paintOpen(document, bench, scene);
   else if (has('pinned', 'ranges') && scene.own?.ok === true) paintOpenHead(document, bench, scene, scene.own.value);
   if (has('point') && !has('open')) paintPoint(document, bench, scene);
-  if (has('open', 'moved')) paintWhatIf(document, bench, scene);
+  if (has('open', 'moved', 'axes', 'ranges')) paintWhatIf(document, bench, scene);
   if (has('pinned')) paintCompare(document, bench, scene);
   if (has('open', 'ranges')) paintAway(document, bench, scene);
   if (has('axes', 'ranges')) paintDesigns(document, bench, scene, isTableOpen(document));
@@ -117,12 +122,21 @@ function act(document: Document, desk: Desk, target: HTMLElement): void {
   if (name === 'clear') desk.set({ ranges: {}, hidden: [] });
   if (name === 'reset') desk.set({ changes: {} });
   if (name === 'family') desk.set({ hidden: toggled(state.hidden, family) });
+  if (name === 'go') goTo(document, target.dataset.to ?? '');
   if (name === 'away') takeAway(document, desk, file);
+}
+
+/** Scrolls to a section and puts the focus on its first control; the address keeps the state, so no link does this. */
+function goTo(document: Document, id: string): void {
+  const place = document.getElementById(id);
+  place?.scrollIntoView({ block: 'start' });
+  const first = place?.matches('[tabindex]') ? place : place?.querySelector<HTMLElement>('input, select, button');
+  first?.focus({ preventScroll: true });
 }
 
 /** Opening a design forgets the moves of the one before. */
 export function opened(id: string): Partial<State> {
-  return { open: id, changes: {}, point: 0 };
+  return { open: id, changes: {} };
 }
 
 /** Pins or unpins; beyond the most that fit, the first pinned goes. */

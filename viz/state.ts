@@ -36,7 +36,7 @@ export function toFragment(state: State): string {
   for (const id of state.pinned) words.append('pin', id);
   for (const [key, [low, high]] of Object.entries(state.ranges)) words.append('range', `${key} ${low} ${high}`);
   for (const family of state.hidden) words.append('hide', family);
-  if (state.point !== 0) words.set('point', String(state.point));
+  words.set('point', String(state.point));
   for (const [name, value] of Object.entries(state.changes)) words.append('change', `${name} ${value}`);
   return words.toString();
 }
@@ -69,7 +69,7 @@ export function fromFragment(fragment: string, fallback: State, known: Known): S
     pinned: [...new Set(words.getAll('pin').filter((id) => known.ids.has(id)))].slice(0, MOST_PINNED),
     ranges: Object.fromEntries(words.getAll('range').flatMap((text) => rangeOf(text, known))),
     hidden: words.getAll('hide').filter((family) => known.families.includes(family)),
-    point: Math.max(0, Math.trunc(Number(words.get('point') ?? 0)) || 0),
+    point: Math.max(0, Math.trunc(Number(words.get('point') ?? fallback.point)) || 0),
     changes: Object.fromEntries(words.getAll('change').flatMap(changeOf)),
   };
 }

@@ -21,7 +21,11 @@ export function renderFamilies<E extends Element>(root: Root<E>, notes: readonly
     .text('Families with the number of designs judged, feasible and on the front, and why');
   const head = table.append('thead').append('tr');
   for (const word of ['Family', 'judged', 'feasible', 'on the front', 'why'])
-    head.append('th').attr('scope', 'col').text(word);
+    head
+      .append('th')
+      .attr('scope', 'col')
+      .attr('class', word === 'why' ? 'words' : null)
+      .text(word);
   const body = table.append('tbody');
   for (const note of [...notes].sort((a, b) => b.front - a.front || b.feasible - a.feasible)) {
     const row = body.append('tr').attr('class', note.front === 0 ? 'lost' : '');

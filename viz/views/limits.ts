@@ -19,7 +19,11 @@ export function renderLimits<E extends Element>(root: Root<E>, design: Assessmen
     .text('Every limit with what the design has, what is allowed, the margin and the worst corner');
   const head = table.append('thead').append('tr');
   for (const word of ['Limit', 'has', 'allowed', 'margin', 'worst at'])
-    head.append('th').attr('scope', 'col').text(word);
+    head
+      .append('th')
+      .attr('scope', 'col')
+      .attr('class', word === 'worst at' ? 'words' : null)
+      .text(word);
   const body = table.append('tbody');
   for (const limit of rows) {
     const state = verdict(limit, options.tight);

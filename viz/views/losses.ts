@@ -65,15 +65,16 @@ function totals(
     sums.append('td').text(written(sum, unit));
   }
   const last = foot.append('tr');
-  last.append('th').attr('scope', 'row').text('Efficiency');
+  last.append('th').attr('scope', 'row').text('Efficiency, %');
   last.append('td').text('');
-  for (const efficiency of efficiencies) last.append('td').text(percent(efficiency));
+  for (const efficiency of efficiencies) last.append('td').text(efficiency > 0 ? (efficiency * 100).toFixed(1) : '·');
 }
 
 /** Watts in the table's unit; what would read as zero is a dot. */
 function written(watts: number, unit: AxisUnit): string {
   const value = watts / unit.factor;
-  return value < 5e-4 ? '·' : digits(value < 0.01 ? Number(value.toFixed(3)) : value);
+  if (value < 5e-3) return '·';
+  return value < 1 ? value.toFixed(2) : digits(value);
 }
 
 /** Parts by falling mean loss, each followed by its effects. */

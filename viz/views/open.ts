@@ -27,6 +27,12 @@ export function renderOpenHead<E extends Element>(root: Root<E>, input: OpenInpu
     .attr('data-act', 'pin')
     .attr('aria-pressed', String(input.isPinned))
     .text(input.isPinned ? 'Pinned' : 'Pin');
+  actions
+    .append('button')
+    .attr('type', 'button')
+    .attr('data-act', 'go')
+    .attr('data-to', 'whatif-section')
+    .text('What if …');
   const line = root.append('p').attr('class', 'family-line');
   familyMark(line, design.family);
   line.append('span').text(`${familyName(design.family)} · ${genesText(design)}`);

@@ -9,7 +9,11 @@ export function renderParts<E extends Element>(root: Root<E>, design: Assessment
   table.append('caption').attr('class', 'unseen').text('Parts list');
   const head = table.append('thead').append('tr');
   for (const word of ['Where', 'part', 'pieces', 'height', 'volume', 'cost'])
-    head.append('th').attr('scope', 'col').text(word);
+    head
+      .append('th')
+      .attr('scope', 'col')
+      .attr('class', word === 'part' ? 'words' : null)
+      .text(word);
   const body = table.append('tbody');
   for (const use of design.parts) {
     const row = body.append('tr');

@@ -84,7 +84,7 @@ export function renderPrices<E extends Element>(
     .attr('class', 'ledger prices');
   table.append('caption').attr('class', 'unseen').text('Limits, by how much to relax them, and what that buys');
   const head = table.append('thead').append('tr');
-  for (const word of ['If this limit', 'moved', 'it would buy', 'with nothing else worse, by'])
+  for (const word of ['If this limit', 'moved', 'it would buy', 'which design'])
     head.append('th').attr('scope', 'col').text(word);
   const body = table.append('tbody');
   for (const offer of offers) offerRow(body.append('tr'), front, offer);
@@ -100,7 +100,9 @@ export function renderPrices<E extends Element>(
 
 function offerRow(row: Root<HTMLTableRowElement>, front: Front, offer: Offer): void {
   const column = front.objectives[offer.objective];
-  const others = front.objectives.filter((_, k) => k !== offer.objective).map(({ name }) => spoken(name));
+  const others = front.objectives
+    .filter((_, k) => k !== offer.objective)
+    .map(({ name }) => spoken(name).split(',')[0] ?? '');
   row.append('th').attr('scope', 'row').text(titled(offer.miss.limit));
   row.append('td').text(`${show(offer.miss.allowed, offer.unit)} → ${show(offer.miss.value, offer.unit)}`);
   row

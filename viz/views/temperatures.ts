@@ -31,7 +31,12 @@ export function renderTemperatures<E extends Element>(
     .attr('class', 'unseen')
     .text('Temperatures by part, at the chosen operating point and at the hottest');
   const head = table.append('thead').append('tr');
-  for (const word of ['Part', 'at this point', 'hottest', 'where']) head.append('th').attr('scope', 'col').text(word);
+  for (const word of ['Part', 'at this point', 'hottest', 'where'])
+    head
+      .append('th')
+      .attr('scope', 'col')
+      .attr('class', word === 'where' ? 'words' : null)
+      .text(word);
   const body = table.append('tbody');
   for (const { slot, here, worst } of rows) {
     const row = body.append('tr').attr('class', 'whole');

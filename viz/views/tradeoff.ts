@@ -47,6 +47,20 @@ export const tradeoffDefaults = {
   /** Cells of the coarse cloud across and down. */
   across: 84,
   down: 52,
+  /** Id of the clipping path; two pictures in one page need two. */
+  clip: 'plot-clip',
+};
+
+/** The small picture beside the knobs. */
+export const smallTradeoff: TradeoffOptions = {
+  ...tradeoffDefaults,
+  width: 400,
+  height: 230,
+  radius: 2.4,
+  smallest: 1.8,
+  largest: 4,
+  ticks: 5,
+  clip: 'small-clip',
 };
 export type TradeoffOptions = typeof tradeoffDefaults;
 
@@ -71,7 +85,7 @@ export function renderTradeoff(
   if (input.cloud !== undefined) coarseCloud(root, input, input.cloud, scales, options);
   root.append('g').attr('class', 'axes');
   renderAxes(root, input, scales, options);
-  const plot = root.append('g').attr('clip-path', 'url(#plot-clip)').append('g').attr('class', 'plot-marks');
+  const plot = root.append('g').attr('clip-path', `url(#${options.clip})`).append('g').attr('class', 'plot-marks');
   plot.append('g').attr('class', 'under');
   marks(plot, input, scales, options);
   plot.append('g').attr('class', 'over');
@@ -121,7 +135,7 @@ function roomy({ low, high, log }: Quantity): readonly [number, number] {
 function clip(root: Root<SVGSVGElement>, o: TradeoffOptions): void {
   root
     .append('clipPath')
-    .attr('id', 'plot-clip')
+    .attr('id', o.clip)
     .append('rect')
     .attr('x', o.left)
     .attr('y', o.top - 6)

@@ -1,0 +1,23 @@
+/** A place to render into, as a page at build time gives it. */
+import { select } from 'd3';
+import { JSDOM } from 'jsdom';
+import type { Root } from '../../viz/marks/root.ts';
+
+/** An empty `div` of a fresh document, as a D3 selection. */
+export function place(): Root<HTMLDivElement> {
+  const { document } = new JSDOM('<!doctype html><div></div>').window;
+  return select(document.querySelector('div') as HTMLDivElement) as unknown as Root<HTMLDivElement>;
+}
+
+/** An empty `svg` of a fresh document. */
+export function sheet(): Root<SVGSVGElement> {
+  return place().append('svg') as unknown as Root<SVGSVGElement>;
+}
+
+/** Text of the cells, row by row, of the first table under `root`. */
+export function cellsOf(root: Root<HTMLDivElement>): string[][] {
+  const rows = root.node()?.querySelector('table')?.querySelectorAll('tr') ?? [];
+  return Array.from(rows, (row) =>
+    Array.from(row.children, (cell) => (cell.textContent ?? '').replaceAll('\u00a0', ' ')),
+  );
+}
