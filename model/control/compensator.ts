@@ -50,7 +50,11 @@ export interface CompensatorParts {
   readonly c3: number;
 }
 
-/** Magnitude and phase (rad, continuous below −π) of the plant at `omega` rad/s. */
+/**
+ * Magnitude and phase (rad, continuous below −π) of the plant at `omega` rad/s.
+ * @source erickson-maksimovic-2001, chapter 8 (buck output filter with series resistance)
+ * @valid up to about half the switching frequency
+ */
 export function plantResponse(plant: LoopPlant, omega: number): { magnitude: number; phase: number } {
   const load = plant.loadResistance;
   const share = Number.isFinite(load) ? 1 / load : 0;
@@ -64,7 +68,11 @@ export function plantResponse(plant: LoopPlant, omega: number): { magnitude: num
   return { magnitude, phase: atan(omega * r * c) - (a === 0 ? Math.PI / 2 : lag) - omega * plant.delay };
 }
 
-/** Magnitude and phase (rad) of the compensator at `omega` rad/s. */
+/**
+ * Magnitude and phase (rad) of the compensator at `omega` rad/s.
+ * @source venable-1983, type-III amplifier
+ * @valid omega above 0
+ */
 export function compensatorResponse(g: Compensator, omega: number): { magnitude: number; phase: number } {
   const up = side(omega / g.zero1) * side(omega / g.zero2);
   const down = side(omega / g.pole1) * side(omega / g.pole2);
@@ -159,7 +167,11 @@ export function compensatorParts(g: Compensator, r1: number): CompensatorParts {
   return { r1, r2: 1 / (g.zero1 * c1), r3, c1, c2, c3 };
 }
 
-/** Response of the amplifier built from parts at `omega`: for checks. Magnitude and phase (rad) of Zf/Zi without the inversion. */
+/**
+ * Response Zf/Zi (without the inversion) at `omega` rad/s of the amplifier built from parts: the check on `compensatorParts`.
+ * @source venable-1983, type-III amplifier
+ * @valid ideal amplifier
+ */
 export function amplifierResponse(parts: CompensatorParts, omega: number): { re: number; im: number } {
   const { r1, r2, r3, c1, c2, c3 } = parts;
   // Zf = (R2 + 1/sC1) ‖ 1/sC2 = (1 + sR2C1)/(s(C1 + C2)(1 + sR2C1C2/(C1 + C2)));  Zi = R1 ‖ (R3 + 1/sC3)

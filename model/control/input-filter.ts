@@ -22,7 +22,7 @@ export function filterCorner(inductance: number, capacitance: number): number {
 
 /**
  * Peak output impedance, Ω, with the best parallel R–C damping of blocking capacitance n·C: √(L/C)·√(2·(2 + n))/n. `impedance` √(L/C) Ω, `ratio` n.
- * @source erickson-maksimovic, chapter 10 (optimum parallel damping of an input filter)
+ * @source erickson-maksimovic-2001, chapter 10 (optimum parallel damping of an input filter)
  * @valid n above 0, best resistance from `dampingResistance`
  * @example dampedPeak(1, 4) = 0.8660254
  */
@@ -32,7 +32,7 @@ export function dampedPeak(impedance: number, ratio: number): number {
 
 /**
  * Best damping resistance, Ω, in series with n·C: √(L/C)·√[(2 + n)(4 + 3·n)/(2·n²·(4 + n))]. `impedance` Ω, `ratio` n.
- * @source erickson-maksimovic, chapter 10
+ * @source erickson-maksimovic-2001, chapter 10
  * @valid n above 0
  * @example dampingResistance(1, 4) = 0.61237
  */

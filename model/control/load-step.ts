@@ -103,7 +103,7 @@ export function jitterCurrent(inputVoltage: number, jitter: number, inductance: 
 /**
  * Right-half-plane zero, rad/s, of a buck stage that runs backwards and regulates its input: Vo²/(|P|·L). `outputVoltage` V (the
  * side that feeds), `power` W, `inductance` L/N H.
- * @source erickson-maksimovic, chapter 8 (right-half-plane zero of the boost: R·D'²/L)
+ * @source erickson-maksimovic-2001, chapter 8 (right-half-plane zero of the boost: R·D'²/L)
  * @valid continuous operation
  * @example rightHalfPlaneZero(12, 120, 1e-6) = 1.2e6
  */

@@ -11,7 +11,7 @@ const AMBIENT = 313.15;
  * over 40 °C in air of `airSpeed` m/s. Constant, so that a heat balance stays linear; once a sheet.
  * @source holman-2010, chapters 5, 7 and 8
  * @valid boards with copper planes that spread heat; both faces in the air
- * @example boardConductance(25e-4, 0) = 0.07137
+ * @example boardConductance(25e-4, 0) = 0.075636
  */
 export function boardConductance(area: number, airSpeed: number): number {
   return 2 * area * surfaceCoefficient(RISE, Math.sqrt(area), airSpeed, AMBIENT);

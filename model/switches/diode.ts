@@ -8,7 +8,7 @@ const REFERENCE = 298.15;
 /**
  * Forward loss, W: (V0 + k·(T − 298.15))·mean(I) + R·mean(I²), not below zero drop. `drop` V0 in V, `tempco` k in V/K,
  * `slopeResistance` R in Ω, `meanCurrent` A, `meanSquareCurrent` A², `temperature` K.
- * @source erickson-maksimovic, chapter 3 (diode as voltage source and resistance)
+ * @source erickson-maksimovic-2001, chapter 3 (diode as voltage source and resistance)
  * @valid straight-line law near the rated current
  * @example diodeForwardLoss(0.4, 0, 0.02, 5, 30, 298.15) = 2.6
  */
@@ -26,7 +26,7 @@ export function diodeForwardLoss(
 
 /**
  * Forward drop at one current, V: V0 + k·(T − 298.15) + R·I. Arguments as `diodeForwardLoss`; `current` A.
- * @source erickson-maksimovic, chapter 3
+ * @source erickson-maksimovic-2001, chapter 3
  * @valid current ≥ 0
  * @example diodeDrop(0.4, 0, 0.02, 5, 298.15) = 0.5
  */

@@ -10,7 +10,7 @@ export const VALLEY = 3;
 /**
  * Writes mean, mean square, peak and valley of `w` to `into[0 … 3]` without garbage: the hot path's form.
  * Mean square of one segment a→b of length d: d·(a² + ab + b²)/3, over the period.
- * @source erickson-maksimovic, appendix A (rms values of piecewise waveforms)
+ * @source erickson-maksimovic-2001, appendix A (rms values of piecewise waveforms)
  * @valid any waveform with a period above 0
  */
 export function measure(w: Waveform, into: Float64Array): void {
@@ -37,7 +37,7 @@ export function measure(w: Waveform, into: Float64Array): void {
 
 /**
  * Mean over the period, in the waveform's unit.
- * @source erickson-maksimovic, appendix A
+ * @source erickson-maksimovic-2001, appendix A
  * @valid period above 0
  */
 export function mean(w: Waveform): number {
@@ -48,7 +48,7 @@ export function mean(w: Waveform): number {
 
 /**
  * Mean of the square over the period, in the waveform's unit squared.
- * @source erickson-maksimovic, appendix A
+ * @source erickson-maksimovic-2001, appendix A
  * @valid period above 0
  */
 export function meanSquare(w: Waveform): number {
@@ -61,19 +61,31 @@ export function meanSquare(w: Waveform): number {
   return sum / (3 * w.period);
 }
 
-/** Root of the mean square, in the waveform's unit. */
+/**
+ * Root of the mean square, in the waveform's unit.
+ * @source erickson-maksimovic-2001, appendix A
+ * @valid period above 0
+ */
 export function rms(w: Waveform): number {
   return Math.sqrt(meanSquare(w));
 }
 
-/** Largest value at any end of a segment; −∞ for an empty waveform. */
+/**
+ * Largest value at any end of a segment; −∞ for an empty waveform.
+ * @derivation a straight segment has its extremes at its ends
+ * @valid any waveform
+ */
 export function peak(w: Waveform): number {
   let largest = Number.NEGATIVE_INFINITY;
   for (let i = 0; i < w.count; i++) largest = Math.max(largest, w.start[i], w.end[i]);
   return largest;
 }
 
-/** Smallest value at any end of a segment; ∞ for an empty waveform. */
+/**
+ * Smallest value at any end of a segment; ∞ for an empty waveform.
+ * @derivation a straight segment has its extremes at its ends
+ * @valid any waveform
+ */
 export function valley(w: Waveform): number {
   let smallest = Number.POSITIVE_INFINITY;
   for (let i = 0; i < w.count; i++) smallest = Math.min(smallest, w.start[i], w.end[i]);

@@ -51,7 +51,11 @@ export function addSegment(w: Waveform, duration: number, start: number, end: nu
   w.period += duration;
 }
 
-/** Makes `into` factor · w + offset, segment by segment; `into` may be `w` itself. */
+/**
+ * Makes `into` factor · w + offset, segment by segment; `into` may be `w` itself.
+ * @derivation an affine map keeps straight segments straight
+ * @valid `into` has room for w.count segments
+ */
 export function affine(w: Waveform, factor: number, offset: number, into: Waveform): void {
   into.count = w.count;
   into.period = w.period;

@@ -1,0 +1,27 @@
+/**
+ * `npm run evidence`: every check whose expected value comes from outside the code, as one table, to the terminal and to
+ * test/evidence.md. Closes with the count; the exit status tells whether all hold.
+ */
+import { writeFileSync } from 'node:fs';
+import { CASES } from './reference/index.ts';
+import { publishedSection, type Section } from './reference/markdown.ts';
+
+const INTRODUCTION = [
+  '# Evidence',
+  '',
+  'What the model says beside what was published or found by other means. Made by `npm run evidence`; do not edit.',
+  '',
+].join('\n');
+
+/** Every section, in the order of printing. */
+function sections(): readonly Section[] {
+  return [publishedSection(CASES)];
+}
+
+const all = sections();
+const passed = all.reduce((sum, section) => sum + section.passed, 0);
+const failed = all.reduce((sum, section) => sum + section.failed, 0);
+const text = [INTRODUCTION, ...all.map((section) => section.text), `${passed} passed, ${failed} failed`, ''].join('\n');
+writeFileSync('test/evidence.md', text);
+process.stdout.write(text);
+process.exitCode = failed === 0 ? 0 : 1;
