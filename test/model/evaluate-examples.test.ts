@@ -114,12 +114,10 @@ describe('B6 to B8, TI TPS40140 data sheet SLUS660H, pages 43 to 45, seen: 12 V 
 
 describe('limits of the whole model', () => {
   it('a zero-loss part set gives the ideal ratio and full efficiency', () => {
-    const point = pointOf(
-      { frequency: 1e6, inductor: { inductance: 1e-6 } },
-      { input: 12, output: 3.3, current: 1e-3 },
-    );
+    const made = { frequency: 1e6, inductor: { inductance: 10e-3 } };
+    const point = pointOf(made, { input: 12, output: 3.3, current: 0.01 });
     expect(point.dutyCycle).toBeCloseTo(3.3 / 12, 6);
-    expect(point.efficiency).toBeCloseTo(1, 3);
+    expect(point.efficiency).toBeCloseTo(1, 5);
   });
 
   it('48 V to 1 V at 1 MHz needs an on-time of 20.8 ns, at 300 kHz 69.4 ns (computed: Vo/(Vi·f), LTC3728 page 28)', () => {
