@@ -7,6 +7,8 @@ import type { ChosenSet } from './chosen-set.ts';
 
 /** Candidates tried in the place of a chosen point: its nearest. */
 const NEAREST = 24;
+/** Most points whose nearest are remembered, which bounds the memory to 10 MB. */
+const REMEMBERED = 100_000;
 /** Chosen points looked at again when one near them has changed. */
 const AFFECTED = 10;
 /** Chosen points scattered at a time. */
@@ -45,6 +47,12 @@ class ExchangeSearch {
   /** Chosen points still to be looked at, and whether a point is among them. */
   private readonly queue: number[] = [];
   private readonly queued: Uint8Array;
+  /** The chosen points, in no particular order, and the place of each there. */
+  private readonly roster: Int32Array;
+  private readonly place: Int32Array;
+  private members = 0;
+  /** Nearest points of each point that was ever asked for, chosen or not. */
+  private readonly neighbours = new Map<number, Int32Array>();
   private readonly near = new Int32Array(NEAREST);
   private readonly distance = new Float64Array(NEAREST);
   /** Hypervolume gained since the start. */
@@ -61,10 +69,19 @@ class ExchangeSearch {
     this.scale = inverseRanges(points, n, m);
     this.queued = new Uint8Array(n);
     this.left = budget;
+    this.place = new Int32Array(n);
+    const roster: number[] = [];
+    for (let point = 0; point < n; point++) {
+      if (chosen[point] === 0) continue;
+      this.place[point] = roster.length;
+      roster.push(point);
+    }
+    this.members = roster.length;
+    this.roster = Int32Array.from([...roster, 0]);
   }
 
   markAll(): void {
-    for (let point = 0; point < this.n; point++) if (this.chosen[point] === 1) this.mark(point);
+    for (let k = 0; k < this.members; k++) this.mark(this.roster[k]);
   }
 
   /** Exchanges with near candidates until none gains. */
@@ -108,14 +125,14 @@ class ExchangeSearch {
 
   /** Scatters one neighbourhood after the other and keeps what gained, while the budget lasts. */
   scatterRepeatedly(): void {
-    const best = this.members();
+    const best = this.roster.slice(0, this.members);
     const inBest = Uint8Array.from(this.chosen);
     let bestGained = this.gained;
     while (this.left > 0) {
       this.scatter(best[this.random(best.length)]);
       this.settle();
       if (this.gained > bestGained + LEAST_GAIN * Math.abs(bestGained)) {
-        best.set(this.members());
+        best.set(this.roster.subarray(0, this.members));
         inBest.set(this.chosen);
         bestGained = this.gained;
       } else {
@@ -127,7 +144,7 @@ class ExchangeSearch {
 
   /** Takes out the chosen points around `centre` and puts as many of the points in that region back in, drawn without looking. */
   private scatter(centre: number): void {
-    const count = this.nearest(centre, SCATTERED, 1);
+    const count = this.nearestChosen(centre, SCATTERED);
     const around = Array.from(this.near.subarray(0, count));
     const reach = this.distance[count - 1];
     for (const point of around) {
@@ -152,18 +169,19 @@ class ExchangeSearch {
 
   /** Puts the best of the nearest candidates in the place of `point`, if one adds more than it. Returns who stands there now. */
   private replaceByBest(point: number): number {
-    const { set, near } = this;
-    const count = this.nearest(point, NEAREST, 0);
-    this.left -= count + 1;
+    const { set, chosen } = this;
+    const candidates = this.nearestOf(point);
+    this.left -= candidates.length + 1;
     this.remove(point);
     const own = set.gain(point);
     let best = own * (1 + LEAST_GAIN);
     let by = point;
-    for (let k = 0; k < count; k++) {
-      const gain = set.gain(near[k]);
+    for (const candidate of candidates) {
+      if (chosen[candidate] === 1) continue;
+      const gain = set.gain(candidate);
       if (gain > best) {
         best = gain;
-        by = near[k];
+        by = candidate;
       }
     }
     this.add(by);
@@ -174,9 +192,9 @@ class ExchangeSearch {
   private leastOf(candidate: number, gain: number): number {
     let least = gain;
     let at = candidate;
-    for (let point = 0; point < this.n; point++) {
-      if (this.chosen[point] === 0) continue;
-      this.left--;
+    this.left -= this.members;
+    for (let k = 0; k < this.members; k++) {
+      const point = this.roster[k];
       const value = this.set.gain(point);
       if (value * (1 + LEAST_GAIN) < least) {
         least = value;
@@ -187,24 +205,23 @@ class ExchangeSearch {
   }
 
   private restore(best: Int32Array, inBest: Uint8Array): void {
-    for (const point of this.members()) if (inBest[point] === 0) this.remove(point);
+    for (const point of this.roster.slice(0, this.members)) if (inBest[point] === 0) this.remove(point);
     for (const point of best) if (this.chosen[point] === 0) this.add(point);
-  }
-
-  private members(): Int32Array {
-    const members: number[] = [];
-    for (let point = 0; point < this.n; point++) if (this.chosen[point] === 1) members.push(point);
-    return Int32Array.from(members);
   }
 
   private add(point: number): void {
     this.set.add(point);
     this.chosen[point] = 1;
+    this.place[point] = this.members;
+    this.roster[this.members++] = point;
   }
 
   private remove(point: number): void {
     this.set.remove(point);
     this.chosen[point] = 0;
+    const last = this.roster[--this.members];
+    this.roster[this.place[point]] = last;
+    this.place[last] = this.place[point];
   }
 
   private mark(point: number): void {
@@ -214,27 +231,45 @@ class ExchangeSearch {
   }
 
   private markAround(point: number): void {
-    const count = this.nearest(point, AFFECTED, 1);
+    const count = this.nearestChosen(point, AFFECTED);
     for (let k = 0; k < count; k++) this.mark(this.near[k]);
   }
 
-  /** Fills `near` with the `most` points nearest to `point` that are chosen (`kind` 1) or not (0), nearest first; returns how many. */
-  private nearest(point: number, most: number, kind: number): number {
-    const { near, distance, chosen, n } = this;
+  /** The points nearest to `point`, nearest first, worked out once. */
+  private nearestOf(point: number): Int32Array {
+    const known = this.neighbours.get(point);
+    if (known !== undefined) return known;
     let count = 0;
-    for (let other = 0; other < n; other++) {
-      if (chosen[other] !== kind) continue;
-      const squares = this.squares(other, point);
-      if (count === most && squares >= distance[count - 1]) continue;
-      let at = count < most ? count++ : most - 1;
-      for (; at > 0 && distance[at - 1] > squares; at--) {
-        distance[at] = distance[at - 1];
-        near[at] = near[at - 1];
-      }
-      distance[at] = squares;
-      near[at] = other;
+    for (let other = 0; other < this.n; other++) {
+      if (other !== point) count = this.rankNear(other, this.squares(other, point), count, NEAREST);
+    }
+    const found = this.near.slice(0, count);
+    if (this.neighbours.size < REMEMBERED) this.neighbours.set(point, found);
+    return found;
+  }
+
+  /** Fills `near` with the `most` chosen points nearest to `point`, nearest first; returns how many. */
+  private nearestChosen(point: number, most: number): number {
+    let count = 0;
+    for (let k = 0; k < this.members; k++) {
+      const other = this.roster[k];
+      count = this.rankNear(other, this.squares(other, point), count, most);
     }
     return count;
+  }
+
+  /** Takes a point into the `count` nearest known, which hold `most` at most; returns the new count. */
+  private rankNear(point: number, squares: number, count: number, most: number): number {
+    const { near, distance } = this;
+    if (count === most && squares >= distance[count - 1]) return count;
+    let at = count < most ? count : most - 1;
+    for (; at > 0 && distance[at - 1] > squares; at--) {
+      distance[at] = distance[at - 1];
+      near[at] = near[at - 1];
+    }
+    distance[at] = squares;
+    near[at] = point;
+    return Math.min(count + 1, most);
   }
 
   /** Squared distance in objectives scaled by their range. */
