@@ -2,6 +2,7 @@
 export {
   type Bank,
   type BankRipple,
+  bankCurrents,
   bankRipple,
   createBank,
   createBankRipple,
