@@ -1,8 +1,8 @@
 /** Columns of a parts table: name, unit, what a cell may hold. A kind's list of columns is typed by the part it builds. */
 
+import { type Bounds, boundsText, within } from '../quantity/bounds.ts';
 import { isDecimal } from '../quantity/decimal.ts';
-import { DIMENSIONS, type Dimension, exampleOf } from '../quantity/dimension.ts';
-import { formatDifference, formatQuantity } from '../quantity/format.ts';
+import { type Dimension, exampleOf } from '../quantity/dimension.ts';
 import { inUnit } from '../quantity/parse.ts';
 import type { UnitReading } from '../quantity/unit.ts';
 
@@ -35,13 +35,6 @@ export interface Row {
 export type ColumnsOf<T extends Row> = {
   readonly [F in keyof Omit<T, 'prices' | 'currency' | 'stock'>]-?: Column<T[F]>;
 };
-
-/** Bounds of a value in SI units; `above` excludes, the others include. */
-export interface Bounds {
-  readonly above?: number;
-  readonly from?: number;
-  readonly to?: number;
-}
 
 /** A physical law between the fields of one row. */
 export interface RowCheck<T> {
@@ -161,24 +154,3 @@ export const BOX_COLUMNS = {
   height: positive('height', 'mm', 'length', 0.5),
   mass: positive('mass', 'g', 'mass', 20),
 };
-
-function within(value: number, { above, from, to }: Bounds): boolean {
-  if (!Number.isFinite(value)) return false;
-  return (
-    (above === undefined || value > above) && (from === undefined || value >= from) && (to === undefined || value <= to)
-  );
-}
-
-/** Bounds in words, such as `above 0, at most 100 Ω`. */
-export function boundsText(bounds: Bounds, dimension: Dimension): string {
-  const { unit } = DIMENSIONS[dimension];
-  const show = (value: number): string => {
-    if (dimension === 'fraction') return `${formatQuantity(value * 100, '')} %`;
-    return dimension === 'temperature' ? formatQuantity(value, unit) : formatDifference(value, unit);
-  };
-  const parts: string[] = [];
-  if (bounds.above !== undefined) parts.push(`above ${bounds.above === 0 ? '0' : show(bounds.above)}`);
-  if (bounds.from !== undefined) parts.push(`at least ${bounds.from === 0 ? '0' : show(bounds.from)}`);
-  if (bounds.to !== undefined) parts.push(`at most ${show(bounds.to)}`);
-  return parts.length === 0 ? 'any number' : parts.join(', ');
-}

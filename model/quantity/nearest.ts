@@ -21,17 +21,21 @@ export function nearest(word: string, known: readonly string[]): string | undefi
 }
 
 /**
- * Least number of insertions, deletions and substitutions that turn `from` into `to` (Levenshtein 1966), two rows of
- * Wagner and Fischer's table at a time.
+ * Least number of insertions, deletions, substitutions and swaps of neighbours that turn `from` into `to`, no place touched
+ * twice (Damerau 1964, Levenshtein 1966), by the table of Wagner and Fischer, three rows at a time.
  */
 export function editDistance(from: string, to: string): number {
   let above = Array.from({ length: to.length + 1 }, (_, i) => i);
+  let before = above;
   for (let i = 1; i <= from.length; i++) {
     const row = [i];
     for (let j = 1; j <= to.length; j++) {
-      const swap = (above[j - 1] ?? 0) + (from[i - 1] === to[j - 1] ? 0 : 1);
-      row.push(Math.min(swap, (above[j] ?? 0) + 1, (row[j - 1] ?? 0) + 1));
+      const replaced = (above[j - 1] ?? 0) + (from[i - 1] === to[j - 1] ? 0 : 1);
+      const least = Math.min(replaced, (above[j] ?? 0) + 1, (row[j - 1] ?? 0) + 1);
+      const swap = i > 1 && j > 1 && from[i - 1] === to[j - 2] && from[i - 2] === to[j - 1];
+      row.push(swap ? Math.min(least, (before[j - 2] ?? 0) + 1) : least);
     }
+    before = above;
     above = row;
   }
   return above[to.length] ?? 0;
