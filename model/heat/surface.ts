@@ -52,11 +52,11 @@ export function surfaceCoefficient(rise: number, length: number, airSpeed: numbe
   return both + radiation(ambient + Math.max(rise, 0), ambient, EMISSIVITY);
 }
 
-/** Rounds of the fixed point below: each shrinks the error to about a fifth. */
-const ROUNDS = 10;
+/** Rounds of the fixed point below: each shrinks the error to between a fifth and a third. */
+const ROUNDS = 14;
 
 /**
- * Rise over ambient, K, of a surface that gives off `power` W from `area` m², by ten rounds of ΔT = P/(h(ΔT)·A).
+ * Rise over ambient, K, of a surface that gives off `power` W from `area` m², by fourteen rounds of ΔT = P/(h(ΔT)·A).
  * `length` m: its typical length, √area where nothing better is known. 0 for no power.
  * @source holman-2010, chapters 5, 7 and 8, solved for the rise
  * @valid rises below 200 K
