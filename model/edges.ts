@@ -24,16 +24,30 @@ import {
 const highOutput = new Float64Array(2);
 const lowOutput = new Float64Array(2);
 const partial = new Float64Array(1);
+/** What the two above hold for. */
+const kept: { high: Switch | undefined; low: Switch | undefined; volts: number } = {
+  high: undefined,
+  low: undefined,
+  volts: 0.5,
+};
 
 /** Adds the switching losses of all active phases at `state` to `ledger`, W. */
 export function addEdgeLosses(design: Design, state: StageState, ledger: Float64Array): void {
-  outputAt(design.high, state.inputVoltage, highOutput);
+  refreshOutputs(design, state.inputVoltage);
   if (design.diode === undefined) addSwitchEdges(design, state, ledger);
   else addDiodeEdges(design, state, ledger);
 }
 
+/** Output charge and energy of both rows at the bus: taken again only when the row or the bus is another. */
+function refreshOutputs(design: Design, volts: number): void {
+  if (kept.high !== design.high || kept.volts !== volts) outputAt(design.high, volts, highOutput);
+  if (kept.low !== design.low || kept.volts !== volts) outputAt(design.low, volts, lowOutput);
+  kept.high = design.high;
+  kept.low = design.low;
+  kept.volts = volts;
+}
+
 function addSwitchEdges(design: Design, state: StageState, ledger: Float64Array): void {
-  outputAt(design.low, state.inputVoltage, lowOutput);
   const cycles = state.frequency * state.activePhases;
   const { high, low, controller } = design;
   const a = state.valleyCurrent;

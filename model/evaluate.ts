@@ -76,6 +76,7 @@ function prepare(e: Evaluator, genes: Float64Array): void {
   prepareFlavour(e.worst, design, e.rail);
   assemble(e.assembly, design, e.rail.quantity);
   e.book.clear();
+  e.solver.warm = false;
 }
 
 /** Judges the worst points on the bare board, and again with the heat sink where any of them needs one. */
@@ -91,6 +92,7 @@ function judgeAllWorst(e: Evaluator, listener?: PointListener): void {
 
 /** Judges every worst point; returns the conductance of the heat sink that they would still need, W/K. */
 function judgeWorst(e: Evaluator, listener?: PointListener): number {
+  e.solver.wantsRipple = true;
   const points = e.plan.worst;
   const from = e.plan.usual.length;
   let needed = 0;
@@ -127,6 +129,7 @@ function sumUsual(e: Evaluator, listener?: PointListener): void {
   e.inflow = 0;
   for (let i = 0; i < e.plan.usual.length; i++) {
     const planned = e.plan.usual[i];
+    solver.wantsRipple = listener !== undefined;
     solveActive(e, e.usual, planned);
     const power = solver.outputPower >= 0 ? solver.outputPower + solver.loss : -solver.outputPower;
     e.loss += planned.share * solver.loss;

@@ -3,7 +3,7 @@
  * all parts comes together; the search's fast path and the full assessment both go through here.
  */
 import { powAt } from '../optimizer/maths/index.ts';
-import { type BankRipple, bankRipple, createBankRipple } from './capacitors/index.ts';
+import { type BankRipple, bankCurrents, bankRipple, createBankRipple } from './capacitors/index.ts';
 import type { Design } from './design.ts';
 import type { Flavour } from './flavour.ts';
 import { HeatBalance, HOT, solveHeat } from './heat-balance.ts';
@@ -21,10 +21,17 @@ import { StageState } from './stages/state.ts';
 import { diodeLeakageLoss, onResistance, RESISTANCE_REFERENCE } from './switches/index.ts';
 import { createWaveform, sumShifted, sumUnequal } from './waveform/index.ts';
 
-/** Rounds of temperature → resistance → duty → loss → temperature. The heat balance itself is exact in each. */
-const ROUNDS = 2;
+/**
+ * Rounds of temperature → resistance → duty → loss → temperature. The heat balance is exact in each, so all that a round
+ * mends is the duty by which resistances of another temperature differ: one more is enough, and where a point starts from the
+ * temperatures of the point before, none. A diode's leakage doubles every few kelvin: it always takes one more.
+ */
+const COLD_ROUNDS = 2;
+const WARM_ROUNDS = 1;
 /** Rise over ambient from which the first round starts, K. */
 const FIRST_RISE = 30;
+/** Temperature beyond which resistances are not followed, K: such a design has failed its limits long before. */
+const HOTTEST = 523.15;
 /** Resistance of the board copper in one phase's path at 20 °C, Ω: one square of 70 µm copper, 1.7241e-8 Ω·m / 70 µm. */
 const BOARD_SQUARE = 2.463e-4;
 /** Temperature coefficient of copper taken at 25 °C, where inductor rows state their resistance, 1/K. */
@@ -46,6 +53,10 @@ export class PointSolver {
   readonly drawn = createWaveform(64);
   readonly outputRipple: BankRipple = createBankRipple();
   readonly inputRipple: BankRipple = createBankRipple();
+  /** Whether a point starts from the temperatures of the point before; the first of a design must not. */
+  warm = false;
+  /** Whether ripple voltages are wanted, beside the currents that heat the capacitors. */
+  wantsRipple = true;
   /** W, all losses. */
   loss = 0.5;
   /** W, delivered to the load; negative in reverse flow. */
@@ -73,8 +84,8 @@ export function solvePoint(
   heat.ambient = rail.ambient;
   heat.conductance = boardConductance;
   heatPaths(solver, design);
-  for (let round = 0; round < ROUNDS; round++) {
-    state.round = round;
+  const rounds = solver.warm && design.diode === undefined ? WARM_ROUNDS : COLD_ROUNDS;
+  for (let round = 0; round < rounds; round++) {
     resistances(state, design);
     design.stage.solve(design, state);
     solver.ledger.fill(0);
@@ -82,9 +93,10 @@ export function solvePoint(
     addInductorLosses(design, state, solver.ledger);
     if (design.stage.form !== undefined) addTransformerCore(design, state, solver.ledger);
     addController(solver, design);
-    if (round === ROUNDS - 1) addCapacitors(solver, flavour);
+    if (round === rounds - 1) addCapacitors(solver, flavour);
     balance(solver, design);
   }
+  solver.warm = true;
   writeResistiveLosses(solver, design);
   solver.outputPower = planned.outputVoltage * planned.load * rail.output.current;
   solver.loss = sumSlots(solver.ledger, 0, solver.ledger.length);
@@ -103,7 +115,6 @@ export function solveRipple(
   state.outputVoltage = outputVoltage;
   state.loadCurrent = solver.rail.output.current;
   state.activePhases = design.phases;
-  state.round = 0;
   design.stage.solve(design, state);
   sumOutput(solver, flavour);
   bankRipple(flavour.output, solver.summed, solver.outputRipple);
@@ -122,6 +133,7 @@ function ask(solver: PointSolver, design: Design, flavour: Flavour, planned: Pla
   state.activePhases = phases;
   state.inductance = flavour.inductance;
   state.resistanceScale = flavour.resistanceScale;
+  if (solver.warm) return;
   const guess = rail.ambient + FIRST_RISE;
   state.highTemperature = guess;
   state.lowTemperature = guess;
@@ -249,9 +261,14 @@ function addController(solver: PointSolver, design: Design): void {
 function addCapacitors(solver: PointSolver, flavour: Flavour): void {
   const { state, ledger } = solver;
   sumOutput(solver, flavour);
-  bankRipple(flavour.output, solver.summed, solver.outputRipple);
   sumShifted(state.draw, state.drawCopies, solver.drawn);
-  bankRipple(flavour.input, solver.drawn, solver.inputRipple);
+  if (solver.wantsRipple) {
+    bankRipple(flavour.output, solver.summed, solver.outputRipple);
+    bankRipple(flavour.input, solver.drawn, solver.inputRipple);
+  } else {
+    bankCurrents(flavour.output, solver.summed, solver.outputRipple);
+    bankCurrents(flavour.input, solver.drawn, solver.inputRipple);
+  }
   ledger[SLOT['outputCeramic.seriesResistance']] += solver.outputRipple.meanSquare1 * flavour.output.r1;
   ledger[SLOT['outputBulk.seriesResistance']] += solver.outputRipple.meanSquare2 * flavour.output.r2;
   ledger[SLOT['inputCeramic.seriesResistance']] += solver.inputRipple.meanSquare1 * flavour.input.r1;
@@ -288,11 +305,11 @@ function balance(solver: PointSolver, design: Design): void {
   heat.boardConstant =
     copper * (1 - COPPER_TEMPCO * 293.15) + sumSlots(ledger, SLOT['outputCeramic.seriesResistance'], ledger.length);
   solveHeat(heat);
-  state.highTemperature = heat.temperature[HOT.high];
-  state.lowTemperature = heat.temperature[HOT.low];
-  state.inductorTemperature = heat.temperature[HOT.inductor];
-  state.transformerTemperature = heat.temperature[HOT.transformer];
-  state.boardTemperature = heat.boardTemperature;
+  state.highTemperature = Math.min(HOTTEST, heat.temperature[HOT.high]);
+  state.lowTemperature = Math.min(HOTTEST, heat.temperature[HOT.low]);
+  state.inductorTemperature = Math.min(HOTTEST, heat.temperature[HOT.inductor]);
+  state.transformerTemperature = Math.min(HOTTEST, heat.temperature[HOT.transformer]);
+  state.boardTemperature = Math.min(HOTTEST, heat.boardTemperature);
 }
 
 /** Conduction loss of the high position at the reference temperature, with tolerance, all phases, W. */

@@ -4,7 +4,7 @@ import { addEdgeLosses } from '../edges.ts';
 import { applyForward, applyReverse, ChokeSteadyState, solveChoke } from '../modes.ts';
 import type { Rail } from '../rail/rail.ts';
 import { addSegment, clearWaveform } from '../waveform/index.ts';
-import { chokeInductance } from './choke.ts';
+import { solveBentChoke } from './choke.ts';
 import type { Stage } from './contract.ts';
 import { MODE, type StageState } from './state.ts';
 
@@ -54,7 +54,6 @@ function solveBuck(design: Design, state: StageState): void {
   const current = state.loadCurrent / state.activePhases;
   state.meanCurrent = current;
   steady.frequency = design.frequency;
-  steady.inductance = chokeInductance(design, state, current);
   if (current >= 0) solveForward(design, state, current);
   else solveReverse(design, state, -current);
   state.effectiveInductance = steady.inductance;
@@ -67,7 +66,7 @@ function solveForward(design: Design, state: StageState, current: number): void 
   steady.shortestRise = design.controller.minimumOnTime;
   const drop = design.stage.diode ? design.diodeDrop(state.lowTemperature) : 0;
   forwardVoltages(state, drop, current);
-  solveChoke(steady);
+  solveBentChoke(design, state, steady);
   // With gaps the drops follow the current that flows while it flows: the geometric mean of load and boundary current,
   // which is half the peak of an ideal discontinuous triangle and equals the load at the boundary itself.
   if (steady.mode !== MODE.continuous && steady.mode !== MODE.forced) {
@@ -88,7 +87,7 @@ function solveReverse(design: Design, state: StageState, current: number): void 
   steady.shortestRise = design.controller.minimumOnTime;
   steady.rise = state.outputVoltage - current * (state.lowResistance + state.pathResistance);
   steady.fall = state.inputVoltage - state.outputVoltage + current * (state.highResistance + state.pathResistance);
-  solveChoke(steady);
+  solveBentChoke(design, state, steady);
   applyReverse(steady, state);
 }
 

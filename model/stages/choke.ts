@@ -1,14 +1,22 @@
-/** The inductance that a choke shows in one round of the solution. */
+/** The inductance that a choke shows at a mean current, with the ripple that it itself allows. */
 import type { Design } from '../design.ts';
-import { inductanceAt, meanInductanceAt } from '../magnetics/index.ts';
+import { inductanceAt } from '../magnetics/index.ts';
+import { type ChokeSteadyState, solveChoke } from '../modes.ts';
 import type { StageState } from './state.ts';
 
 const henries = new Float64Array(1);
 
-/** Inductance at the mean current in the first round; in later ones its mean over the ripple that the round before found. */
-export function chokeInductance(design: Design, state: StageState, current: number): number {
-  const half = 0.5 * state.rippleCurrent;
-  if (state.round === 0) inductanceAt(design.inductor, current, henries);
-  else meanInductanceAt(design.inductor, current - half, current + half, henries);
-  return henries[0] * (state.inductance / design.inductance);
+/**
+ * Solves `steady` for the choke of `design`: first with the inductance at zero bias, then with that at the rms current which
+ * the first solution shows. For a bend that goes with I² this is the mean inductance over the ripple; it is close to it
+ * for any bend while the peak stays below saturation, which is a limit.
+ */
+export function solveBentChoke(design: Design, state: StageState, steady: ChokeSteadyState): void {
+  const scale = state.inductance / design.inductance;
+  steady.inductance = state.inductance;
+  solveChoke(steady);
+  const square = steady.current * steady.current + (steady.ripple * steady.ripple) / 12;
+  inductanceAt(design.inductor, Math.sqrt(square), henries);
+  steady.inductance = henries[0] * scale;
+  solveChoke(steady);
 }

@@ -3,11 +3,11 @@
  * as a buck's, and currents, flux and stresses are carried back through the turns ratio. The forms differ in a few numbers.
  */
 import type { Design } from '../design.ts';
-import { applyForward, ChokeSteadyState, solveChoke } from '../modes.ts';
+import { applyForward, ChokeSteadyState } from '../modes.ts';
 import type { Rail } from '../rail/rail.ts';
 import type { Transformer } from '../transformer.ts';
 import { addSegment, clearWaveform } from '../waveform/index.ts';
-import { chokeInductance } from './choke.ts';
+import { solveBentChoke } from './choke.ts';
 import type { StageState } from './state.ts';
 
 /** The numbers that tell one transformer stage from another. */
@@ -42,13 +42,12 @@ export function solveIsolated(form: IsolatedForm, design: Design, state: StageSt
   const current = phaseCurrent / chokes;
   state.meanCurrent = current;
   steady.frequency = design.frequency * (form.doubleEnded && !form.doubler ? 2 : 1);
-  steady.inductance = chokeInductance(design, state, current);
   steady.current = current;
   // The chokes of a doubler couple through the winding: a pause in one is not a pause of the stage, so it always runs through.
   steady.blocking = design.emulates && !form.doubler;
   steady.shortestRise = design.controller.minimumOnTime;
   voltages(form, transformer, state, phaseCurrent, current);
-  solveChoke(steady);
+  solveBentChoke(design, state, steady);
   applyForward(steady, state);
   state.effectiveInductance = steady.inductance;
   writeCurrents(form, transformer, state, chokes);

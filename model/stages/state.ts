@@ -26,9 +26,6 @@ export class StageState {
   /** Factor on every on-resistance (tolerance). */
   resistanceScale = 1.5;
 
-  /** Round of the thermal solution, from 0; results of the round before still stand while a later one is solved. */
-  round = 0;
-
   // Temperatures of the round, K.
   highTemperature = 300.5;
   lowTemperature = 300.5;
