@@ -2,8 +2,8 @@
 import type { Part } from './common.ts';
 
 export interface Core extends Part {
-  /** Shape family of IEC 63093: E, ETD, RM, PQ, or ring. */
-  readonly shape: 'E' | 'ETD' | 'RM' | 'PQ' | 'ring';
+  /** Shape family of IEC 63093: E, ETD, RM, PQ, planar ELP (+I: with a plate), or ring. */
+  readonly shape: 'E' | 'ETD' | 'RM' | 'PQ' | 'ELP' | 'ring';
   /** Effective area, m². */
   readonly area: number;
   /** Smallest area, m²: saturation is judged here. */

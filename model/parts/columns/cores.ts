@@ -6,7 +6,7 @@ export const CORE_SCHEMA: TableSchema<Core> = {
   priced: true,
   columns: {
     name: word('name'),
-    shape: choice('shape', ['E', 'ETD', 'RM', 'PQ', 'ring']),
+    shape: choice('shape', ['E', 'ETD', 'RM', 'PQ', 'ELP', 'ring']),
     area: positive('area', 'mm²', 'area', 0.1),
     minimumArea: positive('area_min', 'mm²', 'area', 0.1),
     pathLength: positive('path', 'mm', 'length', 5),
