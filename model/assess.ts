@@ -4,14 +4,14 @@ import { BOARD_PRICE, BOARD_THICKNESS, PACKING_FACTOR, PLACEMENT_PRICE } from '.
 import type { Assessment, Corner, LimitFigure, LossItem, PartUse, PointReport, Share } from './assessment.ts';
 import { boxVolume, priceAt } from './catalogue.ts';
 import { cautionsOf } from './cautions.ts';
-import { sinkBox, sinkCost } from './cooling.ts';
 import { controllerCost, type Design } from './design.ts';
-import { type Evaluator, judgeDesign } from './evaluate.ts';
+import { type Evaluator, judgeDesign, solveActive } from './evaluate.ts';
+import { sinkCost, sinkVolume } from './heat/index.ts';
 import { HOT } from './heat-balance.ts';
 import { LOSS_SLOTS } from './ledger.ts';
 import { listParts, PartsList } from './parts-list.ts';
 import type { PlannedPoint } from './plan.ts';
-import { type PointSolver, solvePoint } from './point.ts';
+import type { PointSolver } from './point.ts';
 import type { RailProblem } from './problem.ts';
 import { MODES } from './stages/state.ts';
 import { tracesOf } from './traces.ts';
@@ -122,7 +122,7 @@ function reportPoint(
 }
 
 function lossItems(ledger: Float64Array): LossItem[] {
-  return LOSS_SLOTS.flatMap(([part, effect], i) => (ledger[i] > 0 ? [{ part, effect, watts: ledger[i] }] : []));
+  return LOSS_SLOTS.flatMap(([part, effect], i) => (ledger[i] !== 0 ? [{ part, effect, watts: ledger[i] }] : []));
 }
 
 /** The parts list of `design`, prices at `quantity` pieces. */
@@ -153,7 +153,7 @@ function volumeShares(e: Evaluator, parts: readonly PartUse[]): Share[] {
   const shares = parts.map((part) => ({ name: part.slot, value: part.volume }));
   const air = parts.reduce((sum, part) => sum + part.volume, 0) * (PACKING_FACTOR - 1);
   shares.push({ name: 'spacing', value: air }, { name: 'board', value: e.assembly.boardArea * BOARD_THICKNESS });
-  if (e.sink > 0) shares.push({ name: 'heatSink', value: sinkBox(e.sink, e.rail.airSpeed) });
+  if (e.sink > 0) shares.push({ name: 'heatSink', value: sinkVolume(1 / e.sink, e.rail.airSpeed) });
   return shares;
 }
 
@@ -161,19 +161,19 @@ function costShares(e: Evaluator, parts: readonly PartUse[]): Share[] {
   const shares = parts.map((part) => ({ name: part.slot, value: part.cost }));
   shares.push({ name: 'board', value: e.assembly.boardArea * BOARD_PRICE });
   shares.push({ name: 'placement', value: e.assembly.placements * PLACEMENT_PRICE });
-  if (e.sink > 0) shares.push({ name: 'heatSink', value: sinkCost(sinkBox(e.sink, e.rail.airSpeed)) });
+  if (e.sink > 0) shares.push({ name: 'heatSink', value: sinkCost(sinkVolume(1 / e.sink, e.rail.airSpeed)) });
   return shares;
 }
 
 function efficiencyCurves(e: Evaluator): Assessment['efficiencyCurves'] {
-  const { rail, solver, design } = e;
+  const { rail, solver } = e;
   const lines = [...new Set([rail.input.minimum, rail.input.nominal, rail.input.maximum])];
   return lines.map((inputVoltage) => ({
     inputVoltage,
     load: CURVE_LOADS,
     efficiency: CURVE_LOADS.map((load) => {
       const planned = { inputVoltage, outputVoltage: rail.output.nominal, load, share: 0 };
-      solvePoint(solver, design, e.usual, planned, design.phases, e.bareBoard + e.sink);
+      solveActive(e, e.usual, planned);
       return 1 - solver.loss / (solver.outputPower + solver.loss);
     }),
   }));

@@ -4,9 +4,9 @@
  */
 import { Assembly, assemble } from './assembly.ts';
 import type { Catalogue } from './catalogue.ts';
-import { boardConductance, sinkBox, sinkCost, sinkMass } from './cooling.ts';
 import { Design, resolveDesign } from './design.ts';
 import { Flavour, prepareFlavour } from './flavour.ts';
+import { boardConductance, sinkCost, sinkMass, sinkVolume } from './heat/index.ts';
 import { LOSS_SLOTS } from './ledger.ts';
 import { LimitBook } from './limits/book.ts';
 import { judgeConstruction } from './limits/construction.ts';
@@ -55,7 +55,7 @@ export class Evaluator {
     this.places = limitPlaces(this.book, rail);
     this.design = new Design(rail, catalogue, stages);
     this.solver = new PointSolver(rail);
-    this.bareBoard = boardConductance(rail.coolingArea, rail.airSpeed, rail.ambient);
+    this.bareBoard = boardConductance(rail.coolingArea, rail.airSpeed);
   }
 }
 
@@ -158,7 +158,7 @@ function judgeUsual(e: Evaluator, planned: PlannedPoint, inflow: number, index: 
 }
 
 /** Solves a point with the phase count that the light-load policy asks for: all, or the one with the least loss. */
-function solveActive(e: Evaluator, flavour: Flavour, planned: PlannedPoint): void {
+export function solveActive(e: Evaluator, flavour: Flavour, planned: PlannedPoint): void {
   const { design, solver } = e;
   const board = e.bareBoard + e.sink;
   let best = design.phases;
@@ -179,7 +179,7 @@ function solveActive(e: Evaluator, flavour: Flavour, planned: PlannedPoint): voi
 /** Adds the heat sink to volume, mass and cost. */
 function addSink(e: Evaluator): void {
   if (!(e.sink > 0)) return;
-  const volume = sinkBox(e.sink, e.rail.airSpeed);
+  const volume = sinkVolume(1 / e.sink, e.rail.airSpeed);
   e.assembly.volume += volume;
   e.assembly.mass += sinkMass(volume);
   e.assembly.cost += sinkCost(volume);

@@ -23,6 +23,7 @@ export type { PartKind, PartsTables } from './parts/tables.ts';
 export { tableTemplate } from './parts/template.ts';
 export { createRailProblem, type Judgement, type RailProblem } from './problem.ts';
 export * from './quantity/index.ts';
+export * from './rail/index.ts';
 export type { Architecture, ObjectiveName, Rail } from './rail/rail.ts';
 export { ARCHITECTURES, OBJECTIVES } from './rail/rail.ts';
 export { readSpec, recordOfSpec, SPEC_SCHEMA, type Spec, writeSpec } from './spec.ts';

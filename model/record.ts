@@ -79,7 +79,24 @@ export function fromRecord(space: RecordSpace, record: DesignRecord, file: strin
   genes[GENE.chokeBuild] = Math.max(0, space.genes[GENE.chokeBuild].options?.indexOf(build) ?? 0);
   for (const [slot, part] of Object.entries(record.parts)) readSlot(space, genes, slot, part, refuse);
   outsideRange(space, record, build, refuse);
+  if (findings.length === 0) missing(space, record, genes, refuse);
   return findings.length > 0 ? bad(findings) : good(genes);
+}
+
+/** Refuses a record that leaves out a part or a number that its design has. */
+function missing(
+  space: RecordSpace,
+  record: DesignRecord,
+  genes: Float64Array,
+  refuse: (field: string, found: string, allowed: string) => void,
+): void {
+  for (const [name, slot] of SLOTS) {
+    if (space.active(genes, name) && record.parts[slot] === undefined)
+      refuse(`parts.${slot}`, 'nothing', 'a part name');
+  }
+  for (const name of NUMERIC_GENES) {
+    if (space.active(genes, name) && record.genes[name] === undefined) refuse(`genes.${name}`, 'nothing', 'a number');
+  }
 }
 
 function readSlot(

@@ -53,7 +53,8 @@ export class LimitBook {
   judge(place: number, value: number, allowed: number, scale: number, point: number): void {
     if (place < 0) return;
     const slack = (this.sign[place] * (allowed - value)) / scale;
-    if (slack >= this.slack[place]) return;
+    // A figure that cannot be computed stays: no later corner may hide it.
+    if (slack >= this.slack[place] || Number.isNaN(this.slack[place])) return;
     this.slack[place] = slack;
     this.value[place] = value;
     this.allowed[place] = allowed;

@@ -5,7 +5,7 @@ import type { Evaluator } from '../evaluate.ts';
 import { BOARD_MAXIMUM, HOT } from '../heat-balance.ts';
 import type { Bulk } from '../parts/bulk.ts';
 import type { PlannedPoint } from '../plan.ts';
-import type { StageState } from '../stages/state.ts';
+import { MODE, type StageState } from '../stages/state.ts';
 import { stepExcursionOf } from '../step-response.ts';
 import { judgeMagnetics } from './magnetics.ts';
 
@@ -75,7 +75,10 @@ function judgeTimes(e: Evaluator, index: number): void {
   const { design, book, places, rail } = e;
   const { controller } = design;
   const period = 1 / (design.frequency * (1 + rail.tolerances.oscillator));
-  const on = (e.solver.state.dutyCycle * period) / design.stage.chokeMultiple;
+  const { state } = e.solver;
+  // While pulses are skipped the controller itself holds the shortest on-time.
+  const skipping = state.mode === MODE.skipping || state.mode === MODE.off;
+  const on = skipping ? controller.minimumOnTime : (state.dutyCycle * period) / design.stage.chokeMultiple;
   if (controller.minimumOnTime > 0) {
     book.judge(places.minimumOnTime, on, controller.minimumOnTime, controller.minimumOnTime, index);
   }

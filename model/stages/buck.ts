@@ -111,9 +111,11 @@ function writeCurrents(state: StageState): void {
   const period = state.frequency > 0 ? 1 / state.frequency : 1;
   const idle = (1 - highShare - lowShare) * period;
   clearWaveform(state.choke);
+  // The pause lies where the current rests at zero: after the low interval going forward, after the high one in reverse.
   addSegment(state.choke, highShare * period, a, b);
+  if (idle > 0 && a < 0) addSegment(state.choke, idle, 0, 0);
   addSegment(state.choke, lowShare * period, b, a);
-  if (idle > 0) addSegment(state.choke, idle, 0, 0);
+  if (idle > 0 && a >= 0) addSegment(state.choke, idle, 0, 0);
   clearWaveform(state.draw);
   addSegment(state.draw, highShare * period, a, b);
   addSegment(state.draw, period - highShare * period, 0, 0);

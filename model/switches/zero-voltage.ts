@@ -25,7 +25,7 @@ export function swingFraction(
   againstVoltage: number,
   deadTime: number,
 ): number {
-  if (valley >= 0) return 0;
+  if (valley >= 0 || deadTime <= 0) return 0;
   const moved = (-valley * deadTime) / nodeCharge;
   const stored = (valley * valley * inductance * busVoltage) / nodeCharge;
   const reached = (againstVoltage + Math.sqrt(againstVoltage * againstVoltage + stored)) / busVoltage;
