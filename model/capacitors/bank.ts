@@ -162,6 +162,56 @@ export function bankCurrents(bank: Bank, current: Waveform, into: BankRipple): v
   into.meanSquare2 = state.square2 / current.period;
 }
 
+/** One period of a bank's terminal voltage, for plots: times in s, volts about their mean over the points. */
+export interface BankTrace {
+  readonly time: readonly number[];
+  readonly value: readonly number[];
+}
+
+/**
+ * Terminal voltage of the bank over one period of `current` at `points` times in every segment and at both its ends, for plots: allocates.
+ * @derivation as `bankRipple`; its extremes lie between those of a fine trace and of the exact solution
+ * @valid as `bankRipple`; points ≥ 1
+ */
+export function bankTrace(bank: Bank, current: Waveform, points: number): BankTrace {
+  prepare(bank);
+  const average = mean(current);
+  findStart(current, average);
+  state.q = 0;
+  const time: number[] = [];
+  const value: number[] = [];
+  let start = 0;
+  for (let i = 0; i < current.count; i++) {
+    const d = current.duration[i];
+    if (!(d > 0)) continue;
+    for (let p = 0; p <= points + 1; p++) {
+      const t = (d * p) / (points + 1);
+      time.push(start + t);
+      value.push(voltageAt(current, i, average, t));
+    }
+    walk(bank, current, i, average, false);
+    start += d;
+  }
+  const middle = value.reduce((sum, v) => sum + v, 0) / value.length;
+  return { time, value: value.map((v) => v - middle) };
+}
+
+/** Terminal voltage at time `t` of segment `i`, whose start the walk has reached, V over the reference level. */
+function voltageAt(current: Waveform, i: number, average: number, t: number): number {
+  const a = current.start[i] - average;
+  const s = (current.end[i] - average - a) / current.duration[i];
+  const base = state.h * (a - s * state.tau);
+  let e = 0;
+  if (state.tau > 0) {
+    scratch[0] = -t / state.tau;
+    expAt(scratch, 0);
+    e = scratch[0];
+  }
+  const w = base + state.h * s * t + (state.w - base) * e;
+  const q = state.q + (a + 0.5 * s * t) * t;
+  return q / state.total + state.share * w + state.parallel * (a + s * t) + state.esl * s;
+}
+
 /** Constants of the network. Without a second group, or without resistance, there is no difference to follow: h = 0. */
 function prepare(bank: Bank): void {
   const total = bank.c1 + bank.c2;
@@ -267,7 +317,7 @@ function turns(): void {
 function zero(from: number, to: number, atFrom: number): void {
   let low = from;
   let high = to;
-  let t = 0.5 * (from + to);
+  let t = from + ((to - from) * atFrom) / (atFrom - atTo);
   let e = 0;
   for (let round = 0; round < 40; round++) {
     scratch[0] = -t / state.tau;

@@ -4,6 +4,7 @@ export {
   type BankRipple,
   bankCurrents,
   bankRipple,
+  bankTrace,
   createBank,
   createBankRipple,
   setGroup1,
