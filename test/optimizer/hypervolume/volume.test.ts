@@ -71,12 +71,12 @@ describe('hypervolume of fronts known in closed form, reference 1.1', () => {
     const outer: number[] = [];
     const visit = (cell: number[]): void => {
       if (cell.length < m - 1) {
-        for (let at = 0; at < steps; at++) visit([...cell, at]);
+        for (let at = 0; at <= steps; at++) visit([...cell, at]);
         return;
       }
       const low = cell.map((at) => at / steps);
       const high = cell.map((at) => (at + 1) / steps);
-      outer.push(...low, height(high));
+      if (!cell.includes(steps)) outer.push(...low, height(high));
       inner.push(...low, height(low));
     };
     visit([]);
