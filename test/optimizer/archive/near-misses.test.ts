@@ -119,11 +119,12 @@ describe('near misses', () => {
   it('spread along the trade-off of each limit, up to its ends', () => {
     const draw = generator(5);
     const list = Array.from({ length: 2000 }, (_, i) => {
-      const along = draw();
+      // A quarter circle, its points spread about evenly.
+      const t = draw();
       const worse = 1 + 0.1 * draw();
       return {
         genes: [i],
-        objectives: [4 * worse * along, 4 * worse * Math.sqrt(1 - along * along)],
+        objectives: [(4 * worse * (1 - t * t)) / (1 + t * t), (4 * worse * 2 * t) / (1 + t * t)],
         violations: [0, 1, 2].map((k) => (k === i % 3 ? 0.5 * draw() + 1e-6 : 0)),
       };
     });
