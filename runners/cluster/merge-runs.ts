@@ -50,8 +50,8 @@ async function write(out: string, inputs: Inputs, first: RunRecord, runs: readon
     example ??= found;
   }
   if (example === undefined) return STATUS.badInput;
-  const { railHash, partsHash, widths } = example;
-  const found: Found = { railHash, partsHash, widths, ...joiner.joined() };
+  const { railHash, partsHash } = example;
+  const found: Found = { railHash, partsHash, ...joiner.joined() };
   const tables = writeSnapshot(out, inputs.texts);
   writeFound(out, found);
   const front = publish(out, problem, found);

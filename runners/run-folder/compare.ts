@@ -1,7 +1,7 @@
 /** Compares the fronts of two runs with the same objectives. */
 import type { FrontFile } from '../../model/index.ts';
-import { createHypervolume } from '../../optimizer/index.ts';
-import type { Objective } from '../../optimizer/problem.ts';
+import { hypervolumeOf } from '../../optimizer/index.ts';
+import type { Problem } from '../../optimizer/problem.ts';
 import { refusal } from '../errors.ts';
 import { problemOf } from '../inputs.ts';
 import { dominates, type FrontDesign, readFront } from './front.ts';
@@ -43,24 +43,24 @@ export function compareRuns(a: string, b: string): Comparison {
   if (names(before) !== names(after)) {
     throw refusal('objectives-differ', { folder: b, names: names(after), ours: names(before) });
   }
-  const { objectives } = problemOf(readSnapshot(a, was));
+  const problem = problemOf(readSnapshot(a, was));
   const same = {
     sheet: was.railHash === is.railHash,
     parts: was.partsHash === is.partsHash,
     version: was.version === is.version,
   };
-  return { a, b, objectives: before.objectives, same, ...compareDesigns(objectives, before.designs, after.designs) };
+  return { a, b, objectives: before.objectives, same, ...compareDesigns(problem, before.designs, after.designs) };
 }
 
 type Designs = readonly FrontDesign[];
 
 /** The part of a comparison that follows from the designs alone. */
 export function compareDesigns(
-  objectives: readonly Objective[],
+  problem: Problem,
   a: Designs,
   b: Designs,
 ): Omit<Comparison, 'a' | 'b' | 'same' | 'objectives'> {
-  const volume = (designs: Designs): number => volumeOf(objectives, designs);
+  const volume = (designs: Designs): number => volumeOf(problem, designs);
   const beaten = (some: Designs, by: Designs): number => {
     const count = some.filter((one) => by.some((other) => dominates(other.objectives, one.objectives))).length;
     return some.length === 0 ? 0 : count / some.length;
@@ -72,7 +72,7 @@ export function compareDesigns(
   return {
     hypervolume: { a: volume(a), b: volume(b), together: volume([...a, ...b]) },
     dominated: { a: beaten(a, b), b: beaten(b, a) },
-    best: objectives.map((_, i) => ({ a: least(a, i), b: least(b, i) })),
+    best: problem.objectives.map((_, i) => ({ a: least(a, i), b: least(b, i) })),
     sizes: { a: a.length, b: b.length },
     gained: b.filter((design) => !inA.has(design.id)),
     lost: a.filter((design) => !inB.has(design.id)),
@@ -85,13 +85,9 @@ function movedTo(before: FrontDesign, after: FrontDesign | undefined): Moved[] {
   return [{ id: before.id, family: before.family, before: before.objectives, after: after.objectives }];
 }
 
-function volumeOf(objectives: readonly Objective[], designs: Designs): number {
+function volumeOf(problem: Problem, designs: Designs): number {
   if (designs.length === 0) return 0;
-  const m = objectives.length;
-  const scaled = designs.flatMap((design) =>
-    objectives.map(({ ideal, reference }, i) => ((design.objectives[i] ?? reference) - ideal) / (reference - ideal)),
-  );
-  const rows = Int32Array.from({ length: designs.length }, (_, i) => i);
-  const one = new Float64Array(m).fill(1);
-  return createHypervolume(designs.length, m).volume(Float64Array.from(scaled), rows, designs.length, one);
+  const none = new Float64Array(0);
+  const objectives = Float64Array.from(designs.flatMap((design) => design.objectives));
+  return hypervolumeOf(problem, { count: designs.length, genes: none, objectives, violations: none });
 }

@@ -3,7 +3,7 @@
  * from. It is what `merge`, `compare` and the page read; `archive.bin` holds it, sealed.
  */
 import { readFileSync } from 'node:fs';
-import type { Designs, NearMissDesigns, Widths } from '../../optimizer/index.ts';
+import type { Designs, NearMissDesigns } from '../../optimizer/index.ts';
 import { reasonOf, refusal, systemCode } from '../errors.ts';
 import type { HistoryRow } from '../sweep/history.ts';
 import { writeWhole } from './files.ts';
@@ -27,14 +27,13 @@ export interface Source {
 export interface Found {
   readonly railHash: string;
   readonly partsHash: string;
-  readonly widths: Widths;
   /** Ordered by seed, shards, shard; each once. */
   readonly sources: readonly Source[];
   readonly archive: Designs;
   readonly nearMisses: NearMissDesigns;
 }
 
-type Header = Pick<Found, 'railHash' | 'partsHash' | 'widths' | 'sources'> & {
+type Header = Pick<Found, 'railHash' | 'partsHash' | 'sources'> & {
   readonly designs: number;
   readonly nearMisses: number;
 };

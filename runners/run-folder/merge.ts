@@ -3,15 +3,13 @@
  * depend on the set of designs shown to them and not on its order, so any order, and any repetition, gives the same bytes.
  */
 import {
-  createArchive,
-  createNearMisses,
-  insertAll,
-  insertAllNearMisses,
-  packArchive,
-  packNearMisses,
+  type Designs,
+  mergeArchives,
+  mergeNearMisses,
+  type NearMissDesigns,
+  NO_DESIGNS,
 } from '../../optimizer/index.ts';
 import type { Problem } from '../../optimizer/problem.ts';
-import { archiveGrid, nearMissGrid } from '../sweep/grid.ts';
 import type { Found, Source } from './found.ts';
 
 /** Takes in findings one at a time. */
@@ -23,20 +21,16 @@ export interface Joiner {
 
 /** A joiner for findings of that problem. */
 export function createJoiner(problem: Problem): Joiner {
-  const archive = createArchive(archiveGrid(problem));
-  const misses = createNearMisses(nearMissGrid(problem));
+  let archive: Designs = NO_DESIGNS;
+  let nearMisses: NearMissDesigns = mergeNearMisses(problem, [], NO_DESIGNS);
   const sources = new Map<string, Source>();
   return {
     add(found: Found): void {
-      insertAll(archive, found.archive);
-      insertAllNearMisses(misses, found.nearMisses);
+      archive = mergeArchives(problem, [archive, found.archive]);
+      nearMisses = mergeNearMisses(problem, [nearMisses, found.nearMisses], NO_DESIGNS);
       for (const source of found.sources) addSource(sources, source);
     },
-    joined: () => ({
-      sources: [...sources.values()].sort(bySource),
-      archive: packArchive(archive),
-      nearMisses: packNearMisses(misses),
-    }),
+    joined: () => ({ sources: [...sources.values()].sort(bySource), archive, nearMisses }),
   };
 }
 

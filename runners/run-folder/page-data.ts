@@ -1,9 +1,9 @@
 /** Gathers what a page embeds from the files of a run. */
 import { explainRail, frontFile, type RailExplanation, type RailProblem } from '../../model/index.ts';
-import type { Designs } from '../../optimizer/index.ts';
+import { type Designs, mergeNearMisses } from '../../optimizer/index.ts';
 import type { Cloud, FamilyNote, NearMiss, PageData, RunRecord as PageRun } from '../../viz/data.ts';
 import { type Inputs, problemOf, take } from '../inputs.ts';
-import { genesOf } from '../sweep/grid.ts';
+import { rowsOf } from '../sweep/grid.ts';
 import { type Found, readFound } from './found.ts';
 import { readFront } from './front.ts';
 import { type RunRecord, readRecord } from './record.ts';
@@ -53,15 +53,16 @@ function cloudOf(problem: RailProblem, designs: Designs): Cloud {
   const family: number[] = [];
   const objectives: number[] = [];
   for (let i = 0; i < designs.count; i += step) {
-    family.push(problem.families.of(genesOf(designs, problem.genes.length, i)));
+    const width = problem.genes.length;
+    family.push(problem.families.of(designs.genes.subarray(i * width, (i + 1) * width)));
     objectives.push(...designs.objectives.subarray(i * m, (i + 1) * m));
   }
   return { families: problem.families.names, family, objectives };
 }
 
 function nearMissesOf(problem: RailProblem, found: Found): NearMiss[] {
-  const { nearMisses } = found;
-  const genes = Array.from({ length: nearMisses.count }, (_, i) => genesOf(nearMisses, problem.genes.length, i));
+  const nearMisses = mergeNearMisses(problem, [found.nearMisses], found.archive);
+  const genes = rowsOf(nearMisses, problem.genes.length);
   const designs = new Map(frontFile(problem, genes).designs.map((design) => [design.id, design]));
   return genes.flatMap((row, i) => {
     const limit = problem.limits[nearMisses.limit[i] ?? -1] ?? '';

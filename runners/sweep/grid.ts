@@ -1,102 +1,66 @@
-/** What fixes the archives and measures of a problem: read from its objectives, never from values found. */
-import {
-  type ArchiveGrid,
-  createHypervolume,
-  type Designs,
-  type NearMissGrid,
-  selectSubset,
-  type Widths,
-} from '../../optimizer/index.ts';
+/** Measures and choices on sets of designs of a problem: what the history, the record and the front file need. */
+import { chooseSubset, type Designs, hypervolumeOf } from '../../optimizer/index.ts';
 import type { Problem } from '../../optimizer/problem.ts';
 import type { Measure } from './measure.ts';
-
-/** A design that misses its one broken limit by at most this share is a near miss. */
-const NEAR = 0.5;
-
-/** Widths of the problem's rows. */
-export function widthsOf(problem: Problem): Widths {
-  return { genes: problem.genes.length, objectives: problem.objectives.length, violations: problem.limits.length };
-}
-
-/** Grid of the archive of feasible designs. */
-export function archiveGrid(problem: Problem): ArchiveGrid {
-  const { objectives } = problem;
-  return {
-    ...widthsOf(problem),
-    ideal: Float64Array.from(objectives, (objective) => objective.ideal),
-    resolution: Float64Array.from(objectives, (objective) => objective.resolution),
-  };
-}
-
-/** Grid of the archive of near misses. */
-export function nearMissGrid(problem: Problem): NearMissGrid {
-  const { objectives } = problem;
-  return {
-    ...widthsOf(problem),
-    ideal: Float64Array.from(objectives, (objective) => objective.ideal),
-    reference: Float64Array.from(objectives, (objective) => objective.reference),
-    share: NEAR,
-  };
-}
 
 /** Size, hypervolume (normalised to the box from ideal to reference) and best values of a set of feasible designs. */
 export function measureDesigns(problem: Problem, designs: Designs): Measure {
   const { objectives } = problem;
-  const m = objectives.length;
-  const rows = Int32Array.from({ length: designs.count }, (_, i) => i);
-  const scaled = scale(problem, designs);
-  const one = new Float64Array(m).fill(1);
-  const hypervolume =
-    designs.count === 0 ? 0 : createHypervolume(designs.count, m).volume(scaled, rows, designs.count, one);
-  const best = designs.count === 0 ? [] : objectives.map((_, c) => smallest(designs, m, c));
+  const hypervolume = designs.count === 0 ? 0 : hypervolumeOf(problem, designs);
+  const best = designs.count === 0 ? [] : objectives.map((_, c) => smallest(designs, objectives.length, c));
   return { frontSize: designs.count, hypervolume, best };
 }
 
-/** Rows of the at most `keep` designs that together dominate most, ascending; the best in each objective are among them. */
-export function chooseFront(problem: Problem, designs: Designs, keep: number): readonly number[] {
+/** Gene vectors of at most `keep` designs that together dominate most; the best in each objective are among them. */
+export function chooseFront(problem: Problem, designs: Designs, keep: number): Float64Array[] {
   const m = problem.objectives.length;
-  const rows = undominated(designs, m);
-  if (rows.length <= keep) return [...rows];
-  const one = new Float64Array(m).fill(1);
-  const chosen = new Set(selectSubset(scale(problem, designs), rows, rows.length, Math.max(1, keep - m), one, m) ?? []);
+  const width = problem.genes.length;
+  const front = undominated(designs, width, m);
+  const all = rowsOf(front, width);
+  if (front.count <= keep) return all;
+  const chosen = rowsOf(chooseSubset(front, Math.max(1, keep - m)), width);
+  const known = new Set(chosen.map(String));
   for (let c = 0; c < m; c++) {
-    const best = rows.reduce((a, b) =>
-      (designs.objectives[b * m + c] ?? 0) < (designs.objectives[a * m + c] ?? 0) ? b : a,
-    );
-    chosen.add(best);
+    const best = all[extreme(front, m, c)];
+    if (best === undefined || known.has(String(best))) continue;
+    known.add(String(best));
+    chosen.push(best);
   }
-  return [...chosen].sort((a, b) => a - b);
+  return chosen;
 }
 
-/** Genes of row `i`. */
-export function genesOf(designs: Designs, width: number, i: number): Float64Array {
-  return designs.genes.slice(i * width, (i + 1) * width);
-}
-
-function scale(problem: Problem, designs: Designs): Float64Array {
-  const { objectives } = problem;
-  const m = objectives.length;
-  const scaled = new Float64Array(designs.count * m);
-  for (let i = 0; i < scaled.length; i++) {
-    const objective = objectives[i % m];
-    if (objective === undefined) continue;
-    scaled[i] = ((designs.objectives[i] ?? 0) - objective.ideal) / (objective.reference - objective.ideal);
-  }
-  return scaled;
+/** Gene vectors of a set, one a design. */
+export function rowsOf(designs: Designs, width: number): Float64Array[] {
+  return Array.from({ length: designs.count }, (_, i) => designs.genes.slice(i * width, (i + 1) * width));
 }
 
 function smallest(designs: Designs, m: number, c: number): number {
-  let best = Number.POSITIVE_INFINITY;
-  for (let i = 0; i < designs.count; i++) best = Math.min(best, designs.objectives[i * m + c] ?? best);
+  return designs.objectives[extreme(designs, m, c) * m + c] ?? Number.NaN;
+}
+
+function extreme({ count, objectives }: Designs, m: number, c: number): number {
+  let best = 0;
+  for (let i = 1; i < count; i++) {
+    if ((objectives[i * m + c] ?? Infinity) < (objectives[best * m + c] ?? Infinity)) best = i;
+  }
   return best;
 }
 
 // An archive keeps one design a cell and each extreme, so a few members may dominate others; a front must not.
-function undominated(designs: Designs, m: number): Int32Array {
-  const { count, objectives } = designs;
-  const order = Array.from({ length: count }, (_, i) => i);
-  const kept = order.filter((i) => !order.some((j) => j !== i && beats(objectives, m, j, i)));
-  return Int32Array.from(kept);
+function undominated(designs: Designs, width: number, m: number): Designs {
+  const { count, genes, objectives } = designs;
+  const kept: number[] = [];
+  for (let i = 0; i < count; i++) {
+    let beaten = false;
+    for (let j = 0; j < count && !beaten; j++) beaten = j !== i && beats(objectives, m, j, i);
+    if (!beaten) kept.push(i);
+  }
+  return {
+    count: kept.length,
+    genes: Float64Array.from(kept.flatMap((i) => [...genes.subarray(i * width, (i + 1) * width)])),
+    objectives: Float64Array.from(kept.flatMap((i) => [...objectives.subarray(i * m, (i + 1) * m)])),
+    violations: new Float64Array(0),
+  };
 }
 
 function beats(objectives: Float64Array, m: number, a: number, b: number): boolean {

@@ -3,7 +3,6 @@ import type { RailProblem } from '../../model/index.ts';
 import type { Designs } from '../../optimizer/index.ts';
 import { percent } from '../progress/figures.ts';
 import { table } from '../terminal/table.ts';
-import { genesOf } from './grid.ts';
 
 const NEAREST = 5;
 
@@ -11,8 +10,9 @@ const NEAREST = 5;
 export function explainNothing(problem: RailProblem, designs: Designs): string {
   const near = nearest(designs, problem.limits.length);
   if (near.length === 0) return 'no design could be computed at all';
+  const width = problem.genes.length;
   const broken = limitsInTheWay(problem, designs, near);
-  const rows = near.map((row) => describe(problem, genesOf(designs, problem.genes.length, row)));
+  const rows = near.map((row) => describe(problem, designs.genes.slice(row * width, (row + 1) * width)));
   return [
     'limits in the way, in the designs that came nearest:',
     ...table([{ head: '' }, { head: '' }], broken),

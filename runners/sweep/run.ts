@@ -12,7 +12,6 @@ import type { Found } from '../run-folder/found.ts';
 import { takeLock } from '../run-folder/lock.ts';
 import { type Fault, type RunRecord, writeRecord } from '../run-folder/record.ts';
 import type { Budget } from './budget.ts';
-import { widthsOf } from './grid.ts';
 import { createMeter } from './meter.ts';
 import { packedIslands, resumeFrom, ringState } from './resume.ts';
 import { createRing, islandsOf, type Ring, sumTallies, tallyOf } from './ring.ts';
@@ -178,7 +177,7 @@ function momentOf(plan: RunPlan, search: Search, begun: Begun, status: RunRecord
   return {
     rings: rings.map(ringState),
     islands: packedIslands(rings),
-    found: { railHash, partsHash, widths: widthsOf(plan.problem), sources, archive, nearMisses },
+    found: { railHash, partsHash, sources, archive, nearMisses },
     record: recordOf(plan, begun, survey, status, seconds),
   };
 }

@@ -1,24 +1,22 @@
 /** The optimizer as a sweep uses it: islands as bytes in, counts, measures and findings out. */
 import {
-  createArchive,
-  createNearMisses,
   createPlan,
   type Designs,
+  hypervolumeOf,
   type Island,
-  insertAll,
-  insertAllNearMisses,
   joinDesigns,
+  mergeArchives,
+  mergeNearMisses,
   type NearMissDesigns,
+  NO_DESIGNS,
   OPERATORS,
   type Plan,
-  packArchive,
   packIsland,
-  packNearMisses,
   startIslands,
   unpackIsland,
 } from '../../optimizer/index.ts';
 import type { Problem } from '../../optimizer/problem.ts';
-import { archiveGrid, measureDesigns, nearMissGrid } from './grid.ts';
+import { measureDesigns } from './grid.ts';
 import type { Measure } from './measure.ts';
 import type { IslandState } from './ring.ts';
 
@@ -66,21 +64,17 @@ export interface Survey {
 /** The search of a problem. */
 export function createSearch(problem: Problem): Search {
   const open = (islands: readonly IslandState[]): Island[] => islands.map((state) => unpackIsland(state.bytes));
-  const archiveOf = (islands: readonly Island[]): Designs => {
-    const archive = createArchive(archiveGrid(problem));
-    for (const island of islands) insertAll(archive, island.archive);
-    return packArchive(archive);
-  };
   return {
     start: (plan) => startIslands(problem, plan).map((island) => stateOf(packIsland(island))),
     neighbours: ringNeighbours,
     tally,
-    measure: (islands) => measureDesigns(problem, archiveOf(open(islands))),
+    measure: (islands) => measureDesigns(problem, mergeArchives(problem, open(islands))),
     survey: (islands) => {
       const opened = open(islands);
-      const archive = archiveOf(opened);
+      const archive = mergeArchives(problem, opened);
       const measure = measureDesigns(problem, archive);
-      const nearMisses = nearMissesOf(problem, opened);
+      // All of them: which of them beat the front is decided when the front is final.
+      const nearMisses = mergeNearMisses(problem, opened, NO_DESIGNS);
       return { archive, nearMisses, measure, trust: trustOf(problem, opened, measure.hypervolume) };
     },
     families: (islands) => familiesOf(problem, open(islands)),
@@ -111,12 +105,6 @@ function ringNeighbours(island: number, islands: number): readonly number[] {
   return [...new Set([(island + islands - 1) % islands, (island + 1) % islands])].filter((other) => other !== island);
 }
 
-function nearMissesOf(problem: Problem, islands: readonly Island[]): NearMissDesigns {
-  const misses = createNearMisses(nearMissGrid(problem));
-  for (const island of islands) insertAllNearMisses(misses, island.nearMisses);
-  return packNearMisses(misses);
-}
-
 function familiesOf(problem: Problem, islands: readonly Island[]): FamilyTally[] {
   const sum = (pick: (island: Island) => number): number => islands.reduce((total, island) => total + pick(island), 0);
   return problem.families.names.map((_, i) => ({
@@ -127,7 +115,7 @@ function familiesOf(problem: Problem, islands: readonly Island[]): FamilyTally[]
 
 function trustOf(problem: Problem, islands: readonly Island[], whole: number): Survey['trust'] {
   const sum = (pick: (island: Island) => number): number => islands.reduce((total, island) => total + pick(island), 0);
-  const own = islands.map((island) => measureDesigns(problem, island.archive).hypervolume);
+  const own = islands.map((island) => (island.archive.count === 0 ? 0 : hypervolumeOf(problem, island.archive)));
   const shares = OPERATORS.map((name, i) => [name, sum((island) => island.shares[i] ?? 0) / islands.length]);
   return {
     agreement: own.map((hypervolume) => (whole > 0 ? hypervolume / whole : 0)),

@@ -29,7 +29,7 @@ export function createToy(source: ToySource = {}): Problem {
       { name: 'family', unit: '', kind: 'choice', low: 0, high: 3, options: ['a', 'b', 'c', 'd'] },
       ...[0, 1, 2].map((i) => ({ name: `x${i}`, unit: 'm', kind: 'real' as const, low: 0, high: 1 })),
     ],
-    objectives: ['f', 'g'].map((name) => ({ name, unit: 'm', resolution: 0.002, ideal: 0, reference: 2 })),
+    objectives: ['f', 'g'].map((name) => ({ name, unit: 'm', resolution: 0.02, ideal: 0, reference: 2 })),
     limits: ['x0'],
     families: {
       names: ['a', 'b', 'c', 'd'],
