@@ -1,6 +1,7 @@
 /** The front as columns: every objective, variable and margin that an axis may show or a range may narrow. */
 import type { Front, FrontDesign } from './data.ts';
 import { spoken } from './labels.ts';
+import { show, showDifference } from './units.ts';
 
 export type Group = 'objective' | 'variable' | 'margin';
 
@@ -80,6 +81,13 @@ function quantity(group: Group, name: string, unit: string, list: readonly numbe
   const whole = unit === '' && finite.every((value) => Number.isInteger(value));
   const log = !whole && low > 0 && high / low > 12;
   return { key: `${group.charAt(0)}.${name}`, group, name, label, unit, values, low, high, log, whole };
+}
+
+/** A value of `quantity` for people; a margin is a distance, so kelvin stay kelvin and its sign shows. */
+export function shown(quantity: Quantity, value: number): string {
+  return quantity.group === 'margin' && Number.isFinite(value)
+    ? showDifference(value, quantity.unit)
+    : show(value, quantity.unit);
 }
 
 /** Whether a range on `quantity` can narrow anything. */

@@ -18,6 +18,7 @@ export function spoken(name: string): string {
   if (known !== undefined) return known;
   return name
     .replace(/([a-z0-9])([A-Z])/g, (_, before: string, after: string) => `${before} ${after.toLowerCase()}`)
+    .replace(/@(\d+)%/g, ' at $1\u00a0% load')
     .replace(/[-_]+/g, ' ');
 }
 

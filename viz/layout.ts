@@ -28,6 +28,7 @@ const SECTIONS: readonly (readonly [string, string, string])[] = [
 ];
 
 const DETAILS: readonly (readonly [string, string])[] = [
+  ['effects', 'Every watt, by part and effect'],
   ['limits', 'How close to each limit'],
   ['efficiency', 'Efficiency over load'],
   ['waveforms', 'One switching period'],
@@ -63,6 +64,8 @@ export function layout(): string {
 <div id="open-head"></div>
 <h3>Where the watts go</h3>
 <div id="losses" class="scroll" tabindex="0" role="region" aria-label="Where the watts go"></div>
+<h3>Tightest limits</h3>
+<div id="tightest" class="scroll" tabindex="0" role="region" aria-label="Tightest limits"></div>
 </div>
 </section>
 <section id="detail" aria-label="The open design in detail">

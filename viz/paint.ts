@@ -11,8 +11,8 @@ import { renderCompare } from './views/compare.ts';
 import { efficiencyDefaults, renderEfficiency } from './views/efficiency.ts';
 import { renderFamilies } from './views/families.ts';
 import { renderLegend } from './views/legend.ts';
-import { renderLimits } from './views/limits.ts';
-import { renderLosses } from './views/losses.ts';
+import { limitsDefaults, renderLimits } from './views/limits.ts';
+import { lossesDefaults, renderLosses } from './views/losses.ts';
 import { renderMakeup } from './views/makeup.ts';
 import { profileWords, renderMasthead } from './views/masthead.ts';
 import { renderMind } from './views/mind.ts';
@@ -226,7 +226,9 @@ export function paintOpen(document: Document, bench: Bench, scene: Scene): void 
   paintOpenHead(document, bench, scene, own.value);
   const place = (id: string) => placeOf(document, id);
   const { rail } = bench.data;
-  renderLosses(place('losses'), own.value, rail.profile.length);
+  renderLosses(place('losses'), own.value, rail.profile.length, { ...lossesDefaults, effects: false });
+  renderLosses(place('effects'), own.value, rail.profile.length);
+  renderLimits(place('tightest'), own.value, { ...limitsDefaults, most: 4 });
   renderLimits(place('limits'), own.value);
   renderEfficiency(place('efficiency'), own.value, rail, {
     ...efficiencyDefaults,

@@ -1,8 +1,7 @@
 /** Designs side by side: what differs comes first, most different on top; what is alike in all stands closed below. */
-import type { Dataset, Quantity } from '../dataset.ts';
+import { type Dataset, type Quantity, shown } from '../dataset.ts';
 import { titled } from '../labels.ts';
 import { clear, type Root } from '../marks/root.ts';
-import { show } from '../units.ts';
 import { familyName } from './legend.ts';
 import { letter } from './tradeoff.ts';
 
@@ -141,7 +140,7 @@ function numbers(quantity: Quantity, pinned: readonly number[]): Row {
   const rank = quantity.group === 'objective' ? 0 : quantity.group === 'variable' ? 2 : 3;
   return {
     label: titled(quantity.label),
-    cells: values.map((value) => show(value, quantity.unit)),
+    cells: values.map((value) => shown(quantity, value)),
     best,
     spread,
     rank,

@@ -8,10 +8,14 @@ import { percent, show, showDifference } from '../units.ts';
 export const limitsDefaults = {
   /** Margins below this share of what is allowed are called tight. */
   tight: 0.05,
+  /** Rows shown, the tightest first. */
+  most: Number.POSITIVE_INFINITY,
 };
 
 export function renderLimits<E extends Element>(root: Root<E>, design: Assessment, options = limitsDefaults): void {
-  const rows = [...design.limits].sort((a, b) => a.slack - b.slack);
+  const rows = [...design.limits]
+    .sort((a, b) => bindingRank(a) - bindingRank(b) || a.slack - b.slack)
+    .slice(0, options.most);
   const table = clear(root).append('table').attr('class', 'ledger limits');
   table
     .append('caption')
@@ -28,15 +32,25 @@ export function renderLimits<E extends Element>(root: Root<E>, design: Assessmen
   for (const limit of rows) {
     const state = verdict(limit, options.tight);
     const row = body.append('tr').attr('class', `whole ${state}`);
-    const name = row.append('th').attr('scope', 'row').text(titled(limit.name));
+    const name = row.append('th').attr('scope', 'row').text(limitName(limit.name));
     if (state !== 'holds')
       name
         .append('span')
         .attr('class', 'flag')
         .text(state === 'broken' ? 'broken' : 'tight');
-    row.append('td').text(show(limit.value, limit.unit));
-    row.append('td').text(show(limit.allowed, limit.unit));
-    bar(row.append('td').text(showDifference(limit.margin, limit.unit)), Math.abs(limit.slack), state);
+    row.append('td').text(written(limit, limit.value));
+    row.append('td').text(written(limit, limit.allowed));
+    bar(
+      row
+        .append('td')
+        .text(
+          isShare(limit)
+            ? `${limit.margin < 0 ? '' : '+'}${percent(limit.margin, 2)}`
+            : showDifference(limit.margin, limit.unit),
+        ),
+      Math.abs(limit.slack),
+      state,
+    );
     row
       .append('td')
       .attr('class', 'where')
@@ -51,13 +65,33 @@ export function brokenLimits(limits: readonly LimitFigure[]): readonly string[] 
     .sort((a, b) => b.violation - a.violation)
     .map(
       (limit) =>
-        `${titled(limit.name)}: ${show(limit.value, limit.unit)} where ${show(limit.allowed, limit.unit)} is allowed, missed by ${percent(limit.violation)}`,
+        `${limitName(limit.name)}: ${written(limit, limit.value)} where ${written(limit, limit.allowed)} is allowed, missed by ${percent(limit.violation)}`,
     );
+}
+
+/** `efficiency@50%` → `Efficiency at 50 % load`. */
+export function limitName(name: string): string {
+  const [, what = '', load] = /^(.*)@(.+)%$/.exec(name) ?? [];
+  return load === undefined ? titled(name) : `${titled(what)} at ${load}\u00a0% load`;
+}
+
+/** Efficiencies are fractions that people write in percent. */
+function isShare(limit: LimitFigure): boolean {
+  return limit.unit === '' && limit.name.startsWith('efficiency');
+}
+
+function written(limit: LimitFigure, value: number): string {
+  return isShare(limit) ? percent(value, 2) : show(value, limit.unit);
+}
+
+/** A count that is just met is no close call: such limits stand last. */
+function bindingRank(limit: LimitFigure): number {
+  return limit.unit === '' && limit.margin === 0 ? 1 : 0;
 }
 
 function verdict(limit: LimitFigure, tight: number): 'broken' | 'tight' | 'holds' {
   if (limit.violation > 0) return 'broken';
-  return limit.slack < tight ? 'tight' : 'holds';
+  return limit.slack < tight && bindingRank(limit) === 0 ? 'tight' : 'holds';
 }
 
 function cornerText(corner: Corner): string {

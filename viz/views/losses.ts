@@ -8,6 +8,8 @@ import { type AxisUnit, axisUnit, digits, percent } from '../units.ts';
 export const lossesDefaults = {
   /** Effects below this share of the largest cell are summed into one row per part. */
   smallest: 0.004,
+  /** Whether each part's effects follow it. */
+  effects: true,
 };
 
 interface Line {
@@ -24,7 +26,7 @@ export function renderLosses<E extends Element>(
 ): void {
   const points = design.points.slice(0, profilePoints);
   const columns = [design.losses, ...points.map((point) => point.losses)];
-  const lines = linesOf(columns, options.smallest);
+  const lines = linesOf(columns, options);
   const unit = axisUnit('W', Math.max(...lines.map((line) => line.watts[0] ?? 0)));
   const largest = Math.max(...lines.filter((line) => line.whole).flatMap((line) => line.watts), 1e-12);
   const table = clear(root).append('table').attr('class', 'ledger');
@@ -78,14 +80,16 @@ function written(watts: number, unit: AxisUnit): string {
 }
 
 /** Parts by falling mean loss, each followed by its effects. */
-function linesOf(columns: readonly (readonly LossItem[])[], smallest: number): readonly Line[] {
+function linesOf(columns: readonly (readonly LossItem[])[], options: typeof lossesDefaults): readonly Line[] {
   const parts = [...new Set(columns.flatMap((items) => items.map((item) => item.part)))];
   const whole = parts.map((part) => ({ part, watts: sumOver(columns, (item) => item.part === part) }));
   const peak = Math.max(...whole.flatMap((one) => one.watts), 1e-12);
   whole.sort((a, b) => (b.watts[0] ?? 0) - (a.watts[0] ?? 0) || (a.part < b.part ? -1 : 1));
   return whole.flatMap(({ part, watts }) => [
     { label: titled(part), whole: true, watts },
-    ...effectsOf(columns, part).filter((line) => Math.max(...line.watts) >= smallest * peak),
+    ...(options.effects ? effectsOf(columns, part) : []).filter(
+      (line) => Math.max(...line.watts) >= options.smallest * peak,
+    ),
   ]);
 }
 

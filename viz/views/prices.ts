@@ -1,9 +1,10 @@
 /** What each limit costs: designs that break one limit by a little, and what that little would buy. */
 import type { Rail } from '../../model/rail/rail.ts';
 import type { Front, NearMiss } from '../data.ts';
-import { counted, listed, spoken, titled } from '../labels.ts';
+import { counted, listed, spoken } from '../labels.ts';
 import { clear, type Root } from '../marks/root.ts';
 import { percent, show } from '../units.ts';
+import { limitName } from './limits.ts';
 
 export const pricesDefaults = {
   /** Rows shown for one limit at most. */
@@ -103,7 +104,7 @@ function offerRow(row: Root<HTMLTableRowElement>, front: Front, offer: Offer): v
   const others = front.objectives
     .filter((_, k) => k !== offer.objective)
     .map(({ name }) => spoken(name).split(',')[0] ?? '');
-  row.append('th').attr('scope', 'row').text(titled(offer.miss.limit));
+  row.append('th').attr('scope', 'row').text(limitName(offer.miss.limit));
   row.append('td').text(`${show(offer.miss.allowed, offer.unit)} → ${show(offer.miss.value, offer.unit)}`);
   row
     .append('td')

@@ -1,10 +1,9 @@
 /** Ranges that narrow everything: a histogram and two thumbs for each chosen quantity. */
 import type { Dataset, Quantity } from '../dataset.ts';
-import { varies } from '../dataset.ts';
+import { shown, varies } from '../dataset.ts';
 import { thousands, titled } from '../labels.ts';
 import { clear, px, type Root } from '../marks/root.ts';
 import type { Interval, State } from '../state.ts';
-import { show } from '../units.ts';
 
 export const rangesDefaults = {
   bins: 36,
@@ -93,8 +92,7 @@ function update(
   row.classList.toggle('narrowed', range !== undefined);
   const output = row.querySelector('output');
   if (output !== null)
-    output.textContent =
-      low === high ? show(low, quantity.unit) : `${show(low, quantity.unit)} to ${show(high, quantity.unit)}`;
+    output.textContent = low === high ? shown(quantity, low) : `${shown(quantity, low)} to ${shown(quantity, high)}`;
   const most = quantity.whole ? quantity.high - quantity.low : o.steps;
   for (const [name, value] of [
     ['low', low],
@@ -105,7 +103,7 @@ function update(
     const position = String(Math.round(place(quantity, value) * most));
     if (input.value !== position) input.value = position;
     input.setAttribute('value', position);
-    input.setAttribute('aria-valuetext', show(value, quantity.unit));
+    input.setAttribute('aria-valuetext', shown(quantity, value));
   }
   const svg = row.querySelector('svg');
   if (svg !== null) histogram(svg, quantity, kept, o.bins);

@@ -85,7 +85,7 @@ function key(svg: Root<SVGSVGElement>, name: string, i: number, x: number, y: nu
     .attr('y', y)
     .attr('dy', '0.32em')
     .text(words);
-  return x + 38 + 6.3 * words.length;
+  return x + 38 + 7 * words.length;
 }
 
 function pathOf(trace: Trace, x: (value: number) => number, y: (value: number) => number): string {

@@ -142,12 +142,15 @@ export function renderMove<E extends Element>(root: Root<E>, own: Assessment, mo
   const table = root.append('table').attr('class', 'ledger move');
   table.append('caption').attr('class', 'unseen').text('Objectives of the open design and of the moved one');
   const head = table.append('thead').append('tr');
-  for (const word of ['', 'as chosen', 'moved', 'change']) head.append('th').attr('scope', 'col').text(word);
+  for (const word of ['Objective', 'as chosen', 'moved', 'change']) head.append('th').attr('scope', 'col').text(word);
   const body = table.append('tbody');
   own.objectives.forEach((figure, k) => {
     const after = moved.value.objectives[k]?.value ?? Number.NaN;
     const row = body.append('tr').attr('class', after < figure.value ? 'gain' : after > figure.value ? 'worse' : '');
-    row.append('th').attr('scope', 'row').text(titled(figure.name));
+    row
+      .append('th')
+      .attr('scope', 'row')
+      .text(titled(figure.name).split(',')[0] ?? '');
     row.append('td').text(show(figure.value, figure.unit));
     row.append('td').text(show(after, figure.unit));
     row
