@@ -14,6 +14,7 @@ export type {
 } from './assessment.ts';
 export { cautionsOf, NOT_COVERED, STANDING_CAUTION, TOUCH_VOLTAGE } from './cautions.ts';
 export { type ArchitectureVerdict, explainRail, type Fact, type RailExplanation } from './explain.ts';
+export { type FamilyTally, familyReason } from './families.ts';
 export { type FrontDesign, type FrontFile, frontCsv, frontFile, quoteCell } from './front-file.ts';
 export { bad, describeFinding, type Finding, good, type Outcome } from './outcome.ts';
 export { BUILT_IN_TABLES } from './parts/built-in.ts';
