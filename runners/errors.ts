@@ -25,6 +25,7 @@ export const ERRORS = {
   'file-folder': [2, '{file}: is a folder; give the path of {what}'],
   'file-unreadable': [2, '{file}: cannot be read ({reason})'],
   'file-large': [2, '{file}: is {size} MB; {what} is never above {limit} MB, so this is some other file'],
+  'table-kind': [2, '{file}: its header fits no kind of parts table ({kinds}); begin from a template'],
   'file-exists': [2, '{file}: exists already; choose another name, or add --force to replace it'],
   'file-unwritable': [2, '{file}: cannot be written ({reason}); choose another place'],
   'not-a-spec': [2, '{file}: is not a design in spec form: {reason}'],

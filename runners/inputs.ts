@@ -20,6 +20,7 @@ import {
 import { refusal } from './errors.ts';
 import { packagePath } from './package-path.ts';
 import { readText } from './run-folder/files.ts';
+import { kindOfTable } from './table-kind.ts';
 
 /** A text with the name that messages about it use. */
 export interface NamedText {
@@ -104,6 +105,6 @@ function builtIn(): TableText[] {
 }
 
 function ownTable(name: string, folder: string): TableText {
-  const path = resolve(folder, name);
-  return { kind: kindOf(name), file: name, text: readText(path, 'a parts table named in the sheet') };
+  const text = readText(resolve(folder, name), 'a parts table named in the sheet');
+  return { kind: kindOfTable(text, name), file: name, text };
 }

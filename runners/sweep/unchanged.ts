@@ -1,5 +1,5 @@
 /** Whether a run may go on: with the same sheet, parts, version and settings that it began with. */
-import { canonicalRail } from '../../model/index.ts';
+import { diffRails } from '../../model/index.ts';
 import { refusal } from '../errors.ts';
 import type { Inputs } from '../inputs.ts';
 import type { RunRecord } from '../run-folder/record.ts';
@@ -34,25 +34,9 @@ export function refuseChanges(
 }
 
 function differenceOf(before: Inputs, after: Inputs): string {
-  return flatDifference(JSON.parse(canonicalRail(before.rail)), JSON.parse(canonicalRail(after.rail))).join('\n');
-}
-
-/** One line for each field that differs between two plain values. */
-export function flatDifference(before: unknown, after: unknown): string[] {
-  const [was, is] = [flatten(before), flatten(after)];
-  const fields = [...new Set([...was.keys(), ...is.keys()])].sort();
-  return fields
-    .filter((field) => was.get(field) !== is.get(field))
-    .map((field) => `  ${field}: was ${was.get(field) ?? 'absent'}, is ${is.get(field) ?? 'absent'}`);
-}
-
-function flatten(value: unknown, path = '', into = new Map<string, string>()): Map<string, string> {
-  if (typeof value === 'object' && value !== null) {
-    for (const [key, inner] of Object.entries(value)) flatten(inner, path === '' ? key : `${path}.${key}`, into);
-  } else {
-    into.set(path, JSON.stringify(value));
-  }
-  return into;
+  return diffRails(before.rail, after.rail)
+    .map((line) => `  ${line}`)
+    .join('\n');
 }
 
 function partsDifference(given: boolean, inputs: Inputs, known: RunRecord, snapshot: () => Inputs): string {
