@@ -4,12 +4,12 @@ export {
   type BankRipple,
   bankCurrents,
   bankRipple,
-  bankTrace,
   createBank,
   createBankRipple,
   setGroup1,
   setGroup2,
 } from './bank.ts';
+export { type BankTrace, bankTrace } from './bank-trace.ts';
 export { ceramicCapacitance, ceramicWorstFactor } from './ceramic.ts';
 export { electrolyticCost, filmCost } from './cost.ts';
 export { cancellation, capacitiveRipple, inputChargeRipple, inputMeanSquare } from './ripple.ts';
