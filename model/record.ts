@@ -95,6 +95,8 @@ function missing(
       refuse(`parts.${slot}`, 'nothing', 'a part name');
   }
   for (const name of NUMERIC_GENES) {
+    // A stocked inductor's row says its inductance.
+    if (name === 'inductance' && record.parts.inductor !== undefined) continue;
     if (space.active(genes, name) && record.genes[name] === undefined) refuse(`genes.${name}`, 'nothing', 'a number');
   }
 }
