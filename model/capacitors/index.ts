@@ -2,13 +2,12 @@
 export {
   type Bank,
   type BankRipple,
-  bankCurrents,
-  bankRipple,
   createBank,
   createBankRipple,
   setGroup1,
   setGroup2,
 } from './bank.ts';
+export { bankCurrents, bankRipple } from './bank-ripple.ts';
 export { type BankTrace, bankTrace } from './bank-trace.ts';
 export { ceramicCapacitance, ceramicWorstFactor } from './ceramic.ts';
 export { electrolyticCost, filmCost } from './cost.ts';
