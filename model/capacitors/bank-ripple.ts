@@ -1,7 +1,8 @@
 /** Exact periodic steady state of a capacitor bank under a piecewise-linear current: ripple voltage and group currents. */
 import type { Waveform } from '../waveform/waveform.ts';
 import type { Bank, BankRipple } from './bank.ts';
-import { beginWalk, walk, walkState } from './bank-walk.ts';
+import { walkState } from './bank-state.ts';
+import { beginWalk, walk } from './bank-walk.ts';
 
 /**
  * Solves the bank under the ac part of `current` (its mean is taken off) and fills `into`.

@@ -2,7 +2,9 @@
 import { exp } from '../../optimizer/maths/index.ts';
 import type { Waveform } from '../waveform/waveform.ts';
 import type { Bank } from './bank.ts';
-import { beginWalk, enterSegment, voltageThere, walk, walkState } from './bank-walk.ts';
+import { voltageThere } from './bank-extremes.ts';
+import { walkState } from './bank-state.ts';
+import { beginWalk, enterSegment, walk } from './bank-walk.ts';
 
 /** One period of a bank's terminal voltage: times in s, volts about their mean over the points. */
 export interface BankTrace {
