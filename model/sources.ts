@@ -29,6 +29,12 @@ export const SOURCES = {
     year: 2013,
     place: 'IEEE ECCE, pp. 2139-2146',
   },
+  'cec-weights': {
+    author: 'California Energy Commission',
+    title: 'Performance test protocol for evaluating inverters used in grid-connected photovoltaic systems',
+    year: 2004,
+    place: 'weighted efficiency',
+  },
   'churchill-1977': {
     author: 'S. W. Churchill',
     title: 'A comprehensive correlating equation for laminar, assisting, forced and free convection',
@@ -58,6 +64,18 @@ export const SOURCES = {
     title: 'Fundamentals of Power Electronics',
     year: 2001,
     place: 'Kluwer, 2nd edition',
+  },
+  'eu-2019-1782': {
+    author: 'European Commission',
+    title: 'Ecodesign requirements for external power supplies',
+    year: 2019,
+    place: 'Regulation (EU) 2019/1782',
+  },
+  'european-weights': {
+    author: 'R. Hotopp; Joint Research Centre, Ispra',
+    title: 'European efficiency of photovoltaic inverters',
+    year: 1991,
+    place: 'weighted efficiency, as printed in inverter data sheets',
   },
   'ferreira-1994': {
     author: 'J. A. Ferreira',

@@ -4,7 +4,7 @@
  */
 import { writeFileSync } from 'node:fs';
 import { CASES } from './reference/index.ts';
-import { publishedSection, type Section } from './reference/markdown.ts';
+import { publishedSection, type Section, sourceSection } from './reference/markdown.ts';
 
 const INTRODUCTION = [
   '# Evidence',
@@ -15,7 +15,7 @@ const INTRODUCTION = [
 
 /** Every section, in the order of printing. */
 function sections(): readonly Section[] {
-  return [publishedSection(CASES)];
+  return [publishedSection(CASES), sourceSection()];
 }
 
 const all = sections();

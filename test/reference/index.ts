@@ -8,6 +8,7 @@ import { CORES } from './cores.ts';
 import { HEAT } from './heat.ts';
 import { MATHS } from './maths.ts';
 import { MULTIPHASE } from './multiphase.ts';
+import { PROFILE_CASES } from './profiles.ts';
 import { SWITCHES } from './switches.ts';
 import { TABLES } from './tables.ts';
 import { TRANSFORMER } from './transformer.ts';
@@ -28,4 +29,5 @@ export const CASES: readonly CaseGroup[] = [
   ...HEAT,
   ...MATHS,
   ...TABLES,
+  ...PROFILE_CASES,
 ];
