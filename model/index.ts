@@ -17,11 +17,7 @@ export { type ArchitectureVerdict, explainRail, type Fact, type RailExplanation 
 export { type FamilyTally, familyReason } from './families.ts';
 export { type FrontDesign, type FrontFile, frontCsv, frontFile, quoteCell } from './front-file.ts';
 export { bad, describeFinding, type Finding, good, type Outcome } from './outcome.ts';
-export { BUILT_IN_TABLES } from './parts/built-in.ts';
-export { canonicalParts, joinTables } from './parts/join.ts';
-export { readTable } from './parts/read-table.ts';
-export type { PartKind, PartsTables } from './parts/tables.ts';
-export { tableTemplate } from './parts/template.ts';
+export * from './parts/index.ts';
 export { createRailProblem, type Judgement, type RailProblem } from './problem.ts';
 export * from './quantity/index.ts';
 export * from './rail/index.ts';
