@@ -1,5 +1,5 @@
 /** The front as files that other programs read: `front.json` in SI units, `front.csv` in engineering units. */
-import { GENE_UNITS, NUMERIC_GENES } from './genes.ts';
+import { GENE_UNITS } from './genes.ts';
 import type { RailProblem } from './problem.ts';
 import { engineeringText, toEngineering } from './quantity/index.ts';
 
@@ -57,7 +57,7 @@ export function frontFile(problem: RailProblem, rows: readonly Float64Array[]): 
     rail: problem.rail.name,
     objectives: problem.objectives.map(({ name, unit }) => ({ name, unit })),
     limits: problem.limitDefinitions.map(({ name, unit }) => ({ name, unit })),
-    genes: NUMERIC_GENES.map((name) => ({ name, unit: GENE_UNITS[name] ?? '' })),
+    genes: problem.numericGenes.map((name) => ({ name, unit: GENE_UNITS[name] ?? '' })),
     designs,
   };
 }
@@ -85,7 +85,7 @@ export function frontCsv(file: FrontFile): string {
     ...file.genes.map(column),
     ...PART_SLOTS,
     ...file.objectives.map(column),
-    ...file.limits.map(({ name, unit }) => header(`${name} margin`, unit)),
+    ...file.limits.map(({ name, unit }) => header(`${name} margin`, unit, true)),
     'worst margin',
   ];
   const lines = file.designs.map((design) => [
@@ -107,8 +107,9 @@ export function quoteCell(text: string): string {
   return /[",\n\r]/.test(safe) ? `"${safe.replaceAll('"', '""')}"` : safe;
 }
 
-function header(name: string, unit: string): string {
-  const shown = toEngineering(unit).unit;
+/** A column's title; a difference of temperatures is in kelvin. */
+function header(name: string, unit: string, difference = false): string {
+  const shown = unit === 'K' && difference ? 'K' : toEngineering(unit).unit;
   return shown === '' ? name : `${name} [${shown}]`;
 }
 

@@ -12,7 +12,7 @@ interface Offer {
 }
 
 /** Archive cells over the range of an objective. */
-const CELLS = 400;
+const CELLS = 1000;
 /** Loss that still counts, as a share of the power delivered at full load. */
 const LOSS_SHARE = 0.25;
 /** Volume that still counts where the sheet sets none, m³ per watt of full load (0.5 kW/dm³). */

@@ -4,7 +4,7 @@ import { assessDesign } from './assess.ts';
 import type { Assessment, DesignRecord } from './assessment.ts';
 import { type Catalogue, createCatalogue, hasTransformer, usesLowSwitch } from './catalogue.ts';
 import { Evaluator, judgeDesign } from './evaluate.ts';
-import { createGenes, GENE, type GeneName } from './genes.ts';
+import { createGenes, GENE, type GeneName, NUMERIC_GENES } from './genes.ts';
 import type { LimitDefinition } from './limits/book.ts';
 import { objectiveReaders, objectivesOf } from './objectives.ts';
 import { bad, type Finding, good, type Outcome } from './outcome.ts';
@@ -31,6 +31,8 @@ export interface RailProblem extends Problem {
   readonly catalogue: Catalogue;
   /** Architectures that can serve the rail, in the order in which the `architecture` gene counts them. */
   readonly architectures: readonly Architecture[];
+  /** Genes of this space that are numbers, in the order of a record. */
+  readonly numericGenes: readonly GeneName[];
   /** Limits with unit and sense, in the order of `limits`. */
   readonly limitDefinitions: readonly LimitDefinition[];
   /** Objectives and margins of the design of snapped `genes`, without its story. */
@@ -82,6 +84,7 @@ class ConverterSpace implements RailProblem {
   readonly objectives;
   readonly limits: readonly string[];
   readonly limitDefinitions: readonly LimitDefinition[];
+  readonly numericGenes: readonly GeneName[];
   readonly families: Families;
   readonly seeds: readonly Float64Array[] = [];
   private readonly evaluator: Evaluator;
@@ -94,6 +97,7 @@ class ConverterSpace implements RailProblem {
     this.catalogue = catalogue;
     this.architectures = rail.search.architectures;
     this.genes = createGenes(rail, catalogue);
+    this.numericGenes = numericGenes(catalogue);
     this.objectives = objectivesOf(rail);
     this.readers = objectiveReaders(rail);
     this.evaluator = new Evaluator(rail, catalogue, stages);
@@ -149,6 +153,14 @@ class ConverterSpace implements RailProblem {
   id(genes: Float64Array): string {
     return recordId(this.record(genes));
   }
+}
+
+/** The numeric genes that can play a part: those of wound parts only where there is something to wind on. */
+function numericGenes(catalogue: Catalogue): readonly GeneName[] {
+  return NUMERIC_GENES.filter((name) => {
+    if (name === 'chokeTurns') return catalogue.chokeCores.length > 0;
+    return !TRANSFORMER.test(name) || catalogue.transformerCores.length > 0;
+  });
 }
 
 function familiesOf(rail: Rail): Families {
