@@ -13,7 +13,7 @@ import {
 import { createHypervolume } from '../../../optimizer/hypervolume/index.ts';
 import { createRanker } from '../../../optimizer/ranking/index.ts';
 import { type PlainDesign, plainArchive } from '../oracles/archive.ts';
-import { allRows, generator } from '../oracles/clouds.ts';
+import { allRows, generator } from '../oracles/points.ts';
 
 function gridOf(m: number, resolution: number): ArchiveGrid {
   return {

@@ -10,8 +10,8 @@ import {
   packNearMisses,
   selectNearMisses,
 } from '../../../optimizer/archive/index.ts';
-import { generator } from '../oracles/clouds.ts';
 import { dominates } from '../oracles/fronts.ts';
+import { generator } from '../oracles/points.ts';
 
 const GRID: NearMissGrid = {
   genes: 1,

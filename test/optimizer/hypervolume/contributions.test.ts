@@ -1,7 +1,8 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { createContributions, createHypervolume } from '../../../optimizer/hypervolume/index.ts';
-import { allRows, clouds, generator, sphere } from '../oracles/clouds.ts';
+import { clouds } from '../oracles/clouds.ts';
+import { allRows, generator, sphere } from '../oracles/points.ts';
 import { plainContributions } from '../oracles/volume.ts';
 
 function contributions(rows: number[][], m: number, reference: number[]): number[] {

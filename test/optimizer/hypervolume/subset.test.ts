@@ -1,7 +1,8 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { createHypervolume, selectSubset } from '../../../optimizer/hypervolume/index.ts';
-import { allRows, clouds, sphere } from '../oracles/clouds.ts';
+import { clouds } from '../oracles/clouds.ts';
+import { allRows, sphere } from '../oracles/points.ts';
 import { plainBestSubset, plainVolume } from '../oracles/volume.ts';
 
 function chosen(rows: number[][], keep: number, reference: number[]): number[][] {

@@ -1,7 +1,7 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { createHypervolume, createTruncation } from '../../../optimizer/hypervolume/index.ts';
-import { allRows, sphere, toRows } from '../oracles/clouds.ts';
+import { allRows, sphere, toRows } from '../oracles/points.ts';
 import { plainContributions } from '../oracles/volume.ts';
 
 /** Drops the least contributor, the last among equals, until `keep` remain; kept in order, then the dropped, last dropped first. */

@@ -1,7 +1,8 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { createHypervolume } from '../../../optimizer/hypervolume/index.ts';
-import { allRows, clouds, cube, sphere } from '../oracles/clouds.ts';
+import { clouds } from '../oracles/clouds.ts';
+import { allRows, cube, sphere } from '../oracles/points.ts';
 import { countedVolume, plainVolume } from '../oracles/volume.ts';
 
 function volume(points: ArrayLike<number>, m: number, reference: number[]): number {

@@ -1,7 +1,7 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { createCrowding } from '../../../optimizer/ranking/index.ts';
-import { allRows } from '../oracles/clouds.ts';
+import { allRows } from '../oracles/points.ts';
 
 function crowding(points: number[][], rows = Array.from(points.keys())): number[] {
   const distance = new Float64Array(rows.length);

@@ -1,7 +1,8 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { createRowOrder } from '../../../optimizer/ranking/order.ts';
-import { clouds, cube } from '../oracles/clouds.ts';
+import { clouds } from '../oracles/clouds.ts';
+import { cube } from '../oracles/points.ts';
 
 function sorted(points: Float64Array, m: number, column: number): number[] {
   const n = points.length / m;

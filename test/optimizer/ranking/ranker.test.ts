@@ -3,8 +3,9 @@ import { describe, expect, it } from 'vitest';
 import { createBitsetRanking } from '../../../optimizer/ranking/bitsets.ts';
 import { createDivideRanking } from '../../../optimizer/ranking/divide.ts';
 import { createRanker } from '../../../optimizer/ranking/index.ts';
-import { clouds, cube, generator, sphere } from '../oracles/clouds.ts';
+import { clouds } from '../oracles/clouds.ts';
 import { dominates, plainFronts } from '../oracles/fronts.ts';
+import { cube, generator, sphere } from '../oracles/points.ts';
 
 const OBJECTIVES = [2, 3, 4] as const;
 
