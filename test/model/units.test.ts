@@ -216,7 +216,17 @@ describe('A formula scales as its unit says', () => {
 
 /** They take or fill records and arrays: waveforms, rows, plants. */
 const RECORD_FUNCTIONS = [
-  ...['bankRipple', 'outputAt', 'besselJ', 'dowellHarmonics', 'harmonicLoss', 'triangleLoss', 'layWinding'],
+  ...[
+    'bankRipple',
+    'bankCurrents',
+    'bankTrace',
+    'outputAt',
+    'besselJ',
+    'dowellHarmonics',
+    'harmonicLoss',
+    'triangleLoss',
+    'layWinding',
+  ],
   ...['prepareInductor', 'fluxLinkage', 'currentOfLinkage', 'coreTemperatureFactor', 'materialViolation'],
   ...['effectiveParameters', 'toroidParameters', 'plantResponse', 'compensatorResponse', 'compensatorParts'],
   ...['amplifierResponse', 'designCompensator', 'loopMargin'],

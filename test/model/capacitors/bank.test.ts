@@ -2,7 +2,9 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import {
+  bankCurrents,
   bankRipple,
+  bankTrace,
   ceramicWorstFactor,
   createBank,
   createBankRipple,
@@ -122,6 +124,30 @@ describe('A bank of two groups', () => {
       const steps = [0.996, 0.998, 1.002, 1.004].map((factor) => near(edge * factor) * (edge * factor) ** 2);
       expect(Math.abs(steps[3] - steps[2] - (steps[1] - steps[0])) / steps[1]).toBeLessThan(1e-3);
     }
+  });
+});
+
+describe('The cheaper and the drawn form', () => {
+  const bank = Object.assign(createBank(), { c1: 4e-5, r1: 1e-3, l1: 1e-10, c2: 3e-4, r2: 0.02, l2: 2e-9 });
+  it('have the same currents to the bit, and a trace inside the ripple that nearly fills it', () => {
+    const currents = createBankRipple();
+    fc.assert(
+      fc.property(pulses, (w) => {
+        solve(bank, w);
+        bankCurrents(bank, w, currents);
+        expect([currents.meanSquare1, currents.meanSquare2]).toEqual([result.meanSquare1, result.meanSquare2]);
+        const { time, value } = bankTrace(bank, w, 60);
+        const drawn = Math.max(...value) - Math.min(...value);
+        expect(drawn).toBeLessThanOrEqual(result.ripple * (1 + 1e-9));
+        expect(drawn / result.ripple).toBeGreaterThan(0.999);
+        expect(time.at(-1)).toBeCloseTo(w.period, 15);
+        // Periodic: it ends where it began, but for the step of the inductances between last and first segment.
+        const step = (1e-10 * 2e-9) / 2.1e-9;
+        const slopes = [w.count - 1, 0].map((i) => (w.end[i] - w.start[i]) / w.duration[i]);
+        const jump = ((w.start[0] - w.end[w.count - 1]) * 1e-3 * 0.02) / 0.021;
+        expect(value[0] - (value.at(-1) ?? Number.NaN)).toBeCloseTo(step * (slopes[1] - slopes[0]) + jump, 6);
+      }),
+    );
   });
 });
 
