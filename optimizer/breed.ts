@@ -1,4 +1,5 @@
 /** Making children: whole first populations, and batches by operators drawn by their shares. */
+import { OPERATORS } from './island.ts';
 import { hashRow, remember } from './seen.ts';
 import { TRIES } from './settings.ts';
 import {
@@ -6,17 +7,27 @@ import {
   crossover,
   differential,
   drawOperator,
+  LINE,
   mutate,
   type Operator,
+  refineMember,
+  type Space,
   toCoordinates,
   toGenes,
 } from './variation/index.ts';
 import type { World } from './world.ts';
 
 /** Nearest members that count as neighbours. */
-const NEIGHBOURS = 8;
+const NEAREST = 8;
 
-/** The operators in the order of `OPERATORS` (island.ts). */
+/** Chance of a gene to be drawn anew when a stalled island restarts around the archive. */
+const SCATTER = 0.3;
+
+/** Places in `OPERATORS` (island.ts) of those that need more than parents drawn at random. */
+const NEIGHBOURS = OPERATORS.indexOf('neighbours');
+const REFINEMENT = OPERATORS.indexOf('refinement');
+
+/** What makes the child, in the order of `OPERATORS`, for all but refinement. */
 const MAKERS: readonly Operator[] = [crossover, differential, differential];
 
 /** Scratch of breeding. */
@@ -35,8 +46,8 @@ export function createNursery(world: World): Nursery {
   const gene = new Float64Array(world.n);
   return {
     parents: new Int32Array(3),
-    nearest: new Int32Array(NEIGHBOURS),
-    distance: new Float64Array(NEIGHBOURS),
+    nearest: new Int32Array(NEAREST),
+    distance: new Float64Array(NEAREST),
     range: new Float64Array(world.m),
     gene,
     words: new Uint32Array(gene.buffer),
@@ -58,14 +69,34 @@ export function settle(world: World, nursery: Nursery, size: number): number {
     const order = permutation(rows, random.whole);
     for (let k = 0; k < rows; k++) {
       const u = (order[k] + random.uniform()) / rows;
-      const line = space.kind[g] === 0;
-      coordinates[from + k * n + g] = line ? u : space.low[g] + Math.floor(u * (space.span[g] + 1));
+      coordinates[from + k * n + g] = anywhere(space, g, u);
     }
   }
   const drawn = coordinates.slice(from, from + rows * n);
   for (let k = 0; k < rows; k++) {
     coordinates.set(drawn.subarray(k * n, k * n + n), (world.count + made) * n);
     if (finish(world, nursery, world.count + made, familyFor(world, k))) made++;
+  }
+  return made;
+}
+
+/**
+ * Writes up to `size` new designs around the archive behind the population: members drawn at random with about a third of their genes drawn
+ * anew, at least one. Returns their number.
+ */
+export function scatter(world: World, nursery: Nursery, size: number): number {
+  const { n, space, random, coordinates } = world;
+  const members = world.archive.pack();
+  let made = 0;
+  for (let tries = 0; made < size && tries < TRIES * size; tries++) {
+    const at = (world.count + made) * n;
+    toCoordinates(space, members.genes, random.whole(members.count) * n, coordinates, at);
+    const sure = random.whole(n);
+    for (let g = 0; g < n; g++) {
+      if (g === sure || random.uniform() < SCATTER) coordinates[at + g] = anywhere(space, g, random.uniform());
+    }
+    world.maker[world.count + made] = -1;
+    if (finish(world, nursery, world.count + made, -1)) made++;
   }
   return made;
 }
@@ -80,6 +111,7 @@ export function breed(world: World, nursery: Nursery, size: number): number {
       const row = world.count + made;
       makeChild(world, nursery, row, attempt);
       if (finish(world, nursery, row, world.trial ? world.family[nursery.parents[0]] : -1)) {
+        measureStride(world, nursery.parents[0], row);
         made++;
         break;
       }
@@ -96,15 +128,26 @@ function makeChild(world: World, nursery: Nursery, row: number, attempt: number)
   const operator = drawOperator(world.shares, random.uniform());
   const { parents } = nursery;
   parents[0] = tournament(world);
-  if (operator === 2) neighbours(world, nursery);
-  else {
-    parents[1] = partner(world, parents[0]);
-    parents[2] = partner(world, parents[0]);
+  if (operator === REFINEMENT) {
+    refineMember(space, coordinates, world.stride, parents[0], coordinates, row * n, random);
+  } else {
+    if (operator === NEIGHBOURS) neighbours(world, nursery);
+    else {
+      parents[1] = partner(world, parents[0]);
+      parents[2] = partner(world, parents[0]);
+    }
+    MAKERS[operator](space, coordinates, parents, coordinates, row * n, random);
+    mutate(space, coordinates, row * n, Math.min(1, (1 + attempt) / n), random);
   }
-  MAKERS[operator](space, coordinates, parents, coordinates, row * n, random);
-  mutate(space, coordinates, row * n, Math.min(1, (1 + attempt) / n), random);
   contain(space, coordinates, parents[0], coordinates, row * n, random);
   world.maker[row] = operator;
+  world.parent[row] = parents[0];
+}
+
+/** Keeps the move that made a child. */
+function measureStride(world: World, parent: number, row: number): void {
+  const { n, coordinates, stride } = world;
+  for (let g = 0; g < n; g++) stride[row * n + g] = coordinates[row * n + g] - coordinates[parent * n + g];
 }
 
 /** Snaps the child in `coordinates` into a design; false when it was seen before. */
@@ -187,8 +230,8 @@ function neighbours(world: World, nursery: Nursery): void {
       const gap = (objectives[row * m + c] - objectives[first * m + c]) * range[c];
       d += gap * gap;
     }
-    if (held === NEIGHBOURS && !(d < distance[held - 1])) continue;
-    let k = held < NEIGHBOURS ? held++ : held - 1;
+    if (held === NEAREST && !(d < distance[held - 1])) continue;
+    let k = held < NEAREST ? held++ : held - 1;
     for (; k > 0 && distance[k - 1] > d; k--) {
       distance[k] = distance[k - 1];
       nearest[k] = nearest[k - 1];
@@ -204,6 +247,11 @@ function neighbours(world: World, nursery: Nursery): void {
   const b = random.whole(held);
   parents[1] = nearest[b];
   parents[2] = held > 1 ? nearest[(b + 1 + random.whole(held - 1)) % held] : first;
+}
+
+/** The place in the range of a gene that lies at the part u of it, 0 (inclusive) … 1 (exclusive). */
+function anywhere(space: Space, g: number, u: number): number {
+  return space.kind[g] === LINE ? u : space.low[g] + Math.floor(u * (space.span[g] + 1));
 }
 
 /** A random order of 0 … count − 1 (Fisher, Yates). */

@@ -56,6 +56,9 @@ function evaluateRow(world: World, bench: Bench, row: number): void {
   for (let k = 0; k < limits; k++) violations[row * limits + k] = bench.violations[k];
 }
 
+/** Credit of an archive entry that dominates its parent, beside 1 for any other: progress counts above spread. */
+const DOMINATING = 5;
+
 /** Largest violation that enters a mean, so that one wild value does not silence a limit. */
 const MOST = 10;
 
@@ -88,9 +91,17 @@ function showRow(world: World, row: number): void {
   const { genes, objectives, violations, archive, near, maker, limits } = world;
   if (!(world.total[row] < Number.POSITIVE_INFINITY)) return;
   const entered = archive.insert(genes, objectives, violations, row);
+  world.entries += entered;
   if (limits > 0 && entered === 0) near.insert(genes, objectives, violations, row);
   const operator = maker[row];
   if (operator < 0) return;
   world.tried[operator]++;
-  world.entered[operator] += entered;
+  if (entered === 1) world.earned[operator] += dominates(world, row, world.parent[row]) ? DOMINATING : 1;
+}
+
+function dominates(world: World, a: number, b: number): boolean {
+  const { m, objectives, total } = world;
+  if (total[a] > total[b]) return false;
+  for (let c = 0; c < m; c++) if (objectives[a * m + c] > objectives[b * m + c]) return false;
+  return true;
 }

@@ -1,7 +1,7 @@
 /** One epoch of one island, as a pure function: same island, same immigrants, same result to the bit, on any engine. */
 import type { Designs } from './archive/index.ts';
-import { breed, createNursery, type Nursery, settle } from './breed.ts';
-import type { Island } from './island.ts';
+import { breed, createNursery, type Nursery, scatter, settle } from './breed.ts';
+import { CEILINGS, type Island } from './island.ts';
 import { type Bench, createBench, judge } from './judge.ts';
 import type { Problem } from './problem.ts';
 import { NO_DESIGNS } from './ring.ts';
@@ -36,9 +36,10 @@ interface Tools {
   readonly survival: Survival;
 }
 
-/** A first population. */
+/** A first population, or one around the archive in the place of one that stalled. */
 function founders(world: World, tools: Tools, most: number): number {
-  const made = settle(world, tools.nursery, Math.min(world.keep, most));
+  const size = Math.min(world.keep, most);
+  const made = world.archive.size() > 0 ? scatter(world, tools.nursery, size) : settle(world, tools.nursery, size);
   judge(world, tools.bench, 0, made);
   survive(world, tools.survival, made);
   return made;
@@ -47,11 +48,22 @@ function founders(world: World, tools: Tools, most: number): number {
 /** One batch of children, from breeding to survival. */
 function batch(world: World, tools: Tools, size: number): number {
   const from = world.count;
+  const before = world.entries;
   const made = breed(world, tools.nursery, size);
   world.tried.fill(0);
-  world.entered.fill(0);
+  world.earned.fill(0);
   judge(world, tools.bench, from, from + made);
-  learn(world.shares, world.quality, world.tried, world.entered);
+  learn(world.shares, world.quality, world.tried, world.earned, CEILINGS);
   survive(world, tools.survival, from + made);
+  noteStall(world, before !== world.entries, size);
   return made;
+}
+
+/** Counts generations without an archive entry; a stalled island leaves its population, its archive stays. */
+function noteStall(world: World, entered: boolean, size: number): void {
+  world.stalled = entered || world.archive.size() === 0 ? 0 : world.stalled + size / world.keep;
+  if (world.stalled < STALLED_GENERATIONS || world.trial) return;
+  world.stalled = 0;
+  world.counters.restarts++;
+  world.count = 0;
 }

@@ -116,6 +116,7 @@ function copyRow(world: World, from: number, to: number): void {
   const { n, m, limits } = world;
   world.genes.copyWithin(to * n, from * n, from * n + n);
   world.coordinates.copyWithin(to * n, from * n, from * n + n);
+  world.stride.copyWithin(to * n, from * n, from * n + n);
   world.objectives.copyWithin(to * m, from * m, from * m + m);
   world.violations.copyWithin(to * limits, from * limits, from * limits + limits);
   world.total[to] = world.total[from];

@@ -48,12 +48,16 @@ export interface World {
   readonly keep: number;
   readonly genes: Float64Array;
   readonly coordinates: Float64Array;
+  /** The move, in coordinates, that made each row out of its first parent; zero where unknown. */
+  readonly stride: Float64Array;
   readonly objectives: Float64Array;
   readonly violations: Float64Array;
   /** Total normalised violation of each row; Infinity for what cannot be computed. */
   readonly total: Float64Array;
   readonly rank: Int32Array;
   readonly family: Int32Array;
+  /** Row of the first parent of each child, −1 where none. */
+  readonly parent: Int32Array;
   /** Operator that made a row. */
   readonly maker: Int32Array;
   readonly archive: Archive;
@@ -65,7 +69,7 @@ export interface World {
   readonly shares: Float64Array;
   readonly quality: Float64Array;
   readonly tried: Float64Array;
-  readonly entered: Float64Array;
+  readonly earned: Float64Array;
   readonly violationSum: Float64Array;
   readonly violationCount: Float64Array;
   readonly record: {
@@ -81,6 +85,8 @@ export interface World {
     duplicates: number;
     restarts: number;
   };
+  /** Archive entries in this epoch. */
+  entries: number;
   /** Members of the population. */
   count: number;
   /** True while each family is searched by itself. */
@@ -135,11 +141,13 @@ export function openWorld(problem: Problem, island: Island, guests: number, watc
     keep,
     genes: new Float64Array(capacity * n),
     coordinates: new Float64Array(capacity * n),
+    stride: new Float64Array(capacity * n),
     objectives: new Float64Array(capacity * m),
     violations: new Float64Array(capacity * limits),
     total: new Float64Array(capacity),
     rank: new Int32Array(capacity),
     family: new Int32Array(capacity),
+    parent: new Int32Array(capacity).fill(-1),
     maker: new Int32Array(capacity).fill(-1),
     archive: unpackArchive(archiveGrid(problem), island.archive),
     near,
@@ -150,7 +158,7 @@ export function openWorld(problem: Problem, island: Island, guests: number, watc
     shares: island.shares.slice(),
     quality: island.quality.slice(),
     tried: new Float64Array(island.shares.length),
-    entered: new Float64Array(island.shares.length),
+    earned: new Float64Array(island.shares.length),
     violationSum: island.violationSum.slice(),
     violationCount: island.violationCount.slice(),
     record: {
@@ -160,6 +168,7 @@ export function openWorld(problem: Problem, island: Island, guests: number, watc
       violated: island.record.violated.slice(),
     },
     counters: { ...island.counters },
+    entries: 0,
     count: 0,
     trial,
     relaxation: island.relaxation,

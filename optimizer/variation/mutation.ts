@@ -13,7 +13,8 @@ export function mutate(space: Space, child: Float64Array, at: number, rate: numb
   const { n, kind } = space;
   for (let g = 0; g < n; g++) {
     if (random.uniform() >= rate || !(space.span[g] > 0)) continue;
-    if (kind[g] === LINE) child[at + g] = random.uniform() < FAR ? random.uniform() : polynomial(child[at + g], random.uniform());
+    if (kind[g] === LINE)
+      child[at + g] = random.uniform() < FAR ? random.uniform() : polynomial(child[at + g], random.uniform());
     else if (kind[g] === CHOICE) child[at + g] = otherOption(space, g, child[at + g], random);
     else child[at + g] += geometricStep(space.span[g], random);
   }

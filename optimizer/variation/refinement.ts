@@ -1,0 +1,62 @@
+/**
+ * Local refinement of a member: along the line that led to it, further (the pattern move of Hooke, Jeeves 1961, "Direct search"), or, where no such line is
+ * known, one gene by a small step. Meant for the member's own direction of compromise, which the archive then judges.
+ */
+import { exp } from '../maths/index.ts';
+import type { Random } from '../random.ts';
+import { CHOICE, LINE, type Space } from './space.ts';
+
+/** Smallest and largest exponent of ten of a step along a line, as parts of its range. */
+const FINEST = -4;
+const COARSEST = -1;
+
+/**
+ * Writes to `child[at …]` the member at `pool[member · n …]` moved on along `stride[member · n …]` by 0.5 … 2 of its length, or with one gene
+ * stepped when the stride is all zero or one time in two.
+ */
+export function refineMember(
+  space: Space,
+  pool: Float64Array,
+  stride: Float64Array,
+  member: number,
+  child: Float64Array,
+  at: number,
+  random: Random,
+): void {
+  const { n, kind } = space;
+  const from = member * n;
+  for (let g = 0; g < n; g++) child[at + g] = pool[from + g];
+  if (random.uniform() < 0.5 && follow(space, stride, from, child, at, random)) return;
+  const g = random.whole(n);
+  if (kind[g] === LINE) child[at + g] += lineStep(random);
+  else if (kind[g] === CHOICE) child[at + g] = space.low[g] + random.whole(space.span[g] + 1);
+  else child[at + g] += random.uniform() < 0.5 ? -1 : 1;
+}
+
+/** Moves on along the stride; false when there is none. */
+function follow(
+  space: Space,
+  stride: Float64Array,
+  from: number,
+  child: Float64Array,
+  at: number,
+  random: Random,
+): boolean {
+  const { n, kind } = space;
+  const length = 0.5 + 1.5 * random.uniform();
+  let moved = false;
+  for (let g = 0; g < n; g++) {
+    const step = stride[from + g];
+    if (step === 0 || kind[g] === CHOICE) continue;
+    child[at + g] += kind[g] === LINE ? length * step : Math.round(length * step);
+    moved = true;
+  }
+  return moved;
+}
+
+/** A step of either sign whose size is spread evenly over the decades. */
+function lineStep(random: Random): number {
+  const decades = FINEST + (COARSEST - FINEST) * random.uniform();
+  const size = exp(decades * Math.LN10);
+  return random.uniform() < 0.5 ? -size : size;
+}
