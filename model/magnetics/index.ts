@@ -51,6 +51,13 @@ export {
   windingResistance,
 } from './stocked.ts';
 export { triangleLoss } from './triangle-loss.ts';
+export {
+  createWindingAtFrequency,
+  prepareWinding,
+  WINDING_HARMONICS,
+  type WindingAtFrequency,
+  windingLossAt,
+} from './winding-frequency.ts';
 export { createWinding, gapKeepOut, layWinding, type Winding, windowFill } from './winding-layout.ts';
 export {
   effectiveResistanceFactor,
@@ -60,4 +67,5 @@ export {
   WINDING_BOUND,
 } from './winding-loss.ts';
 export { gaugeDiameter, litzLoss, roundArea } from './wire.ts';
+export { type MaterialConstants, materialConstants, woundCoreLossAt } from './wound-core.ts';
 export { copperMass, coreTemperatureFactor, hotSpotRise, materialViolation, woundCost } from './wound-part.ts';

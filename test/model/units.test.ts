@@ -228,6 +228,7 @@ const RECORD_FUNCTIONS = [
     'layWinding',
   ],
   ...['prepareInductor', 'fluxLinkage', 'currentOfLinkage', 'coreTemperatureFactor', 'materialViolation'],
+  ...['prepareWinding', 'materialConstants'],
   ...['effectiveParameters', 'toroidParameters', 'plantResponse', 'compensatorResponse', 'compensatorParts'],
   ...['amplifierResponse', 'designCompensator', 'loopMargin'],
 ];
