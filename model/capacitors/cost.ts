@@ -1,7 +1,7 @@
 /** Published cost models of large capacitors: a check on the prices of invented parts. */
 
 /**
- * Electrolytic capacitor, EUR: b·Vr + c·C·Vr², b = 1.437e-3 EUR/V, c = 24.757e-3 EUR/(F·V²) (the transcription's exponent does not
+ * Electrolytic capacitor, EUR: b·Vr + c·C·Vr², b = 1.437e-3 EUR/V, c = 24.757e-3 EUR/(F·V²) (the exponent in public copies does not
  * fit its dimensions; this one does). `capacitance` F, `ratedVoltage` V.
  * @source burkart-kolar-2013, electrolytic capacitors
  * @valid 200 V to 500 V, high volume, prices of 2013

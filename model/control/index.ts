@@ -1,16 +1,12 @@
 /** Control room: load step, crossover, compensator, input filter. */
 export {
-  amplifierResponse,
   type Compensator,
-  type CompensatorParts,
-  compensatorParts,
   compensatorResponse,
   designCompensator,
-  type LoopMargin,
   type LoopPlant,
-  loopMargin,
   plantResponse,
 } from './compensator.ts';
+export { amplifierResponse, type CompensatorParts, compensatorParts } from './compensator-parts.ts';
 export {
   dampedPeak,
   dampingResistance,
@@ -27,3 +23,4 @@ export {
   slewedExcursion,
   stepExcursion,
 } from './load-step.ts';
+export { type LoopMargin, loopMargin } from './loop-margin.ts';

@@ -51,7 +51,7 @@ const banks = BANKS.flatMap(({ name, solve: run, values }) => [
 
 const COST: Common = {
   source: 'burkart-kolar-2013',
-  place: 'coefficients in public transcriptions',
+  place: 'coefficients as public code that cites the paper has them',
   unit: 'EUR',
   mark: 'computed',
   tolerance: 3e-5,

@@ -1,5 +1,5 @@
 /** Control room: slewed load steps, compensator, input filter. */
-import { compensatorParts, designCompensator, loopMargin, plantResponse } from '../../model/control/compensator.ts';
+import { compensatorParts, designCompensator, loopMargin, plantResponse } from '../../model/control/index.ts';
 import { dampedPeak, dampingResistance, filterCorner, filterImpedanceLimit } from '../../model/control/input-filter.ts';
 import { crossoverLimit, rightHalfPlaneZero, slewedExcursion } from '../../model/control/load-step.ts';
 import { type CaseGroup, type Common, make } from './case.ts';
