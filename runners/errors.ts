@@ -125,6 +125,7 @@ export function refusal(code: ErrorCode, values: Readonly<Record<string, string 
 
 /** The code that Node or the system gave to an error, such as `ENOENT`; empty where it gave none. */
 export function systemCode(error: unknown): string {
+  if (error instanceof Refusal) return '';
   return error instanceof Error && 'code' in error && typeof error.code === 'string' ? error.code : '';
 }
 

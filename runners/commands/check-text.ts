@@ -6,6 +6,9 @@ import { sayPainted } from '../terminal/output.ts';
 import { table } from '../terminal/table.ts';
 import { plain } from '../terminal/text.ts';
 
+/** Facts are short sentences and are never cut. */
+const FACT_WIDTH = 200;
+
 /** Prints the explanation. */
 export function showExplanation(rail: Rail, explanation: RailExplanation): void {
   const paint = painter(process.stdout);
@@ -16,6 +19,7 @@ export function showExplanation(rail: Rail, explanation: RailExplanation): void 
     ...table(
       [{ head: '' }, { head: '' }],
       facts.map((fact) => [fact.name, fact.text]),
+      FACT_WIDTH,
     ),
     '',
     'Architectures',

@@ -13,7 +13,7 @@ export function plainReporter(write: Write): Reporter {
   let next = 0;
   return {
     show(progress: Progress): void {
-      if (progress.seconds < next) return;
+      if (progress.seconds < next || progress.evaluations === 0) return;
       next = progress.seconds + (progress.seconds < 5 * LATER ? OFTEN : LATER);
       write(`${plainLine(progress)}\n`);
     },

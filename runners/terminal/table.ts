@@ -9,10 +9,14 @@ export interface Column {
 
 const WIDEST = 48;
 
-/** The table as lines, each indented by two spaces; cells are made harmless and cut to a readable width. */
-export function table(columns: readonly Column[], rows: readonly (readonly string[])[]): string[] {
+/** The table as lines, each indented by two spaces; cells are made harmless and cut to `widest` characters. */
+export function table(
+  columns: readonly Column[],
+  rows: readonly (readonly string[])[],
+  widest: number = WIDEST,
+): string[] {
   const all = [columns.map((column) => column.head), ...rows.map((row) => columns.map((_, i) => row[i] ?? ''))];
-  const cells = all.map((row) => row.map((cell) => short(cell, WIDEST)));
+  const cells = all.map((row) => row.map((cell) => short(cell, widest)));
   const widths = columns.map((_, i) => Math.max(...cells.map((row) => widthOf(row[i] ?? ''))));
   const headless = columns.every((column) => column.head === '');
   return (headless ? cells.slice(1) : cells).map((row) => `  ${line(columns, row, widths)}`.trimEnd());
