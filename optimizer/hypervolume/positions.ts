@@ -3,8 +3,10 @@
  * Sweeps keep their staircase in it, by position in a presorted order: no balancing, no allocation, no bad case.
  */
 
+import { highestBit, lowestBit } from '../ranking/word-bits.ts';
+
 /** Most positions a set can hold: four levels of 32. */
-export const MOST_POSITIONS = 32 ** 4;
+export const MOST_POSITIONS = 1 << 20;
 
 /** Set of positions 0 … capacity − 1. `before` and `after` ask for a neighbour that must exist: sweeps put a guard at each end. */
 export class PositionSet {
@@ -61,16 +63,16 @@ export class PositionSet {
         let region = group >> 5;
         bits = this.regions[region] & ((1 << (group & 31)) - 1);
         if (bits === 0) {
-          region = 31 - Math.clz32(this.root & ((1 << region) - 1));
+          region = highestBit(this.root & ((1 << region) - 1));
           bits = this.regions[region];
         }
-        group = (region << 5) | (31 - Math.clz32(bits));
+        group = (region << 5) | highestBit(bits);
         bits = this.groups[group];
       }
-      word = (group << 5) | (31 - Math.clz32(bits));
+      word = (group << 5) | highestBit(bits);
       bits = this.words[word];
     }
-    return (word << 5) | (31 - Math.clz32(bits));
+    return (word << 5) | highestBit(bits);
   }
 
   /** Smallest member above `position`. */
@@ -85,15 +87,15 @@ export class PositionSet {
         bits = this.regions[region] & (-2 << (group & 31));
         if (bits === 0) {
           const later = this.root & (-2 << region);
-          region = 31 - Math.clz32(later & -later);
+          region = lowestBit(later);
           bits = this.regions[region];
         }
-        group = (region << 5) | (31 - Math.clz32(bits & -bits));
+        group = (region << 5) | lowestBit(bits);
         bits = this.groups[group];
       }
-      word = (group << 5) | (31 - Math.clz32(bits & -bits));
+      word = (group << 5) | lowestBit(bits);
       bits = this.words[word];
     }
-    return (word << 5) | (31 - Math.clz32(bits & -bits));
+    return (word << 5) | lowestBit(bits);
   }
 }

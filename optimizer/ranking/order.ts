@@ -7,6 +7,8 @@
  * evenly, O(N log N) for any.
  */
 
+import { highestBit } from './word-bits.ts';
+
 /** Sorts row numbers; owns its scratch. */
 export interface RowOrder {
   /**
@@ -54,7 +56,7 @@ function encode(points: Float64Array, m: number, column: number, n: number, code
     if (value < least) least = value;
     else if (value > most) most = value;
   }
-  const half = Math.min(11, Math.max(5, 30 - Math.clz32(n)));
+  const half = Math.min(11, Math.max(5, highestBit(n) - 1));
   const scale = ((1 << (2 * half)) - 1) / (most - least);
   if (!(scale > 0 && scale < 1e300)) return 0;
   for (let i = 0, at = column; i < n; i++, at += m) codes[i] = ((points[at] - least) * scale) | 0;
