@@ -3,7 +3,7 @@ import type { Reporter } from '../progress/figures.ts';
 import type { Budget } from './budget.ts';
 import { lastGain } from './history.ts';
 import type { Measure } from './measure.ts';
-import { type IslandState, islandsOf, type Ring, sumTallies } from './ring.ts';
+import { type IslandState, islandsOf, latestEvaluations, type Ring, sumTallies } from './ring.ts';
 import { meanShare } from './shares.ts';
 
 /** What the meter needs to know. */
@@ -50,7 +50,8 @@ function createReading(setup: MeterSetup): (seconds: number) => Parameters<Repor
   const marks: { seconds: number; evaluations: number }[] = [];
   const measure = sparing(setup);
   return (seconds) => {
-    const { evaluations, feasible } = sumTallies(setup.rings);
+    const { evaluations: counted, feasible } = sumTallies(setup.rings);
+    const evaluations = latestEvaluations(setup.rings);
     const share = meanShare(setup.budget, setup.shards, setup.rings, seconds);
     const { frontSize, hypervolume, best } = measure();
     const saved = setup.lastSave();
@@ -58,7 +59,7 @@ function createReading(setup: MeterSetup): (seconds: number) => Parameters<Repor
       share,
       evaluations,
       perSecond: speed(marks, seconds, evaluations),
-      feasible: evaluations === 0 ? 0 : feasible / evaluations,
+      feasible: counted === 0 ? 0 : feasible / counted,
       frontSize,
       hypervolume,
       trend: setup.rings[0] && lastGain(setup.rings[0].history),

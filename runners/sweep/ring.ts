@@ -128,6 +128,12 @@ export function settledFaults(ring: Ring): Fault[] {
   return ring.faults.filter((fault) => fault.epoch <= ring.epoch);
 }
 
+/** Designs evaluated by rings so far, with epochs that the whole ring has not completed yet. */
+export function latestEvaluations(rings: readonly Ring[]): number {
+  const slots = rings.flatMap((ring) => ring.slots);
+  return slots.reduce((sum, slot) => sum + (slot.states.get(slot.epoch)?.evaluations ?? 0), 0);
+}
+
 /** The tallies of several rings, added up. */
 export function sumTallies(rings: readonly Ring[]): { evaluations: number; feasible: number } {
   const tallies = rings.map(tallyOf);

@@ -19,7 +19,7 @@ import { createSaver, type Moment, maySaveLater, type Saver } from './saving.ts'
 import { createSearch, planRing, type Search, type SearchSettings, type Survey } from './search.ts';
 import { meanShare } from './shares.ts';
 import type { StopRequest } from './stop.ts';
-import { type Ending, startSweep } from './sweep.ts';
+import { type CheckpointRule, type Ending, startSweep } from './sweep.ts';
 
 /** What is fixed about a run from its start, as `run.json` says it. */
 export type RunIdentity = Pick<
@@ -40,7 +40,7 @@ export interface RunPlan {
   engine(): Engine;
   readonly reporter: Reporter;
   readonly stop: StopRequest;
-  readonly checkpointSeconds: number;
+  readonly checkpoints: CheckpointRule;
   /** Text for the best value of each objective. */
   describeBest(values: readonly number[]): readonly string[];
   /** Writes the snapshot of the inputs; called when a run starts. */
@@ -116,7 +116,7 @@ async function carryOut(plan: RunPlan, search: Search, begun: Begun, saver: Save
     const status = reason === 'interval' ? 'running' : rings.every((ring) => ring.done) ? 'done' : 'stopped';
     saver.save(momentOf(plan, search, begun, status, seconds()));
   };
-  const { budget, reporter, describeBest, problem, checkpointSeconds } = plan;
+  const { budget, reporter, describeBest, problem, checkpoints } = plan;
   const { shards } = plan.identity;
   const { measure, neighbours, tally } = search;
   const meter = createMeter({ rings, reporter, budget, shards, measure, describeBest, lastSave: () => saver.last });
@@ -126,7 +126,7 @@ async function carryOut(plan: RunPlan, search: Search, begun: Begun, saver: Save
       rings,
       budget,
       shards,
-      checkpointSeconds,
+      checkpoints,
       neighbours,
       tally,
       measure,

@@ -58,7 +58,7 @@ export function maySaveLater(error: unknown): boolean {
 
 function explainFailure(folder: string, error: unknown): unknown {
   const code = systemCode(error);
-  if (!existsSync(folder)) return refusal('folder-vanished', { folder });
+  if (code === 'ENOENT' || !existsSync(folder)) return refusal('folder-vanished', { folder });
   const command = `chopfront sweep --out ${folder} --resume`;
   const values = { folder, command, reason: reasonOf(error), checkpoint: newest(folder) };
   if (code === 'ENOSPC' || code === 'EDQUOT') return refusal('disk-full', values);

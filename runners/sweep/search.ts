@@ -118,7 +118,7 @@ function trustOf(problem: Problem, islands: readonly Island[], whole: number): S
   const own = islands.map((island) => (island.archive.count === 0 ? 0 : hypervolumeOf(problem, island.archive)));
   const shares = OPERATORS.map((name, i) => [name, sum((island) => island.shares[i] ?? 0) / islands.length]);
   return {
-    agreement: own.map((hypervolume) => (whole > 0 ? hypervolume / whole : 0)),
+    agreement: own.map((hypervolume) => (whole > 0 ? Math.min(1, hypervolume / whole) : 0)),
     operatorShares: Object.fromEntries(shares),
     duplicates: sum((island) => island.counters.duplicates),
     restarts: sum((island) => island.counters.restarts),

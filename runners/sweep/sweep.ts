@@ -40,14 +40,21 @@ export interface SweepSetup {
   readonly secondsBefore: number;
   /** Called when a checkpoint is due and at the end; throws where it cannot save. */
   save(reason: 'interval' | 'end'): void;
-  /** Seconds from one checkpoint to the next, at least. */
-  readonly checkpointSeconds: number;
+  readonly checkpoints: CheckpointRule;
   /** Told of every fault as it happens. */
   onFault(fault: Fault): void;
   /** Resolves when the sweep shall stop. */
   readonly stop: Promise<void>;
   /** Seconds that running epochs get to finish after a stop. */
   readonly graceSeconds: number;
+}
+
+/** How often a sweep is saved. */
+export interface CheckpointRule {
+  /** Seconds from one checkpoint to the next, at least. */
+  readonly seconds: number;
+  /** Largest share of the time that checkpoints may take, above 0 … 1. */
+  readonly share: number;
 }
 
 /** How a sweep ended. */
@@ -64,9 +71,6 @@ export interface Sweep {
 /** An epoch is tried this often before its island is given up. */
 export const TRIES = 3;
 
-/** Checkpoints may take this share of the time. */
-const CHECKPOINT_SHARE = 0.005;
-
 /** Starts a sweep. */
 export function startSweep(setup: SweepSetup): Sweep {
   const started = performance.now();
@@ -76,7 +80,7 @@ export function startSweep(setup: SweepSetup): Sweep {
 
 async function run(setup: SweepSetup, seconds: () => number): Promise<Ending> {
   const running = new Set<Promise<void>>();
-  const state = { stopped: false, nextSave: seconds() + setup.checkpointSeconds, failure: undefined as unknown };
+  const state = { stopped: false, nextSave: seconds() + setup.checkpoints.seconds, failure: undefined as unknown };
   const stop = setup.stop.then(() => {
     state.stopped = true;
   });
@@ -102,7 +106,7 @@ function saveTimed(setup: SweepSetup, state: State, seconds: () => number): void
   const before = seconds();
   setup.save('interval');
   const cost = seconds() - before;
-  state.nextSave = seconds() + Math.max(setup.checkpointSeconds, cost / CHECKPOINT_SHARE);
+  state.nextSave = seconds() + Math.max(setup.checkpoints.seconds, cost / setup.checkpoints.share);
 }
 
 function dispatch(setup: SweepSetup, running: Set<Promise<void>>, state: State, seconds: () => number): void {

@@ -64,7 +64,7 @@ async function sweepToy({ folder, source = {}, threads, ...rest }: ToyOrder): Pr
     engine: () => (threads === 0 ? inlineEngine(problem) : pool(source, threads, rest.epochLimit ?? 60)),
     reporter: jsonReporter((text) => process.stderr.write(text)),
     stop,
-    checkpointSeconds: rest.checkpoint ?? 0.05,
+    checkpoints: { seconds: rest.checkpoint ?? 0.05, share: 1 },
     describeBest: (values) => values.map(String),
     snapshot: () => writeFileSync(join(folder, 'rail.yaml'), 'toy\n'),
     refresh: () => {},
