@@ -12,6 +12,7 @@ import {
   deadTimeEnergy,
   diodeChargeEnergy,
   hardEdgeEnergy,
+  loopEnergy,
   OUTPUT_CHARGE,
   OUTPUT_ENERGY,
   outputAt,
@@ -20,6 +21,9 @@ import {
   swingFraction,
   transitionTime,
 } from './switches/index.ts';
+
+/** Inductance of the loop through input capacitor and both switches, H: a tight layout (common practice, no source). */
+export const LOOP_INDUCTANCE = 1e-9;
 
 const highOutput = new Float64Array(2);
 const lowOutput = new Float64Array(2);
@@ -74,6 +78,8 @@ function addSwitchEdges(design: Design, state: StageState, ledger: Float64Array)
   edgeEnergy(high, design.highParallel, highOutput, low, design.lowParallel, lowOutput, state.inputVoltage, toLow);
   ledger[SLOT['lowSwitch.outputCharge']] += cycles * partial[0];
 
+  ledger[SLOT['highSwitch.loop']] += cycles * loopEnergy(LOOP_INDUCTANCE, Math.max(0, b));
+  ledger[SLOT['lowSwitch.loop']] += cycles * loopEnergy(LOOP_INDUCTANCE, Math.max(0, -a));
   addGap(ledger, cycles, design, a, a > 0, nodeCharge);
   addGap(ledger, cycles, design, b, b < 0, nodeCharge);
   addGates(ledger, cycles, design, state, toHigh, toLow);
@@ -183,6 +189,7 @@ function addDiodeEdges(design: Design, state: StageState, ledger: Float64Array):
     cycles *
     (design.highParallel * highOutput[OUTPUT_ENERGY] +
       diodeChargeEnergy(diode.junctionCharge, diode.chargeVoltage, volts));
+  ledger[SLOT['highSwitch.loop']] += cycles * loopEnergy(LOOP_INDUCTANCE, Math.max(0, state.peakCurrent));
   ledger[SLOT['highSwitch.recovery']] +=
     cycles * volts * recoveryCharge(diode.recoveryCharge, diode.recoveryCurrent, false, 0, a);
   addGates(ledger, cycles, design, state, 0, 0);

@@ -181,6 +181,8 @@ function addSink(e: Evaluator): void {
   if (!(e.sink > 0)) return;
   const volume = sinkVolume(1 / e.sink, e.rail.airSpeed);
   e.assembly.volume += volume;
+  // The sink covers the board that the sheet gives to cooling.
+  e.assembly.height = Math.max(e.assembly.height, volume / e.rail.coolingArea);
   e.assembly.mass += sinkMass(volume);
   e.assembly.cost += sinkCost(volume);
 }

@@ -22,8 +22,13 @@ export function overlapOn(row: Switch, dice: number, controller: Controller, vol
 /** Energy of one turn-off overlap, J; see `overlapOn`. */
 export function overlapOff(row: Switch, dice: number, controller: Controller, volts: number, current: number): number {
   if (current <= 0) return 0;
+  return overlapEnergy(volts, current, turnOffTime(row, dice, controller, current));
+}
+
+/** Time of the turn-off edge of `dice` in parallel at `current` (A), s. */
+export function turnOffTime(row: Switch, dice: number, controller: Controller, current: number): number {
   const resistance = sharedGateResistance(controller.driverSinkResistance, row.gateResistance, dice);
-  const time = edgeTime(
+  return edgeTime(
     dice * row.gateChargeSwitch,
     dice * row.gateDrainCharge,
     row.plateauVoltage,
@@ -31,7 +36,6 @@ export function overlapOff(row: Switch, dice: number, controller: Controller, vo
     row.commonSourceInductance / dice,
     current,
   );
-  return overlapEnergy(volts, current, time);
 }
 
 /** Drive above the plateau, V; at least a tenth of a volt, so that a controller that cannot drive a row stays finite. */

@@ -30,6 +30,8 @@ export class HeatBalance {
   /** Loss that heats the board alone, W, and its slope with board temperature, W/K. */
   boardConstant = 0.5;
   boardSlope = 0.5;
+  /** Highest board temperature that the board and what stands on it without a hot spot of its own allow, K. */
+  boardAllowed = 300.5;
   /** K. */
   ambient = 300.5;
   /** Board and sink to ambient, W/K. */
@@ -51,7 +53,7 @@ export function solveHeat(h: HeatBalance): void {
   let constant = h.boardConstant;
   let slope = h.boardSlope;
   let runaway = 0;
-  let boardAllowed = BOARD_MAXIMUM;
+  let { boardAllowed } = h;
   let toAir = 0;
   for (let i = 0; i < HOT_PARTS; i++) {
     const gain = h.resistance[i] * h.slope[i];
@@ -59,7 +61,7 @@ export function solveHeat(h: HeatBalance): void {
     const rest = left(gain);
     if (h.toAir[i] === 1) {
       const watts = (h.constant[i] + h.slope[i] * h.ambient) / rest;
-      h.temperature[i] = h.ambient + h.resistance[i] * watts;
+      h.temperature[i] = warm(h, h.ambient + h.resistance[i] * watts);
       toAir += watts;
       continue;
     }
@@ -71,14 +73,19 @@ export function solveHeat(h: HeatBalance): void {
   const gain = slope / h.conductance;
   if (gain > runaway) runaway = gain;
   h.runaway = runaway;
-  h.boardTemperature = (h.ambient + constant / h.conductance) / left(gain);
+  h.boardTemperature = warm(h, (h.ambient + constant / h.conductance) / left(gain));
   h.total = constant + slope * h.boardTemperature + toAir;
   for (let i = 0; i < HOT_PARTS; i++) {
     if (h.toAir[i] === 1) continue;
     const watts = (h.constant[i] + h.slope[i] * h.boardTemperature) / left(h.resistance[i] * h.slope[i]);
-    h.temperature[i] = h.boardTemperature + h.resistance[i] * watts;
+    h.temperature[i] = warm(h, h.boardTemperature + h.resistance[i] * watts);
   }
   h.sinkNeeded = sinkFor(h, constant, slope, boardAllowed);
+}
+
+/** A temperature that no straight line through a far point can take below ambient. */
+function warm(h: HeatBalance, temperature: number): number {
+  return Math.max(h.ambient, temperature);
 }
 
 /** What a heating loop of gain `gain` leaves of one: never so little that figures become infinite. */

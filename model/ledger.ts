@@ -18,6 +18,7 @@ export const LOSS_SLOTS = [
   ['lowSwitch', 'recovery'],
   ['lowSwitch', 'deadTime'],
   ['lowSwitch', 'gate'],
+  ['lowSwitch', 'loop'],
   ['diode', 'conduction'],
   ['diode', 'leakage'],
   ['inductor', 'winding'],

@@ -6,7 +6,7 @@ import { powAt } from '../optimizer/maths/index.ts';
 import { type BankRipple, bankCurrents, bankRipple, createBankRipple } from './capacitors/index.ts';
 import type { Design } from './design.ts';
 import type { Flavour } from './flavour.ts';
-import { HeatBalance, HOT, solveHeat } from './heat-balance.ts';
+import { BOARD_MAXIMUM, HeatBalance, HOT, solveHeat } from './heat-balance.ts';
 import { LOSS_SLOTS, SLOT, sumSlots } from './ledger.ts';
 import {
   COPPER_TEMPCO,
@@ -15,6 +15,7 @@ import {
   stockedCoreLossAt,
   triangleLoss,
 } from './magnetics/index.ts';
+import type { Bulk } from './parts/bulk.ts';
 import type { PlannedPoint } from './plan.ts';
 import type { Rail } from './rail/rail.ts';
 import { StageState } from './stages/state.ts';
@@ -32,6 +33,8 @@ const WARM_ROUNDS = 1;
 const FIRST_RISE = 30;
 /** Temperature beyond which resistances are not followed, K: such a design has failed its limits long before. */
 const HOTTEST = 523.15;
+/** The same for the leakage of a diode, which grows without bound, K. */
+const HOTTEST_DIODE = 448.15;
 /** Resistance of the board copper in one phase's path at 20 °C, Ω: one square of 70 µm copper, 1.7241e-8 Ω·m / 70 µm. */
 const BOARD_SQUARE = 2.463e-4;
 /** Temperature coefficient of copper taken at 25 °C, where inductor rows state their resistance, 1/K. */
@@ -301,6 +304,10 @@ function balance(solver: PointSolver, design: Design): void {
   resistive(heat, HOT.transformer, transformerWatts(state, design), WINDING_TEMPCO);
   heat.constant[HOT.transformer] += ledger[SLOT['transformer.core']];
   const copper = copperWatts(state);
+  heat.boardAllowed = Math.min(
+    bulkAllowance(solver, design.outputBulk, design.outputBulkCount, solver.outputRipple.meanSquare2),
+    bulkAllowance(solver, design.inputBulk, design.inputBulkCount, solver.inputRipple.meanSquare2),
+  );
   heat.boardSlope = copper * COPPER_TEMPCO;
   heat.boardConstant =
     copper * (1 - COPPER_TEMPCO * 293.15) + sumSlots(ledger, SLOT['outputCeramic.seriesResistance'], ledger.length);
@@ -310,6 +317,13 @@ function balance(solver: PointSolver, design: Design): void {
   state.inductorTemperature = Math.min(HOTTEST, heat.temperature[HOT.inductor]);
   state.transformerTemperature = Math.min(HOTTEST, heat.temperature[HOT.transformer]);
   state.boardTemperature = Math.min(HOTTEST, heat.boardTemperature);
+}
+
+/** Board temperature that a bulk capacitor allows after its own heating, K; the board's own limit without one. */
+function bulkAllowance(solver: PointSolver, bulk: Bulk | undefined, count: number, square: number): number {
+  if (bulk === undefined) return BOARD_MAXIMUM;
+  const rise = (bulk.ratedRise * square) / (count * count * bulk.rippleRating * bulk.rippleRating);
+  return Math.min(BOARD_MAXIMUM, bulk.maximumTemperature - solver.rail.derating.temperature - rise);
 }
 
 /** Conduction loss of the high position at the reference temperature, with tolerance, all phases, W. */
@@ -359,11 +373,9 @@ function diodeHeat(solver: PointSolver, design: Design): void {
   const { diode } = design;
   if (diode === undefined) return;
   const n = state.activePhases;
-  const t = state.lowTemperature;
+  const t = Math.min(state.lowTemperature, HOTTEST_DIODE);
   const forward = n * (design.diodeDrop(t) * state.lowMean + diode.slopeResistance * state.lowMeanSquare);
-  const leakage =
-    n *
-    diodeLeakageLoss(state.inputVoltage, diode.leakage, diode.leakageDoubling, state.highShare, Math.min(t, 473.15));
+  const leakage = n * diodeLeakageLoss(state.inputVoltage, diode.leakage, diode.leakageDoubling, state.highShare, t);
   ledger[SLOT['diode.conduction']] = forward;
   ledger[SLOT['diode.leakage']] = leakage;
   const slope = n * diode.dropTempco * state.lowMean + (leakage * Math.LN2) / diode.leakageDoubling;

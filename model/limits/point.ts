@@ -1,12 +1,15 @@
 /** Limits that depend on the operating point: ripple, load step, heat, saturation, on-time, capacitor current. */
 import { createBank } from '../capacitors/index.ts';
 import type { Design } from '../design.ts';
+import { LOOP_INDUCTANCE } from '../edges.ts';
 import type { Evaluator } from '../evaluate.ts';
+import { turnOffTime } from '../gate-drive.ts';
 import { BOARD_MAXIMUM, HOT } from '../heat-balance.ts';
 import type { Bulk } from '../parts/bulk.ts';
 import type { PlannedPoint } from '../plan.ts';
 import { MODE, type StageState } from '../stages/state.ts';
 import { stepExcursionOf } from '../step-response.ts';
+import { overshoot } from '../switches/index.ts';
 import { judgeMagnetics } from './magnetics.ts';
 
 /** Largest loop gain of heating that is still accepted; at 1 the temperature has no end. */
@@ -19,6 +22,7 @@ const stepCase = { inputVoltage: 0.5, outputVoltage: 0.5, inductance: 0.5, bank:
 export function judgePoint(e: Evaluator, planned: PlannedPoint, index: number): void {
   judgeHeat(e, index);
   judgeCurrents(e, index);
+  judgeOvershoot(e, planned, index);
   judgeTimes(e, index);
   judgeRippleAt(e, index);
   judgeCapacitors(e, index);
@@ -69,6 +73,22 @@ function judgeCurrents(e: Evaluator, index: number): void {
   } else {
     book.judge(places.switchCurrent, e.solver.state.lowMean, diode.currentRating, diode.currentRating, index);
   }
+}
+
+/**
+ * The high switch's voltage with the ringing of its loop against the whole rating. A step of current I rings to I·√(L/C); an
+ * edge of length t cannot ring beyond 2·L·I/t, twice its inductive drop: the smaller holds.
+ */
+function judgeOvershoot(e: Evaluator, planned: PlannedPoint, index: number): void {
+  const { design, book, places } = e;
+  const { state } = e.solver;
+  if (design.stage.form !== undefined || !(state.peakCurrent > 0)) return;
+  const { high, highParallel, controller } = design;
+  const capacitance = (highParallel * high.outputCharge) / high.outputTestVoltage;
+  const time = turnOffTime(high, highParallel, controller, state.peakCurrent);
+  const ramp = (2 * LOOP_INDUCTANCE * state.peakCurrent) / time;
+  const rise = Math.min(overshoot(state.peakCurrent, LOOP_INDUCTANCE, capacitance), ramp);
+  book.judge(places.highVoltage, planned.inputVoltage + rise, high.voltageRating, high.voltageRating, index);
 }
 
 function judgeTimes(e: Evaluator, index: number): void {

@@ -79,6 +79,13 @@ function solveForward(design: Design, state: StageState, current: number): void 
 function forwardVoltages(state: StageState, drop: number, current: number): void {
   steady.rise = state.inputVoltage - state.outputVoltage - current * (state.highResistance + state.pathResistance);
   steady.fall = state.outputVoltage + drop + current * (state.lowResistance + state.pathResistance);
+  keepDriving(state);
+}
+
+/** Where drops eat the whole drive no duty serves: a duty of one and the limits it breaks tell, not a negative voltage. */
+function keepDriving(state: StageState): void {
+  const least = 1e-6 * state.inputVoltage;
+  if (!(steady.rise > least)) steady.rise = least;
 }
 
 function solveReverse(design: Design, state: StageState, current: number): void {
@@ -87,6 +94,7 @@ function solveReverse(design: Design, state: StageState, current: number): void 
   steady.shortestRise = design.controller.minimumOnTime;
   steady.rise = state.outputVoltage - current * (state.lowResistance + state.pathResistance);
   steady.fall = state.inputVoltage - state.outputVoltage + current * (state.highResistance + state.pathResistance);
+  keepDriving(state);
   solveBentChoke(design, state, steady);
   applyReverse(steady, state);
 }
