@@ -54,8 +54,8 @@ function follow(
   return moved;
 }
 
-/** A step of either sign whose size is spread evenly over the decades. */
-function lineStep(random: Random): number {
+/** A step along a line, of either sign, whose size is spread evenly over the decades. */
+export function lineStep(random: Random): number {
   const decades = FINEST + (COARSEST - FINEST) * random.uniform();
   const size = exp(decades * Math.LN10);
   return random.uniform() < 0.5 ? -size : size;

@@ -9,7 +9,12 @@ const HALF_PI = Math.PI / 2;
 
 /** Plane front Σf = 0.5 behind 11⁵ local ones. */
 export function dtlz1(m = 3, k = 5): Published {
-  return publish({ ...unit(m, 0.5), name: 'DTLZ1', genes: reals(m - 1 + k, 0, 1), evaluate: (x, f) => linear(x, f, m) });
+  return publish({
+    ...unit(m, 0.5),
+    name: 'DTLZ1',
+    genes: reals(m - 1 + k, 0, 1),
+    evaluate: (x, f) => linear(x, f, m),
+  });
 }
 
 /** Sphere front Σf² = 1. */

@@ -33,7 +33,11 @@ export function publish(statement: Statement): Published {
     ideal: low,
     reference: low + 1.1 * (nadir[i] - low),
   }));
-  return { problem: { name, genes, objectives, limits, families: ONE_FAMILY, seeds: [], snap, evaluate }, ideal, nadir };
+  return {
+    problem: { name, genes, objectives, limits, families: ONE_FAMILY, seeds: [], snap, evaluate },
+    ideal,
+    nadir,
+  };
 }
 
 /** `count` real genes from `low` to `high`, named x1, x2, … from `first` on. */
