@@ -47,14 +47,14 @@ export function createSpaceContributions(capacity: number): SpaceContributions {
     since[position] = z[at];
   }
 
-  /** Measures the area of the outer point's quadrant that neither its neighbours nor its inner corners reach. */
-  function remeasure(position: number): void {
-    const end = outer.after(position);
+  /** Measures the area of the outer point's quadrant that neither its neighbours nor its inner corners, from `corner` on, reach. */
+  function remeasure(position: number, corner: number): void {
+    const end = outer.next[position];
     const low = y[position];
-    let top = y[outer.before(position)];
+    let top = y[outer.previous[position]];
     let from = x[position];
     let own = 0;
-    for (let d = inner.after(position); d < end; d = inner.after(d)) {
+    for (let d = corner; d < end; d = inner.next[d]) {
       own += (x[d] - from) * (top - low);
       from = x[d];
       top = y[d];
@@ -65,41 +65,42 @@ export function createSpaceContributions(capacity: number): SpaceContributions {
   /** A point inside some outer quadrant: inside one only, it becomes that one's inner corner; inside two it changes nothing. */
   function addInner(position: number, owner: number): void {
     const level = y[position];
-    if (y[outer.before(owner)] <= level) return;
-    const d = inner.before(position);
-    if (d > owner && y[d] <= level) return;
+    if (y[outer.previous[owner]] <= level) return;
+    const before = inner.before(position);
+    if (before > owner && y[before] <= level) return;
     book(owner, position);
-    const end = outer.after(owner);
-    for (let behind = inner.after(position); behind < end && y[behind] >= level; behind = inner.after(behind)) {
-      inner.remove(behind);
-    }
-    inner.add(position);
-    remeasure(owner);
+    const end = outer.next[owner];
+    for (let d = inner.next[before]; d < end && y[d] >= level; d = inner.next[d]) inner.remove(d);
+    inner.insertAfter(position, before);
+    remeasure(owner, inner.next[before < owner ? before : inner.before(owner)]);
   }
 
   /** A point outside the outer staircase: the outer points it covers become its inner corners, all corners they had are covered twice. */
   function addOuter(position: number, before: number): void {
     const level = y[position];
-    let after = outer.after(position);
-    while (y[after] >= level) after = outer.after(after);
-    for (let d = inner.after(position); d < after; d = inner.after(d)) inner.remove(d);
-    for (let covered = outer.after(position); covered < after; covered = outer.after(covered)) {
+    let after = outer.next[before];
+    while (y[after] >= level) after = outer.next[after];
+    const innerBefore = inner.before(position);
+    for (let d = inner.next[innerBefore]; d < after; d = inner.next[d]) inner.remove(d);
+    let corner = innerBefore;
+    for (let covered = outer.next[before]; covered < after; covered = outer.next[covered]) {
       book(covered, position);
       outer.remove(covered);
-      inner.add(covered);
+      inner.insertAfter(covered, corner);
+      corner = covered;
     }
-    outer.add(position);
+    outer.insertAfter(position, before);
     since[position] = z[position];
-    remeasure(position);
+    remeasure(position, inner.next[innerBefore]);
     if (before > 0) {
       book(before, position);
-      remeasure(before);
+      remeasure(before, inner.next[innerBefore < before ? innerBefore : inner.before(before)]);
     }
     if (after <= loaded) {
       book(after, position);
-      const end = outer.after(after);
-      for (let d = inner.after(after); d < end && y[d] >= level; d = inner.after(d)) inner.remove(d);
-      remeasure(after);
+      const end = outer.next[after];
+      while (inner.next[corner] < end && y[inner.next[corner]] >= level) inner.remove(inner.next[corner]);
+      remeasure(after, inner.next[corner]);
     }
   }
 
@@ -125,12 +126,8 @@ export function createSpaceContributions(capacity: number): SpaceContributions {
     },
     risingPoint: (k) => pointAt[rising[k]],
     measure(contribution) {
-      outer.clear(loaded + 2);
-      inner.clear(loaded + 2);
-      outer.add(0);
-      outer.add(loaded + 1);
-      inner.add(0);
-      inner.add(loaded + 1);
+      outer.reset(loaded + 1);
+      inner.reset(loaded + 1);
       for (let k = 0; k < loaded; k++) {
         const position = rising[k];
         volume[position] = 0;
@@ -139,7 +136,7 @@ export function createSpaceContributions(capacity: number): SpaceContributions {
         else addOuter(position, before);
       }
       z[0] = ceiling;
-      for (let position = outer.after(0); position <= loaded; position = outer.after(position)) book(position, 0);
+      for (let position = outer.next[0]; position <= loaded; position = outer.next[position]) book(position, 0);
       for (let k = 0; k < loaded; k++) contribution[pointAt[rising[k]]] = volume[rising[k]];
     },
   };

@@ -73,9 +73,7 @@ function createSpaceSweep(capacity: number): Sweep {
     y[0] = reference[1];
     x[n + 1] = reference[0];
     y[n + 1] = Number.NEGATIVE_INFINITY;
-    stairs.clear(n + 2);
-    stairs.add(0);
-    stairs.add(n + 1);
+    stairs.reset(n + 1);
     order.sort(points, 3, 2, n, sorted);
     let area = 0;
     let level = 0;
@@ -83,22 +81,23 @@ function createSpaceSweep(capacity: number): Sweep {
     for (let k = 0; k < n; k++) {
       const position = positionOf[sorted[k]];
       const low = y[position];
-      let top = y[stairs.before(position)];
+      const before = stairs.before(position);
+      let top = y[before];
       if (top <= low) continue;
       const z = points[3 * sorted[k] + 2];
       total += area * (z - level);
       level = z;
       let left = x[position];
-      let next = stairs.after(position);
+      let next = stairs.next[before];
       while (y[next] >= low) {
         area += (x[next] - left) * (top - low);
         left = x[next];
         top = y[next];
         stairs.remove(next);
-        next = stairs.after(next);
+        next = stairs.next[next];
       }
       area += (x[next] - left) * (top - low);
-      stairs.add(position);
+      stairs.insertAfter(position, before);
     }
     return total + area * (reference[2] - level);
   };
