@@ -3,7 +3,7 @@
  * both directions of power: the rising interval is the one in which the source drives the choke.
  */
 import type { StageState } from './stages/state.ts';
-import { MODE } from './stages/state.ts';
+import { MODE, pauses } from './stages/state.ts';
 
 /** What the choke sees, and what the mode solver answers. Reused, never allocated in the hot path. */
 export class ChokeSteadyState {
@@ -73,7 +73,7 @@ export function applyForward(s: ChokeSteadyState, state: StageState): void {
   state.mode = s.mode;
   state.highShare = s.riseShare;
   state.lowShare = s.fallShare;
-  const blocked = s.mode === MODE.discontinuous || s.mode === MODE.skipping || s.mode === MODE.off;
+  const blocked = pauses(s.mode);
   state.valleyCurrent = blocked ? 0 : s.current - 0.5 * s.ripple;
   state.peakCurrent = blocked ? s.ripple : s.current + 0.5 * s.ripple;
   shared(s, state);
@@ -84,7 +84,7 @@ export function applyReverse(s: ChokeSteadyState, state: StageState): void {
   state.mode = s.mode === MODE.continuous || s.mode === MODE.forced ? MODE.reverse : s.mode;
   state.highShare = s.fallShare;
   state.lowShare = s.riseShare;
-  const blocked = s.mode === MODE.discontinuous || s.mode === MODE.skipping || s.mode === MODE.off;
+  const blocked = pauses(s.mode);
   state.valleyCurrent = blocked ? -s.ripple : -s.current - 0.5 * s.ripple;
   state.peakCurrent = blocked ? 0 : -s.current + 0.5 * s.ripple;
   shared(s, state);

@@ -6,7 +6,7 @@ import type { Rail } from '../rail/rail.ts';
 import { addSegment, clearWaveform } from '../waveform/index.ts';
 import { solveBentChoke } from './choke.ts';
 import type { Stage } from './contract.ts';
-import { MODE, type StageState } from './state.ts';
+import { MODE, pauses, type StageState } from './state.ts';
 
 const steady = new ChokeSteadyState();
 
@@ -117,7 +117,7 @@ function writeCurrents(state: StageState): void {
   state.highMean = 0.5 * highShare * (a + b);
   state.lowMean = 0.5 * lowShare * (a + b);
   const period = state.frequency > 0 ? 1 / state.frequency : 1;
-  const idle = (1 - highShare - lowShare) * period;
+  const idle = pauses(state.mode) ? (1 - highShare - lowShare) * period : 0;
   clearWaveform(state.choke);
   // The pause lies where the current rests at zero: after the low interval going forward, after the high one in reverse.
   addSegment(state.choke, highShare * period, a, b);

@@ -8,7 +8,7 @@ import type { Rail } from '../rail/rail.ts';
 import type { Transformer } from '../transformer.ts';
 import { addSegment, clearWaveform } from '../waveform/index.ts';
 import { solveBentChoke } from './choke.ts';
-import type { StageState } from './state.ts';
+import { pauses, type StageState } from './state.ts';
 
 /** The numbers that tell one transformer stage from another. */
 export interface IsolatedForm {
@@ -104,7 +104,7 @@ function writeCurrents(form: IsolatedForm, t: Transformer, state: StageState, ch
 function writeWaveforms(form: IsolatedForm, t: Transformer, state: StageState): void {
   const { valleyCurrent: a, peakCurrent: b, highShare: h, lowShare: l } = state;
   const period = state.frequency > 0 ? 1 / state.frequency : 1;
-  const idle = (1 - h - l) * period;
+  const idle = pauses(state.mode) ? (1 - h - l) * period : 0;
   clearWaveform(state.choke);
   addSegment(state.choke, h * period, a, b);
   addSegment(state.choke, l * period, b, a);

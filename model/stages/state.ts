@@ -10,6 +10,11 @@ export const MODE = { continuous: 0, forced: 1, discontinuous: 2, skipping: 3, r
 /** Names of the modes by code. */
 export const MODES = ['continuous', 'forced-continuous', 'discontinuous', 'pulse-skipping', 'reverse', 'off'] as const;
 
+/** Whether the choke's current rests at zero in `mode`. */
+export function pauses(mode: number): boolean {
+  return mode === MODE.discontinuous || mode === MODE.skipping || mode === MODE.off;
+}
+
 /** Inputs and results of one operating point. SI units; currents of one phase unless a field says otherwise. */
 export class StageState {
   // What the point asks.
