@@ -4,11 +4,8 @@
  * as its first choices were made for fewer points.
  */
 import type { ChosenSet } from './chosen-set.ts';
+import { Neighbourhood } from './neighbourhood.ts';
 
-/** Candidates tried in the place of a chosen point: its nearest. */
-const NEAREST = 24;
-/** Most points whose nearest are remembered, which bounds the memory to 10 MB. */
-const REMEMBERED = 100_000;
 /** Chosen points looked at again when one near them has changed. */
 const AFFECTED = 10;
 /** Chosen points scattered at a time. */
@@ -39,11 +36,9 @@ export function exchange(
 
 class ExchangeSearch {
   private readonly set: ChosenSet;
-  private readonly points: Float64Array;
   private readonly n: number;
-  private readonly m: number;
   private readonly chosen: Uint8Array;
-  private readonly scale: Float64Array;
+  private readonly neighbourhood: Neighbourhood;
   /** Chosen points still to be looked at, and whether a point is among them. */
   private readonly queue: number[] = [];
   private readonly queued: Uint8Array;
@@ -51,10 +46,6 @@ class ExchangeSearch {
   private readonly roster: Int32Array;
   private readonly place: Int32Array;
   private members = 0;
-  /** Nearest points of each point that was ever asked for, chosen or not. */
-  private readonly neighbours = new Map<number, Int32Array>();
-  private readonly near = new Int32Array(NEAREST);
-  private readonly distance = new Float64Array(NEAREST);
   /** Hypervolume gained since the start. */
   private gained = 0;
   private left: number;
@@ -62,11 +53,9 @@ class ExchangeSearch {
 
   constructor(set: ChosenSet, points: Float64Array, n: number, m: number, chosen: Uint8Array, budget: number) {
     this.set = set;
-    this.points = points;
     this.n = n;
-    this.m = m;
     this.chosen = chosen;
-    this.scale = inverseRanges(points, n, m);
+    this.neighbourhood = new Neighbourhood(points, n, m);
     this.queued = new Uint8Array(n);
     this.left = budget;
     this.place = new Int32Array(n);
@@ -144,16 +133,17 @@ class ExchangeSearch {
 
   /** Takes out the chosen points around `centre` and puts as many of the points in that region back in, drawn without looking. */
   private scatter(centre: number): void {
-    const count = this.nearestChosen(centre, SCATTERED);
-    const around = Array.from(this.near.subarray(0, count));
-    const reach = this.distance[count - 1];
+    const { neighbourhood, roster } = this;
+    const count = neighbourhood.among(roster, this.members, centre, SCATTERED);
+    const around = neighbourhood.near.slice(0, count);
+    const reach = neighbourhood.distance[count - 1];
     for (const point of around) {
       this.remove(point);
       this.gained -= this.set.gain(point);
     }
     const region: number[] = [];
     for (let point = 0; point < this.n; point++) {
-      if (this.chosen[point] === 0 && this.squares(point, centre) <= reach) region.push(point);
+      if (this.chosen[point] === 0 && neighbourhood.squares(point, centre) <= reach) region.push(point);
     }
     for (let k = 0; k < count; k++) {
       const at = k + this.random(region.length - k);
@@ -170,7 +160,7 @@ class ExchangeSearch {
   /** Puts the best of the nearest candidates in the place of `point`, if one adds more than it. Returns who stands there now. */
   private replaceByBest(point: number): number {
     const { set, chosen } = this;
-    const candidates = this.nearestOf(point);
+    const candidates = this.neighbourhood.of(point);
     this.left -= candidates.length + 1;
     this.remove(point);
     const own = set.gain(point);
@@ -231,56 +221,8 @@ class ExchangeSearch {
   }
 
   private markAround(point: number): void {
-    const count = this.nearestChosen(point, AFFECTED);
-    for (let k = 0; k < count; k++) this.mark(this.near[k]);
-  }
-
-  /** The points nearest to `point`, nearest first, worked out once. */
-  private nearestOf(point: number): Int32Array {
-    const known = this.neighbours.get(point);
-    if (known !== undefined) return known;
-    let count = 0;
-    for (let other = 0; other < this.n; other++) {
-      if (other !== point) count = this.rankNear(other, this.squares(other, point), count, NEAREST);
-    }
-    const found = this.near.slice(0, count);
-    if (this.neighbours.size < REMEMBERED) this.neighbours.set(point, found);
-    return found;
-  }
-
-  /** Fills `near` with the `most` chosen points nearest to `point`, nearest first; returns how many. */
-  private nearestChosen(point: number, most: number): number {
-    let count = 0;
-    for (let k = 0; k < this.members; k++) {
-      const other = this.roster[k];
-      count = this.rankNear(other, this.squares(other, point), count, most);
-    }
-    return count;
-  }
-
-  /** Takes a point into the `count` nearest known, which hold `most` at most; returns the new count. */
-  private rankNear(point: number, squares: number, count: number, most: number): number {
-    const { near, distance } = this;
-    if (count === most && squares >= distance[count - 1]) return count;
-    let at = count < most ? count : most - 1;
-    for (; at > 0 && distance[at - 1] > squares; at--) {
-      distance[at] = distance[at - 1];
-      near[at] = near[at - 1];
-    }
-    distance[at] = squares;
-    near[at] = point;
-    return Math.min(count + 1, most);
-  }
-
-  /** Squared distance in objectives scaled by their range. */
-  private squares(a: number, b: number): number {
-    const { points, scale, m } = this;
-    let sum = 0;
-    for (let c = 0; c < m; c++) {
-      const step = (points[a * m + c] - points[b * m + c]) * scale[c];
-      sum += step * step;
-    }
-    return sum;
+    const count = this.neighbourhood.among(this.roster, this.members, point, AFFECTED);
+    for (let k = 0; k < count; k++) this.mark(this.neighbourhood.near[k]);
   }
 
   /** Next whole number below `limit` of a fixed sequence (mulberry32). */
@@ -290,18 +232,4 @@ class ExchangeSearch {
     mixed = (mixed + Math.imul(mixed ^ (mixed >>> 7), mixed | 61)) ^ mixed;
     return ((mixed ^ (mixed >>> 14)) >>> 0) % limit;
   }
-}
-
-function inverseRanges(points: Float64Array, n: number, m: number): Float64Array {
-  const scale = new Float64Array(m);
-  for (let c = 0; c < m; c++) {
-    let low = Number.POSITIVE_INFINITY;
-    let high = Number.NEGATIVE_INFINITY;
-    for (let i = 0; i < n; i++) {
-      low = Math.min(low, points[i * m + c]);
-      high = Math.max(high, points[i * m + c]);
-    }
-    scale[c] = high > low ? 1 / (high - low) : 0;
-  }
-  return scale;
 }
