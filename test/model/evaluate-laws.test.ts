@@ -6,7 +6,7 @@ import type { Rail } from '../../model/rail/rail.ts';
 import { anyCase, type Case } from './real-parts.ts';
 import { momentsOf, pointOf, traceOf, watts } from './support.ts';
 
-const RUNS = { numRuns: 400, seed: 1 };
+const RUNS = { numRuns: 200, seed: 1 };
 /** Losses here are up to a quarter of the power; a big board keeps most of them from running away. */
 const COOL: Partial<Rail> = { coolingArea: 10 };
 

@@ -40,7 +40,6 @@ export function solveStage(made: HandMade, where: Where, ohms: Resistances = {},
   state.pathResistance = ohms.path ?? 0;
   state.highTemperature = 298.15;
   state.lowTemperature = 298.15;
-  state.round = 0;
   design.stage.solve(design, state);
   return state;
 }
