@@ -1,4 +1,4 @@
-export type { Designs, NearMissDesigns, Widths } from './designs.ts';
+export type { Designs, NearMissDesigns } from './designs.ts';
 export {
   type Archive,
   type ArchiveGrid,

@@ -1,4 +1,4 @@
-export { type Contributions, createContributions } from './contributions.ts';
+export { createContributions } from './contributions.ts';
 export { selectSubset } from './subset.ts';
 export { createTruncation, type Truncation } from './truncate.ts';
-export { createHypervolume, type Hypervolume } from './volume.ts';
+export { createHypervolume } from './volume.ts';

@@ -1,7 +1,7 @@
 /** Who lies near whom in the objectives, each scaled by its range: where subset selection looks for exchanges. */
 
 /** Candidates kept for each point: its nearest. */
-export const NEAREST = 24;
+const NEAREST = 24;
 /** Most points whose nearest are remembered, which bounds the memory to 10 MB. */
 const REMEMBERED = 100_000;
 
@@ -36,7 +36,10 @@ export class Neighbourhood {
     return found;
   }
 
-  /** Fills `near` and `distance` with the `most` (at most NEAREST) of the first `count` candidates that are nearest to `point`, nearest first; returns how many. */
+  /**
+   * Fills `near` and `distance` with the `most` (up to 24) of the first `count` candidates that are nearest to `point`, nearest first; returns how
+   * many there are.
+   */
   among(candidates: Int32Array, count: number, point: number, most: number): number {
     let found = 0;
     for (let k = 0; k < count; k++) {

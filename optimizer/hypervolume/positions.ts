@@ -7,7 +7,7 @@
 import { highestBit } from '../ranking/word-bits.ts';
 
 /** Most positions a set can hold: four levels of 32. */
-export const MOST_POSITIONS = 1 << 20;
+const MOST_POSITIONS = 1 << 20;
 
 /** Set of positions between two guards, 0 and `end`, that are always in it. */
 export class PositionSet {
@@ -19,7 +19,7 @@ export class PositionSet {
   private readonly regions: Int32Array;
   private root: number;
 
-  /** A set of positions below `capacity`, at most MOST_POSITIONS. */
+  /** A set of positions below `capacity`, at most 1,048,576; a RangeError above. */
   constructor(capacity: number) {
     if (capacity > MOST_POSITIONS)
       throw new RangeError(`a position set holds at most ${MOST_POSITIONS}, not ${capacity}`);

@@ -118,7 +118,7 @@ function createSweptShrinking(capacity: number, m: number): Shrinking {
     values,
     load(points, n, reference) {
       corner[2] = 1;
-      corner.set(reference.subarray(0, m));
+      for (let c = 0; c < m; c++) corner[c] = reference[c];
       for (let k = 0; k < n; k++) {
         for (let c = 0; c < m; c++) lifted[3 * k + c] = points[m * k + c];
       }
@@ -158,7 +158,7 @@ function createBoxedShrinking(capacity: number): Shrinking {
     load(points, n, reference) {
       held = points;
       left = n;
-      corner.set(reference.subarray(0, 4));
+      for (let c = 0; c < 4; c++) corner[c] = reference[c];
       order.sort(points, 4, 3, n, rising);
       for (let k = 0; k < n; k++) this.remeasure(k);
     },

@@ -1,3 +1,3 @@
 export { type ConstrainedRanker, createConstrainedRanker } from './constrained.ts';
-export { type Crowding, createCrowding } from './crowding.ts';
-export { createRanker, type Ranker } from './ranker.ts';
+export { createCrowding } from './crowding.ts';
+export { createRanker } from './ranker.ts';

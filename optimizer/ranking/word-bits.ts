@@ -1,15 +1,10 @@
 /**
- * Where the lowest and the highest bit of a word stand, by multiplication with a de Bruijn sequence (Leiserson, Prokop, Randall 1998). `Math.clz32`
+ * Where the highest bit of a word stands, by multiplication with a de Bruijn sequence (Leiserson, Prokop, Randall 1998). `Math.clz32`
  * is not among the few functions of `Math` that the pure rooms use.
  */
 
-const LOWEST = table(0x077cb531, (bit) => 1 << bit);
-const HIGHEST = table(0x07c4acdd, (bit) => (bit === 31 ? -1 : (2 << bit) - 1));
-
-/** Index, 0 … 31, of the lowest bit that is set in `word`, which is not 0. */
-export function lowestBit(word: number): number {
-  return LOWEST[Math.imul(word & -word, 0x077cb531) >>> 27];
-}
+const SEQUENCE = 0x07c4acdd;
+const HIGHEST = highestOfProducts();
 
 /** Index, 0 … 31, of the highest bit that is set in `word`, which is not 0. */
 export function highestBit(word: number): number {
@@ -18,12 +13,15 @@ export function highestBit(word: number): number {
   below |= below >>> 4;
   below |= below >>> 8;
   below |= below >>> 16;
-  return HIGHEST[Math.imul(below, 0x07c4acdd) >>> 27];
+  return HIGHEST[Math.imul(below, SEQUENCE) >>> 27];
 }
 
-/** For each of the 32 words `of(bit)`, whose products with the sequence differ in their upper five bits: the bit. */
-function table(sequence: number, of: (bit: number) => number): Int32Array {
+/** The words of 1, 2 … 32 ones, multiplied with the sequence, differ in their upper five bits: which tell the number of ones less one. */
+function highestOfProducts(): Int32Array {
   const found = new Int32Array(32);
-  for (let bit = 0; bit < 32; bit++) found[Math.imul(of(bit), sequence) >>> 27] = bit;
+  for (let bit = 0; bit < 32; bit++) {
+    const ones = bit === 31 ? -1 : (2 << bit) - 1;
+    found[Math.imul(ones, SEQUENCE) >>> 27] = bit;
+  }
   return found;
 }
