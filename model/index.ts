@@ -23,5 +23,6 @@ export * from './quantity/index.ts';
 export * from './rail/index.ts';
 export type { Architecture, ObjectiveName, Rail } from './rail/rail.ts';
 export { ARCHITECTURES, OBJECTIVES } from './rail/rail.ts';
-export { readSpec, recordOfSpec, SPEC_SCHEMA, type Spec, writeSpec } from './spec.ts';
+export { readSpec, recordOfSpec, SPEC_SCHEMA, type Spec } from './spec.ts';
 export { MODEL_VERSION } from './version.ts';
+export { writeSpec } from './write-spec.ts';

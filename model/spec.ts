@@ -5,9 +5,7 @@
 import { z } from 'zod';
 import type { DesignRecord } from './assessment.ts';
 import { bad, type Finding, good, type Outcome } from './outcome.ts';
-import type { RailProblem } from './problem.ts';
 import { ARCHITECTURES } from './rail/rail.ts';
-import { MODEL_VERSION } from './version.ts';
 
 const figure = z.object({
   name: z.string(),
@@ -77,32 +75,6 @@ export type Spec = z.infer<typeof specShape>;
 
 /** JSON Schema (draft 2020-12) of a spec. */
 export const SPEC_SCHEMA: Readonly<Record<string, unknown>> = z.toJSONSchema(specShape);
-
-/** The spec of the design of `genes`. */
-export function writeSpec(problem: RailProblem, genes: Float64Array): Spec {
-  const assessment = problem.assess(genes);
-  const { design } = assessment;
-  return {
-    format: 'chopfront-spec',
-    version: 1,
-    tool: MODEL_VERSION,
-    id: assessment.id,
-    rail: problem.rail.name,
-    architecture: design.architecture,
-    genes: { ...design.genes },
-    parts: { ...design.parts },
-    partsList: assessment.parts.map(({ slot, name, count, cost }) => ({ slot, name, count, cost })),
-    feasible: assessment.feasible,
-    objectives: assessment.objectives.map((objective) => ({ ...objective })),
-    limits: assessment.limits.map(({ name, unit, value, allowed, margin }) => ({ name, unit, value, allowed, margin })),
-    points: assessment.points
-      .filter((report) => report.share > 0)
-      .map(({ losses, traces, inputPower, ...kept }) => ({ ...kept, temperatures: { ...kept.temperatures } })),
-    losses: assessment.losses.map((loss) => ({ ...loss })),
-    tolerances: { ...problem.rail.tolerances },
-    cautions: [...assessment.cautions],
-  };
-}
 
 /** Reads a spec; every problem of shape is a finding in `file`. */
 export function readSpec(text: string, file: string): Outcome<Spec> {
