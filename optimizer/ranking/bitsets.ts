@@ -7,27 +7,28 @@
 /** Ranks distinct rows that stand in lexicographic order; owns its scratch. */
 export interface BitsetRanking {
   /**
-   * `columns[c]` holds, for objectives 1 … m − 1 (counting from 0), the dense rank of each of the `n` rows, `sorted[c]` the rows in ascending order of it.
-   * Writes `ranks`, returns the number of fronts.
+   * `columns[c]` holds, for objectives 1 and up (counting from 0), a whole number for each of the `n` rows that orders them as the objective
+   * does; `sorted[c]` the rows in ascending order of it. Raises `ranks`: they begin at 0, or at the front that dominators outside these rows
+   * already force, and spread over at most `spread`.
    */
-  rank(columns: readonly Int32Array[], sorted: readonly Int32Array[], n: number, ranks: Int32Array): number;
+  raise(columns: readonly Int32Array[], sorted: readonly Int32Array[], n: number, ranks: Int32Array): void;
 }
 
-/** A ranking for up to `capacity` rows; holds capacity² / 32 words twice. */
-export function createBitsetRanking(capacity: number): BitsetRanking {
+/** A ranking for up to `capacity` rows whose first ranks spread over at most `spread`; holds (2 capacity + spread) · capacity / 32 words. */
+export function createBitsetRanking(capacity: number, spread: number): BitsetRanking {
   const width = (capacity + 31) >> 5;
   /** Row i: the rows that are no worse than i in the objectives handled so far, among rows before i. */
   const dominators = new Int32Array(capacity * width);
-  /** Row f: the members of front f. */
-  const fronts = new Int32Array(capacity * width);
+  /** Row f: the members of front f, counted from the least first rank. */
+  const fronts = new Int32Array((capacity + spread) * width);
   const seen = new Int32Array(width);
   return {
-    rank(columns, sorted, n, ranks) {
+    raise(columns, sorted, n, ranks) {
       const words = (n + 31) >> 5;
       for (let c = 1; c < columns.length; c++) {
         intersect(columns[c], sorted[c], n, words, seen, dominators, c === 1);
       }
-      return assign(dominators, fronts, n, words, ranks);
+      assign(dominators, fronts, n, words, ranks);
     },
   };
 }
@@ -60,14 +61,20 @@ function intersect(
   }
 }
 
-/** Puts each row, in order, into the first front that holds none of its dominators: all fronts before it hold one, so bisection finds it. */
-function assign(dominators: Int32Array, fronts: Int32Array, n: number, words: number, ranks: Int32Array): number {
+/**
+ * Puts each row, in order, into the first front from its first rank on that holds none of its dominators. All fronts before that one hold one: a
+ * dominator's front is either forced from outside, then so is the row's, or by a dominator of the front before, which dominates the row too. So bisection
+ * finds it.
+ */
+function assign(dominators: Int32Array, fronts: Int32Array, n: number, words: number, ranks: Int32Array): void {
+  let base = ranks[0];
+  for (let row = 1; row < n; row++) if (ranks[row] < base) base = ranks[row];
   let count = 0;
   for (let row = 0; row < n; row++) {
     const last = row >> 5;
     const at = row * words;
     dominators[at + last] &= (1 << (row & 31)) - 1;
-    let low = 0;
+    let low = ranks[row] - base;
     let high = count;
     while (low < high) {
       const middle = (low + high) >> 1;
@@ -77,12 +84,11 @@ function assign(dominators: Int32Array, fronts: Int32Array, n: number, words: nu
       if (w >= 0) low = middle + 1;
       else high = middle;
     }
-    if (low === count) {
-      fronts.fill(0, count * words, count * words + words);
-      count++;
+    if (low >= count) {
+      fronts.fill(0, count * words, (low + 1) * words);
+      count = low + 1;
     }
     fronts[low * words + last] |= 1 << (row & 31);
-    ranks[row] = low;
+    ranks[row] = base + low;
   }
-  return count;
 }

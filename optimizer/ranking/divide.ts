@@ -7,15 +7,19 @@
  * instead of by median: no selection step, and a depth of at most log2 N in each objective.
  */
 
+import { createBlockRanking } from './blocks.ts';
+
 /** Ranks distinct rows that stand in lexicographic order; owns its scratch. */
 export interface DivideRanking {
-  /** `columns[c]` holds, for objectives 1 … m − 1, the dense rank of each of the `n` rows. Writes `ranks`, returns the number of fronts. */
-  rank(columns: readonly Int32Array[], n: number, ranks: Int32Array): number;
+  /** `columns[c]` holds, for objectives 1 … m − 1, the dense rank of each of the `n` rows. Raises `ranks`, which are 0 to begin with. */
+  raise(columns: readonly Int32Array[], n: number, ranks: Int32Array): void;
 }
 
 /** Up to this many rows, or pairs of rows, comparing them all is cheaper than splitting. */
 const FEW_ROWS = 48;
 const FEW_PAIRS = 2500;
+/** Up to this many rows, sets of bits are cheaper than splitting, by the last objective looked at. */
+const BLOCK_ROWS = [0, 0, 1000, 2500] as const;
 
 /** A ranking for up to `capacity` rows of `m` objectives (3 or 4). */
 export function createDivideRanking(capacity: number, m: number): DivideRanking {
@@ -27,6 +31,8 @@ export function createDivideRanking(capacity: number, m: number): DivideRanking 
   let third: Int32Array = empty;
   let fourth: Int32Array = empty;
   let ranks: Int32Array = empty;
+  const blocks = createBlockRanking(Math.min(capacity, BLOCK_ROWS[m - 1]), m);
+  let columnsUpTo: readonly (readonly Int32Array[])[] = [];
 
   /** Ranks the rows stack[from … to) among themselves, looking at objectives 1 … c; `free` is where the stack is unused. */
   function sortSet(from: number, to: number, c: number, free: number): void {
@@ -38,6 +44,7 @@ export function createDivideRanking(capacity: number, m: number): DivideRanking 
       sweepWithin(from, to);
       return;
     }
+    if (to - from <= BLOCK_ROWS[c] && blocks.raise(columnsUpTo[c], stack, from, to, ranks)) return;
     const column = c === 2 ? third : fourth;
     let least = column[stack[from]];
     let most = least;
@@ -224,19 +231,14 @@ export function createDivideRanking(capacity: number, m: number): DivideRanking 
   }
 
   return {
-    rank(columns, n, into) {
+    raise(columns, n, into) {
       second = columns[1];
       third = columns[2];
       fourth = m > 3 ? columns[3] : empty;
+      columnsUpTo = [[], [], columns.slice(0, 3), columns];
       ranks = into;
-      for (let i = 0; i < n; i++) {
-        stack[i] = i;
-        ranks[i] = 0;
-      }
+      for (let i = 0; i < n; i++) stack[i] = i;
       sortSet(0, n, m - 1, n);
-      let most = -1;
-      for (let i = 0; i < n; i++) if (ranks[i] > most) most = ranks[i];
-      return most + 1;
     },
   };
 }

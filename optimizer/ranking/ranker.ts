@@ -25,7 +25,7 @@ export interface Ranker {
 }
 
 /** Most distinct rows ranked by sets of bits, by number of objectives; where the two ways cost the same (bench). */
-const BITSET_ROWS = [0, 0, 0, 3000, 6000] as const;
+const BITSET_ROWS = [0, 0, 0, 1500, 4000] as const;
 
 /** A ranker for up to `capacity` rows of `m` objectives (2 to 4). */
 export function createRanker(capacity: number, m: number): Ranker {
@@ -66,13 +66,17 @@ function createSpaceRanker(capacity: number, m: number, order: RowOrder, sorted:
         order.sort(objectives, m, c, n, sorted);
         numberColumn(objectives, m, c, n, sorted, distinctOf, columns[c], columnOrders[c]);
       }
-      let fronts: number;
+      distinctRanks.fill(0, 0, distinct);
       if (distinct <= few) {
-        bitsets ??= createBitsetRanking(few);
-        fronts = bitsets.rank(columns, columnOrders, distinct, distinctRanks);
-      } else fronts = divide.rank(columns, distinct, distinctRanks);
-      for (let i = 0; i < n; i++) ranks[i] = distinctRanks[distinctOf[i]];
-      return fronts;
+        bitsets ??= createBitsetRanking(few, 0);
+        bitsets.raise(columns, columnOrders, distinct, distinctRanks);
+      } else divide.raise(columns, distinct, distinctRanks);
+      let last = -1;
+      for (let i = 0; i < n; i++) {
+        ranks[i] = distinctRanks[distinctOf[i]];
+        if (ranks[i] > last) last = ranks[i];
+      }
+      return last + 1;
     },
   };
 }
