@@ -13,6 +13,7 @@ import type { Core } from './parts/core.ts';
 import type { Diode } from './parts/diode.ts';
 import type { Inductor } from './parts/inductor.ts';
 import type { Material } from './parts/material.ts';
+import { type Leg, legOf } from './parts/power-stage.ts';
 import type { Switch } from './parts/switch.ts';
 import type { PartsTables } from './parts/tables.ts';
 import type { Architecture, Rail } from './rail/rail.ts';
@@ -31,6 +32,8 @@ export interface Catalogue {
   readonly lowSwitches: readonly Switch[];
   /** By rising rated current. */
   readonly diodes: readonly Diode[];
+  /** Power stages for a synchronous buck, by falling on-resistance of the low switch. */
+  readonly legs: readonly Leg[];
   /** By rising volume. */
   readonly inductorSeries: readonly InductorSeries[];
   /** By rising effective capacitance at the output's bias. */
@@ -71,6 +74,7 @@ export function createCatalogue(rail: Rail, tables: PartsTables): Outcome<Catalo
       usable(rail, tables.diodes).filter((row) => within(row.voltageRating, switchNeed, RATING_SPAN)),
       (row) => row.currentRating,
     ),
+    legs: legsFor(rail, tables),
     inductorSeries: inductorSeries(rail, tables.inductors),
     outputCeramics: ceramicsFor(rail, tables.ceramics, rail.output.maximum),
     outputBulks: bulksFor(rail, tables.bulks, rail.output.maximum),
@@ -161,6 +165,13 @@ function controllersFor(rail: Rail, rows: readonly Controller[]): readonly Contr
     row.outputMinimum <= rail.output.minimum &&
     row.outputMaximum >= rail.output.maximum;
   return sortBy(usable(rail, rows).filter(fits), (row) => priceAt(row, rail.quantity));
+}
+
+function legsFor(rail: Rail, tables: PartsTables): readonly Leg[] {
+  if (!rail.search.architectures.includes('buck-synchronous')) return [];
+  const need = rail.input.maximum / rail.derating.switchVoltage;
+  const rows = usable(rail, tables.powerStages).filter((row) => within(row.voltageRating, need, RATING_SPAN));
+  return sortBy(rows, (row) => -row.lowResistance).map(legOf);
 }
 
 /** Whether an architecture has a transformer. */

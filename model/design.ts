@@ -11,6 +11,7 @@ import type { Controller } from './parts/controller.ts';
 import type { Diode } from './parts/diode.ts';
 import type { Inductor } from './parts/inductor.ts';
 import type { Material } from './parts/material.ts';
+import type { Driver, PowerStage } from './parts/power-stage.ts';
 import type { Switch } from './parts/switch.ts';
 import type { Rail } from './rail/rail.ts';
 import { nearestRow } from './snap.ts';
@@ -36,6 +37,10 @@ export class Design {
   lowParallel = 1;
   diode: Diode | undefined;
   controller: Controller;
+  /** What drives the gates: the controller, or the power stage's own driver. */
+  driver: Driver;
+  /** The power stage of a phase; absent with discrete switches. */
+  powerStage: PowerStage | undefined;
   outputCeramic: Ceramic;
   outputCeramicCount = 1;
   outputBulk: Bulk | undefined;
@@ -67,6 +72,7 @@ export class Design {
     this.low = catalogue.lowSwitches[0];
     this.diode = catalogue.diodes[0];
     this.controller = catalogue.controllers[0];
+    this.driver = this.controller;
     this.outputCeramic = catalogue.outputCeramics[0];
     this.inputCeramic = catalogue.inputCeramics[0];
     this.outputBulk = catalogue.outputBulks[0];
@@ -108,12 +114,9 @@ export function resolveDesign(
   design.phases = genes[GENE.phases];
   design.frequency = genes[GENE.frequency];
   resolveChoke(design, genes, rail, catalogue);
-  design.high = catalogue.highSwitches[genes[GENE.highSwitch]];
-  design.highParallel = genes[GENE.highParallel];
-  design.low = catalogue.lowSwitches[genes[GENE.lowSwitch]];
-  design.lowParallel = genes[GENE.lowParallel];
   design.diode = design.stage.diode ? catalogue.diodes[genes[GENE.diode]] : undefined;
   design.controller = catalogue.controllers[genes[GENE.controller]];
+  resolveLeg(design, genes, catalogue);
   design.outputCeramic = catalogue.outputCeramics[genes[GENE.outputCeramic]];
   design.outputCeramicCount = genes[GENE.outputCeramicCount];
   design.outputBulkCount = genes[GENE.outputBulkCount];
@@ -126,6 +129,18 @@ export function resolveDesign(
   if (design.stage.windings !== undefined) resolveTransformer(design, genes, rail, catalogue, design.stage.windings);
   design.emulates = !design.stage.diode && asked && design.controller.diodeEmulation;
   design.sheds = rail.lightLoad === 'phase-shedding' && design.controller.phaseShedding && design.phases > 1;
+}
+
+/** Discrete switches under the controller's drivers, or a power stage under its own. */
+function resolveLeg(design: Design, genes: Float64Array, catalogue: Catalogue): void {
+  const packaged = design.stage.architecture === 'buck-synchronous' && genes[GENE.legBuild] > 0;
+  const leg = packaged ? catalogue.legs[genes[GENE.powerStage]] : undefined;
+  design.powerStage = leg?.stage;
+  design.driver = leg?.driver ?? design.controller;
+  design.high = leg?.high ?? catalogue.highSwitches[genes[GENE.highSwitch]];
+  design.highParallel = packaged ? 1 : genes[GENE.highParallel];
+  design.low = leg?.low ?? catalogue.lowSwitches[genes[GENE.lowSwitch]];
+  design.lowParallel = packaged ? 1 : genes[GENE.lowParallel];
 }
 
 function resolveChoke(design: Design, genes: Float64Array, rail: Rail, catalogue: Catalogue): void {

@@ -53,7 +53,7 @@ function refreshOutputs(design: Design, volts: number): void {
 
 function addSwitchEdges(design: Design, state: StageState, ledger: Float64Array): void {
   const cycles = state.frequency * state.activePhases;
-  const { high, low, controller } = design;
+  const { high, low, driver } = design;
   const a = state.valleyCurrent;
   const b = state.peakCurrent;
   const nodeCharge = design.highParallel * highOutput[OUTPUT_CHARGE] + design.lowParallel * lowOutput[OUTPUT_CHARGE];
@@ -61,18 +61,16 @@ function addSwitchEdges(design: Design, state: StageState, ledger: Float64Array)
   const toLow = falling(design, state, nodeCharge);
 
   // Into the high switch: hard while the current flows out of the leg, helped by it while it flows in.
-  ledger[SLOT['highSwitch.overlap']] +=
-    cycles * overlapOn(high, design.highParallel, controller, state.inputVoltage, a);
-  ledger[SLOT['lowSwitch.overlap']] += cycles * overlapOff(low, design.lowParallel, controller, state.inputVoltage, -a);
+  ledger[SLOT['highSwitch.overlap']] += cycles * overlapOn(high, design.highParallel, driver, state.inputVoltage, a);
+  ledger[SLOT['lowSwitch.overlap']] += cycles * overlapOff(low, design.lowParallel, driver, state.inputVoltage, -a);
   ledger[SLOT['highSwitch.recovery']] +=
     cycles * recovery(low, design.lowParallel, lowOutput[OUTPUT_CHARGE], state.inputVoltage, a);
   edgeEnergy(low, design.lowParallel, lowOutput, high, design.highParallel, highOutput, state.inputVoltage, toHigh);
   ledger[SLOT['highSwitch.outputCharge']] += cycles * partial[0];
 
   // Into the low switch: the mirror image.
-  ledger[SLOT['highSwitch.overlap']] +=
-    cycles * overlapOff(high, design.highParallel, controller, state.inputVoltage, b);
-  ledger[SLOT['lowSwitch.overlap']] += cycles * overlapOn(low, design.lowParallel, controller, state.inputVoltage, -b);
+  ledger[SLOT['highSwitch.overlap']] += cycles * overlapOff(high, design.highParallel, driver, state.inputVoltage, b);
+  ledger[SLOT['lowSwitch.overlap']] += cycles * overlapOn(low, design.lowParallel, driver, state.inputVoltage, -b);
   ledger[SLOT['lowSwitch.recovery']] +=
     cycles * recovery(high, design.highParallel, highOutput[OUTPUT_CHARGE], state.inputVoltage, -b);
   edgeEnergy(high, design.highParallel, highOutput, low, design.lowParallel, lowOutput, state.inputVoltage, toLow);
@@ -93,7 +91,7 @@ function rising(design: Design, state: StageState, nodeCharge: number): number {
     nodeCharge,
     state.inputVoltage,
     state.outputVoltage,
-    design.controller.deadTime,
+    design.driver.deadTime,
   );
 }
 
@@ -105,7 +103,7 @@ function falling(design: Design, state: StageState, nodeCharge: number): number 
     nodeCharge,
     state.inputVoltage,
     state.inputVoltage - state.outputVoltage,
-    design.controller.deadTime,
+    design.driver.deadTime,
   );
 }
 
@@ -154,7 +152,7 @@ function addGap(
   hard: boolean,
   node: number,
 ): void {
-  const gap = design.controller.deadTime;
+  const gap = design.driver.deadTime;
   const wait = hard ? 0 : transitionTime(node, current, gap);
   const slot = current >= 0 ? SLOT['lowSwitch.deadTime'] : SLOT['highSwitch.deadTime'];
   const drop = current >= 0 ? design.low.bodyDrop : design.high.bodyDrop;
@@ -169,22 +167,22 @@ function addGates(
   toHigh: number,
   toLow: number,
 ): void {
-  const { controller } = design;
-  const high = cycles * cycleCharge(design.high, design.highParallel, controller, toHigh);
-  const low = design.diode === undefined ? cycles * cycleCharge(design.low, design.lowParallel, controller, toLow) : 0;
-  addGateLosses(ledger, controller, state.inputVoltage, high, low);
+  const { driver } = design;
+  const high = cycles * cycleCharge(design.high, design.highParallel, driver, toHigh);
+  const low = design.diode === undefined ? cycles * cycleCharge(design.low, design.lowParallel, driver, toLow) : 0;
+  addGateLosses(ledger, driver, state.inputVoltage, high, low);
 }
 
 function addDiodeEdges(design: Design, state: StageState, ledger: Float64Array): void {
-  const { diode, high, controller } = design;
+  const { diode, high, driver } = design;
   if (diode === undefined) return;
   const cycles = state.frequency * state.activePhases;
   const a = state.valleyCurrent;
   const volts = state.inputVoltage;
   ledger[SLOT['highSwitch.overlap']] +=
     cycles *
-    (overlapOn(high, design.highParallel, controller, volts, a) +
-      overlapOff(high, design.highParallel, controller, volts, state.peakCurrent));
+    (overlapOn(high, design.highParallel, driver, volts, a) +
+      overlapOff(high, design.highParallel, driver, volts, state.peakCurrent));
   ledger[SLOT['highSwitch.outputCharge']] +=
     cycles *
     (design.highParallel * highOutput[OUTPUT_ENERGY] +

@@ -38,6 +38,7 @@ export interface FrontFile {
 const PART_SLOTS = [
   'highSwitch',
   'lowSwitch',
+  'powerStage',
   'diode',
   'inductor',
   'outputCeramic',

@@ -36,12 +36,18 @@ export const GENE_NAMES = [
   'secondaryTurns',
   'primaryConductor',
   'secondaryConductor',
+  'legBuild',
+  'powerStage',
 ] as const;
 export type GeneName = (typeof GENE_NAMES)[number];
 
 /** Options of the gene `chokeBuild`. */
 export const STOCKED = 'stocked';
 export const WOUND = 'wound';
+
+/** Options of the gene `legBuild`. */
+export const DISCRETE = 'discrete';
+export const PACKAGED = 'power stage';
 
 /** Most turns that a gene counts. */
 const MOST_CHOKE_TURNS = 60;
@@ -73,6 +79,8 @@ export const NAMED_GENES: readonly GeneName[] = [
   'transformerMaterial',
   'primaryConductor',
   'secondaryConductor',
+  'legBuild',
+  'powerStage',
 ];
 
 /** Genes with a number that a person reads, in the order of a record. */
@@ -130,6 +138,11 @@ export function createGenes(rail: Rail, catalogue: Catalogue): readonly Gene[] {
     inputCeramicCount: count('inputCeramicCount', 1, search.ceramics),
     inputBulk: ordered('inputBulk', catalogue.inputBulks),
     inputBulkCount: count('inputBulkCount', 0, catalogue.inputBulks.length > 0 ? search.bulks : 0),
+    legBuild: { name: 'legBuild', unit: '', kind: 'choice', ...legOptions(catalogue) },
+    powerStage: ordered(
+      'powerStage',
+      catalogue.legs.map(({ stage }) => stage),
+    ),
     chokeBuild: { name: 'chokeBuild', unit: '', kind: 'choice', ...buildOptions(catalogue) },
     chokeCore: ordered('chokeCore', catalogue.chokeCores),
     chokeMaterial: unordered('chokeMaterial', catalogue.chokeCores.length > 0 ? catalogue.materials : []),
@@ -146,6 +159,12 @@ export function createGenes(rail: Rail, catalogue: Catalogue): readonly Gene[] {
     ),
   };
   return GENE_NAMES.map((name) => genes[name]);
+}
+
+/** How the leg of a synchronous buck is had: from discrete switches, or as one package with its driver. */
+function legOptions(catalogue: Catalogue): { low: number; high: number; options: readonly string[] } {
+  const options = catalogue.legs.length > 0 ? [DISCRETE, PACKAGED] : [DISCRETE];
+  return { low: 0, high: options.length - 1, options };
 }
 
 /** How a choke is had: from stock, wound to order, or either. */

@@ -25,13 +25,13 @@ export function addIsolatedEdges(form: IsolatedForm, design: Design, state: Stag
   const cycles = state.frequency * perCycle * state.activePhases;
   addPrimary(form, design, state, ledger, cycles);
   addRectifiers(form, design, state, ledger, cycles);
-  const high = cycles * state.highDevices * cycleCharge(design.high, design.highParallel, design.controller, 0);
-  const low = cycles * state.lowDevices * cycleCharge(design.low, design.lowParallel, design.controller, 0);
-  addGateLosses(ledger, design.controller, state.inputVoltage, high, low);
+  const high = cycles * state.highDevices * cycleCharge(design.high, design.highParallel, design.driver, 0);
+  const low = cycles * state.lowDevices * cycleCharge(design.low, design.lowParallel, design.driver, 0);
+  addGateLosses(ledger, design.driver, state.inputVoltage, high, low);
 }
 
 function addPrimary(form: IsolatedForm, design: Design, state: StageState, ledger: Float64Array, cycles: number): void {
-  const { high, highParallel, controller } = design;
+  const { high, highParallel, driver } = design;
   const ratio = design.transformer.ratio;
   const rest = 0.5 * state.inputVoltage;
   const on = state.valleyCurrent / ratio;
@@ -39,14 +39,7 @@ function addPrimary(form: IsolatedForm, design: Design, state: StageState, ledge
   const devices = cycles * state.highDevices;
   ledger[SLOT['highSwitch.overlap']] +=
     devices *
-    (overlapOn(high, highParallel, controller, rest, on) +
-      overlapOff(
-        high,
-        highParallel,
-        controller,
-        form.share < 1 ? state.inputVoltage : 0.5 * form.inSeries * state.inputVoltage,
-        off,
-      ));
+    (overlapOn(high, highParallel, driver, rest, on) + overlapOff(high, highParallel, driver, state.inputVoltage, off));
   outputAt(high, rest, output);
   const charge = highParallel * output[OUTPUT_CHARGE];
   const energy = highParallel * output[OUTPUT_ENERGY];
@@ -62,7 +55,7 @@ function addRectifiers(
   ledger: Float64Array,
   cycles: number,
 ): void {
-  const { low, lowParallel, controller } = design;
+  const { low, lowParallel, driver } = design;
   const devices = cycles * state.lowDevices;
   const volts = state.rectifierVoltage;
   outputAt(low, volts, output);
@@ -77,7 +70,7 @@ function addRectifiers(
   ledger[SLOT['lowSwitch.recovery']] += devices * volts * lowParallel * charge;
   // Charging a capacitance from a voltage through an inductance and damping the ringing costs Q·V in all.
   ledger[SLOT['lowSwitch.outputCharge']] += devices * lowParallel * output[OUTPUT_CHARGE] * volts;
-  const gap = controller.deadTime;
+  const gap = driver.deadTime;
   const each = form.centreTap ? 0.5 : 1;
   ledger[SLOT['lowSwitch.deadTime']] +=
     devices *

@@ -18,9 +18,13 @@ export class PartsList {
 export function listParts(list: PartsList, design: Design): void {
   const { phases, stage } = design;
   list.length = 0;
-  put(list, 'highSwitch', design.high, phases * stage.highDevices * design.highParallel);
-  if (design.diode === undefined) put(list, 'lowSwitch', design.low, phases * stage.lowDevices * design.lowParallel);
-  else put(list, 'diode', design.diode, phases);
+  if (design.powerStage !== undefined) {
+    put(list, 'powerStage', design.powerStage, phases);
+  } else {
+    put(list, 'highSwitch', design.high, phases * stage.highDevices * design.highParallel);
+    if (design.diode === undefined) put(list, 'lowSwitch', design.low, phases * stage.lowDevices * design.lowParallel);
+    else put(list, 'diode', design.diode, phases);
+  }
   put(list, 'inductor', design.inductor, phases * stage.chokes);
   if (stage.form !== undefined) put(list, 'transformer', design.transformer, phases);
   put(list, 'outputCeramic', design.outputCeramic, design.outputCeramicCount);

@@ -258,7 +258,8 @@ function pulseShare(design: Design, state: StageState): number {
 
 function addController(solver: PointSolver, design: Design): void {
   const { controller } = design;
-  solver.ledger[SLOT['controller.quiescent']] += solver.state.inputVoltage * controller.quiescentCurrent;
+  const stages = design.powerStage === undefined ? 0 : solver.state.activePhases * design.powerStage.quiescentCurrent;
+  solver.ledger[SLOT['controller.quiescent']] += solver.state.inputVoltage * (controller.quiescentCurrent + stages);
 }
 
 function addCapacitors(solver: PointSolver, flavour: Flavour): void {

@@ -11,7 +11,7 @@ import { bad, type Finding, good, type Outcome } from './outcome.ts';
 import type { PartsTables } from './parts/tables.ts';
 import type { Architecture, Rail } from './rail/rail.ts';
 import { fromRecord, type RecordSpace, recordId, toRecord } from './record.ts';
-import { isWound, nearestRow, snapGenes } from './snap.ts';
+import { isPackaged, isWound, nearestRow, snapGenes } from './snap.ts';
 import type { Stage } from './stages/contract.ts';
 import { stageOf } from './stages/list.ts';
 
@@ -186,11 +186,15 @@ function recordSpace(problem: RailProblem): RecordSpace {
   const { catalogue, architectures } = problem;
   const low = (genes: Float64Array): boolean => usesLowSwitch(architectures[genes[GENE.architecture]]);
   const active = (genes: Float64Array, name: GeneName): boolean => {
-    if (name === 'lowSwitch' || name === 'lowParallel') return low(genes);
+    const packaged = isPackaged(genes, problem.genes, architectures[genes[GENE.architecture]]);
+    if (name === 'powerStage') return packaged;
+    if (name === 'highSwitch' || name === 'highParallel') return !packaged;
+    if (name === 'lowSwitch' || name === 'lowParallel') return low(genes) && !packaged;
     if (name === 'diode') return !low(genes);
     if (name === 'outputBulk') return genes[GENE.outputBulkCount] > 0;
     if (name === 'inputBulk') return genes[GENE.inputBulkCount] > 0;
     if (name === 'inductorSeries') return !isWound(genes, problem.genes);
+    if (name === 'legBuild') return false;
     if (name.startsWith('choke')) return name !== 'chokeBuild' && isWound(genes, problem.genes);
     if (TRANSFORMER.test(name)) return hasTransformer(architectures[genes[GENE.architecture]]);
     return true;

@@ -11,6 +11,7 @@ const SLOTS: readonly (readonly [GeneName, string])[] = [
   ['highSwitch', 'highSwitch'],
   ['lowSwitch', 'lowSwitch'],
   ['diode', 'diode'],
+  ['powerStage', 'powerStage'],
   ['inductorSeries', 'inductor'],
   ['controller', 'controller'],
   ['outputCeramic', 'outputCeramic'],
@@ -75,6 +76,7 @@ export function fromRecord(space: RecordSpace, record: DesignRecord, file: strin
     if ((NUMERIC_GENES as readonly string[]).includes(name)) genes[GENE[name as GeneName]] = value;
     else refuse(`genes.${name}`, String(value), NUMERIC_GENES.join(', '));
   }
+  if (record.parts.powerStage !== undefined) genes[GENE.legBuild] = space.genes[GENE.legBuild].high;
   const build = record.parts.chokeCore === undefined ? STOCKED : WOUND;
   genes[GENE.chokeBuild] = Math.max(0, space.genes[GENE.chokeBuild].options?.indexOf(build) ?? 0);
   for (const [slot, part] of Object.entries(record.parts)) readSlot(space, genes, slot, part, refuse);

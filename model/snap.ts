@@ -2,7 +2,7 @@
 import type { Gene } from '../optimizer/problem.ts';
 import type { Catalogue, InductorSeries } from './catalogue.ts';
 import { hasTransformer, usesLowSwitch } from './catalogue.ts';
-import { GENE, WOUND } from './genes.ts';
+import { GENE, PACKAGED, WOUND } from './genes.ts';
 import type { Architecture } from './rail/rail.ts';
 
 /** Powers of ten as literals: a computed one could differ in its last digit between engines. */
@@ -49,6 +49,13 @@ export function isWound(genes: Float64Array, list: readonly Gene[]): boolean {
   return list[GENE.chokeBuild].options?.[genes[GENE.chokeBuild]] === WOUND;
 }
 
+/** Whether the leg of snapped `genes` is a power stage: only a synchronous buck's can be. */
+export function isPackaged(genes: Float64Array, list: readonly Gene[], architecture: Architecture): boolean {
+  return architecture === 'buck-synchronous' && list[GENE.legBuild].options?.[genes[GENE.legBuild]] === PACKAGED;
+}
+
+const DISCRETE_GENES = [GENE.highSwitch, GENE.highParallel, GENE.lowSwitch, GENE.lowParallel];
+const LEG_GENES = [GENE.legBuild, GENE.powerStage];
 const CHOKE_GENES = [GENE.chokeCore, GENE.chokeMaterial, GENE.chokeTurns, GENE.chokeConductor];
 const TRANSFORMER_GENES = [
   GENE.transformerCore,
@@ -64,6 +71,8 @@ function reset(genes: Float64Array, list: readonly Gene[], places: readonly numb
 }
 
 function rest(genes: Float64Array, list: readonly Gene[], architecture: Architecture): void {
+  if (isPackaged(genes, list, architecture)) reset(genes, list, DISCRETE_GENES);
+  else reset(genes, list, LEG_GENES);
   if (usesLowSwitch(architecture)) {
     genes[GENE.diode] = list[GENE.diode].low;
   } else {

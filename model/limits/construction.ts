@@ -25,6 +25,7 @@ function judgeVoltages(e: Evaluator): void {
   const { form } = design.stage;
   const blocked = design.stage.lowBlocking(rail.input.maximum, design.transformer.ratio);
   book.judge(places.lowVoltage, form === undefined ? blocked : RINGING * blocked, low, low, -1);
+  if (design.powerStage !== undefined) return;
   judgeGate(e, design.high);
   if (design.diode === undefined) judgeGate(e, design.low);
 }

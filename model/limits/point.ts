@@ -83,9 +83,9 @@ function judgeOvershoot(e: Evaluator, planned: PlannedPoint, index: number): voi
   const { design, book, places } = e;
   const { state } = e.solver;
   if (design.stage.form !== undefined || !(state.peakCurrent > 0)) return;
-  const { high, highParallel, controller } = design;
+  const { high, highParallel, driver } = design;
   const capacitance = (highParallel * high.outputCharge) / high.outputTestVoltage;
-  const time = turnOffTime(high, highParallel, controller, state.peakCurrent);
+  const time = turnOffTime(high, highParallel, driver, state.peakCurrent);
   const ramp = (2 * LOOP_INDUCTANCE * state.peakCurrent) / time;
   const rise = Math.min(overshoot(state.peakCurrent, LOOP_INDUCTANCE, capacitance), ramp);
   book.judge(places.highVoltage, planned.inputVoltage + rise, high.voltageRating, high.voltageRating, index);

@@ -11,4 +11,5 @@ export const BUILT_IN_TABLES: readonly { readonly kind: PartKind; readonly file:
   { kind: 'cores', file: 'cores.csv' },
   { kind: 'materials', file: 'materials.csv' },
   { kind: 'conductors', file: 'conductors.csv' },
+  { kind: 'powerStages', file: 'power-stages.csv' },
 ];

@@ -26,6 +26,7 @@ export function joinTables(tables: readonly ReadTable[], currency?: string): Out
     cores: rowsOf(tables, 'cores'),
     materials: rowsOf(tables, 'materials'),
     conductors: rowsOf(tables, 'conductors'),
+    powerStages: rowsOf(tables, 'powerStages'),
   });
 }
 

@@ -8,6 +8,7 @@ import { CORE_SCHEMA } from './columns/cores.ts';
 import { DIODE_SCHEMA } from './columns/diodes.ts';
 import { INDUCTOR_SCHEMA } from './columns/inductors.ts';
 import { MATERIAL_SCHEMA } from './columns/materials.ts';
+import { POWER_STAGE_SCHEMA } from './columns/power-stages.ts';
 import { SWITCH_SCHEMA } from './columns/switches.ts';
 import type { PartKind, PartsTables } from './tables.ts';
 
@@ -25,6 +26,7 @@ export const SCHEMAS: { readonly [K in PartKind]: TableSchema<RowOf<K>> } = {
   cores: CORE_SCHEMA,
   materials: MATERIAL_SCHEMA,
   conductors: CONDUCTOR_SCHEMA,
+  powerStages: POWER_STAGE_SCHEMA,
 };
 
 /** Every kind, in the order of `PartsTables`. */
@@ -38,4 +40,5 @@ export const PART_KINDS: readonly PartKind[] = [
   'cores',
   'materials',
   'conductors',
+  'powerStages',
 ];

@@ -7,6 +7,7 @@ import type { Core } from './core.ts';
 import type { Diode } from './diode.ts';
 import type { Inductor } from './inductor.ts';
 import type { Material } from './material.ts';
+import type { PowerStage } from './power-stage.ts';
 import type { Switch } from './switch.ts';
 
 /** Rows of every kind; names are unique over all of them. */
@@ -20,6 +21,7 @@ export interface PartsTables {
   readonly cores: readonly Core[];
   readonly materials: readonly Material[];
   readonly conductors: readonly Conductor[];
+  readonly powerStages: readonly PowerStage[];
 }
 
 /** A kind of parts table. */

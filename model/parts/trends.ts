@@ -36,6 +36,7 @@ export const TRENDS: { readonly [K in PartKind]: readonly Trend<RowOf<K>>[] } = 
   cores: [],
   materials: [],
   conductors: [],
+  powerStages: [],
 };
 
 /** From this rating on silicon is superjunction, V. */

@@ -279,7 +279,7 @@ export function handMade(made: HandMade, rail: Rail): { problem: RailProblem; ge
 }
 
 /** Tables of kinds that a buck does not use. */
-const NO_OTHER_TABLES = { cores: [], materials: [], conductors: [] };
+const NO_OTHER_TABLES = { cores: [], materials: [], conductors: [], powerStages: [] };
 
 /** The whole story of a hand-made design. */
 export function assessMade(made: HandMade, rail: Rail): Assessment {

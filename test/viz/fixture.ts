@@ -154,6 +154,7 @@ function around(front: Front, everyone: readonly Assessment[]): Omit<PageData, '
       cores: [],
       materials: [],
       conductors: [],
+      powerStages: [],
     },
     history: Array.from({ length: 40 }, (_, epoch) => ({
       evaluations: (epoch + 1) * 6000,
