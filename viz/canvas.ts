@@ -9,6 +9,8 @@ const ROOM = 1.6;
 export interface CloudLayer {
   /** Draws all points for these scales; once a gesture. */
   draw(scales: TradeoffScales): void;
+  /** Draws the marks of `group` into the buffer too, so that a pan moves one bitmap and not thousands of shapes. */
+  carry(group: SVGGElement): void;
   /** Shows the drawn buffer moved by `dx`, `dy` (px) and scaled by `k` about the picture's corner. */
   shift(dx: number, dy: number, k: number): void;
 }
@@ -48,8 +50,61 @@ export function cloudLayer(canvas: HTMLCanvasElement, cloud: Cloud, axes: () => 
       if (brush !== null) fill(brush, buffer, cloud, scales, axes(), room);
       shift(0, 0, 1);
     },
+    carry: (group) => {
+      if (brush !== null) carryMarks(brush, group, room);
+    },
     shift,
   };
+}
+
+interface Ink {
+  readonly fill: string;
+  readonly stroke: string;
+  readonly width: number;
+}
+
+/** Paints the paths and circles of a drawing as the style shows them. */
+function carryMarks(
+  brush: CanvasRenderingContext2D,
+  group: SVGGElement,
+  room: { readonly x: number; readonly y: number },
+): void {
+  const inks = new Map<string, Ink>();
+  for (const shape of group.querySelectorAll<SVGGraphicsElement>('path, circle')) {
+    const key = `${shape.parentElement?.getAttribute('class')} ${shape.getAttribute('class')}`;
+    const ink = inks.get(key) ?? inkOf(shape);
+    inks.set(key, ink);
+    const [x = 0, y = 0] =
+      /translate\(([-\d.]+),([-\d.]+)/
+        .exec(shape.getAttribute('transform') ?? '')
+        ?.slice(1)
+        .map(Number) ?? [];
+    brush.setTransform(1, 0, 0, 1, x + room.x, y + room.y);
+    const outline = outlineOf(shape);
+    brush.fillStyle = ink.fill;
+    brush.strokeStyle = ink.stroke;
+    brush.lineWidth = ink.width;
+    if (ink.fill !== 'none') brush.fill(outline, 'evenodd');
+    if (ink.stroke !== 'none') brush.stroke(outline);
+  }
+  brush.setTransform(1, 0, 0, 1, 0, 0);
+}
+
+function inkOf(shape: SVGGraphicsElement): Ink {
+  const style = shape.ownerDocument.defaultView?.getComputedStyle(shape);
+  return {
+    fill: style?.fill ?? 'none',
+    stroke: style?.stroke ?? 'none',
+    width: Number.parseFloat(style?.strokeWidth ?? '1'),
+  };
+}
+
+function outlineOf(shape: SVGGraphicsElement): Path2D {
+  const number = (name: string) => Number(shape.getAttribute(name) ?? 0);
+  if (shape.localName === 'path') return new Path2D(shape.getAttribute('d') ?? '');
+  const outline = new Path2D();
+  outline.arc(number('cx'), number('cy'), number('r'), 0, 2 * Math.PI);
+  return outline;
 }
 
 /** Every point as a square of two pixels whose ink adds up where points meet. */

@@ -4,7 +4,7 @@ import { frontCsv, frontFile } from '../model/front-file.ts';
 import { describeFinding, type Finding } from '../model/outcome.ts';
 import { createRailProblem, type RailProblem } from '../model/problem.ts';
 import type { Rail } from '../model/rail/rail.ts';
-import { writeSpec } from '../model/spec.ts';
+import { writeSpec } from '../model/write-spec.ts';
 import type { Assessor, Movable, TakeAwayFile, Verdict } from './assessor.ts';
 import type { FrontDesign, PageData } from './data.ts';
 import { recordOf } from './scene.ts';

@@ -23,6 +23,7 @@ import { renderPrices } from './views/prices.ts';
 import { renderCount, renderRanges, shownQuantities } from './views/ranges.ts';
 import { renderTemperatures } from './views/temperatures.ts';
 import {
+  renderMovedMark,
   renderOverlay,
   renderTradeoff,
   smallTradeoff,
@@ -131,6 +132,13 @@ export function paintOverlay(
   const svg = placeOf(document, 'picture').select<SVGSVGElement>('svg') as unknown as Root<SVGSVGElement>;
   renderOverlay(svg, input, scales, options);
   paintPictureWords(document, bench, scene, input);
+}
+
+/** Only the moved design. */
+export function paintMoved(document: Document, bench: Bench, scene: Scene, scales: TradeoffScales): void {
+  const input = pictureInput(bench, scene, false);
+  const svg = placeOf(document, 'picture').select<SVGSVGElement>('svg') as unknown as Root<SVGSVGElement>;
+  if (input !== undefined) renderMovedMark(svg, input, scales);
 }
 
 function paintPictureWords(document: Document, bench: Bench, scene: Scene, input: TradeoffInput): void {
@@ -278,7 +286,7 @@ export function paintWhatIf(document: Document, bench: Bench, scene: Scene): voi
     { genes: bench.assessor.genes, own: bench.assessor.values(scene.own.value.design) },
     scene.state.changes,
   );
-  paintMovePicture(document, bench, scene);
+  if (document.documentElement.dataset.live === 'yes') paintMovePicture(document, bench, scene);
   renderMove(placeOf(document, 'move'), scene.own.value, scene.moved);
   placeOf(document, 'whatif')
     .select('[data-act=reset]')
@@ -298,7 +306,7 @@ export function paintMovePicture(document: Document, bench: Bench, scene: Scene)
     scene.state.ranges,
     scene.state.hidden,
   ]);
-  if (svg.attr('data-drawn') === key) renderOverlay(svg, input, tradeoffScales(input, smallTradeoff), smallTradeoff);
+  if (svg.attr('data-drawn') === key) renderMovedMark(svg, input, tradeoffScales(input, smallTradeoff));
   else {
     renderTradeoff(svg, input, smallTradeoff);
     svg.attr('data-drawn', key);

@@ -2,7 +2,7 @@
 import { Delaunay, select, type ZoomTransform, zoom, zoomIdentity } from 'd3';
 import { cloudLayer } from './canvas.ts';
 import type { Root } from './marks/root.ts';
-import { paintOverlay, paintPicture, pictureInput } from './paint.ts';
+import { paintMoved, paintOverlay, paintPicture, pictureInput } from './paint.ts';
 import type { Desk } from './start.ts';
 import { opened, togglePin } from './start.ts';
 import type { State } from './state.ts';
@@ -15,6 +15,8 @@ export interface Picture {
   redraw(): void;
   /** Only what follows the open, pinned and moved designs. */
   overlay(): void;
+  /** Only the moved design. */
+  moved(): void;
 }
 
 /** Widest distance from pointer to mark that still means the mark, px. */
@@ -69,6 +71,9 @@ export function attachPicture(document: Document, desk: Desk): Picture {
     redraw: draw,
     overlay: () => {
       if (scales !== undefined) paintOverlay(document, desk.bench, desk.scene(), scales, options);
+    },
+    moved: () => {
+      if (scales !== undefined) paintMoved(document, desk.bench, desk.scene(), scales);
     },
   };
 }
@@ -220,7 +225,12 @@ function preview(
         drawn.y.invert(px),
       ),
     );
-  root.select('g.plot-marks').attr('transform', `translate(${transform.x},${transform.y}) scale(${transform.k})`);
+  const marks = root.select<SVGGElement>('g.plot-marks');
+  const group = marks.node();
+  if (group !== null && marks.attr('display') === null) {
+    cloud.carry(group);
+    marks.attr('display', 'none');
+  }
   renderAxes(root, input, { x, y, frame: drawn.frame }, options);
   cloud.shift(transform.x, transform.y, transform.k);
 }
@@ -233,7 +243,10 @@ function settle(
   transform: ZoomTransform,
   reset: (selection: ReturnType<typeof select<SVGSVGElement, unknown>>, transform: ZoomTransform) => void,
 ): void {
-  if (drawn === undefined || (transform.k === 1 && transform.x === 0 && transform.y === 0)) return;
+  if (drawn === undefined || (transform.k === 1 && transform.x === 0 && transform.y === 0)) {
+    select(svg).select('g.plot-marks').attr('display', null);
+    return;
+  }
   const window = windowOf(drawn, transform);
   reset(select<SVGSVGElement, unknown>(svg), zoomIdentity);
   desk.set({ window });

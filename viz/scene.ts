@@ -71,20 +71,27 @@ function heaviest({ profile }: PageData['rail']): number {
   );
 }
 
-/** Works out `state`; `judge` may remember verdicts between states. */
-export function sceneOf(bench: Bench, state: State, judge = judgeBy(bench)): Scene {
+/** Works out `state`; `judge` may remember verdicts between states, and what `before` knows already is taken from it. */
+export function sceneOf(bench: Bench, state: State, judge = judgeBy(bench), before?: Scene): Scene {
   const open = bench.dataset.index.get(state.open);
   const design = open === undefined ? undefined : bench.dataset.designs[open];
   return {
     state,
-    kept: kept(bench.dataset, state),
+    kept: isSameChoice(before?.state, state) ? (before?.kept ?? []) : kept(bench.dataset, state),
     open,
     own: design === undefined ? undefined : judge(design, {}),
     moved: design === undefined || Object.keys(state.changes).length === 0 ? undefined : judge(design, state.changes),
-    alike:
-      open === undefined ? [] : indistinguishable(bench.known.objectives, bench.dataset.designs, open, bench.data.rail),
+    alike: before !== undefined && before.open === open ? before.alike : alikeOf(bench, open),
     pinned: state.pinned.flatMap((id) => bench.dataset.index.get(id) ?? []),
   };
+}
+
+function isSameChoice(a: State | undefined, b: State): boolean {
+  return a !== undefined && a.ranges === b.ranges && a.hidden === b.hidden;
+}
+
+function alikeOf({ data, dataset, known }: Bench, open: number | undefined): readonly number[] {
+  return open === undefined ? [] : indistinguishable(known.objectives, dataset.designs, open, data.rail);
 }
 
 export type Judge = (design: FrontDesign, changes: State['changes']) => Verdict;

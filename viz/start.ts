@@ -47,7 +47,7 @@ export function start(document: Document, data: PageData, assessor: Assessor): D
   const picture = attachPicture(document, desk);
   const show = (state: State, isOwn: boolean) => {
     const before = scene;
-    scene = sceneOf(bench, state, judge);
+    scene = sceneOf(bench, state, judge, before);
     repaint(document, bench, scene, changesBetween(before.state, state), picture);
     if (isOwn) remember(document, scene.state);
   };
@@ -56,6 +56,7 @@ export function start(document: Document, data: PageData, assessor: Assessor): D
     if (document.location.hash.slice(1) !== written) show(read(), false);
   });
   document.documentElement.dataset.live = 'yes';
+  document.defaultView?.requestAnimationFrame(() => paintWhatIf(document, bench, scene));
   return desk;
 }
 
@@ -80,7 +81,8 @@ function repaint(
 ): void {
   const has = (...names: Change[]) => names.some((name) => changed.has(name));
   if (has('axes', 'ranges')) picture.redraw();
-  else if (has('open', 'pinned', 'moved')) picture.overlay();
+  else if (has('open', 'pinned')) picture.overlay();
+  else if (has('moved')) picture.moved();
   if (has('ranges')) paintNarrow(document, bench, scene);
   if (has('open')) paintOpen(document, bench, scene);
   else if (has('pinned', 'ranges') && scene.own?.ok === true) paintOpenHead(document, bench, scene, scene.own.value);

@@ -104,7 +104,14 @@ export function renderOverlay(
   const over = clear(root.select<SVGGElement>('g.over') as unknown as Root<SVGGElement>);
   if (input.open !== undefined) band(under, input, input.open, scales);
   rings(over, input, scales, options);
-  if (input.changed !== undefined) change(over, input, input.changed, scales);
+  over.append('g').attr('class', 'move');
+  renderMovedMark(root, input, scales);
+}
+
+/** Redraws the moved design alone. */
+export function renderMovedMark(root: Root<SVGSVGElement>, input: TradeoffInput, scales: TradeoffScales): void {
+  const group = clear(root.select<SVGGElement>('g.move') as unknown as Root<SVGGElement>);
+  if (input.changed !== undefined) change(group, input, input.changed, scales);
 }
 
 /** Scales over the window, or over all designs with a little room around. */
