@@ -179,6 +179,11 @@ export function hasTransformer(architecture: Architecture): boolean {
   return !architecture.startsWith('buck');
 }
 
+/** Whether an architecture has four primary switches, so that its legs may be shifted against each other. */
+export function isFullBridge(architecture: Architecture): boolean {
+  return architecture.startsWith('full-bridge');
+}
+
 /** Switches that may rectify behind a transformer: from twice the output up to what a plain buck needs. */
 function rectifierSwitches(rail: Rail, rows: readonly Switch[]): readonly Switch[] {
   const least = (2 * rail.output.maximum) / rail.derating.switchVoltage;

@@ -49,6 +49,8 @@ export class Design {
   inputCeramicCount = 1;
   inputBulk: Bulk | undefined;
   inputBulkCount = 0;
+  /** Whether the legs of a full bridge are shifted against each other, so that they turn on at zero voltage. */
+  phaseShifted = false;
   /** The transformer of a phase; its fields mean nothing in a stage without one. */
   readonly transformer = new Transformer();
   readonly transformerChoice: TransformerChoice | undefined;
@@ -126,6 +128,7 @@ export function resolveDesign(
   design.inputBulkCount = genes[GENE.inputBulkCount];
   design.inputBulk = design.inputBulkCount > 0 ? catalogue.inputBulks[genes[GENE.inputBulk]] : undefined;
   const asked = rail.lightLoad !== 'forced-continuous';
+  design.phaseShifted = genes[GENE.bridgeControl] > 0;
   if (design.stage.windings !== undefined) resolveTransformer(design, genes, rail, catalogue, design.stage.windings);
   design.emulates = !design.stage.diode && asked && design.controller.diodeEmulation;
   design.sheds = rail.lightLoad === 'phase-shedding' && design.controller.phaseShedding && design.phases > 1;

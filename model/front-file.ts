@@ -39,6 +39,7 @@ const PART_SLOTS = [
   'highSwitch',
   'lowSwitch',
   'powerStage',
+  'bridgeControl',
   'diode',
   'inductor',
   'outputCeramic',

@@ -1,6 +1,6 @@
 /** The genes of a converter design: one fixed list, with the place of each by name. */
 import type { Gene } from '../optimizer/problem.ts';
-import type { Catalogue } from './catalogue.ts';
+import { type Catalogue, isFullBridge } from './catalogue.ts';
 import type { Part } from './parts/common.ts';
 import type { Rail } from './rail/rail.ts';
 
@@ -38,6 +38,7 @@ export const GENE_NAMES = [
   'secondaryConductor',
   'legBuild',
   'powerStage',
+  'bridgeControl',
 ] as const;
 export type GeneName = (typeof GENE_NAMES)[number];
 
@@ -48,6 +49,9 @@ export const WOUND = 'wound';
 /** Options of the gene `legBuild`. */
 export const DISCRETE = 'discrete';
 export const PACKAGED = 'power stage';
+
+/** Options of the gene `bridgeControl`. */
+export const BRIDGE_CONTROLS = ['hard-switched', 'phase-shifted'] as const;
 
 /** Most turns that a gene counts. */
 const MOST_CHOKE_TURNS = 60;
@@ -81,6 +85,7 @@ export const NAMED_GENES: readonly GeneName[] = [
   'secondaryConductor',
   'legBuild',
   'powerStage',
+  'bridgeControl',
 ];
 
 /** Genes with a number that a person reads, in the order of a record. */
@@ -143,6 +148,14 @@ export function createGenes(rail: Rail, catalogue: Catalogue): readonly Gene[] {
       'powerStage',
       catalogue.legs.map(({ stage }) => stage),
     ),
+    bridgeControl: {
+      name: 'bridgeControl',
+      unit: '',
+      kind: 'choice',
+      low: 0,
+      high: search.architectures.some(isFullBridge) ? BRIDGE_CONTROLS.length - 1 : 0,
+      options: BRIDGE_CONTROLS,
+    },
     chokeBuild: { name: 'chokeBuild', unit: '', kind: 'choice', ...buildOptions(catalogue) },
     chokeCore: ordered('chokeCore', catalogue.chokeCores),
     chokeMaterial: unordered('chokeMaterial', catalogue.chokeCores.length > 0 ? catalogue.materials : []),

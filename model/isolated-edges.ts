@@ -33,19 +33,43 @@ export function addIsolatedEdges(form: IsolatedForm, design: Design, state: Stag
 function addPrimary(form: IsolatedForm, design: Design, state: StageState, ledger: Float64Array, cycles: number): void {
   const { high, highParallel, driver } = design;
   const ratio = design.transformer.ratio;
-  const rest = 0.5 * state.inputVoltage;
   const on = state.valleyCurrent / ratio;
   const off = state.peakCurrent / ratio + state.magnetizingPeak;
   const devices = cycles * state.highDevices;
-  ledger[SLOT['highSwitch.overlap']] +=
-    devices *
-    (overlapOn(high, highParallel, driver, rest, on) + overlapOff(high, highParallel, driver, state.inputVoltage, off));
+  ledger[SLOT['highSwitch.overlap']] += devices * overlapOff(high, highParallel, driver, state.inputVoltage, off);
+  if (design.phaseShifted) {
+    addShiftedEdges(design, state, ledger, devices, off);
+    return;
+  }
+  const rest = 0.5 * state.inputVoltage;
+  ledger[SLOT['highSwitch.overlap']] += devices * overlapOn(high, highParallel, driver, rest, on);
   outputAt(high, rest, output);
   const charge = highParallel * output[OUTPUT_CHARGE];
   const energy = highParallel * output[OUTPUT_ENERGY];
   // A leg's partner is charged with each turn-on; a two-switch stage has clamp diodes there instead, far smaller.
   const edge = form.doubleEnded ? hardEdgeEnergy(charge, energy, energy, rest) : energy;
   ledger[SLOT['highSwitch.outputCharge']] += devices * edge;
+}
+
+/**
+ * Edges of a shifted bridge. The leading leg is moved by the choke's current and always arrives; the lagging one has only the
+ * leakage's energy, ½·L·I² against Q·V (Sabaté 1990), and pays for the part of the swing that is left. Half the devices each.
+ */
+function addShiftedEdges(
+  design: Design,
+  state: StageState,
+  ledger: Float64Array,
+  devices: number,
+  current: number,
+): void {
+  const { high, highParallel, transformer } = design;
+  outputAt(high, state.inputVoltage, output);
+  const charge = highParallel * output[OUTPUT_CHARGE];
+  const energy = highParallel * output[OUTPUT_ENERGY];
+  const stored = 0.5 * transformer.leakage * current * current;
+  const left = Math.max(0, 1 - stored / (charge * state.inputVoltage));
+  const edge = hardEdgeEnergy(charge, energy, energy, state.inputVoltage);
+  ledger[SLOT['highSwitch.outputCharge']] += 0.5 * devices * left * edge;
 }
 
 function addRectifiers(

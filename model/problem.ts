@@ -2,7 +2,7 @@
 import type { Families, Problem } from '../optimizer/problem.ts';
 import { assessDesign } from './assess.ts';
 import type { Assessment, DesignRecord } from './assessment.ts';
-import { type Catalogue, createCatalogue, hasTransformer, usesLowSwitch } from './catalogue.ts';
+import { type Catalogue, createCatalogue, hasTransformer, isFullBridge, usesLowSwitch } from './catalogue.ts';
 import { Evaluator, judgeDesign } from './evaluate.ts';
 import { createGenes, GENE, type GeneName, NUMERIC_GENES } from './genes.ts';
 import type { LimitDefinition } from './limits/book.ts';
@@ -188,6 +188,7 @@ function recordSpace(problem: RailProblem): RecordSpace {
   const active = (genes: Float64Array, name: GeneName): boolean => {
     const packaged = isPackaged(genes, problem.genes, architectures[genes[GENE.architecture]]);
     if (name === 'powerStage') return packaged;
+    if (name === 'bridgeControl') return isFullBridge(architectures[genes[GENE.architecture]]);
     if (name === 'highSwitch' || name === 'highParallel') return !packaged;
     if (name === 'lowSwitch' || name === 'lowParallel') return low(genes) && !packaged;
     if (name === 'diode') return !low(genes);

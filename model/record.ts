@@ -12,6 +12,7 @@ const SLOTS: readonly (readonly [GeneName, string])[] = [
   ['lowSwitch', 'lowSwitch'],
   ['diode', 'diode'],
   ['powerStage', 'powerStage'],
+  ['bridgeControl', 'bridgeControl'],
   ['inductorSeries', 'inductor'],
   ['controller', 'controller'],
   ['outputCeramic', 'outputCeramic'],

@@ -1,7 +1,7 @@
 /** Moves a gene vector onto the nearest buildable design, and gives genes that play no part one canonical value. */
 import type { Gene } from '../optimizer/problem.ts';
 import type { Catalogue, InductorSeries } from './catalogue.ts';
-import { hasTransformer, usesLowSwitch } from './catalogue.ts';
+import { hasTransformer, isFullBridge, usesLowSwitch } from './catalogue.ts';
 import { GENE, PACKAGED, WOUND } from './genes.ts';
 import type { Architecture } from './rail/rail.ts';
 
@@ -82,6 +82,7 @@ function rest(genes: Float64Array, list: readonly Gene[], architecture: Architec
   if (isWound(genes, list)) genes[GENE.inductorSeries] = list[GENE.inductorSeries].low;
   else reset(genes, list, CHOKE_GENES);
   if (!hasTransformer(architecture)) reset(genes, list, TRANSFORMER_GENES);
+  if (!isFullBridge(architecture)) genes[GENE.bridgeControl] = 0;
   if (genes[GENE.outputBulkCount] === 0) genes[GENE.outputBulk] = list[GENE.outputBulk].low;
   if (genes[GENE.inputBulkCount] === 0) genes[GENE.inputBulk] = list[GENE.inputBulk].low;
 }

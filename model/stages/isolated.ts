@@ -50,7 +50,7 @@ export function solveIsolated(form: IsolatedForm, design: Design, state: StageSt
   solveBentChoke(design, state, steady);
   applyForward(steady, state);
   state.effectiveInductance = steady.inductance;
-  writeCurrents(form, transformer, state, chokes);
+  writeCurrents(form, transformer, state, chokes, design.phaseShifted);
   writeFlux(form, design, transformer, state, current);
 }
 
@@ -73,13 +73,15 @@ function voltages(form: IsolatedForm, t: Transformer, state: StageState, phaseCu
 }
 
 /** Moments of every current of one phase, and the waveforms of choke and input. */
-function writeCurrents(form: IsolatedForm, t: Transformer, state: StageState, chokes: number): void {
+function writeCurrents(form: IsolatedForm, t: Transformer, state: StageState, chokes: number, shifted: boolean): void {
   const { valleyCurrent: a, peakCurrent: b, highShare: h, lowShare: l } = state;
   const square = (a * a + a * b + b * b) / 3;
   const n2 = t.ratio * t.ratio;
   // Share of the switching period in which the primary carries a pulse.
   const driven = form.doubler ? 2 * h : h;
-  state.primaryMeanSquare = (driven * square) / n2;
+  // Legs that are shifted keep the primary shorted between pulses, so its current goes on through two switches.
+  const carried = shifted ? (form.doubler ? 1 : h + l) : driven;
+  state.primaryMeanSquare = (carried * square) / n2;
   state.highMeanSquare = form.doubleEnded ? 0.5 * state.primaryMeanSquare : state.primaryMeanSquare;
   if (form.doubler) {
     state.secondaryMeanSquare = driven * square;
@@ -127,7 +129,8 @@ function writeFlux(form: IsolatedForm, design: Design, t: Transformer, state: St
   state.fluxRamp = on;
   const swing = voltSeconds / t.magnetizing;
   state.magnetizingPeak = form.doubleEnded ? 0.5 * swing : swing;
-  const edges = form.doubleEnded ? 2 : 1;
+  // Sabaté 1990: a shifted bridge turns its current round through the whole swing, a hard-switched one from rest.
+  const edges = design.phaseShifted ? 4 : form.doubleEnded ? 2 : 1;
   state.lostDuty = (edges * t.leakage * design.frequency * current) / (t.ratio * volts);
   state.rectifierVoltage = rectifierVoltage(form, state.inputVoltage, t.ratio);
 }
