@@ -23,6 +23,11 @@ export class Neighbourhood {
     this.scale = inverseRanges(points, n, m);
   }
 
+  /** Whether the nearest of the point are at hand. */
+  knows(point: number): boolean {
+    return this.neighbours.has(point);
+  }
+
   /** The points nearest to `point`, nearest first, worked out once. */
   of(point: number): Int32Array {
     const known = this.neighbours.get(point);

@@ -12,6 +12,8 @@ const AFFECTED = 10;
 const SCATTERED = 8;
 /** Candidates tried anywhere, the most promising first. */
 const FAR = 40;
+/** Looking at 2^LOOK points costs about as much as measuring one contribution. */
+const LOOK = 8;
 /** An exchange must gain more than this part of what it replaces, or rounding could keep it going for ever. */
 const LEAST_GAIN = 1e-9;
 
@@ -153,13 +155,14 @@ class ExchangeSearch {
       this.add(point);
       this.mark(point);
     }
-    this.left -= 2 * count;
+    this.left -= 2 * count + (this.n >> LOOK);
     this.markAround(centre);
   }
 
   /** Puts the best of the nearest candidates in the place of `point`, if one adds more than it. Returns who stands there now. */
   private replaceByBest(point: number): number {
     const { set, chosen } = this;
+    if (!this.neighbourhood.knows(point)) this.left -= this.n >> LOOK;
     const candidates = this.neighbourhood.of(point);
     this.left -= candidates.length + 1;
     this.remove(point);
