@@ -76,7 +76,6 @@ function prepare(e: Evaluator, genes: Float64Array): void {
   prepareFlavour(e.worst, design, e.rail);
   assemble(e.assembly, design, e.rail.quantity);
   e.book.clear();
-  e.solver.warm = false;
 }
 
 /** Judges the worst points on the bare board, and again with the heat sink where any of them needs one. */
@@ -92,6 +91,8 @@ function judgeAllWorst(e: Evaluator, listener?: PointListener): void {
 
 /** Judges every worst point; returns the conductance of the heat sink that they would still need, W/K. */
 function judgeWorst(e: Evaluator, listener?: PointListener): number {
+  // Every pass starts cold: what came before it must not show in its last digits.
+  e.solver.warm = false;
   e.solver.wantsRipple = true;
   const points = e.plan.worst;
   const from = e.plan.usual.length;
@@ -127,6 +128,7 @@ function sumUsual(e: Evaluator, listener?: PointListener): void {
   weighted.fill(0);
   e.loss = 0;
   e.inflow = 0;
+  solver.warm = false;
   for (let i = 0; i < e.plan.usual.length; i++) {
     const planned = e.plan.usual[i];
     solver.wantsRipple = listener !== undefined;
