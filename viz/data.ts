@@ -24,6 +24,8 @@ export interface RunRecord {
   readonly feasibleShare: number;
   /** Hypervolume of the archive as a share of the box between ideal and reference, 0 … 1. */
   readonly hypervolume: number;
+  /** Hypervolume of each island's own members over the whole's, 0 … 1; absent where islands are not known apart. */
+  readonly agreement?: readonly number[];
   readonly version: string;
   readonly railHash: string;
   readonly partsHash: string;

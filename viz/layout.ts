@@ -55,7 +55,7 @@ export function layout(): string {
 <details id="picture-numbers" class="numbers"><summary>Designs as a table</summary><div class="scroll" tabindex="0" role="region" aria-label="Designs as a table"></div></details>
 </div>
 <div id="narrow" class="card">
-<div class="card-head"><h2>Narrow down</h2><button type="button" class="quiet" data-act="clear" disabled>Clear</button></div>
+<div class="card-head"><h2>Ranges</h2><button type="button" class="quiet" data-act="clear" disabled>Clear</button></div>
 <p id="count" class="count" role="status" aria-live="polite"></p>
 <div id="ranges"></div>
 <div class="adder"><label for="add-range">Another range</label><select id="add-range"></select></div>

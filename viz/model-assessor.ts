@@ -12,6 +12,9 @@ import { recordOf } from './scene.ts';
 /** Slot of a record in which a named gene's part stands, where it is not the gene's own name. */
 const SLOTS: Readonly<Record<string, string>> = { inductorSeries: 'inductor' };
 
+/** Named choices that are no part but decide which parts there are. */
+const STRUCTURE: readonly string[] = ['architecture', 'chokeBuild', 'legBuild'];
+
 /** An assessor over the page's own rail and tables, or over none where they give no space. */
 export function modelAssessor(data: Pick<PageData, 'rail' | 'tables' | 'front'>): Assessor {
   const own = createRailProblem(data.rail, data.tables);
@@ -71,7 +74,7 @@ function valuesOf(problem: RailProblem, design: DesignRecord): Readonly<Record<s
   const entries = problem.genes.flatMap((gene, i): [string, number | string][] => {
     const value = genes.value[i] ?? 0;
     if (gene.options === undefined) return gene.name in design.genes ? [[gene.name, value]] : [];
-    const isPart = (SLOTS[gene.name] ?? gene.name) in design.parts || gene.name === 'architecture';
+    const isPart = (SLOTS[gene.name] ?? gene.name) in design.parts || STRUCTURE.includes(gene.name);
     return isPart ? [[gene.name, gene.options[value] ?? '']] : [];
   });
   return Object.fromEntries(entries);

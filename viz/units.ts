@@ -82,6 +82,12 @@ export function percent(fraction: number, places = 1): string {
   return Number.isFinite(fraction) ? `${minus((fraction * 100).toFixed(places))}\u00a0%` : 'none';
 }
 
+/** A margin as a fraction, in percent: what would round to nothing says so. */
+export function marginPercent(fraction: number): string {
+  if (fraction > 0 && fraction < 0.0005) return 'under\u00a00.1\u00a0%';
+  return percent(fraction);
+}
+
 /** Three significant digits without exponent; whole numbers of at most four digits stay whole. */
 export function digits(value: number): string {
   if (value === 0) return '0';

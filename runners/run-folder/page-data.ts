@@ -41,7 +41,13 @@ function pageRun(record: RunRecord): PageRun {
   const { version, railHash, partsHash } = record;
   const built = new Date().toISOString();
   const counts = { evaluations, epochs, seconds, threads, feasibleShare, hypervolume };
-  return { status, seed, ...counts, version, railHash, partsHash, built };
+  return { status, seed, ...counts, ...agreementOf(record), version, railHash, partsHash, built };
+}
+
+/** Each island's own share of the whole hypervolume, where the search recorded it. */
+function agreementOf({ trust }: RunRecord): Pick<PageRun, 'agreement'> {
+  const list = Array.isArray(trust.agreement) ? trust.agreement.filter((one) => typeof one === 'number') : [];
+  return list.length > 1 ? { agreement: list } : {};
 }
 
 /** Most points behind the front. */

@@ -138,6 +138,7 @@ function around(front: Front, everyone: readonly Assessment[]): Omit<PageData, '
       threads: 2,
       feasibleShare: 0.31,
       hypervolume: 0.6612,
+      agreement: [0.9992, 0.9987, 0.9971, 0.9995],
       version: '0.1.0',
       railHash: 'a3f1c09d2b',
       partsHash: '77e0b1445c',

@@ -2,7 +2,7 @@
 import type { Assessment } from '../../model/assessment.ts';
 import { counted, spoken } from '../labels.ts';
 import { clear, type Root } from '../marks/root.ts';
-import { percent, show } from '../units.ts';
+import { marginPercent, percent, show } from '../units.ts';
 import { familyMark, familyName } from './legend.ts';
 
 export interface OpenInput {
@@ -62,7 +62,7 @@ function figures<E extends Element>(root: Root<E>, design: Assessment): void {
 }
 
 function remarks(input: OpenInput): string {
-  const words = [`Tightest margin ${percent(input.design.worstMargin)}.`];
+  const words = [`Tightest margin ${marginPercent(input.design.worstMargin)}.`];
   if (input.alike > 0)
     words.push(
       `Within the model’s error ${counted(input.alike, 'other design')} ${input.alike === 1 ? 'is' : 'are'} as good.`,

@@ -243,8 +243,8 @@ function rings(plot: Root<SVGGElement>, input: TradeoffInput, { x, y }: Tradeoff
       .append('text')
       .attr('class', 'pin-letter')
       .attr('transform', at(i))
-      .attr('dx', 11)
-      .attr('dy', -7)
+      .attr('dx', rank % 4 < 2 ? 10 : -19)
+      .attr('dy', rank % 2 === 0 ? -8 : 17)
       .text(letter(rank));
   });
   if (input.open !== undefined) crosshair(plot, input, input.open, { x, y, frame: o });

@@ -62,9 +62,11 @@ export function verdicts(run: RunRecord, history: readonly HistoryRow[], settled
         : `Still growing: the last fifth of the search moved the front by ${percent(grown, 2)}; a longer sweep will find more.`,
     );
   }
-  if (last.islands.length > 1) {
-    const spread = (Math.max(...last.islands) - Math.min(...last.islands)) / Math.max(...last.islands);
-    words.push(`${last.islands.length} islands searched apart and end within ${percent(spread, 1)} of each other.`);
+  const islands = run.agreement ?? last.islands.map((own) => own / Math.max(...last.islands, 1e-300));
+  if (islands.length > 1) {
+    words.push(
+      `${islands.length} islands searched apart; the weakest alone holds ${percent(Math.min(...islands), 2)} of ${run.agreement === undefined ? 'the best' : 'the whole'}.`,
+    );
   }
   return words;
 }

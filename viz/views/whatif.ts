@@ -4,7 +4,7 @@ import type { Rail } from '../../model/rail/rail.ts';
 import type { Movable, Verdict } from '../assessor.ts';
 import { titled } from '../labels.ts';
 import { clear, type Root } from '../marks/root.ts';
-import { digits, percent, show, showDifference } from '../units.ts';
+import { digits, marginPercent, percent, show, showDifference } from '../units.ts';
 import { type DesignKnob, designKnobs, type RailKnob, railKnobs } from '../whatif.ts';
 import { brokenLimits } from './limits.ts';
 
@@ -72,7 +72,7 @@ function control(row: HTMLDivElement, knob: DesignKnob | RailKnob, steps: number
   for (const option of options ?? []) {
     const item = row.ownerDocument.createElement('option');
     item.value = option;
-    item.textContent = option;
+    item.textContent = knob.name === 'architecture' ? titled(option) : option;
     made.append(item);
   }
   row.append(made);
@@ -166,7 +166,7 @@ export function renderMove<E extends Element>(root: Root<E>, own: Assessment, mo
   verdict.text(
     broken.length > 0
       ? `Breaks ${broken.length === 1 ? 'one limit' : `${digits(broken.length)} limits`}`
-      : `Keeps every limit; tightest margin ${percent(moved.value.worstMargin)}.`,
+      : `Keeps every limit; tightest margin ${marginPercent(moved.value.worstMargin)}.`,
   );
   const list = root.append('ul').attr('class', 'broken');
   for (const sentence of broken) list.append('li').text(sentence);
