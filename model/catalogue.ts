@@ -36,6 +36,8 @@ export interface Catalogue {
   readonly legs: readonly Leg[];
   /** By rising volume. */
   readonly inductorSeries: readonly InductorSeries[];
+  /** Every usable stocked inductor by rising volume, for the input filter; empty unless the sheet limits the source's ripple. */
+  readonly filterChokes: readonly Inductor[];
   /** By rising effective capacitance at the output's bias. */
   readonly outputCeramics: readonly Ceramic[];
   readonly outputBulks: readonly Bulk[];
@@ -76,6 +78,8 @@ export function createCatalogue(rail: Rail, tables: PartsTables): Outcome<Catalo
     ),
     legs: legsFor(rail, tables),
     inductorSeries: inductorSeries(rail, tables.inductors),
+    filterChokes:
+      rail.input.sourceRipple === undefined ? [] : sortBy(usable(rail, tables.inductors), (row) => boxVolume(row)),
     outputCeramics: ceramicsFor(rail, tables.ceramics, rail.output.maximum),
     outputBulks: bulksFor(rail, tables.bulks, rail.output.maximum),
     inputCeramics: ceramicsFor(rail, tables.ceramics, rail.input.maximum),

@@ -49,6 +49,8 @@ export class Design {
   inputCeramicCount = 1;
   inputBulk: Bulk | undefined;
   inputBulkCount = 0;
+  /** The input filter's choke, chosen once the design's worst input ripple is known; absent where none is needed. */
+  filterChoke: Inductor | undefined;
   /** Whether the legs of a full bridge are shifted against each other, so that they turn on at zero voltage. */
   phaseShifted = false;
   /** The transformer of a phase; its fields mean nothing in a stage without one. */

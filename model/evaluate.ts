@@ -4,9 +4,18 @@
  */
 import { Assembly, assemble } from './assembly.ts';
 import type { Catalogue } from './catalogue.ts';
+import { filterImpedanceLimit } from './control/index.ts';
 import { Design, resolveDesign } from './design.ts';
 import { Flavour, prepareFlavour } from './flavour.ts';
 import { boardConductance, sinkCost, sinkMass, sinkVolume } from './heat/index.ts';
+import {
+  chooseFilterChoke,
+  filterCurrent,
+  filterInductance,
+  peakSourceImpedance,
+  sourceInductance,
+  sourceResistance,
+} from './input-filter.ts';
 import { LOSS_SLOTS } from './ledger.ts';
 import { LimitBook } from './limits/book.ts';
 import { judgeConstruction } from './limits/construction.ts';
@@ -40,6 +49,10 @@ export class Evaluator {
   readonly weighted = new Float64Array(LOSS_SLOTS.length);
   /** Conductance of the heat sink of the design at hand, W/K; 0 without one. */
   sink = 0.5;
+  /** Inductance that the worst ripple so far asks of source and filter together, H. */
+  filterNeed = 0.5;
+  /** Input current that a filter choke carries, A. */
+  readonly filterCurrent: number;
   /** W, profile-weighted loss and power that flows in. */
   loss = 0.5;
   inflow = 0.5;
@@ -55,6 +68,7 @@ export class Evaluator {
     this.places = limitPlaces(this.book, rail);
     this.design = new Design(rail, catalogue, stages);
     this.solver = new PointSolver(rail);
+    this.filterCurrent = filterCurrent(rail);
     this.bareBoard = boardConductance(rail.coolingArea, rail.airSpeed);
   }
 }
@@ -64,6 +78,7 @@ export function judgeDesign(e: Evaluator, genes: Float64Array, listener?: PointL
   prepare(e, genes);
   judgeAllWorst(e, listener);
   judgeBetween(e);
+  addFilter(e);
   sumUsual(e, listener);
   addSink(e);
   judgeConstruction(e);
@@ -72,6 +87,8 @@ export function judgeDesign(e: Evaluator, genes: Float64Array, listener?: PointL
 function prepare(e: Evaluator, genes: Float64Array): void {
   const { design } = e;
   resolveDesign(design, genes, e.rail, e.catalogue, e.stages);
+  design.filterChoke = undefined;
+  e.filterNeed = 0;
   prepareFlavour(e.usual, design, e.rail);
   prepareFlavour(e.worst, design, e.rail);
   assemble(e.assembly, design, e.rail.quantity);
@@ -101,6 +118,7 @@ function judgeWorst(e: Evaluator, listener?: PointListener): number {
     solveActive(e, e.worst, points[i]);
     judgePoint(e, points[i], from + i);
     needed = Math.max(needed, e.solver.heat.sinkNeeded);
+    noteRipple(e);
     listener?.(e.solver, points[i], from + i);
   }
   return needed;
@@ -120,6 +138,30 @@ function judgeBetween(e: Evaluator): void {
       judgeRipple(e);
     }
   }
+}
+
+/** Notes what the input ripple of the solved point asks of the filter. */
+function noteRipple(e: Evaluator): void {
+  const allowed = e.rail.input.sourceRipple;
+  if (allowed === undefined) return;
+  const frequency = 1 / e.solver.drawn.period;
+  e.filterNeed = Math.max(e.filterNeed, filterInductance(e.solver.inputRipple.ripple, frequency, allowed));
+}
+
+/** Chooses the filter choke, adds it to the construction, and judges the filter before the converter's negative resistance. */
+function addFilter(e: Evaluator): void {
+  const { design, rail, book, places } = e;
+  const missing = e.filterNeed - rail.input.sourceInductance;
+  if (missing > 0) {
+    design.filterChoke = chooseFilterChoke(e.catalogue.filterChokes, missing, e.filterCurrent);
+    book.judge(places.filterChoke, design.filterChoke === undefined ? 0 : 1, 1, 1, -1);
+    assemble(e.assembly, design, rail.quantity);
+  }
+  const inductance = sourceInductance(design, rail);
+  if (!(inductance > 0)) return;
+  const peak = peakSourceImpedance(sourceResistance(design, rail), inductance, e.worst.input);
+  const allowed = filterImpedanceLimit(rail.input.minimum, rail.input.minimum * e.filterCurrent);
+  book.judge(places.filterDamping, peak, allowed, allowed, -1);
 }
 
 /** Sums the profile at nominal input with usual values. */

@@ -31,6 +31,7 @@ export function listParts(list: PartsList, design: Design): void {
   if (design.outputBulk !== undefined) put(list, 'outputBulk', design.outputBulk, design.outputBulkCount);
   put(list, 'inputCeramic', design.inputCeramic, design.inputCeramicCount);
   if (design.inputBulk !== undefined) put(list, 'inputBulk', design.inputBulk, design.inputBulkCount);
+  if (design.filterChoke !== undefined) put(list, 'filterChoke', design.filterChoke, 1);
   put(list, 'controller', design.controller, 1);
 }
 

@@ -14,8 +14,10 @@ import {
   RIPPLE_HARMONICS,
   stockedCoreLossAt,
   triangleLoss,
+  windingResistance,
 } from './magnetics/index.ts';
 import type { Bulk } from './parts/bulk.ts';
+import type { Inductor } from './parts/inductor.ts';
 import type { PlannedPoint } from './plan.ts';
 import type { Rail } from './rail/rail.ts';
 import { StageState } from './stages/state.ts';
@@ -97,6 +99,7 @@ export function solvePoint(
     if (design.stage.form !== undefined) addTransformerCore(design, state, solver.ledger);
     addController(solver, design);
     if (round === rounds - 1) addCapacitors(solver, flavour);
+    if (design.filterChoke !== undefined) addFilterChoke(solver, design.filterChoke);
     balance(solver, design);
   }
   solver.warm = true;
@@ -260,6 +263,14 @@ function addController(solver: PointSolver, design: Design): void {
   const { controller } = design;
   const stages = design.powerStage === undefined ? 0 : solver.state.activePhases * design.powerStage.quiescentCurrent;
   solver.ledger[SLOT['controller.quiescent']] += solver.state.inputVoltage * (controller.quiescentCurrent + stages);
+}
+
+/** Loss of the input filter's choke: dc alone, for its ripple is what the filter leaves. */
+function addFilterChoke(solver: PointSolver, choke: Inductor): void {
+  const { state, ledger } = solver;
+  const current = state.activePhases * state.highMean;
+  const hot = windingResistance(choke.dcResistance, state.boardTemperature);
+  ledger[SLOT['filterChoke.winding']] += current * current * hot;
 }
 
 function addCapacitors(solver: PointSolver, flavour: Flavour): void {

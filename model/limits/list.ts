@@ -26,6 +26,8 @@ const least = (name: string, unit: string, when: (rail: Rail) => boolean = alway
 const OFFERS: readonly Offer[] = [
   most('outputRipple', 'V'),
   most('inputRipple', 'V', (rail) => rail.input.ripple !== undefined),
+  { ...least('filterChoke', '', (rail) => rail.input.sourceRipple !== undefined), whole: true },
+  most('filterDamping', 'Ω', (rail) => rail.input.sourceInductance > 0 || rail.input.sourceRipple !== undefined),
   most('loadStep', 'V', (rail) => rail.step !== undefined),
   most('highJunction', 'K'),
   most('lowJunction', 'K'),

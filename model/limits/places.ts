@@ -6,6 +6,8 @@ import { efficiencyLimitName } from './list.ts';
 const NAMES = [
   'outputRipple',
   'inputRipple',
+  'filterChoke',
+  'filterDamping',
   'loadStep',
   'highJunction',
   'lowJunction',

@@ -35,7 +35,7 @@ export function toroidParameters(outerDiameter: number, innerDiameter: number, h
  * Effective permeability of a core: AL·le/(µ0·Ae). `inductanceFactor` AL in H, `length` le m, `area` Ae m².
  * @source iec-60205, inductance factor
  * @valid closed or gapped cores
- * @example effectivePermeability(2.35e-6, 0.072, 7.6e-5) = 1771.7
+ * @example effectivePermeability(2.35e-6, 0.072, 7.6e-5) = 1771.6
  */
 export function effectivePermeability(inductanceFactor: number, length: number, area: number): number {
   return (inductanceFactor * length) / (MU0 * area);

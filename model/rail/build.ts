@@ -17,6 +17,7 @@ export function buildRail(sheet: Sheet): Rail {
       sourceResistance: input.source.resistance,
       sourceInductance: input.source.inductance,
       ...(input.ripple === undefined ? {} : { ripple: input.ripple }),
+      ...(input['source-ripple'] === undefined ? {} : { sourceRipple: input['source-ripple'] }),
       takesPower: input['takes-power'],
     },
     output: { ...range(output.voltage), current: output.current, ripple: output.ripple, battery: output.battery },

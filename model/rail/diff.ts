@@ -10,6 +10,7 @@ const UNITS: Readonly<Record<string, string>> = {
   'input.sourceResistance': 'Ω',
   'input.sourceInductance': 'H',
   'input.ripple': 'V',
+  'input.sourceRipple': 'A',
   'output.minimum': 'V',
   'output.nominal': 'V',
   'output.maximum': 'V',

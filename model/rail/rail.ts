@@ -156,6 +156,8 @@ export interface Rail {
     readonly sourceInductance: number;
     /** Largest peak-to-peak voltage ripple at the input terminals, V; absent where none is asked. */
     readonly ripple?: number;
+    /** Largest ripple current that may flow in the source, A peak to peak; a filter choke is added where it asks for one. */
+    readonly sourceRipple?: number;
     /** Whether the source can take power back. */
     readonly takesPower: boolean;
   };

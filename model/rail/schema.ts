@@ -79,6 +79,7 @@ export const SHEET = keyed({
       inductance: amount('inductance', { from: 0, to: 1e-3 }),
     }),
     ripple: upTo('voltage', MOST_VOLTS).optional(),
+    'source-ripple': upTo('current', MOST_AMPERES).optional(),
     'takes-power': yesNo(),
   }),
   output: keyed({

@@ -20,6 +20,7 @@ input:
   voltage: {min: 18 V, nominal: 24 V, max: 32 V}   # or one value, such as 24 V
   source: {resistance: 10 mΩ, inductance: 0.5 µH}  # cable and supply; they decide what the input capacitors must do
   # ripple: 300 mV       # largest peak-to-peak ripple at the input terminals
+  # source-ripple: 50 mA # largest peak-to-peak ripple current in the source; asks for a filter choke
   takes-power: no        # yes where the source can take power back
 
 output:

@@ -1,0 +1,88 @@
+/**
+ * The input filter: the choke that keeps ripple current out of the source, chosen from the stocked inductors once the worst
+ * ripple of a design is known, and whether filter and source together stay stable before the converter's negative resistance.
+ */
+import type { Bank } from './capacitors/index.ts';
+import type { Design } from './design.ts';
+import type { Inductor } from './parts/inductor.ts';
+import type { Rail } from './rail/rail.ts';
+
+/** Efficiency assumed for the input current that a choke must carry. */
+const EFFICIENCY = 0.9;
+/** Points at which the impedance is looked at, and the span of frequency around the corner that they cover. */
+const POINTS = 33;
+const SPAN = 8;
+
+/**
+ * Inductance, H, that lets `allowed` A peak to peak of a bank ripple of `ripple` V peak to peak at `frequency` Hz into the source:
+ * V/(2π·f·I), the whole ripple taken as its fundamental.
+ * @derivation impedance of an inductor at the fundamental; higher harmonics see more
+ * @valid source impedance small at the ripple frequency
+ * @example filterInductance(0.1, 500000, 0.01) = 3.1830989e-6
+ */
+export function filterInductance(ripple: number, frequency: number, allowed: number): number {
+  return ripple / (2 * Math.PI * frequency * allowed);
+}
+
+/** Input current that a filter choke of `rail` carries at full load and lowest input, A. */
+export function filterCurrent(rail: Rail): number {
+  return (rail.output.maximum * rail.output.current) / (EFFICIENCY * rail.input.minimum);
+}
+
+/** The smallest of `rows` (by rising volume) that holds `inductance` (H) at its low tolerance and carries `current` (A). */
+export function chooseFilterChoke(
+  rows: readonly Inductor[],
+  inductance: number,
+  current: number,
+): Inductor | undefined {
+  for (const row of rows) {
+    const holds = row.inductance * (1 - row.tolerance) >= inductance;
+    if (holds && row.ratedCurrent >= current && row.saturationCurrent >= 1.2 * current) return row;
+  }
+  return undefined;
+}
+
+/**
+ * Largest impedance, Ω, that source, filter choke and input bank show the converter: |(R + jωL) ‖ bank| over frequencies about the
+ * corner. `resistance` Ω and `inductance` H of source and choke together.
+ * @source middlebrook-1976
+ * @valid inductance above 0
+ */
+export function peakSourceImpedance(resistance: number, inductance: number, bank: Bank): number {
+  const corner = 1 / Math.sqrt(inductance * (bank.c1 + bank.c2));
+  let most = 0;
+  for (let i = 0; i < POINTS; i++) {
+    const omega = corner * (1 / SPAN + (i / (POINTS - 1)) * (SPAN - 1 / SPAN));
+    most = Math.max(most, impedanceSquare(resistance, inductance, bank, omega));
+  }
+  return Math.sqrt(most);
+}
+
+/** |Z|² at `omega` (rad/s): admittances of the source branch and of both capacitor groups add. */
+function impedanceSquare(resistance: number, inductance: number, bank: Bank, omega: number): number {
+  const x = omega * inductance;
+  const source = resistance * resistance + x * x;
+  let re = resistance / source;
+  let im = -x / source;
+  const x1 = -1 / (omega * bank.c1);
+  const z1 = bank.r1 * bank.r1 + x1 * x1;
+  re += bank.r1 / z1;
+  im -= x1 / z1;
+  if (bank.c2 > 0) {
+    const x2 = -1 / (omega * bank.c2);
+    const z2 = bank.r2 * bank.r2 + x2 * x2;
+    re += bank.r2 / z2;
+    im -= x2 / z2;
+  }
+  return 1 / (re * re + im * im);
+}
+
+/** Resistance (Ω) and inductance (H) between an ideal source and the input bank of `design`. */
+export function sourceResistance(design: Design, rail: Rail): number {
+  return rail.input.sourceResistance + (design.filterChoke?.dcResistance ?? 0);
+}
+
+/** See `sourceResistance`. */
+export function sourceInductance(design: Design, rail: Rail): number {
+  return rail.input.sourceInductance + (design.filterChoke?.inductance ?? 0);
+}
