@@ -31,7 +31,7 @@ export function renderEfficiency<E extends Element>(
     ...curves.flatMap((curve) => curve.efficiency.filter((_, i) => Math.abs(curve.load[i] ?? 0) >= 0.1)),
     0.95,
   );
-  const loads = curves.flatMap((curve) => curve.load);
+  const loads = [...curves.flatMap((curve) => curve.load), ...rail.profile.map((point) => point.fraction)];
   const x = scaleLinear()
     .domain([Math.min(0, ...loads), Math.max(1, ...loads)])
     .range([o.left, o.width - o.right]);

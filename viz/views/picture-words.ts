@@ -38,6 +38,7 @@ export function pictureNote(input: TradeoffInput): string {
   }
   if (input.open !== undefined)
     words.push(`Tinted box: the model’s own error around the open design; ${alikeWords(input)}.`);
+  if (input.incumbents.length > 0) words.push('Dashed ring: a design that exists already.');
   if (input.dataset.designs.length > 0) words.push('Grey: further designs that the search kept.');
   return words.join(' ');
 }

@@ -41,7 +41,7 @@ export const tradeoffDefaults = {
   bottom: 42,
   /** Radius of a mark, px; with a third quantity as size, from the smallest to the largest. */
   radius: 4,
-  smallest: 2.5,
+  smallest: 2.9,
   largest: 6.6,
   ticks: 8,
   /** Cells of the coarse cloud across and down. */
@@ -57,7 +57,7 @@ export const smallTradeoff: TradeoffOptions = {
   width: 400,
   height: 230,
   radius: 2.4,
-  smallest: 1.8,
+  smallest: 1.9,
   largest: 4,
   ticks: 5,
   clip: 'small-clip',

@@ -2,7 +2,7 @@
 import { line, scaleLinear } from 'd3';
 import type { PointReport, Trace } from '../../model/assessment.ts';
 import { titled } from '../labels.ts';
-import { bottomAxis, canvasOf, type Frame, leftAxis } from '../marks/axis.ts';
+import { bottomAxis, canvasOf, type Frame, leftAxis, type Scale } from '../marks/axis.ts';
 import { numbersTable } from '../marks/numbers.ts';
 import { clear, px, type Root } from '../marks/root.ts';
 import { axisUnit, percent, show } from '../units.ts';
@@ -41,13 +41,8 @@ export function operatingPoint(point: PointReport): string {
   return `${show(point.inputVoltage, 'V')} in, ${percent(point.load, 0)} load, ${titled(point.mode).toLowerCase()}`;
 }
 
-function panel(
-  svg: Root<SVGSVGElement>,
-  traces: readonly Trace[],
-  unit: string,
-  x: (value: number) => number,
-  frame: Frame,
-): void {
+function panel(svg: Root<SVGSVGElement>, traces: readonly Trace[], unit: string, x: Scale, frame: Frame): void {
+  const whole = x.domain()[1] ?? 1;
   const all = traces.flatMap((trace) => trace.value);
   const [low, high] = [Math.min(...all), Math.max(...all)];
   const span = high - low || 1;
@@ -66,7 +61,7 @@ function panel(
     svg
       .append('path')
       .attr('class', `line trace-${i % 4}`)
-      .attr('d', pathOf(trace, x, y));
+      .attr('d', pathOf(trace, whole, x, y));
     at = key(svg, trace.name, i, at, frame.top - 26);
   });
 }
@@ -88,15 +83,23 @@ function key(svg: Root<SVGSVGElement>, name: string, i: number, x: number, y: nu
   return x + 38 + 7 * words.length;
 }
 
-function pathOf(trace: Trace, x: (value: number) => number, y: (value: number) => number): string {
-  const points = trace.time.map((time, i) => [time, trace.value[i] ?? 0] as const);
+/** The trace from 0 to the drawing's whole period: one that repeats sooner, as a summed current does, is drawn as often. */
+function pathOf(trace: Trace, whole: number, x: (value: number) => number, y: (value: number) => number): string {
+  const turns = Math.max(1, Math.round(whole / trace.period));
+  const points: [number, number][] = [];
+  for (let turn = 0; turn < turns; turn++) {
+    trace.time.forEach((time, i) => {
+      points.push([turn * trace.period + time, trace.value[i] ?? 0]);
+    });
+  }
   const first = points[0];
-  const closed = first === undefined ? points : [...points, [trace.period + first[0], first[1]] as const];
+  if (first !== undefined) points.push([turns * trace.period + first[0], first[1]]);
+  const inside = points.filter(([time]) => time <= whole * 1.0000001);
   return (
-    line<readonly [number, number]>(
-      (point) => px(x(point[0])),
-      (point) => px(y(point[1])),
-    )(closed.filter((point) => point[0] <= trace.period * 1.0000001)) ?? ''
+    line<[number, number]>(
+      ([time]) => px(x(time)),
+      ([, value]) => px(y(value)),
+    )(inside) ?? ''
   );
 }
 
