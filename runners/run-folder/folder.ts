@@ -55,7 +55,8 @@ export function isFolder(path: string): boolean {
   return statSync(path, { throwIfNoEntry: false })?.isDirectory() ?? false;
 }
 
-// A lock and half-written files do not make a folder count as used: they may be all that a killed start left behind.
+// A lock and half-written files do not make a folder count as used: they may be all that a killed start left behind. Nor do
+// the shards of a sweep, which their merged run may stand beside.
 function isOurs(name: string): boolean {
-  return name.startsWith('lock.json') || /^\..*\.tmp$/.test(name);
+  return name.startsWith('lock.json') || /^\..*\.tmp$/.test(name) || /^shard-\d+$/.test(name) || name === 'slurm';
 }
