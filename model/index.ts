@@ -26,3 +26,6 @@ export { ARCHITECTURES, OBJECTIVES } from './rail/rail.ts';
 export { readSpec, recordOfSpec, SPEC_SCHEMA, type Spec } from './spec.ts';
 export { MODEL_VERSION } from './version.ts';
 export { writeSpec } from './write-spec.ts';
+export { stageNetlist } from './handoff/netlist/index.ts';
+export type { LossTerm, Prediction, Reading } from './handoff/netlist/predictions.ts';
+export { fullLoad, solveAt } from './handoff/solved-point.ts';

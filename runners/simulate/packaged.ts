@@ -35,7 +35,8 @@ function inTurn(netlist: string): Promise<Run> {
 }
 
 async function simulate(netlist: string): Promise<Run> {
-  if (/[^ -~\n]/.test(netlist)) throw new Error('a netlist is plain ASCII: the simulator stops for good at anything else');
+  if (/[^ -~\n]/.test(netlist))
+    throw new Error('a netlist is plain ASCII: the simulator stops for good at anything else');
   const simulation = await (engine ?? start());
   simulation.setNetList(withoutMeasurements(netlist));
   const result = await withPatience(simulation.runSim());

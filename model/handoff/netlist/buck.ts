@@ -16,7 +16,7 @@ interface Gating {
 export function buckGating(point: SolvedPoint): Gating {
   const { design, state } = point;
   const period = 1 / state.frequency;
-  const gap = design.diode === undefined ? design.controller.deadTime : 0;
+  const gap = design.diode === undefined ? design.driver.deadTime : 0;
   const { valleyCurrent: a, peakCurrent: b } = state;
   const rests = pauses(state.mode);
   const extra = makeUp(point, gap);
@@ -56,7 +56,7 @@ export function writeBuck(lines: Lines, point: SolvedPoint): void {
   lines.parameter('tmakeup', gating.extra, 's', 'on-time a control loop adds for the drops in the dead times');
   lines.derived('ton', 'duty*tper+tmakeup', state.highShare * period + gating.extra, 's', 'high interval');
   if (design.diode === undefined) {
-    lines.parameter('tdead', design.controller.deadTime, 's', 'dead time of the drivers at each edge');
+    lines.parameter('tdead', design.driver.deadTime, 's', 'dead time of the drivers at each edge');
   }
   writePartValues(lines, point);
   for (let k = 0; k < state.activePhases; k++) writePhase(lines, point, gating, k);

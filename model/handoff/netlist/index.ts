@@ -1,0 +1,112 @@
+/** The netlist of a design at one operating point, with what the model predicts of it. */
+import type { RailProblem } from '../../problem.ts';
+import { formatQuantity } from '../../quantity/index.ts';
+import { MODES, pauses } from '../../stages/state.ts';
+import { MODEL_VERSION } from '../../version.ts';
+import type { SolvedPoint } from '../solved-point.ts';
+import { writeBuck } from './buck.ts';
+import { writeIsolated } from './isolated.ts';
+import { ascii, Lines, numberText } from './lines.ts';
+import { BANDS, conductionOf, type LossTerm, lossTerms, type Prediction, predictionsOf } from './predictions.ts';
+import { writeInput, writeOutput } from './surroundings.ts';
+
+/** Time steps a period, at least; fewer cost ripple. */
+const STEPS = 200;
+/** Time constants of the filter until its start is forgotten. */
+const CONSTANTS = 7;
+/** Fewest and most periods that a simulation is given to settle. */
+const FEWEST = 30;
+const MOST = 600;
+
+/** A netlist with what goes with it. */
+export interface StageNetlist {
+  readonly text: string;
+  readonly predictions: readonly Prediction[];
+  readonly losses: readonly LossTerm[];
+  /** W, what the model says that `losses` come to. */
+  readonly conduction: number;
+  /** Periods simulated; the last one is measured. */
+  readonly periods: number;
+  /** s, of the stage. */
+  readonly period: number;
+}
+
+/** The netlist of `point`; `id` names the design. */
+export function stageNetlist(problem: RailProblem, id: string, point: SolvedPoint): StageNetlist {
+  const { design, state } = point;
+  const lines = new Lines();
+  const period = design.stage.chokeMultiple / state.frequency;
+  const periods = settling(point, period);
+  writeTimes(lines, point, period, periods);
+  writeInput(lines, point);
+  if (design.stage.form === undefined) writeBuck(lines, point);
+  else writeIsolated(lines, point);
+  writeOutput(lines, point);
+  const predictions = predictionsOf(point);
+  const losses = lossTerms(point);
+  for (const { vectors } of [...predictions, ...losses]) for (const vector of vectors) lines.keep(vector);
+  const conduction = conductionOf(point);
+  const title = `chopfront ${MODEL_VERSION}: ${design.stage.architecture} x${state.activePhases}, design ${id} for ${problem.rail.name}`;
+  const text = lines.text(title, head(point), tail(predictions, conduction));
+  return { text, predictions, losses, conduction, periods, period };
+}
+
+function head(point: SolvedPoint): string[] {
+  const { state } = point;
+  return [
+    `${formatQuantity(state.inputVoltage, 'V')} in, ${formatQuantity(state.outputVoltage, 'V')} out, ${formatQuantity(state.loadCurrent, 'A')}, ${MODES[state.mode]}, usual values.`,
+    'Units are SI base units: V, A, ohm, H, F, s. Gates run open loop with the duty that the model found.',
+    'Ideal switches prove waveforms, conduction and ripple; switching, gate and core loss are not in this circuit.',
+    `Agreement is within: mean output ${100 * BANDS.mean} %, ripple ${100 * BANDS.ripple} %, rms ${100 * BANDS.rms} %, conduction loss ${100 * BANDS.conduction} %.`,
+  ];
+}
+
+function writeTimes(lines: Lines, point: SolvedPoint, period: number, periods: number): void {
+  const { design, state } = point;
+  const copies = state.activePhases * (design.stage.form?.doubleEnded === true ? 2 : 1);
+  lines.parameter('fsw', 1 / period, 'Hz', 'switching frequency');
+  lines.derived('tper', '1/fsw', period, 's', 'period');
+  lines.derived('tshift', `tper/${copies}`, period / copies, 's', 'delay from phase to phase');
+  lines.parameter('te', 1e-11, 's', 'edge of a gate; longer edges cost accuracy');
+  lines.parameter('nper', periods, '', 'periods simulated; the last one is measured');
+  lines.derived('tmax', `tper/${STEPS}`, period / STEPS, 's', 'longest time step');
+  lines.derived('tstop', 'nper*tper', periods * period, 's', 'end');
+  lines.derived('tfrom', 'tstop-tper', (periods - 1) * period, 's', 'start of what is measured');
+}
+
+/** Periods until the output filter has forgotten its start. */
+function settling(point: SolvedPoint, period: number): number {
+  const { state, output, rail } = point;
+  const load = Math.abs(state.outputVoltage / state.loadCurrent);
+  const capacitance = output.c1 + output.c2;
+  const copies = state.activePhases * state.chokes;
+  // Real part of the filter's poles: 1/(2RC) + R/(2L); at rest between pulses the bank empties through the load alone.
+  const inductance = state.effectiveInductance / copies;
+  const filter =
+    0.5 / (load * capacitance) + (0.5 * (state.pathResistance + state.lowResistance)) / (inductance * copies);
+  const bare = 1 / (load * capacitance);
+  const source = (2 * rail.input.sourceInductance) / Math.max(1e-6, rail.input.sourceResistance);
+  const constant = Math.max(1 / (pauses(state.mode) ? bare : filter), Math.min(source, 100 * period));
+  return Math.max(FEWEST, Math.min(MOST, Math.ceil((CONSTANTS * constant) / period)));
+}
+
+function tail(predictions: readonly Prediction[], conduction: number): string[] {
+  const lines = [
+    '.options method=gear reltol=1e-4 abstol=1e-6 vntol=1e-6',
+    '.tran {tmax} {tstop} {tfrom} {tmax} uic',
+    '* what the model predicts, and the measurement beside it',
+  ];
+  const words = { mean: 'AVG', 'peak-to-peak': 'PP', rms: 'RMS' } as const;
+  for (const { name, unit, value, reading, vectors } of predictions) {
+    const many = vectors.length > 1;
+    lines.push(
+      `* ${ascii(name)}: ${numberText(Number(value.toPrecision(6)))} ${ascii(unit)}${many ? ' (root of the mean of the squares)' : ''}`,
+    );
+    for (const [i, vector] of vectors.entries()) {
+      const label = `${name.replaceAll(' ', '_')}${many ? `_${i + 1}` : ''}`;
+      lines.push(`.meas tran ${label} ${words[reading]} ${vector} FROM={tfrom} TO={tstop}`);
+    }
+  }
+  lines.push(`* conduction loss, all phases: ${numberText(Number(conduction.toPrecision(6)))} W`);
+  return lines;
+}

@@ -1,0 +1,88 @@
+/** When the pulses of a transformer stage come and what flows at time 0: what its netlist is timed by. */
+import { pauses } from '../../stages/state.ts';
+import { sample } from '../../waveform/index.ts';
+import type { SolvedPoint } from '../solved-point.ts';
+
+/** Times of one phase whose first pulse begins at 0, s. */
+export interface PulseTimes {
+  /** Period of the transformer. */
+  readonly period: number;
+  /** Length of a pulse at the primary. */
+  readonly pulse: number;
+  /** Part of it in which the leakage turns the current round. */
+  readonly commutation: number;
+  /** Part of it that makes up for the body diodes' drops. */
+  readonly extra: number;
+  readonly gap: number;
+}
+
+/** The pulses of `point`, a transformer stage. */
+export function pulseTimes(point: SolvedPoint): PulseTimes {
+  const { design, state } = point;
+  const { stage, transformer, driver } = design;
+  const { form } = stage;
+  const choke = 1 / state.frequency;
+  const period = stage.chokeMultiple * choke;
+  if (form === undefined) return { period, pulse: 0, commutation: 0, extra: 0, gap: 0 };
+  const volts = form.share * state.inputVoltage;
+  const turned = (design.phaseShifted ? 2 : 1) * Math.max(0, state.valleyCurrent);
+  const commutation = (transformer.leakage * turned) / (transformer.ratio * volts);
+  const gap = driver.deadTime;
+  // A centre tap sees half of what one end of its winding drops.
+  const share = form.centreTap ? 0.5 : 1;
+  const drop = share * design.low.bodyDrop * (2 * gap + commutation);
+  const extra = pauses(state.mode) ? 0 : (drop * transformer.ratio) / volts;
+  const longest = form.doubleEnded ? 0.5 * period - 2 * gap : 0.5 * period;
+  const pulse = Math.min(longest, state.highShare * choke + commutation + extra);
+  return { period, pulse, commutation, extra, gap };
+}
+
+/** Currents at time 0 of a phase whose cycle began `ago` s earlier. */
+export interface StartCurrents {
+  /** Primary and magnetizing current, A. */
+  readonly primary: number;
+  readonly magnetizing: number;
+  /** Choke currents; the second of a doubler, else 0. */
+  readonly first: number;
+  readonly second: number;
+  /** Current out of the secondary's dotted end, by what the turns ratio says. */
+  readonly winding: number;
+}
+
+/** Currents of `point` at `ago` s into the cycle. */
+export function startCurrents(point: SolvedPoint, times: PulseTimes, ago: number): StartCurrents {
+  const { design, state } = point;
+  const { form } = design.stage;
+  const n = design.transformer.ratio;
+  const first = sample(state.choke, ago);
+  const second = form?.doubler === true ? sample(state.choke, ago + 0.5 * times.period) : 0;
+  const magnetizing = magnetizingAt(point, times, ago);
+  const half = 0.5 * times.period;
+  const positive = ago < half;
+  const into = positive ? ago : ago - half;
+  const driven = into > times.commutation && into < times.pulse;
+  const single = form?.doubleEnded !== true;
+  // Before the first pulse has turned the current round, a shifted bridge still carries the last one's.
+  const after = into >= times.pulse ? positive : !positive;
+  const sign = single ? (positive ? 1 : 0) : driven ? (positive ? 1 : -1) : after ? 1 : -1;
+  const chokeNow = form?.doubler === true && sign < 0 ? second : first;
+  if (driven || (design.phaseShifted && !pauses(state.mode))) {
+    return { primary: (sign * chokeNow) / n + magnetizing, magnetizing, first, second, winding: sign * chokeNow };
+  }
+  // Forward: the primary goes on with the magnetizing current through the clamp diodes. Bridges: the secondary carries it.
+  const primary = single ? magnetizing : 0;
+  return { primary, magnetizing, first, second, winding: n * (primary - magnetizing) };
+}
+
+function magnetizingAt(point: SolvedPoint, times: PulseTimes, ago: number): number {
+  const peak = point.state.magnetizingPeak;
+  const { pulse, period } = times;
+  if (point.design.stage.form?.doubleEnded !== true) {
+    if (ago < pulse) return (peak * ago) / pulse;
+    return Math.max(0, peak * (2 - ago / pulse));
+  }
+  const half = 0.5 * period;
+  const sign = ago < half ? 1 : -1;
+  const into = ago < half ? ago : ago - half;
+  return sign * peak * Math.min(1, (2 * into) / pulse - 1);
+}
