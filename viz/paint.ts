@@ -53,6 +53,13 @@ function measured(document: Document, id: string): { readonly width?: number } {
   return width > 0 ? { width } : {};
 }
 
+/** Draws a view anew and leaves the table behind it open if it was. */
+function redraw(root: Root<HTMLElement>, draw: (root: Root<HTMLElement>) => void): void {
+  const wasOpen = root.select<HTMLDetailsElement>('details.numbers').node()?.open === true;
+  draw(root);
+  if (wasOpen) root.select('details.numbers').attr('open', '');
+}
+
 /** Everything that does not change with the reader's choices. */
 export function paintFixed(document: Document, { data, known }: Bench): void {
   const place = (id: string) => placeOf(document, id);
@@ -238,9 +245,8 @@ export function paintOpen(document: Document, bench: Bench, scene: Scene): void 
   renderLosses(place('effects'), own.value, rail.profile.length);
   renderLimits(place('tightest'), own.value, { ...limitsDefaults, most: 4 });
   renderLimits(place('limits'), own.value);
-  renderEfficiency(place('efficiency'), own.value, rail, {
-    ...efficiencyDefaults,
-    ...measured(document, 'efficiency'),
+  redraw(place('efficiency'), (root) => {
+    renderEfficiency(root, own.value, rail, { ...efficiencyDefaults, ...measured(document, 'efficiency') });
   });
   renderMakeup(place('makeup'), own.value, rail.currency);
   renderParts(place('parts'), own.value, rail.currency);
@@ -272,7 +278,9 @@ export function paintPoint(document: Document, bench: Bench, scene: Scene): void
     design.points.map((one, i) => [String(i), operatingPoint(one)] as const),
     String(at),
   );
-  renderWaveforms(placeOf(document, 'waveforms'), point, { ...waveformsDefaults, ...measured(document, 'waveforms') });
+  redraw(placeOf(document, 'waveforms'), (root) => {
+    renderWaveforms(root, point, { ...waveformsDefaults, ...measured(document, 'waveforms') });
+  });
   renderTemperatures(placeOf(document, 'temperatures'), design, point, bench.data.rail.ambient);
 }
 
@@ -314,7 +322,9 @@ export function paintMovePicture(document: Document, bench: Bench, scene: Scene)
 }
 
 export function paintCompare(document: Document, { dataset }: Bench, scene: Scene): void {
-  renderCompare(placeOf(document, 'compare'), dataset, scene.pinned);
+  redraw(placeOf(document, 'compare'), (root) => {
+    renderCompare(root, dataset, scene.pinned);
+  });
 }
 
 export function paintAway(document: Document, bench: Bench, scene: Scene): void {

@@ -100,7 +100,9 @@ function isTableOpen(document: Document): boolean {
 function listen(document: Document, desk: Desk): void {
   document.addEventListener('click', (event) => {
     const target = event.target instanceof Element ? event.target.closest<HTMLElement>('[data-act]') : null;
-    if (target !== null) act(document, desk, target);
+    if (target === null) return;
+    act(document, desk, target);
+    refocus(document, target);
   });
   document.addEventListener('input', (event) => {
     const target = event.target;
@@ -112,6 +114,15 @@ function listen(document: Document, desk: Desk): void {
   document.getElementById('picture-numbers')?.addEventListener('toggle', () => {
     if (isTableOpen(document)) paintDesigns(document, desk.bench, desk.scene(), true);
   });
+}
+
+/** A press redraws the button itself in some views: the focus goes on to its successor, or stays near where that vanished. */
+function refocus(document: Document, pressed: HTMLElement): void {
+  if (pressed.isConnected || document.activeElement !== document.body) return;
+  const { act: name = '', id = '' } = pressed.dataset;
+  const all = [...document.querySelectorAll<HTMLElement>(`[data-act="${name}"]`)];
+  const next = all.find((one) => (one.dataset.id ?? '') === id) ?? all[0] ?? document.getElementById('picture');
+  next?.focus({ preventScroll: true });
 }
 
 /** Buttons. */

@@ -96,6 +96,26 @@ describe.each(started.slice(0, 1))('in $name', ({ browser }) => {
     await context.close();
   });
 
+  test('a press keeps the focus, though the button is drawn anew; an open table stays open from design to design', async () => {
+    const { page, context } = await openTab(browser, plain);
+    const focus = () =>
+      page.evaluate(() => (document.activeElement as HTMLElement).dataset.act ?? document.activeElement?.id);
+    await page.locator('[data-act="pin"]').focus();
+    await page.keyboard.press('Enter');
+    expect(await focus()).toBe('pin');
+    await page.getByRole('button', { name: 'Smallest' }).focus();
+    await page.keyboard.press('Enter');
+    expect(await focus()).toBe('open');
+    await page.locator('[data-act="unpin"]').focus();
+    await page.keyboard.press('Enter');
+    expect(await focus()).toBe('picture');
+    await page.locator('#efficiency summary').click();
+    await page.locator('#picture').focus();
+    await page.keyboard.press('End');
+    expect(await page.locator('#efficiency details').getAttribute('open')).toBe('');
+    await context.close();
+  });
+
   test('every drawing has its numbers as a table in the same card (the small picture beside the knobs repeats the large one)', async () => {
     const { page, context } = await openTab(browser, plain);
     const bare = await page.evaluate(() =>

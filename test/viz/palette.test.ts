@@ -7,7 +7,7 @@ import { readFileSync } from 'node:fs';
 import { describe, expect, test } from 'vitest';
 
 const css = readFileSync(new URL('../../viz/theme.css', import.meta.url), 'utf8');
-const [light = '', dark = ''] = css.split('@media (prefers-color-scheme: dark)');
+const [light = '', dark = ''] = css.split('@media screen and (prefers-color-scheme: dark)');
 
 type Colour = readonly [number, number, number];
 
