@@ -183,12 +183,12 @@ describe('many mistakes give all their messages at once, in the order of the tex
       'rail.yaml:8:1: rail: found nothing',
       'rail.yaml:8:1: rial: found the unknown key rial',
       'rail.yaml:13:18: input.voltage.min: found 40 V',
-      'rail.yaml:20:12: output.current: found 6 V, which is a voltage',
-      'rail.yaml:21:11: output.ripple: found 30 without a unit',
-      'rail.yaml:31:3: load-profile: found shares that sum to 90 %',
-      'rail.yaml:35:13: light-load: found diode-emulate',
-      'rail.yaml:38:3: environment.ambeint: found the unknown key ambeint',
-      'rail.yaml:77:13: objectives: found one entry',
+      'rail.yaml:21:12: output.current: found 6 V, which is a voltage',
+      'rail.yaml:22:11: output.ripple: found 30 without a unit',
+      'rail.yaml:32:3: load-profile: found shares that sum to 90 %',
+      'rail.yaml:36:13: light-load: found diode-emulate',
+      'rail.yaml:39:3: environment.ambeint: found the unknown key ambeint',
+      'rail.yaml:78:13: objectives: found one entry',
     ]);
   });
 
