@@ -87,9 +87,14 @@ export function createCatalogue(rail: Rail, tables: PartsTables): Outcome<Catalo
     controllers: controllersFor(rail, tables.controllers),
     chokeCores: rail.search.woundChokes === true ? cores : [],
     transformerCores: transformers ? cores.filter((row) => row.shape !== 'ring') : [],
-    materials: tables.materials,
-    transformerMaterials: transformers ? tables.materials.filter((row) => row.kind !== 'powder') : [],
-    conductors: [...tables.conductors].sort((a, b) =>
+    materials: chosen(rail, tables.materials),
+    transformerMaterials: transformers
+      ? chosen(
+          rail,
+          tables.materials.filter((row) => row.kind !== 'powder'),
+        )
+      : [],
+    conductors: [...chosen(rail, tables.conductors)].sort((a, b) =>
       a.kind < b.kind ? -1 : a.kind > b.kind ? 1 : a.size * a.size * a.strands - b.size * b.size * b.strands,
     ),
   };
@@ -115,7 +120,15 @@ export function capacitanceOrder(row: Ceramic, volts: number): number {
 }
 
 function usable<P extends Part>(rail: Rail, rows: readonly P[]): readonly P[] {
-  const allowed = rows.filter((row) => !rail.parts.barred.includes(row.name) && row.height <= heightLimit(rail));
+  return chosen(
+    rail,
+    rows.filter((row) => row.height <= heightLimit(rail)),
+  );
+}
+
+/** The rows that the sheet does not bar; of these the preferred ones alone, where there are any. */
+function chosen<P extends { readonly name: string }>(rail: Rail, rows: readonly P[]): readonly P[] {
+  const allowed = rows.filter((row) => !rail.parts.barred.includes(row.name));
   const preferred = allowed.filter((row) => rail.parts.preferred.includes(row.name));
   return preferred.length > 0 ? preferred : allowed;
 }
@@ -221,6 +234,8 @@ function missingKinds(rail: Rail, catalogue: Catalogue): Finding[] {
   if (rail.search.architectures.includes('buck-diode')) {
     wanted.push(['diodes', catalogue.diodes.length, `a rating of at least ${rail.input.maximum} V with derating`]);
   }
+  const { barred, preferred } = rail.parts;
+  const left = barred.length + preferred.length > 0 ? ', among those that parts.bar and parts.prefer leave' : '';
   return wanted
     .filter(([, count]) => count === 0)
     .map(([kind, , need]) => ({
@@ -229,6 +244,6 @@ function missingKinds(rail: Rail, catalogue: Catalogue): Finding[] {
       column: 0,
       field: `parts.${kind}`,
       found: 'no usable row',
-      allowed: `at least one row with ${need}`,
+      allowed: `at least one row with ${need}${left}`,
     }));
 }

@@ -17,10 +17,12 @@ import {
   readRail,
   readTable,
 } from '../model/index.ts';
+import { unknownPartNames } from '../model/parts-choice.ts';
 import { refusal } from './errors.ts';
 import { packagePath } from './package-path.ts';
 import { readText } from './run-folder/files.ts';
 import { kindOfTable } from './table-kind.ts';
+import { plain } from './terminal/text.ts';
 
 /** A text with the name that messages about it use. */
 export interface NamedText {
@@ -64,15 +66,19 @@ export function readSheet(path: string): Inputs {
 /** Reads texts that were gathered before, such as a run's snapshot. Throws refusals that name every problem found. */
 export function readInputs(texts: InputTexts): Inputs {
   const rail = readRail(texts.rail.text, texts.rail.file);
-  const rows = texts.tables.map(({ kind, text, file }) => ({ kind, outcome: readTable(kind, text, file) }));
+  const rows = texts.tables.map(({ kind, text, file }) => ({ kind, file, outcome: readTable(kind, text, file) }));
   const findings = [rail, ...rows.map((row) => row.outcome)].flatMap((outcome) => (outcome.ok ? [] : outcome.findings));
   if (findings.length > 0) throw refuseFindings(findings);
-  const parts = rows.flatMap(({ kind, outcome }) => (outcome.ok ? [{ kind, rows: outcome.value }] : []));
-  const tables = joinTables(parts);
-  const remarks = [rail, ...rows.map((row) => row.outcome), tables].flatMap((outcome) =>
+  const parts = rows.flatMap(({ kind, file, outcome }) => (outcome.ok ? [{ kind, file, rows: outcome.value }] : []));
+  const sheet = take(rail);
+  const joined = joinTables(parts, sheet.currency);
+  const remarks = [rail, ...rows.map((row) => row.outcome), joined].flatMap((outcome) =>
     outcome.ok ? outcome.remarks : [],
   );
-  return { texts, rail: take(rail), tables: take(tables), remarks: remarks.map(describeFinding) };
+  const tables = take(joined);
+  const unknown = unknownPartNames(texts.rail, sheet, tables);
+  if (unknown.length > 0) throw refuseFindings(unknown);
+  return { texts, rail: sheet, tables, remarks: remarks.map(describeFinding) };
 }
 
 /** The problem that the inputs pose. Throws the refusal `no-space` where nothing can be searched. */
@@ -92,7 +98,7 @@ export function take<T>(outcome: Outcome<T>): T {
 const MOST_LISTED = 20;
 
 function refuseFindings(findings: readonly Finding[]): Error {
-  const lines = findings.slice(0, MOST_LISTED).map(describeFinding);
+  const lines = findings.slice(0, MOST_LISTED).map((finding) => plain(describeFinding(finding)));
   if (findings.length > MOST_LISTED) lines.push(`and ${findings.length - MOST_LISTED} more`);
   return refusal('findings', { text: lines.join('\n  ') });
 }

@@ -11,14 +11,32 @@ import type { PartKind } from './tables.ts';
 /** Most problems reported of one table. */
 const MOST_FINDINGS = 100;
 
-/** Reads `text` as a table of `kind`; `file` is its name in messages. Rows keep their order. */
-export function readTable<K extends PartKind>(kind: K, text: string, file: string): Outcome<readonly RowOf<K>[]> {
-  return readRows<RowOf<K>>(SCHEMAS[kind], text, file);
+/** What a table holds whether or not all of it can be read. */
+export interface TableInspection<T> {
+  /** The rows that were read, in their order; none where the header is refused. */
+  readonly rows: readonly T[];
+  /** Line in the file of each of `rows`. */
+  readonly lines: readonly number[];
+  /** Rows below the header. */
+  readonly total: number;
+  /** Every problem, at most 101. */
+  readonly findings: readonly Finding[];
 }
 
-function readRows<T extends Row>(schema: TableSchema<T>, text: string, file: string): Outcome<readonly T[]> {
+/** Reads `text` as a table of `kind`; `file` is its name in messages. Rows keep their order. */
+export function readTable<K extends PartKind>(kind: K, text: string, file: string): Outcome<readonly RowOf<K>[]> {
+  const { rows, findings } = inspectTable(kind, text, file);
+  return findings.length === 0 ? good(rows) : bad(findings);
+}
+
+/** Reads what can be read of `text` as a table of `kind`: the good rows beside every problem of the others. */
+export function inspectTable<K extends PartKind>(kind: K, text: string, file: string): TableInspection<RowOf<K>> {
+  return inspectRows<RowOf<K>>(SCHEMAS[kind], text, file);
+}
+
+function inspectRows<T extends Row>(schema: TableSchema<T>, text: string, file: string): TableInspection<T> {
   const split = splitCsv(text, file);
-  if (!split.ok) return bad([split.finding]);
+  if (!split.ok) return { rows: [], lines: [], total: 0, findings: [split.finding] };
   const lines = text.replace(/\r\n?/g, '\n').split('\n');
   const findings: Finding[] = [];
   const report: Report = (row, index, rest) => {
@@ -28,17 +46,21 @@ function readRows<T extends Row>(schema: TableSchema<T>, text: string, file: str
   const header = readHeader(split.value.header, schema);
   for (const { index, ...rest } of header.problems) report(split.value.header, index, rest);
   const rows: T[] = [];
+  const places: number[] = [];
   if (findings.length === 0) {
     const width = split.value.header.cells.length;
     for (const row of split.value.rows) {
       const part = readRow(schema, header, row, width, report);
-      if (part !== undefined) rows.push(part);
+      if (part !== undefined) {
+        rows.push(part);
+        places.push(row.line);
+      }
       if (findings.length > MOST_FINDINGS) break;
     }
     repeatedNames(split.value.rows, header, report);
     if (rows.length === 0 && findings.length === 0) report(split.value.header, -1, EMPTY);
   }
-  return findings.length === 0 ? good(rows) : bad(cut(findings, file));
+  return { rows, lines: places, total: split.value.rows.length, findings: cut(findings, file) };
 }
 
 type Report = (row: CsvRow, index: number, rest: Pick<Finding, 'field' | 'found' | 'allowed' | 'nearest'>) => void;
