@@ -92,6 +92,7 @@ function rising(design: Design, state: StageState, nodeCharge: number): number {
     state.inputVoltage,
     state.outputVoltage,
     design.driver.deadTime,
+    inverseExponent(design.low),
   );
 }
 
@@ -104,7 +105,14 @@ function falling(design: Design, state: StageState, nodeCharge: number): number 
     state.inputVoltage,
     state.inputVoltage - state.outputVoltage,
     design.driver.deadTime,
+    inverseExponent(design.high),
   );
+}
+
+/** 1/p of a row's charge law Q ∝ V^p, from its stored energy: see `chargeExponent`. */
+function inverseExponent(row: Switch): number {
+  const share = row.outputEnergy / (row.outputCharge * row.outputTestVoltage);
+  return share > 0 ? (1 - share) / share : 1;
 }
 
 /** Writes to `partial[0]` what the switch `own` burns as it turns on after the node has swung by `fraction`. */

@@ -16,6 +16,9 @@ export { cautionsOf, NOT_COVERED, STANDING_CAUTION, TOUCH_VOLTAGE } from './caut
 export { type ArchitectureVerdict, explainRail, type Fact, type RailExplanation } from './explain.ts';
 export { type FamilyTally, familyReason } from './families.ts';
 export { type FrontDesign, type FrontFile, frontCsv, frontFile, quoteCell } from './front-file.ts';
+export { stageNetlist } from './handoff/netlist/index.ts';
+export type { LossTerm, Prediction, Reading } from './handoff/netlist/predictions.ts';
+export { fullLoad, solveAt } from './handoff/solved-point.ts';
 export { bad, describeFinding, type Finding, good, type Outcome } from './outcome.ts';
 export * from './parts/index.ts';
 export { createRailProblem, type Judgement, type RailProblem } from './problem.ts';
@@ -26,6 +29,3 @@ export { ARCHITECTURES, OBJECTIVES } from './rail/rail.ts';
 export { readSpec, recordOfSpec, SPEC_SCHEMA, type Spec } from './spec.ts';
 export { MODEL_VERSION } from './version.ts';
 export { writeSpec } from './write-spec.ts';
-export { stageNetlist } from './handoff/netlist/index.ts';
-export type { LossTerm, Prediction, Reading } from './handoff/netlist/predictions.ts';
-export { fullLoad, solveAt } from './handoff/solved-point.ts';

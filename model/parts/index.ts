@@ -6,4 +6,4 @@ export { type ColumnRange, type Outlier, type TableProfile, tableProfile } from 
 export { inspectTable, readTable, type TableInspection } from './read-table.ts';
 export { PART_KINDS, type RowOf } from './schemas.ts';
 export type { PartKind, PartsTables } from './tables.ts';
-export { tableTemplate } from './template.ts';
+export { explainedTemplate, tableTemplate } from './template.ts';

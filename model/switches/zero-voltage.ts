@@ -2,19 +2,22 @@
  * Zero-voltage turn-on: how far a negative valley current swings the switching node before the switch turns on, and what
  * the rest of the swing costs. Everything is continuous in the valley current: a search parks on any jump.
  */
+import { pow } from '../../optimizer/maths/index.ts';
 import { OUTPUT_CHARGE, OUTPUT_ENERGY, outputAt } from './output-charge.ts';
 
 /**
  * Fraction 0 … 1 of the bus that the node swings by. `valley` A (negative helps), `inductance` H, `nodeCharge` C moved by
  * a whole swing (own plus partner, 2·Qoss for equal dice), `busVoltage` V, `againstVoltage` V: what the inductor swings
  * about (Vo for the high switch of a buck; Vi − Vo for its low switch in reverse flow), `deadTime` s.
- * Two bounds, the smaller counts. Charge: |I|·td over the charge of the swing. Energy: the resonance reaches
+ * Two bounds, the smaller counts. Charge: |I|·td over the charge of the swing, raised to `inverseExponent` (1/p of Q ∝ V^p, 1 for a
+ * constant capacitance), for charge moved is not voltage swung. Energy: the resonance reaches
  * Vo + √(Vo² + I²·L/Ce), Ce = charge/bus; for equal dice that is the rail when ½·L·I² ≥ Qoss·(Vi − 2·Vo).
  * The charge bound brings the fraction to 0 at zero current, where the bare resonance would jump to 2·Vo.
  * @source kasper-2016, section III (charge-based zero-voltage condition and dead time)
  * @valid charge-equivalent node capacitance; deadTime ≥ 0
  * @example swingFraction(-4, 1e-6, 2e-8, 48, 12, 1e-7) = 1
  * @example swingFraction(-1, 1e-5, 2e-8, 48, 30, 1e-8) = 0.5
+ * @example swingFraction(-1, 1e-5, 2e-8, 48, 30, 1e-8, 2) = 0.25
  * @example swingFraction(2, 1e-6, 2e-8, 48, 12, 1e-7) = 0
  */
 export function swingFraction(
@@ -24,9 +27,11 @@ export function swingFraction(
   busVoltage: number,
   againstVoltage: number,
   deadTime: number,
+  inverseExponent = 1,
 ): number {
   if (valley >= 0 || deadTime <= 0) return 0;
-  const moved = (-valley * deadTime) / nodeCharge;
+  const share = (-valley * deadTime) / nodeCharge;
+  const moved = share < 1 && inverseExponent !== 1 ? pow(share, inverseExponent) : share;
   const stored = (valley * valley * inductance * busVoltage) / nodeCharge;
   const reached = (againstVoltage + Math.sqrt(againstVoltage * againstVoltage + stored)) / busVoltage;
   return Math.min(1, moved, reached);

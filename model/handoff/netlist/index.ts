@@ -11,12 +11,12 @@ import { BANDS, conductionOf, type LossTerm, lossTerms, type Prediction, predict
 import { writeInput, writeOutput } from './surroundings.ts';
 
 /** Time steps a period, at least; fewer cost ripple. */
-const STEPS = 200;
+const STEPS = 100;
 /** Time constants of the filter until its start is forgotten. */
-const CONSTANTS = 7;
+const CONSTANTS = 5;
 /** Fewest and most periods that a simulation is given to settle. */
-const FEWEST = 30;
-const MOST = 600;
+const FEWEST = 25;
+const MOST = 400;
 
 /** A netlist with what goes with it. */
 export interface StageNetlist {
@@ -47,7 +47,7 @@ export function stageNetlist(problem: RailProblem, id: string, point: SolvedPoin
   for (const { vectors } of [...predictions, ...losses]) for (const vector of vectors) lines.keep(vector);
   const conduction = conductionOf(point);
   const title = `chopfront ${MODEL_VERSION}: ${design.stage.architecture} x${state.activePhases}, design ${id} for ${problem.rail.name}`;
-  const text = lines.text(title, head(point), tail(predictions, conduction));
+  const text = lines.text(title, head(point), tail(predictions, conduction, design.stage.form === undefined));
   return { text, predictions, losses, conduction, periods, period };
 }
 
@@ -80,19 +80,24 @@ function settling(point: SolvedPoint, period: number): number {
   const load = Math.abs(state.outputVoltage / state.loadCurrent);
   const capacitance = output.c1 + output.c2;
   const copies = state.activePhases * state.chokes;
-  // Real part of the filter's poles: 1/(2RC) + R/(2L); at rest between pulses the bank empties through the load alone.
+  // Real part of the filter's poles, 1/(2RC) + R/(2L); at rest between pulses the bank empties through the load alone.
   const inductance = state.effectiveInductance / copies;
-  const filter =
-    0.5 / (load * capacitance) + (0.5 * (state.pathResistance + state.lowResistance)) / (inductance * copies);
+  const damping = bankResistance(point) + (state.pathResistance + state.lowResistance) / copies;
+  const filter = 0.5 / (load * capacitance) + (0.5 * damping) / inductance;
   const bare = 1 / (load * capacitance);
   const source = (2 * rail.input.sourceInductance) / Math.max(1e-6, rail.input.sourceResistance);
   const constant = Math.max(1 / (pauses(state.mode) ? bare : filter), Math.min(source, 100 * period));
   return Math.max(FEWEST, Math.min(MOST, Math.ceil((CONSTANTS * constant) / period)));
 }
 
-function tail(predictions: readonly Prediction[], conduction: number): string[] {
+/** Series resistance of the whole output bank at the filter's own frequency, about: of the group that holds most charge, Ω. */
+function bankResistance({ output }: SolvedPoint): number {
+  return output.c2 > output.c1 ? output.r2 : output.r1;
+}
+
+function tail(predictions: readonly Prediction[], conduction: number, fine: boolean): string[] {
   const lines = [
-    '.options method=gear reltol=1e-4 abstol=1e-6 vntol=1e-6',
+    `.options method=gear reltol=1e-4 abstol=${fine ? '1e-6' : '1e-5'} vntol=${fine ? '1e-6' : '1e-4'}`,
     '.tran {tmax} {tstop} {tfrom} {tmax} uic',
     '* what the model predicts, and the measurement beside it',
   ];
