@@ -1,6 +1,6 @@
 /** The cloud as pixels: drawn once into a buffer wider than the window, then moved with the pan as one bitmap. */
 import type { Cloud } from './data.ts';
-import type { TradeoffScales } from './views/tradeoff.ts';
+import type { TradeoffScales } from './views/tradeoff-scales.ts';
 
 /** Buffer over window, in each direction: how far a pan goes before it must be drawn again. */
 const ROOM = 1.6;

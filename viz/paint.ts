@@ -1,10 +1,10 @@
 /** Draws a scene into the page: the same code at build time in jsdom and live in the browser. */
-import { select } from 'd3';
 import type { Assessment } from '../model/assessment.ts';
 import { varies } from './dataset.ts';
 import { titled } from './labels.ts';
-import { clear, type Root } from './marks/root.ts';
-import { picksOf } from './picks.ts';
+import { clear } from './marks/root.ts';
+import { paintDesigns, paintMovePicture, paintPicture } from './paint-picture.ts';
+import { fill, measured, placeOf, redraw } from './places.ts';
 import type { Bench, Scene } from './scene.ts';
 import { renderAway } from './views/away.ts';
 import { renderCompare } from './views/compare.ts';
@@ -18,47 +18,13 @@ import { profileWords, renderMasthead } from './views/masthead.ts';
 import { renderMind } from './views/mind.ts';
 import { renderOpenHead } from './views/open.ts';
 import { renderParts } from './views/parts.ts';
-import { designWords, pictureNote, renderDesigns, renderPicks } from './views/picture-words.ts';
 import { renderPrices } from './views/prices.ts';
 import { renderCount, renderRanges, shownQuantities } from './views/ranges.ts';
 import { renderTemperatures } from './views/temperatures.ts';
-import {
-  renderMovedMark,
-  renderOverlay,
-  renderTradeoff,
-  smallTradeoff,
-  type TradeoffInput,
-  type TradeoffOptions,
-  type TradeoffScales,
-  tradeoffDefaults,
-  tradeoffScales,
-} from './views/tradeoff.ts';
+import { type TradeoffOptions, type TradeoffScales, tradeoffDefaults } from './views/tradeoff-scales.ts';
 import { renderTrust, trustDefaults } from './views/trust.ts';
 import { operatingPoint, renderWaveforms, waveformsDefaults } from './views/waveforms.ts';
 import { renderKnobs, renderMove } from './views/whatif.ts';
-
-/** Designs in the table behind the picture until it is opened. */
-const FEW = 40;
-
-/** The element of a view. */
-export function placeOf(document: Document, id: string): Root<HTMLElement> {
-  const element = document.getElementById(id);
-  if (element === null) throw new Error(`the page has no place called ${id}`);
-  return select(element) as unknown as Root<HTMLElement>;
-}
-
-/** A chart's width on this screen, so that its text keeps its size; none where nothing is laid out, as at build time. */
-function measured(document: Document, id: string): { readonly width?: number } {
-  const width = Math.min(620, document.getElementById(id)?.clientWidth ?? 0);
-  return width > 0 ? { width } : {};
-}
-
-/** Draws a view anew and leaves the table behind it open if it was. */
-function redraw(root: Root<HTMLElement>, draw: (root: Root<HTMLElement>) => void): void {
-  const wasOpen = root.select<HTMLDetailsElement>('details.numbers').node()?.open === true;
-  draw(root);
-  if (wasOpen) root.select('details.numbers').attr('open', '');
-}
 
 /** Everything that does not change with the reader's choices. */
 export function paintFixed(document: Document, { data, known }: Bench): void {
@@ -73,137 +39,6 @@ export function paintFixed(document: Document, { data, known }: Bench): void {
     .text(
       `Load profile: ${profileWords(data.rail)}. Sheet ${data.run.railHash.slice(0, 12)}, parts ${data.run.partsHash.slice(0, 12)}, version ${data.run.version}, seed ${data.run.seed}. This file holds everything; it asks nothing of any network.`,
     );
-}
-
-/** What the picture draws in this scene; absent where there is no front. */
-export function pictureInput({ dataset, data }: Bench, scene: Scene, withCloud: boolean): TradeoffInput | undefined {
-  const { state } = scene;
-  const x = dataset.byKey.get(`o.${state.x}`);
-  const y = dataset.byKey.get(`o.${state.y}`);
-  if (x === undefined || y === undefined || dataset.designs.length === 0) return undefined;
-  const { moved } = scene;
-  return {
-    dataset,
-    rail: data.rail,
-    x,
-    y,
-    third: dataset.byKey.get(`o.${state.third}`),
-    as: state.as,
-    window: state.window,
-    kept: scene.kept,
-    open: scene.open,
-    alike: scene.alike,
-    pinned: scene.pinned,
-    incumbents: (data.incumbents ?? []).flatMap((id) => dataset.index.get(id) ?? []),
-    changed: moved?.ok === true ? moved.value.objectives.map((figure) => figure.value) : undefined,
-    cloud: withCloud ? data.cloud : undefined,
-  };
-}
-
-/** The picture whole, with the words around it. */
-export function paintPicture(
-  document: Document,
-  bench: Bench,
-  scene: Scene,
-  withCloud: boolean,
-  options: TradeoffOptions = tradeoffDefaults,
-): TradeoffScales | undefined {
-  const input = pictureInput(bench, scene, withCloud);
-  const svg = placeOf(document, 'picture').select<SVGSVGElement>('svg') as unknown as Root<SVGSVGElement>;
-  if (input === undefined) {
-    clear(svg)
-      .attr('viewBox', '0 0 680 120')
-      .append('text')
-      .attr('x', 20)
-      .attr('y', 60)
-      .attr('class', 'empty')
-      .text('No design keeps every limit yet: see what each limit costs, below.');
-    return undefined;
-  }
-  const scales = renderTradeoff(svg, input, options);
-  paintPictureWords(document, bench, scene, input);
-  axisChoices(document, bench, scene);
-  return scales;
-}
-
-/** Only what follows the open, pinned and moved designs. */
-export function paintOverlay(
-  document: Document,
-  bench: Bench,
-  scene: Scene,
-  scales: TradeoffScales,
-  options: TradeoffOptions,
-): void {
-  const input = pictureInput(bench, scene, false);
-  if (input === undefined) return;
-  const svg = placeOf(document, 'picture').select<SVGSVGElement>('svg') as unknown as Root<SVGSVGElement>;
-  renderOverlay(svg, input, scales, options);
-  paintPictureWords(document, bench, scene, input);
-}
-
-/** Only the moved design. */
-export function paintMoved(document: Document, bench: Bench, scene: Scene, scales: TradeoffScales): void {
-  const input = pictureInput(bench, scene, false);
-  const svg = placeOf(document, 'picture').select<SVGSVGElement>('svg') as unknown as Root<SVGSVGElement>;
-  if (input !== undefined) renderMovedMark(svg, input, scales);
-}
-
-function paintPictureWords(document: Document, bench: Bench, scene: Scene, input: TradeoffInput): void {
-  const place = (id: string) => placeOf(document, id);
-  renderPicks(place('picks'), bench.dataset, picksOf(bench.dataset, scene.kept), scene.state.open);
-  place('picture-note').text(pictureNote(input));
-  const order = [...scene.kept].sort((a, b) => (input.x.values[a] ?? 0) - (input.x.values[b] ?? 0));
-  place('picture')
-    .attr('aria-valuemax', Math.max(1, order.length))
-    .attr('aria-valuenow', Math.max(1, order.indexOf(scene.open ?? -1) + 1))
-    .attr('aria-valuetext', scene.open === undefined ? 'none open' : designWords(bench.dataset, scene.open).join(', '));
-}
-
-/** The table behind the picture. */
-export function paintDesigns(document: Document, bench: Bench, scene: Scene, isWhole: boolean): void {
-  const input = pictureInput(bench, scene, false);
-  if (input !== undefined)
-    renderDesigns(
-      placeOf(document, 'picture-numbers').select<HTMLElement>('.scroll') as unknown as Root<HTMLElement>,
-      input,
-      isWhole ? Number.POSITIVE_INFINITY : FEW,
-    );
-}
-
-function axisChoices(document: Document, { dataset }: Bench, { state }: Scene): void {
-  const names = dataset.objectives.map((objective) => [objective.name, short(objective.name)] as const);
-  fill(document, 'axis-x', names, state.x);
-  fill(document, 'axis-y', names, state.y);
-  const thirds = names.flatMap(([name, text]) => [
-    [`size ${name}`, `size: ${text.toLowerCase()}`] as const,
-    [`shade ${name}`, `shade: ${text.toLowerCase()}`] as const,
-  ]);
-  fill(document, 'axis-third', [['', 'plain'], ...thirds], state.third === '' ? '' : `${state.as} ${state.third}`);
-}
-
-/** `Loss` for `loss, profile mean`: what stands after a comma is said elsewhere. */
-function short(name: string): string {
-  return titled(name).split(',')[0] ?? '';
-}
-
-function fill(document: Document, id: string, options: readonly (readonly [string, string])[], chosen: string): void {
-  const root = placeOf(document, id);
-  root
-    .selectAll('option')
-    .data(options)
-    .join('option')
-    .attr('value', ([value]) => value)
-    .text(([, text]) => text);
-  choose(document, id, chosen);
-}
-
-function choose(document: Document, id: string, value: string): void {
-  placeOf(document, id)
-    .selectAll<HTMLOptionElement, unknown>('option')
-    .each(function mark() {
-      this.toggleAttribute('selected', this.value === value);
-      this.selected = this.value === value;
-    });
 }
 
 /** Ranges, count, families, the list of further ranges. */
@@ -299,26 +134,6 @@ export function paintWhatIf(document: Document, bench: Bench, scene: Scene): voi
   placeOf(document, 'whatif')
     .select('[data-act=reset]')
     .attr('disabled', scene.moved === undefined ? '' : null);
-}
-
-/** The small picture beside the knobs; its marks are drawn anew only where they changed. */
-export function paintMovePicture(document: Document, bench: Bench, scene: Scene): void {
-  const input = pictureInput(bench, { ...scene, state: { ...scene.state, window: undefined }, pinned: [] }, false);
-  if (input === undefined) return;
-  const svg = placeOf(document, 'move-picture') as unknown as Root<SVGSVGElement>;
-  const key = JSON.stringify([
-    scene.state.x,
-    scene.state.y,
-    scene.state.third,
-    scene.state.as,
-    scene.state.ranges,
-    scene.state.hidden,
-  ]);
-  if (svg.attr('data-drawn') === key) renderMovedMark(svg, input, tradeoffScales(input, smallTradeoff));
-  else {
-    renderTradeoff(svg, input, smallTradeoff);
-    svg.attr('data-drawn', key);
-  }
 }
 
 export function paintCompare(document: Document, { dataset }: Bench, scene: Scene): void {

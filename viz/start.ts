@@ -2,32 +2,25 @@
 import type { Assessor } from './assessor.ts';
 import { type Change, changesBetween } from './changes.ts';
 import type { PageData } from './data.ts';
+import { type Desk, opened, toggled, togglePin } from './desk.ts';
 import { download } from './download.ts';
 import {
   paintAll,
   paintAway,
   paintCompare,
-  paintDesigns,
   paintNarrow,
   paintOpen,
   paintOpenHead,
   paintPoint,
   paintWhatIf,
 } from './paint.ts';
+import { paintDesigns } from './paint-picture.ts';
 import { attachPicture } from './picture.ts';
 import { type Bench, benchOf, firstState, judgeBy, type Scene, sceneOf } from './scene.ts';
-import { fromFragment, MOST_PINNED, type State, toFragment } from './state.ts';
+import { fromFragment, type State, toFragment } from './state.ts';
 import { valueAt } from './views/ranges.ts';
 import { knobValue } from './views/whatif.ts';
 import { designKnobs, railKnobs } from './whatif.ts';
-
-/** What the handlers may do. */
-export interface Desk {
-  readonly bench: Bench;
-  scene(): Scene;
-  /** Merges `part` into the state and repaints what it touches. */
-  set(part: Partial<State>): void;
-}
 
 /** Starts the live page in `document`. */
 export function start(document: Document, data: PageData, assessor: Assessor): Desk {
@@ -145,20 +138,6 @@ function goTo(document: Document, id: string): void {
   place?.scrollIntoView({ block: 'start' });
   const first = place?.matches('[tabindex]') ? place : place?.querySelector<HTMLElement>('input, select, button');
   first?.focus({ preventScroll: true });
-}
-
-/** Opening a design forgets the moves of the one before. */
-export function opened(id: string): Partial<State> {
-  return { open: id, changes: {} };
-}
-
-/** Pins or unpins; beyond the most that fit, the first pinned goes. */
-export function togglePin(desk: Desk, id: string): void {
-  if (id !== '') desk.set({ pinned: toggled(desk.scene().state.pinned, id).slice(-MOST_PINNED) });
-}
-
-function toggled(list: readonly string[], item: string): readonly string[] {
-  return list.includes(item) ? list.filter((one) => one !== item) : [...list, item];
 }
 
 function takeAway(document: Document, { bench, scene }: Desk, name: string): void {

@@ -1,7 +1,7 @@
 /** Every stored drawing by name: the view drawn from the invented sweep. `drawings/` holds exactly these. */
 import type { Assessment } from '../../model/assessment.ts';
 import type { Root } from '../../viz/marks/root.ts';
-import { pictureInput } from '../../viz/paint.ts';
+import { pictureInput } from '../../viz/paint-picture.ts';
 import { benchOf, firstState, sceneOf } from '../../viz/scene.ts';
 import { renderAway } from '../../viz/views/away.ts';
 import { renderCompare } from '../../viz/views/compare.ts';

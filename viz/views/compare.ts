@@ -3,7 +3,7 @@ import { type Dataset, type Quantity, shown } from '../dataset.ts';
 import { titled } from '../labels.ts';
 import { clear, type Root } from '../marks/root.ts';
 import { familyName } from './legend.ts';
-import { letter } from './tradeoff.ts';
+import { letter } from './overlay.ts';
 
 interface Row {
   readonly label: string;

@@ -76,11 +76,12 @@ export function limitName(name: string): string {
 }
 
 /** Efficiencies are fractions that people write in percent. */
-function isShare(limit: LimitFigure): boolean {
+function isShare(limit: Pick<LimitFigure, 'unit' | 'name'>): boolean {
   return limit.unit === '' && limit.name.startsWith('efficiency');
 }
 
-function written(limit: LimitFigure, value: number): string {
+/** A limit's value for people. */
+export function written(limit: Pick<LimitFigure, 'unit' | 'name'>, value: number): string {
   return isShare(limit) ? percent(value, 2) : show(value, limit.unit);
 }
 

@@ -7,7 +7,7 @@ import { clear, type Root } from '../marks/root.ts';
 import type { Pick as FirstPick } from '../picks.ts';
 import { show } from '../units.ts';
 import { familyName } from './legend.ts';
-import type { TradeoffInput } from './tradeoff.ts';
+import type { TradeoffInput } from './tradeoff-scales.ts';
 
 export function renderPicks<E extends Element>(
   root: Root<E>,

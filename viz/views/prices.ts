@@ -4,7 +4,7 @@ import type { Front, NearMiss } from '../data.ts';
 import { counted, listed, spoken } from '../labels.ts';
 import { clear, type Root } from '../marks/root.ts';
 import { percent, show } from '../units.ts';
-import { limitName } from './limits.ts';
+import { limitName, written } from './limits.ts';
 
 export const pricesDefaults = {
   /** Rows shown for one limit at most. */
@@ -99,13 +99,20 @@ export function renderPrices<E extends Element>(
     );
 }
 
+/** `20 mV → 21.8 mV`; a limit that allows nothing at all is told by how far it is broken. */
+function relaxationWords({ miss, unit }: Offer): string {
+  const limit = { name: miss.limit, unit };
+  if (miss.allowed === 0) return `by ${percent(Math.abs(miss.value))}`;
+  return `${written(limit, miss.allowed)} → ${written(limit, miss.value)}`;
+}
+
 function offerRow(row: Root<HTMLTableRowElement>, front: Front, offer: Offer): void {
   const column = front.objectives[offer.objective];
   const others = front.objectives
     .filter((_, k) => k !== offer.objective)
     .map(({ name }) => spoken(name).split(',')[0] ?? '');
   row.append('th').attr('scope', 'row').text(limitName(offer.miss.limit));
-  row.append('td').text(`${show(offer.miss.allowed, offer.unit)} → ${show(offer.miss.value, offer.unit)}`);
+  row.append('td').text(relaxationWords(offer));
   row
     .append('td')
     .text(
