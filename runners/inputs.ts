@@ -81,6 +81,12 @@ export function readInputs(texts: InputTexts): Inputs {
   return { texts, rail: sheet, tables, remarks: remarks.map(describeFinding) };
 }
 
+/** The built-in table of a kind. */
+export function builtInText(kind: PartKind): TableText {
+  const file = BUILT_IN_TABLES.find((table) => table.kind === kind)?.file ?? '';
+  return { kind, file, text: readText(packagePath('model', 'tables', file), 'a built-in parts table') };
+}
+
 /** The problem that the inputs pose. Throws the refusal `no-space` where nothing can be searched. */
 export function problemOf(inputs: Inputs): RailProblem {
   const outcome = createRailProblem(inputs.rail, inputs.tables);
@@ -104,10 +110,7 @@ function refuseFindings(findings: readonly Finding[]): Error {
 }
 
 function builtIn(): TableText[] {
-  return BUILT_IN_TABLES.map(({ kind, file }) => {
-    const text = readText(packagePath('model', 'tables', file), 'a built-in parts table');
-    return { kind, file, text };
-  });
+  return BUILT_IN_TABLES.map(({ kind }) => builtInText(kind));
 }
 
 function ownTable(name: string, folder: string): TableText {

@@ -7,6 +7,7 @@ import { defineDraft } from './commands/draft.ts';
 import { defineHandoff } from './commands/handoff.ts';
 import { defineMerge } from './commands/merge.ts';
 import { definePage } from './commands/page.ts';
+import { defineParts } from './commands/parts.ts';
 import { defineShow } from './commands/show.ts';
 import { defineStatus } from './commands/status.ts';
 import { defineSweep } from './commands/sweep.ts';
@@ -18,6 +19,7 @@ import { VERSION } from './version.ts';
 const DEFINITIONS = [
   defineDraft,
   defineCheck,
+  defineParts,
   defineSweep,
   definePage,
   defineShow,

@@ -13,3 +13,6 @@ export const BUILT_IN_TABLES: readonly { readonly kind: PartKind; readonly file:
   { kind: 'conductors', file: 'conductors.csv' },
   { kind: 'powerStages', file: 'power-stages.csv' },
 ];
+
+/** What each kind is called by people: the name of its built-in table's file. */
+export const KIND_NAMES: readonly string[] = BUILT_IN_TABLES.map(({ file }) => file.replace(/\.csv$/, ''));
