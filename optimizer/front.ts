@@ -10,7 +10,7 @@ import {
   selectNearMisses,
 } from './archive/index.ts';
 import { createHypervolume, selectSubset } from './hypervolume/index.ts';
-import type { Island } from './island.ts';
+import type { FamilyRecord, Island } from './island.ts';
 import type { Problem } from './problem.ts';
 import { pickDesigns } from './ring.ts';
 import { archiveGrid, nearMissGrid } from './world.ts';
@@ -31,6 +31,30 @@ export function mergeNearMisses(
   const near = createNearMisses(nearMissGrid(problem));
   for (const part of parts) insertAllNearMisses(near, 'nearMisses' in part ? part.nearMisses : part);
   return selectNearMisses(near, front);
+}
+
+/** What became of each family over all islands together. */
+export function mergeRecords(islands: readonly Island[]): FamilyRecord {
+  const add = (pick: (record: FamilyRecord) => Float64Array, join: (a: number, b: number) => number): Float64Array =>
+    islands
+      .slice(1)
+      .reduce(
+        (all, { record }) => all.map((value, k) => join(value, pick(record)[k])),
+        islands.length === 0 ? new Float64Array(0) : pick(islands[0].record).slice(),
+      );
+  const sum = (a: number, b: number): number => a + b;
+  return {
+    evaluated: add((record) => record.evaluated, sum),
+    feasible: add((record) => record.feasible, sum),
+    best: add((record) => record.best, Math.min),
+    violated: add((record) => record.violated, sum),
+  };
+}
+
+/** How far islands agree: hypervolume of each one's archive over that of the merged front, 0 … 1. */
+export function agreementOf(problem: Problem, islands: readonly Island[], front: Designs): number[] {
+  const whole = hypervolumeOf(problem, front);
+  return islands.map((island) => (whole > 0 ? hypervolumeOf(problem, island.archive) / whole : 0));
 }
 
 /**

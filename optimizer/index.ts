@@ -2,8 +2,28 @@
  * The search engine as a library. It searches any `Problem` (problem.ts): real, logarithmic, whole-number and choice genes, two to four
  * objectives, limits as violations.
  *
- * In one thread:
+ * In one thread (test/optimizer/example.test.ts runs a whole one):
  *
+ *     const problem: Problem = {
+ *       name: 'can',
+ *       genes: [
+ *         { name: 'radius', unit: 'cm', kind: 'real', low: 1, high: 10 },
+ *         { name: 'height', unit: 'cm', kind: 'log', low: 1, high: 100 },
+ *       ],
+ *       objectives: [
+ *         { name: 'metal', unit: 'cm²', resolution: 0.1, ideal: 0, reference: 1000 },
+ *         { name: 'height', unit: 'cm', resolution: 0.01, ideal: 0, reference: 100 },
+ *       ],
+ *       limits: ['volume'],
+ *       families: ONE_FAMILY,
+ *       seeds: [],
+ *       snap: () => {},
+ *       evaluate: ([radius, height], objectives, violations) => {
+ *         objectives[0] = 2 * Math.PI * radius * (radius + height);
+ *         objectives[1] = height;
+ *         violations[0] = Math.max(0, 1 - (Math.PI * radius * radius * height) / 330);
+ *       },
+ *     };
  *     const { front } = search(problem, { evaluations: 25_000, seed: 1, keep: 100 });
  *
  * Over threads or machines, each island is plain data and an epoch a pure function, so anyone may run it:
@@ -26,12 +46,14 @@
  *     mergeNearMisses(problem, parts: readonly (Island | Designs)[], front: Designs): NearMissDesigns
  *     chooseSubset(front: Designs, count: number, reference?: Float64Array): Designs
  *     hypervolumeOf(problem, front: Designs): number                                 // 0 … 1
+ *     mergeRecords(islands): FamilyRecord                                            // family by family, over all islands
+ *     agreementOf(problem, islands, front: Designs): number[]                        // island by island, 0 … 1
  *
  * An epoch takes `plan.epochGenerations × plan.population` evaluations an island; `Island.counters`, `.record` (family by family), `.shares` (of
  * `OPERATORS`) tell how it goes. `watch` = { now, spent: { variation, model, ranking, archive } } adds up where the time went.
  */
 export type { Designs, NearMissDesigns } from './archive/index.ts';
-export { chooseSubset, hypervolumeOf, mergeArchives, mergeNearMisses } from './front.ts';
+export { agreementOf, chooseSubset, hypervolumeOf, mergeArchives, mergeNearMisses, mergeRecords } from './front.ts';
 export { type Counters, type FamilyRecord, type Island, OPERATORS, startIslands } from './island.ts';
 export { PACK_VERSION, packDesigns, packIsland, unpackDesigns, unpackIsland } from './pack.ts';
 export { createPlan, type Plan, type PlanOptions } from './plan.ts';

@@ -81,9 +81,22 @@ function countRow(world: World, row: number): void {
   if (!finite) counters.notComputable++;
   if (!finite || broken > 0) return;
   counters.feasible++;
+  crown(world, row);
   record.feasible[f]++;
   for (let c = 0; c < m; c++) {
     if (objectives[row * m + c] < record.best[f * m + c]) record.best[f * m + c] = objectives[row * m + c];
+  }
+}
+
+/** Makes the row champion of each objective in which it beats the present one. */
+function crown(world: World, row: number): void {
+  const { n, m, capacity, objectives, coordinates, stride } = world;
+  for (let c = 0; c < m; c++) {
+    const champion = capacity + c;
+    if (!(objectives[row * m + c] < objectives[champion * m + c])) continue;
+    objectives.copyWithin(champion * m, row * m, row * m + m);
+    coordinates.copyWithin(champion * n, row * n, row * n + n);
+    stride.copyWithin(champion * n, row * n, row * n + n);
   }
 }
 

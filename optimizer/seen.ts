@@ -1,6 +1,6 @@
 /**
- * A bounded memory of designs seen: a table with one fingerprint a slot, where a newcomer replaces what was there. It never calls a new design
- * seen but for one chance in 2³², and forgets old ones only where slots collide.
+ * A bounded memory of designs seen: a table of fingerprints in buckets of four, where a newcomer pushes out the oldest. It calls a new design
+ * seen with a chance of about one in 10⁹, and forgets old ones only where buckets overflow.
  */
 
 /** Hashes one row of genes into `out`: the slot hash first, the fingerprint (never 0) second. MurmurHash3's mixing (Appleby 2011). */
@@ -19,11 +19,15 @@ export function hashRow(words: Uint32Array, out: Uint32Array): void {
   out[1] = finish(b) | 1;
 }
 
-/** Remembers the design hashed in `hash`; true when it was remembered already. */
+/** Slots of a bucket: a design is looked for, and remembered, in one bucket. */
+const WAYS = 4;
+
+/** Remembers the design hashed in `hash`; true when it was remembered already. A full bucket forgets its oldest. */
 export function remember(seen: Uint32Array, hash: Uint32Array): boolean {
-  const slot = hash[0] & (seen.length - 1);
-  if (seen[slot] === hash[1]) return true;
-  seen[slot] = hash[1];
+  const bucket = (hash[0] & (seen.length / WAYS - 1)) * WAYS;
+  for (let k = bucket; k < bucket + WAYS; k++) if (seen[k] === hash[1]) return true;
+  for (let k = bucket + WAYS - 1; k > bucket; k--) seen[k] = seen[k - 1];
+  seen[bucket] = hash[1];
   return false;
 }
 

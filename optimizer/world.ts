@@ -33,7 +33,10 @@ export interface Watch {
   readonly spent: TimeSplit;
 }
 
-/** An open island. Rows 0 … count − 1 are the population, the rows behind them children. */
+/**
+ * An open island. Rows 0 … count − 1 are the population, the rows behind them children; rows capacity … capacity + m − 1 of coordinates,
+ * strides and objectives are the champions: the best feasible design known in each objective (objectives Infinity while there is none).
+ */
 export interface World {
   readonly problem: Problem;
   readonly island: Island;
@@ -140,11 +143,11 @@ export function openWorld(problem: Problem, island: Island, guests: number, watc
     capacity,
     keep,
     genes: new Float64Array(capacity * n),
-    coordinates: new Float64Array(capacity * n),
-    stride: new Float64Array(capacity * n),
-    objectives: new Float64Array(capacity * m),
+    coordinates: new Float64Array((capacity + m) * n),
+    stride: new Float64Array((capacity + m) * n),
+    objectives: new Float64Array((capacity + m) * m).fill(Number.POSITIVE_INFINITY),
     violations: new Float64Array(capacity * limits),
-    total: new Float64Array(capacity),
+    total: new Float64Array(capacity + m),
     rank: new Int32Array(capacity),
     family: new Int32Array(capacity),
     parent: new Int32Array(capacity).fill(-1),
@@ -176,7 +179,19 @@ export function openWorld(problem: Problem, island: Island, guests: number, watc
     stalled: island.stalled,
   };
   addRows(world, island.population);
+  for (let c = 0; c < m; c++) findChampion(world, c);
   return world;
+}
+
+/** Sets the champion of objective c from the archive that was brought along. */
+function findChampion(world: World, c: number): void {
+  const { m, n, capacity } = world;
+  const { count, genes, objectives } = world.island.archive;
+  let best = 0;
+  for (let k = 1; k < count; k++) if (objectives[k * m + c] < objectives[best * m + c]) best = k;
+  if (count === 0) return;
+  for (let k = 0; k < m; k++) world.objectives[(capacity + c) * m + k] = objectives[best * m + k];
+  toCoordinates(world.space, genes, best * n, world.coordinates, (capacity + c) * n);
 }
 
 /** True when every objective of a row is finite and no violation NaN. */

@@ -3,15 +3,19 @@
  */
 import { describe, expect, it } from 'vitest';
 import {
+  agreementOf,
   createPlan,
   type Designs,
   type Island,
   immigrantsFor,
   mergeArchives,
+  mergeNearMisses,
+  mergeRecords,
   NO_DESIGNS,
   type Problem,
   packDesigns,
   packIsland,
+  search,
   startIslands,
   step,
   unpackDesigns,
@@ -168,3 +172,67 @@ function sum(values: Float64Array): number {
 function range(count: number): number[] {
   return Array.from({ length: count }, (_, k) => k);
 }
+
+describe('islands together', () => {
+  it('add up their records and tell how far they agree', () => {
+    const problem = rooms();
+    const islands = ring(problem, 11);
+    const front = mergeArchives(problem, islands);
+    const record = mergeRecords(islands);
+    expect(sum(record.evaluated)).toBe(islands.reduce((all, island) => all + island.counters.evaluations, 0));
+    expect(Math.min(...record.best.filter((_, k) => k % 2 === 0))).toBe(front.objectives[0]);
+    for (const share of agreementOf(problem, islands, front)) {
+      expect(share).toBeGreaterThan(0.5);
+      expect(share).toBeLessThan(1.01);
+    }
+  });
+
+  it('hold near misses that break one limit by at most a quarter and beat the front', () => {
+    const problem = rooms();
+    const islands = ring(problem, 12);
+    const front = mergeArchives(problem, islands);
+    const near = mergeNearMisses(problem, islands, front);
+    expect(near.count).toBeGreaterThan(0);
+    for (let k = 0; k < near.count; k++) {
+      expect(near.violations[k]).toBeGreaterThan(0);
+      expect(near.violations[k]).toBeLessThanOrEqual(0.25);
+      const [cost, discomfort] = near.objectives.subarray(2 * k, 2 * k + 2);
+      for (let j = 0; j < front.count; j++) {
+        expect(front.objectives[2 * j] <= cost && front.objectives[2 * j + 1] <= discomfort).toBe(false);
+      }
+    }
+  });
+
+  it('start from the seeds given', () => {
+    const problem = rooms();
+    const genes = Float64Array.of(1, 10, 6, 300);
+    const f = new Float64Array(2);
+    problem.evaluate(genes, f, new Float64Array(1));
+    const plan = createPlan(problem, { islands: 1, population: 20, epochGenerations: 1 });
+    const [island] = startIslands(problem, plan).map((each) => step(problem, each));
+    const { archive } = island;
+    const covered = range(archive.count).some(
+      (k) => archive.objectives[2 * k] <= f[0] + 1 && archive.objectives[2 * k + 1] <= f[1] + 0.01,
+    );
+    expect(covered).toBe(true);
+  });
+
+  it('restart around the archive when nothing new enters it, and stop when every design was seen', () => {
+    const small: Problem = {
+      ...rooms(),
+      genes: rooms().genes.slice(0, 2),
+      seeds: [],
+      snap: () => {},
+      evaluate: ([a, b], f, v) => {
+        f[0] = a + b;
+        f[1] = 41 - b;
+        v[0] = 0;
+      },
+    };
+    const { islands, front, evaluations } = search(small, { evaluations: 20_000, seed: 1 });
+    // 3 shapes × 40 seat counts; the front is the first shape with every seat count.
+    expect(front.count).toBe(40);
+    expect(evaluations).toBe(120);
+    expect(islands[0].counters.restarts).toBeGreaterThan(0);
+  });
+});
