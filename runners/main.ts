@@ -3,6 +3,7 @@ import { Command, CommanderError } from 'commander';
 import { defineAssess } from './commands/assess.ts';
 import { defineCheck } from './commands/check.ts';
 import { defineCompare } from './commands/compare.ts';
+import { defineCompletion } from './commands/completion.ts';
 import { defineDraft } from './commands/draft.ts';
 import { defineHandoff } from './commands/handoff.ts';
 import { defineMerge } from './commands/merge.ts';
@@ -28,6 +29,7 @@ const DEFINITIONS = [
   defineMerge,
   defineStatus,
   defineCompare,
+  defineCompletion,
 ];
 
 const AFTER_HELP = `
@@ -64,13 +66,18 @@ function build(setStatus: SetStatus): Command {
     .helpCommand('help [command]', 'explain a command')
     .addHelpText('after', AFTER_HELP);
   for (const define of DEFINITIONS) define(program, setStatus);
-  for (const command of [program, ...program.commands]) {
+  for (const command of withBelow(program)) {
     command
       .exitOverride()
       .showSuggestionAfterError(true)
       .configureOutput({ outputError: () => {} });
   }
   return program;
+}
+
+/** A command and all below it. */
+function withBelow(command: Command): Command[] {
+  return [command, ...command.commands.flatMap(withBelow)];
 }
 
 /** Writes the one line that an error deserves; returns its exit status. */

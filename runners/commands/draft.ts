@@ -26,8 +26,7 @@ const MORE = `
 Nothing is asked: the sheet explains itself in its comments. Without --scenario it is a complete small rail to change.
 
 Scenarios, all invented:
-${SCENARIO_NAMES.map((name) => `  ${name.padEnd(14)}  ${SCENARIOS[name] ?? ''}`).join('\n')}
-`;
+${SCENARIO_NAMES.map((name) => `  ${name.padEnd(14)}  ${SCENARIOS[name] ?? ''}`).join('\n')}`;
 
 /** Adds the command to the program. */
 export function defineDraft(program: Command, _setStatus: SetStatus): void {

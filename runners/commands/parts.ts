@@ -16,8 +16,7 @@ interface TemplateOptions {
 
 const CHECK_MORE = `
 Each rejected row is named with its line, its column, what was found and what is allowed. Rows that are allowed but far
-from what such parts usually are get listed too: they may be right. Rejected rows give exit status 2, odd ones 0.
-`;
+from what such parts usually are get listed too: they may be right. Rejected rows give exit status 2, odd ones 0.`;
 
 /** Adds the command to the program. */
 export function defineParts(program: Command, setStatus: SetStatus): void {

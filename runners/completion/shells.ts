@@ -1,0 +1,3 @@
+/** Shells that completion is written for. */
+export const SHELLS = ['bash', 'zsh', 'fish'] as const;
+export type Shell = (typeof SHELLS)[number];
