@@ -38,7 +38,7 @@ function writeValues(lines: Lines, point: SolvedPoint, times: PulseTimes): void 
     '',
     'share of the rectified period that the model gives the rising interval',
   );
-  lines.parameter('tcommute', times.commutation, 's', 'time in which the leakage turns the current round');
+  lines.parameter('tcommute', times.commutation, 's', 'on-time whose volt-seconds the leakage takes');
   lines.parameter('tmakeup', times.extra, 's', 'on-time a control loop adds for the drops in the dead times');
   lines.parameter('tdead', times.gap, 's', 'dead time of the drivers at each edge');
   const share = design.stage.chokeMultiple === 2 ? 'duty*tper/2' : 'duty*tper';
