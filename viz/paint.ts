@@ -27,7 +27,7 @@ import { operatingPoint, renderWaveforms, waveformsDefaults } from './views/wave
 import { renderKnobs, renderMove } from './views/whatif.ts';
 
 /** Everything that does not change with the reader's choices. */
-export function paintFixed(document: Document, { data, known }: Bench): void {
+function paintFixed(document: Document, { data, known }: Bench): void {
   const place = (id: string) => placeOf(document, id);
   renderMasthead(place('masthead'), data.rail, data.run, data.front.designs.length, known.objectives);
   renderPrices(place('prices'), data.front, data.nearMisses, data.rail);

@@ -38,7 +38,7 @@ export function fill(
   choose(document, id, chosen);
 }
 
-export function choose(document: Document, id: string, value: string): void {
+function choose(document: Document, id: string, value: string): void {
   placeOf(document, id)
     .selectAll<HTMLOptionElement, unknown>('option')
     .each(function mark() {

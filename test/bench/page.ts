@@ -64,7 +64,7 @@ function figures(
 }
 
 /** The sweep's own designs, repeated with small shifts until there are enough to load the page. */
-export function filled(data: PageData, count: number, points: number): PageData {
+function filled(data: PageData, count: number, points: number): PageData {
   const own = data.front.designs;
   const designs = Array.from({ length: count }, (_, i) => {
     const design = own[i % own.length];

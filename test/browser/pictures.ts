@@ -1,4 +1,8 @@
-/** Pictures of the page's main states, for the README and for the eyes of whoever changes the looks. */
+/**
+ * Pictures of the page's main states, for the README and for the eyes of whoever changes the looks. After `npm run demo`:
+ *
+ *     node dist/test/browser/pictures.js runs/demo/page.html viz/pictures
+ */
 import { mkdirSync } from 'node:fs';
 import { join } from 'node:path';
 import { pathToFileURL } from 'node:url';
@@ -25,7 +29,7 @@ const STATES: readonly State[] = [
 ];
 
 /** Writes `light.png`, `dark.png`, … of the page at `path` into `folder`; returns their names, none where no browser starts. */
-export async function takePictures(path: string, folder: string): Promise<readonly string[]> {
+async function takePictures(path: string, folder: string): Promise<readonly string[]> {
   const { started } = await launchAll();
   const browser = started[0]?.browser;
   mkdirSync(folder, { recursive: true });
@@ -50,3 +54,7 @@ async function whatIf(page: Page): Promise<void> {
   await page.locator('#knob-frequency').focus();
   for (let i = 0; i < 60; i++) await page.keyboard.press('ArrowLeft');
 }
+
+const [page = '', folder = ''] = process.argv.slice(2);
+if (page === '' || folder === '') throw new Error('expected the path of a page and a folder for its pictures');
+for (const name of await takePictures(page, folder)) console.log(join(folder, name));

@@ -58,7 +58,7 @@ export function sweptData(evaluations = 20_000, keep = 300): PageData {
 }
 
 /** The shipped parts. */
-export function builtInTables(): PartsTables {
+function builtInTables(): PartsTables {
   const read = BUILT_IN_TABLES.map(({ kind, file }) => ({
     kind,
     rows: given(readTable(kind, readFileSync(new URL(file, TABLES), 'utf8'), file)),

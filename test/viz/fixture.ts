@@ -317,7 +317,7 @@ function choice(name: string, options: readonly string[]): Movable {
 }
 
 /** Judges one invented design. */
-export function judge(design: DesignRecord, rail: Rail): Assessment {
+function judge(design: DesignRecord, rail: Rail): Assessment {
   const inputs = [rail.input.nominal, rail.input.minimum, rail.input.maximum];
   const points = inputs.flatMap((input) =>
     rail.profile.map((load) => pointAt(design, rail, input, load.fraction, load.share)),

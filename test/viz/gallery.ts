@@ -28,7 +28,7 @@ type Place = Root<HTMLDivElement>;
 
 const data = fixture(60, 400);
 export const bench = benchOf(data, fixtureAssessor());
-export const first = firstState(bench);
+const first = firstState(bench);
 export const scene = sceneOf(bench, { ...first, pinned: bench.dataset.designs.slice(0, 4).map((design) => design.id) });
 export const open: Assessment = opened();
 

@@ -9,11 +9,6 @@ export function place(): Root<HTMLDivElement> {
   return select(document.querySelector('div') as HTMLDivElement) as unknown as Root<HTMLDivElement>;
 }
 
-/** An empty `svg` of a fresh document. */
-export function sheet(): Root<SVGSVGElement> {
-  return place().append('svg') as unknown as Root<SVGSVGElement>;
-}
-
 /** Text of the cells, row by row, of the first table under `root`. */
 export function cellsOf(root: Root<HTMLDivElement>): string[][] {
   const rows = root.node()?.querySelector('table')?.querySelectorAll('tr') ?? [];

@@ -106,7 +106,7 @@ function title(
 }
 
 /** Round values in the shown unit, inside the scale's domain; on a logarithmic scale at 1, 2 and 5. */
-export function ticksOf(scale: Scale, { unit, ticks }: Pick<AxisOptions, 'unit' | 'ticks'>): readonly number[] {
+function ticksOf(scale: Scale, { unit, ticks }: Pick<AxisOptions, 'unit' | 'ticks'>): readonly number[] {
   const shown = scale.copy().domain(scale.domain().map((value) => (value - unit.offset) / unit.factor));
   const [low = 0, high = 1] = shown.domain();
   const all = shown.ticks(ticks).filter((tick) => tick >= low && tick <= high);

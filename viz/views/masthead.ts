@@ -26,7 +26,7 @@ export function renderMasthead<E extends Element>(
 }
 
 /** `10.5 to 15 V in (12.8 V usual) → 3.3 V at 8 A; …`. */
-export function requirement(rail: Rail): string {
+function requirement(rail: Rail): string {
   const { input, output } = rail;
   const out =
     output.minimum === output.maximum

@@ -6,7 +6,7 @@ import { clear, type Root } from '../marks/root.ts';
 import { percent, show } from '../units.ts';
 import { limitName, written } from './limits.ts';
 
-export const pricesDefaults = {
+const pricesDefaults = {
   /** Rows shown for one limit at most. */
   perLimit: 2,
 };

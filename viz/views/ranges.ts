@@ -5,7 +5,7 @@ import { thousands, titled } from '../labels.ts';
 import { clear, px, type Root } from '../marks/root.ts';
 import type { Interval, State } from '../state.ts';
 
-export const rangesDefaults = {
+const rangesDefaults = {
   bins: 36,
   /** Positions of a thumb from one end to the other. */
   steps: 240,

@@ -5,7 +5,7 @@ import { bar } from '../marks/bar.ts';
 import { clear, type Root } from '../marks/root.ts';
 import { percent, show } from '../units.ts';
 
-export const temperaturesDefaults = {
+const temperaturesDefaults = {
   /** The scale ends at least this far above the ambient, K. */
   span: 60,
 };

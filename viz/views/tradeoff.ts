@@ -18,7 +18,7 @@ import {
 } from './tradeoff-scales.ts';
 
 /** Shades of the third quantity, from the best value to the worst. */
-export const SHADES = 6;
+const SHADES = 6;
 
 export function renderTradeoff(
   root: Root<SVGSVGElement>,

@@ -8,7 +8,7 @@ import { digits, marginPercent, percent, show, showDifference } from '../units.t
 import { type DesignKnob, designKnobs, type RailKnob, railKnobs } from '../whatif.ts';
 import { brokenLimits } from './limits.ts';
 
-export const whatIfDefaults = { steps: 400 };
+const whatIfDefaults = { steps: 400 };
 
 type Knob = DesignKnob | RailKnob;
 type Group = readonly [string, Knob[]];
