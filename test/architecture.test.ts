@@ -16,14 +16,16 @@ const tracked = trackedPaths();
 const files = trackedTexts(/\.ts$/).map(parseFile);
 /** What the package's `exports` open to other programs. */
 const FACES = ['optimizer/index.ts', 'model/index.ts'];
-/** Files that are started and not imported. */
+/** Files that are started, or loaded by their name, and not imported. */
 const STARTED =
-  /^(runners\/(chopfront|demo|build|refresh|engines\/worker)|viz\/live|test\/.*(\.test|\.config|\.d))\.ts$/;
+  /^(runners\/(chopfront|demo|build|refresh|engines\/(worker|rail-problem))|viz\/live|test\/(.*(\.test|\.config|\.d)|runners\/toy))\.ts$/;
 
-const manifest: Record<'dependencies' | 'devDependencies', Record<string, string>> = JSON.parse(
+const manifest: Record<'dependencies' | 'devDependencies' | 'peerDependencies', Record<string, string>> = JSON.parse(
   readText('package.json'),
 );
 const runtime = Object.keys(manifest.dependencies);
+/** Used where they are installed, and done without where not. */
+const optional = Object.keys(manifest.peerDependencies);
 const development = Object.keys(manifest.devDependencies);
 const inRooms = files.filter(({ path }) => !path.startsWith('test/'));
 
@@ -202,9 +204,9 @@ describe('nothing is left over', () => {
     expect(unusedExports(pair, [])).toEqual(['model/a.ts: a', 'model/a.ts: b', 'model/part/index.ts: b']);
   });
 
-  test('the rooms use the runtime dependencies, all of them and no other package', () => {
+  test('the rooms use the runtime dependencies and the optional ones, all of them and no other package', () => {
     const used = packagesOf(inRooms.filter(({ path }) => path !== 'runners/build.ts'));
-    expect([...used].sort()).toEqual([...runtime].sort());
+    expect([...used].sort()).toEqual([...runtime, ...optional].sort());
   });
 
   test('every development dependency is imported, typed for or started by name', () => {

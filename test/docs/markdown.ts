@@ -39,7 +39,7 @@ export function exchangesOf(block: Block): readonly Exchange[] {
 }
 
 /** Text without fenced blocks. */
-export function proseOf(markdown: string): string {
+function proseOf(markdown: string): string {
   return markdown.replace(/^```[\s\S]*?^```$/gm, '');
 }
 

@@ -12,7 +12,7 @@ export interface Room {
 }
 
 /** Words of the map's last column that are not package names. */
-export const PLATFORM = ['the DOM', 'the clock', 'Node', 'any development dependency'] as const;
+const PLATFORM = ['the DOM', 'the clock', 'Node', 'any development dependency'] as const;
 export type Platform = (typeof PLATFORM)[number];
 
 /** The map's rows; throws where the text has no such table or a row cannot be understood. */
