@@ -3,6 +3,7 @@
  * Commands throw a `Refusal`; `main` prints its one line and leaves with its status. Anything else that is thrown is an
  * internal fault.
  */
+import { short } from './terminal/text.ts';
 
 /** Exit statuses. Stable: scripts and schedulers rely on them. */
 export const STATUS = {
@@ -34,8 +35,6 @@ export const ERRORS = {
   'unknown-shell': [2, 'no completion for {name}; there is one for: {names}'],
   'file-exists': [2, '{file}: exists already; choose another name, or add --force to replace it'],
   'file-unwritable': [2, '{file}: cannot be written ({reason}); choose another place'],
-  'not-a-spec': [2, '{file}: is not a design in spec form: {reason}'],
-  'unknown-part': [2, '{file}: this design cannot stand in this sheet: {reason}'],
   'unknown-scenario': [2, 'no scenario named {name}; there are: {names}{nearest}'],
   'folder-not-run': [2, '{folder}: holds files but no run; give a new or empty folder to --out'],
   'folder-has-run': [
@@ -71,7 +70,7 @@ export const ERRORS = {
     '{folder}: in use by another sweep (process {pid} on {host}, last seen {age} ago); wait for it, or stop it first',
   ],
   'no-design': [3, 'no design keeps every limit after {evaluations} evaluations\n{explanation}'],
-  'no-space': [3, 'this sheet leaves nothing to search: {reason}'],
+  'no-space': [3, 'this sheet leaves nothing to search:\n  {reasons}'],
   'unknown-design': [2, '{folder}: no design {id} in this run{nearest}'],
   'ambiguous-design': [2, '{folder}: {id} begins more than one design id: {ids}'],
   'disk-full': [
@@ -122,10 +121,18 @@ export class Refusal extends Error {
   }
 }
 
-/** The refusal of that code; each `{name}` in its text is taken from `values`. */
+/** Values that we laid out in lines ourselves; every other one is somebody's text and stays on its line. */
+const LAID_OUT = new Set(['text', 'difference', 'explanation', 'reasons']);
+/** Longest text of somebody that a message repeats, characters. */
+const LONGEST = 400;
+
+/** The refusal of that code; each `{name}` in its text is taken from `values`, made harmless. */
 export function refusal(code: ErrorCode, values: Readonly<Record<string, string | number>> = {}): Refusal {
   const [status, template] = ERRORS[code];
-  const text = template.replace(/\{(\w+)\}/g, (_, name: string) => String(values[name] ?? `{${name}}`));
+  const text = template.replace(/\{(\w+)\}/g, (_, name: string) => {
+    const value = String(values[name] ?? `{${name}}`);
+    return LAID_OUT.has(name) ? value : short(value, LONGEST);
+  });
   return new Refusal(code, text, status);
 }
 
@@ -135,8 +142,27 @@ export function systemCode(error: unknown): string {
   return error instanceof Error && 'code' in error && typeof error.code === 'string' ? error.code : '';
 }
 
-/** The first line of what went wrong, whatever was thrown. */
+/** What the system's codes mean to a person. */
+const SYSTEM_REASONS: Readonly<Record<string, string>> = {
+  ENOENT: 'no such file or folder',
+  EACCES: 'permission denied',
+  EPERM: 'permission denied',
+  EEXIST: 'a file of that name is in the way',
+  EISDIR: 'it is a folder',
+  ENOTDIR: 'a part of that path is a file',
+  ENOSPC: 'the disk is full',
+  EDQUOT: 'the quota is used up',
+  EROFS: 'the file system is read-only',
+  ENAMETOOLONG: 'the name is too long',
+  ELOOP: 'its links go round in a circle',
+  EMFILE: 'too many files are open',
+  EIO: 'the device fails',
+};
+
+/** What went wrong in one line, whatever was thrown. */
 export function reasonOf(error: unknown): string {
+  const known = SYSTEM_REASONS[systemCode(error)];
+  if (known !== undefined) return known;
   const text = error instanceof Error ? error.message : String(error);
   return text.split('\n', 1)[0] ?? '';
 }

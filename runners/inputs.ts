@@ -91,7 +91,7 @@ export function builtInText(kind: PartKind): TableText {
 export function problemOf(inputs: Inputs): RailProblem {
   const outcome = createRailProblem(inputs.rail, inputs.tables);
   if (outcome.ok) return outcome.value;
-  throw refusal('no-space', { reason: outcome.findings.map(describeFinding).join('\n  ') });
+  throw refusal('no-space', { reasons: linesOf(outcome.findings) });
 }
 
 /** The value of an outcome. Throws the refusal `findings` with a line for each problem where there is none. */
@@ -104,9 +104,14 @@ export function take<T>(outcome: Outcome<T>): T {
 const MOST_LISTED = 20;
 
 function refuseFindings(findings: readonly Finding[]): Error {
+  return refusal('findings', { text: linesOf(findings) });
+}
+
+/** A line for each finding, whatever it repeats of a person's text. */
+function linesOf(findings: readonly Finding[]): string {
   const lines = findings.slice(0, MOST_LISTED).map((finding) => plain(describeFinding(finding)));
   if (findings.length > MOST_LISTED) lines.push(`and ${findings.length - MOST_LISTED} more`);
-  return refusal('findings', { text: lines.join('\n  ') });
+  return lines.join('\n  ');
 }
 
 function builtIn(): TableText[] {

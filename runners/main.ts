@@ -13,7 +13,7 @@ import { defineShow } from './commands/show.ts';
 import { defineStatus } from './commands/status.ts';
 import { defineSweep } from './commands/sweep.ts';
 import { Refusal, reasonOf, refusal, STATUS } from './errors.ts';
-import { plainLines } from './terminal/text.ts';
+import { plainLines, short } from './terminal/text.ts';
 import { VERSION } from './version.ts';
 
 /** Each command's file; the order is that of `--help`. */
@@ -52,7 +52,7 @@ export async function main(args: readonly string[]): Promise<number> {
     await program.parseAsync([...args], { from: 'user' });
     return status;
   } catch (error) {
-    return explain(error);
+    return explain(error, commandNamed(program, args));
   }
 }
 
@@ -80,9 +80,15 @@ function withBelow(command: Command): Command[] {
   return [command, ...command.commands.flatMap(withBelow)];
 }
 
-/** Writes the one line that an error deserves; returns its exit status. */
-export function explain(error: unknown): number {
-  if (error instanceof CommanderError) return explainUsage(error);
+/** How the command that `args` ask for is called in `see: chopfront … --help`: its words, each with a space behind it. */
+function commandNamed(command: Command, [first, ...rest]: readonly string[]): string {
+  const found = command.commands.find((one) => one.name() === first);
+  return found === undefined ? '' : `${found.name()} ${commandNamed(found, rest)}`;
+}
+
+/** Writes the one line that an error deserves; returns its exit status. `command` is the one that was asked for. */
+export function explain(error: unknown, command = ''): number {
+  if (error instanceof CommanderError) return explainUsage(error, command);
   if (error instanceof Refusal) {
     process.stderr.write(`chopfront: ${plainLines(error.message)}\n`);
     return error.status;
@@ -94,10 +100,12 @@ export function explain(error: unknown): number {
   return STATUS.fault;
 }
 
+const LONGEST_USAGE = 400;
+
 // Commander ends `--help` and `--version` by an error with status 0, and shows help with status 1 where no command is named.
-function explainUsage(error: CommanderError): number {
+function explainUsage(error: CommanderError, command: string): number {
   if (error.exitCode === 0) return STATUS.done;
   if (error.code === 'commander.help') return STATUS.badInput;
   const text = error.message.replace(/^error: /, '').replace(/\n\(?Did you mean ([^)]*)\)?$/, '; did you mean $1');
-  return explain(refusal('usage', { text: text.replace(/\n/g, ' '), command: '' }));
+  return explain(refusal('usage', { text: short(text.replace(/\n/g, ' '), LONGEST_USAGE), command }));
 }

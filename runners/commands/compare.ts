@@ -1,6 +1,5 @@
 /** `chopfront compare`: what a changed price list, requirement or version did to the front. */
 import type { Command } from 'commander';
-import { reasonOf, refusal } from '../errors.ts';
 import type { SetStatus } from '../main.ts';
 import { examples } from './shared.ts';
 
@@ -31,12 +30,8 @@ async function runCompare(a: string, b: string, options: CompareOptions): Promis
   const { sayJson, sayPainted } = await import('../terminal/output.ts');
   const comparison = compareRuns(a, b);
   if (options.csv !== undefined) {
-    const { writeWhole } = await import('../run-folder/files.ts');
-    try {
-      writeWhole(options.csv, compareCsv(comparison));
-    } catch (error) {
-      throw refusal('file-unwritable', { file: options.csv, reason: reasonOf(error) });
-    }
+    const { writeNew } = await import('./write-new.ts');
+    writeNew(options.csv, compareCsv(comparison), true);
   }
   if (options.json === true) sayJson(comparison);
   else sayPainted(compareText(comparison));

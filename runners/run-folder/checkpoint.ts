@@ -58,5 +58,7 @@ export function checkpointNames(folder: string): string[] {
 /** The checkpoint in those bytes. Throws an `Error` that says what is wrong with them. */
 export function unpackCheckpoint(bytes: Uint8Array): Checkpoint {
   const { header, parts } = unseal(KIND, bytes);
-  return { ...(header as Header), islands: parts };
+  const { number, node, state } = (header ?? {}) as Partial<Header>;
+  if (typeof number !== 'number' || typeof node !== 'string') throw new Error('it lacks its number or its version');
+  return { number, node, state, islands: parts };
 }

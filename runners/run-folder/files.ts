@@ -7,7 +7,7 @@ import {
   fsyncSync,
   openSync,
   readdirSync,
-  readFileSync,
+  readSync,
   renameSync,
   rmSync,
   statSync,
@@ -44,17 +44,39 @@ const LARGEST_TEXT = 64 * 1024 * 1024;
 export function readText(path: string, what: string, limit = LARGEST_TEXT): string {
   try {
     const { size } = statSync(path);
-    if (size > limit) {
-      const megabytes = (bytes: number): string => (bytes / 1048576).toFixed(1);
-      throw refusal('file-large', { file: path, size: megabytes(size), what, limit: megabytes(limit) });
-    }
-    return readFileSync(path, 'utf8');
+    const bytes = size > limit ? undefined : readUpTo(path, limit);
+    if (bytes !== undefined) return bytes.toString('utf8');
+    const megabytes = (count: number): string => (count / 1048576).toFixed(1);
+    throw refusal('file-large', {
+      file: path,
+      size: megabytes(Math.max(size, limit + 1)),
+      what,
+      limit: megabytes(limit),
+    });
   } catch (error) {
     const code = systemCode(error);
     if (code === 'ENOENT' || code === 'ENOTDIR') throw refusal('file-missing', { file: path, what });
     if (code === 'EISDIR') throw refusal('file-folder', { file: path, what });
     if (code !== '') throw refusal('file-unreadable', { file: path, reason: reasonOf(error) });
     throw error;
+  }
+}
+
+/** The bytes of a file; undefined where there are more than `limit`, as in a device that never ends. */
+function readUpTo(path: string, limit: number): Buffer | undefined {
+  const file = openSync(path, 'r');
+  try {
+    const chunks: Buffer[] = [];
+    for (let total = 0; total <= limit; ) {
+      const chunk = Buffer.alloc(65_536);
+      const count = readSync(file, chunk, 0, chunk.length, null);
+      if (count === 0) return Buffer.concat(chunks);
+      chunks.push(chunk.subarray(0, count));
+      total += count;
+    }
+    return undefined;
+  } finally {
+    closeSync(file);
   }
 }
 

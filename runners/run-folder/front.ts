@@ -1,5 +1,6 @@
 /** Reading the front of a run, and finding a design in it by the beginning of its id. */
 import { readFileSync } from 'node:fs';
+import { z } from 'zod';
 import type { FrontFile } from '../../model/index.ts';
 import { reasonOf, refusal, systemCode } from '../errors.ts';
 import { RUN_FILES, runFile } from './folder.ts';
@@ -7,11 +8,31 @@ import { RUN_FILES, runFile } from './folder.ts';
 /** One design of a front. */
 export type FrontDesign = FrontFile['designs'][number];
 
+const NAMED = z.array(z.looseObject({ name: z.string(), unit: z.string() }));
+
+/** What other files rely on in a front; more may stand in it. */
+const SHAPE = z.looseObject({
+  format: z.literal('chopfront-front'),
+  objectives: NAMED,
+  limits: NAMED,
+  designs: z.array(
+    z.looseObject({
+      id: z.string(),
+      family: z.string(),
+      genes: z.record(z.string(), z.number()),
+      parts: z.record(z.string(), z.string()),
+      objectives: z.array(z.number()),
+      margins: z.record(z.string(), z.number().nullable()),
+    }),
+  ),
+});
+
 /** `front.json` of a run. Throws the refusals `run-empty` and `run-damaged`. */
 export function readFront(folder: string): FrontFile {
   try {
     const front: FrontFile = JSON.parse(readFileSync(runFile(folder, 'frontJson'), 'utf8'));
-    if (front.format !== 'chopfront-front' || !Array.isArray(front.designs)) throw new Error('not a front');
+    const issue = SHAPE.safeParse(front).error?.issues[0];
+    if (issue !== undefined) throw new Error(`${issue.path.join('.')}: ${issue.message}`);
     return front;
   } catch (error) {
     if (systemCode(error) === 'ENOENT') throw refusal('run-empty', { folder });

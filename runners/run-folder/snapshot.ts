@@ -1,7 +1,8 @@
 /** The snapshot of sheet and parts that a run keeps, so that it can be resumed, shown and merged whatever became of the originals. */
 import { mkdirSync } from 'node:fs';
 import { basename, join } from 'node:path';
-import { canonicalParts, canonicalRail } from '../../model/index.ts';
+import { BUILT_IN_TABLES, canonicalParts, canonicalRail } from '../../model/index.ts';
+import { refusal } from '../errors.ts';
 import { type Inputs, type InputTexts, readInputs, type TableText } from '../inputs.ts';
 import { readText, writeWhole } from './files.ts';
 import { RUN_FILES } from './folder.ts';
@@ -35,7 +36,9 @@ export function readSnapshot(folder: string, record: RunRecord): Inputs {
   const rail = { file: join(folder, RUN_FILES.rail), text: readText(join(folder, RUN_FILES.rail), "the run's sheet") };
   const tables = record.tables.map(({ kind, file, stored }): TableText => {
     const text = readText(join(folder, RUN_FILES.parts, basename(stored)), "a parts table of the run's snapshot");
-    return { kind: kind as TableText['kind'], file, text };
+    const known = BUILT_IN_TABLES.find((table) => table.kind === kind);
+    if (known === undefined) throw refusal('run-damaged', { folder, file: 'run.json', reason: `no parts are ${kind}` });
+    return { kind: known.kind, file, text };
   });
   return readInputs({ rail, tables });
 }

@@ -1,6 +1,6 @@
 /** The two streams: results on stdout, all else on stderr; a reader that has gone away ends the program quietly. */
 import { systemCode } from '../errors.ts';
-import { plainLines } from './text.ts';
+import { HOSTILE, plainLines } from './text.ts';
 
 /** Writes a result, made harmless, with a line end. */
 export function say(text: string): void {
@@ -17,9 +17,16 @@ export function remark(text: string): void {
   process.stderr.write(`${plainLines(text)}\n`);
 }
 
-/** Writes a value as JSON and nothing else to stdout. */
+/** Writes a value as JSON and nothing else to stdout; characters that could steer a terminal are escaped as JSON allows. */
 export function sayJson(value: unknown): void {
-  process.stdout.write(`${JSON.stringify(value, undefined, 2)}\n`);
+  const text = JSON.stringify(value, undefined, 2).split('\n').map(escaped).join('\n');
+  process.stdout.write(`${text}\n`);
+}
+
+function escaped(line: string): string {
+  return line.replace(HOSTILE, (found) =>
+    [...Array(found.length).keys()].map((i) => `\\u${found.charCodeAt(i).toString(16).padStart(4, '0')}`).join(''),
+  );
 }
 
 /** Ends the program with status 0 where whoever read our output stops reading, as `head` does. */

@@ -1,7 +1,7 @@
 /** What may reach a terminal: names from sheets and tables can carry control characters and must stay mere text. */
 
-// Control characters, zero-width and bidirectional marks, line and paragraph separators: shown, never obeyed.
-const HOSTILE = /[\p{Cc}\p{Cf}\p{Zl}\p{Zp}]/gu;
+/** Control characters, zero-width and bidirectional marks, line and paragraph separators: shown, never obeyed. */
+export const HOSTILE = /[\p{Cc}\p{Cf}\p{Zl}\p{Zp}]/gu;
 
 /** `text` with every character that could steer a terminal written as its code point. */
 export function plain(text: string): string {
