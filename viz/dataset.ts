@@ -1,7 +1,7 @@
 /** The front as columns: every objective, variable and margin that an axis may show or a range may narrow. */
 import type { Front, FrontDesign } from './data.ts';
 import { spoken } from './labels.ts';
-import { show, showDifference } from './units.ts';
+import { percent, show, showDifference } from './units.ts';
 
 export type Group = 'objective' | 'variable' | 'margin';
 
@@ -83,11 +83,12 @@ function quantity(group: Group, name: string, unit: string, list: readonly numbe
   return { key: `${group.charAt(0)}.${name}`, group, name, label, unit, values, low, high, log, whole };
 }
 
-/** A value of `quantity` for people; a margin is a distance, so kelvin stay kelvin and its sign shows. */
+/** A value of `quantity` for people; a margin is a distance, so kelvin stay kelvin, its sign shows, and efficiencies go in percent. */
 export function shown(quantity: Quantity, value: number): string {
-  return quantity.group === 'margin' && Number.isFinite(value)
-    ? showDifference(value, quantity.unit)
-    : show(value, quantity.unit);
+  if (quantity.group !== 'margin' || !Number.isFinite(value)) return show(value, quantity.unit);
+  if (quantity.unit === '' && quantity.name.startsWith('efficiency'))
+    return `${value < 0 ? '' : '+'}${percent(value, 2)}`;
+  return showDifference(value, quantity.unit);
 }
 
 /** Whether a range on `quantity` can narrow anything. */
