@@ -57,9 +57,10 @@ export class Netlist {
   }
 
   /** A gate that is high (1 V) from `from` to `to` within every period (s); either may lie outside 0 … period. */
-  gate(node: string, from: number, to: number, period: number): void {
-    const width = to - from;
-    const start = from - Math.floor(from / period) * period;
+  gate(node: string, from: number, to: number, exactPeriod: number): void {
+    const period = picoseconds(exactPeriod);
+    const width = picoseconds(to - from);
+    const start = picoseconds(from - Math.floor(from / exactPeriod) * exactPeriod);
     // A pulse across the end of the period is written as the gap in a high gate: not every simulator takes a start below 0.
     const wraps = start + width > period;
     const levels = wraps ? [1, 0] : [0, 1];
@@ -90,7 +91,8 @@ export class Netlist {
   }
 
   /** The finished text: `periods` of length `period` (s), of which the last is kept. */
-  finish(title: string, period: number, periods: number): string {
+  finish(title: string, exactPeriod: number, periods: number): string {
+    const period = picoseconds(exactPeriod);
     const stop = periods * period;
     return [
       // The WASM module stops for good at a byte beyond ASCII.
@@ -104,6 +106,11 @@ export class Netlist {
       '',
     ].join('\n');
   }
+}
+
+/** Whole picoseconds: edges of two gates that miss each other by less send a simulator into steps without end. */
+function picoseconds(seconds: number): number {
+  return Math.round(seconds * 1e12) / 1e12;
 }
 
 function text(value: number): string {

@@ -81,7 +81,7 @@ function line(least: number, most: number, { where }: Case, turn: readonly numbe
 }
 
 const turn = fc.array(fc.double({ min: 0, max: 1, noNaN: true }), { minLength: 3, maxLength: 3 });
-const RUNS = { numRuns: 10, seed: 3, endOnFailure: true };
+const RUNS = { numRuns: 6, seed: 3, endOnFailure: true };
 
 describe('along random lines', () => {
   it('synchronous, forced continuous: through zero current, a negative valley, into reverse', () => {
