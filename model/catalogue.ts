@@ -32,6 +32,8 @@ export interface Catalogue {
   readonly lowSwitches: readonly Switch[];
   /** By rising rated current. */
   readonly diodes: readonly Diode[];
+  /** Diodes that may clamp a two-switch stage to its input, by rising price. */
+  readonly clampDiodes: readonly Diode[];
   /** Power stages for a synchronous buck, by falling on-resistance of the low switch. */
   readonly legs: readonly Leg[];
   /** By rising volume. */
@@ -76,6 +78,7 @@ export function createCatalogue(rail: Rail, tables: PartsTables): Outcome<Catalo
       usable(rail, tables.diodes).filter((row) => within(row.voltageRating, switchNeed, RATING_SPAN)),
       (row) => row.currentRating,
     ),
+    clampDiodes: clampDiodes(rail, tables.diodes),
     legs: legsFor(rail, tables),
     inductorSeries: inductorSeries(rail, tables.inductors),
     filterChokes:
@@ -184,6 +187,15 @@ function controllersFor(rail: Rail, rows: readonly Controller[]): readonly Contr
   return sortBy(usable(rail, rows).filter(fits), (row) => priceAt(row, rail.quantity));
 }
 
+function clampDiodes(rail: Rail, rows: readonly Diode[]): readonly Diode[] {
+  if (!rail.search.architectures.includes('two-switch-forward')) return [];
+  const need = rail.input.maximum / rail.derating.switchVoltage;
+  return sortBy(
+    usable(rail, rows).filter((row) => row.voltageRating >= need),
+    (row) => priceAt(row, rail.quantity),
+  );
+}
+
 function legsFor(rail: Rail, tables: PartsTables): readonly Leg[] {
   if (!rail.search.architectures.includes('buck-synchronous')) return [];
   const need = rail.input.maximum / rail.derating.switchVoltage;
@@ -230,6 +242,9 @@ function missingKinds(rail: Rail, catalogue: Catalogue): Finding[] {
     wanted.push(['cores', catalogue.transformerCores.length, 'a height inside the limit']);
     wanted.push(['materials', catalogue.transformerMaterials.length, 'no distributed gap']);
     wanted.push(['conductors', catalogue.conductors.length, 'any size']);
+  }
+  if (rail.search.architectures.includes('two-switch-forward')) {
+    wanted.push(['diodes', catalogue.clampDiodes.length, `a rating of at least ${rail.input.maximum} V with derating`]);
   }
   if (rail.search.architectures.includes('buck-diode')) {
     wanted.push(['diodes', catalogue.diodes.length, `a rating of at least ${rail.input.maximum} V with derating`]);

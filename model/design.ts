@@ -2,6 +2,7 @@
  * A design resolved from its genes: the rows behind every choice, and everything that does not depend on the operating
  * point, worked out once. One object is reused for all designs of a search; nothing is allocated.
  */
+import { ceramicCapacitance } from './capacitors/index.ts';
 import { type Catalogue, priceAt } from './catalogue.ts';
 import { GENE } from './genes.ts';
 import { createInductorAtFrequency, inductorThermalResistance, prepareInductor } from './magnetics/index.ts';
@@ -37,6 +38,8 @@ export class Design {
   lowParallel = 1;
   diode: Diode | undefined;
   controller: Controller;
+  /** Shortest on-time of controller and sheet, s: below it pulses are skipped. */
+  shortestOnTime = 0.5;
   /** What drives the gates: the controller, or the power stage's own driver. */
   driver: Driver;
   /** The power stage of a phase; absent with discrete switches. */
@@ -49,6 +52,12 @@ export class Design {
   inputCeramicCount = 1;
   inputBulk: Bulk | undefined;
   inputBulkCount = 0;
+  /** Clamp diodes of a two-switch stage, two to a phase; absent elsewhere. */
+  clampDiode: Diode | undefined;
+  /** Pieces of the input ceramic in each half of a half bridge's divider, one phase; 0 elsewhere. */
+  dividerCount = 0;
+  /** Their ESR in one half, Ω. */
+  dividerResistance = 0.5;
   /** The input filter's choke, chosen once the design's worst input ripple is known; absent where none is needed. */
   filterChoke: Inductor | undefined;
   /** Whether the legs of a full bridge are shifted against each other, so that they turn on at zero voltage. */
@@ -120,6 +129,7 @@ export function resolveDesign(
   resolveChoke(design, genes, rail, catalogue);
   design.diode = design.stage.diode ? catalogue.diodes[genes[GENE.diode]] : undefined;
   design.controller = catalogue.controllers[genes[GENE.controller]];
+  design.shortestOnTime = Math.max(design.controller.minimumOnTime, rail.limits.minimumOnTime ?? 0);
   resolveLeg(design, genes, catalogue);
   design.outputCeramic = catalogue.outputCeramics[genes[GENE.outputCeramic]];
   design.outputCeramicCount = genes[GENE.outputCeramicCount];
@@ -130,6 +140,8 @@ export function resolveDesign(
   design.inputBulkCount = genes[GENE.inputBulkCount];
   design.inputBulk = design.inputBulkCount > 0 ? catalogue.inputBulks[genes[GENE.inputBulk]] : undefined;
   const asked = rail.lightLoad !== 'forced-continuous';
+  design.clampDiode = undefined;
+  design.dividerCount = 0;
   design.phaseShifted = genes[GENE.bridgeControl] > 0;
   if (design.stage.windings !== undefined) resolveTransformer(design, genes, rail, catalogue, design.stage.windings);
   design.emulates = !design.stage.diode && asked && design.controller.diodeEmulation;
@@ -199,9 +211,33 @@ function resolveTransformer(
   choice.primaryTurns = genes[GENE.primaryTurns];
   choice.secondaryTurns = genes[GENE.secondaryTurns];
   choice.form = form;
+  design.clampDiode = design.stage.form?.doubleEnded === false ? catalogue.clampDiodes[0] : undefined;
   const ratio = choice.primaryTurns / choice.secondaryTurns;
   const duty = design.stage.idealDuty(rail.input.nominal, rail.output.nominal, ratio) / design.stage.chokeMultiple;
+  sizeDivider(design, rail, ratio);
   windTransformer(design.transformer, choice, design.frequency, duty, rail.airSpeed, rail.ambient);
+}
+
+/** Ripple of a half bridge's divider as a share of the half input that it holds (common practice, no source). */
+const DIVIDER_RIPPLE = 0.05;
+
+/**
+ * The divider of a half bridge from pieces of the input ceramic: each half carries half of the primary current, keeps its
+ * midpoint within the usual ripple, and every piece within its rated current.
+ */
+function sizeDivider(design: Design, rail: Rail, ratio: number): void {
+  const { form } = design.stage;
+  design.dividerCount = 0;
+  if (form === undefined || form.share === 1) return;
+  const { inputCeramic: row } = design;
+  const current = rail.output.current / (design.phases * ratio * (form.doubler ? 2 : 1));
+  const half = 0.5 * rail.input.minimum;
+  const held = ceramicCapacitance(row.capacitance, row.smallSignalFactor, row.halvingVoltage, row.biasExponent, half);
+  const charge = (0.5 * current) / (2 * design.frequency);
+  const byRipple = charge / (DIVIDER_RIPPLE * half * held);
+  const byCurrent = (0.5 * current) / row.rippleRating;
+  design.dividerCount = Math.ceil(Math.max(byRipple, byCurrent));
+  design.dividerResistance = row.seriesResistance / design.dividerCount;
 }
 
 /** Cost of the controller and its drivers for all phases, in the sheet's currency. */

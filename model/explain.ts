@@ -2,6 +2,7 @@
 import { cautionsOf, NOT_COVERED } from './cautions.ts';
 import type { Outcome } from './outcome.ts';
 import { good } from './outcome.ts';
+import type { Controller } from './parts/controller.ts';
 import type { PartsTables } from './parts/tables.ts';
 import { createRailProblem } from './problem.ts';
 import { formatQuantity } from './quantity/index.ts';
@@ -42,7 +43,7 @@ export function explainRail(rail: Rail, tables: PartsTables): Outcome<RailExplan
   const power = rail.output.nominal * rail.output.current;
   return good({
     facts: facts(rail),
-    architectures: rail.search.architectures.map((name) => verdict(rail, name)),
+    architectures: rail.search.architectures.map((name) => verdict(rail, name, problem.value.catalogue.controllers)),
     baseline: { efficiency, loss: power * (1 / efficiency - 1) },
     spaceSize: spaceSize(problem.value.genes),
     cautions: cautionsOf(rail),
@@ -84,15 +85,34 @@ function meanLoad(rail: Rail): number {
   return rail.profile.reduce((sum, point) => sum + point.share * Math.abs(point.fraction), 0);
 }
 
-function verdict(rail: Rail, name: Architecture): ArchitectureVerdict {
+function verdict(rail: Rail, name: Architecture, controllers: readonly Controller[]): ArchitectureVerdict {
   const stage = stageOf(name);
   if (stage === undefined) return { name, possible: false, reason: 'this architecture is not modelled yet' };
   const refusal = stage.refusal(rail);
   if (refusal !== undefined) return { name, possible: false, reason: refusal };
   if (stage.form !== undefined) return { name, possible: true, reason: turnsReason(rail, stage) };
+  return buckVerdict(rail, stage, controllers);
+}
+
+/** Duty range of a buck, and the highest frequency that the shortest on-time of its controllers lets it reach. */
+function buckVerdict(rail: Rail, stage: Stage, controllers: readonly Controller[]): ArchitectureVerdict {
+  const name = stage.architecture;
   const low = stage.idealDuty(rail.input.maximum, rail.output.minimum, 1);
   const high = stage.idealDuty(rail.input.minimum, rail.output.maximum, 1);
-  return { name, possible: true, reason: `duty ${(low * 100).toPrecision(3)} % to ${(high * 100).toPrecision(3)} %` };
+  const duty = `duty ${percent(low)} to ${percent(high)}`;
+  const own = controllers.filter((row) => row.stages.includes(stage.control)).map((row) => row.minimumOnTime);
+  if (own.length === 0) return { name, possible: false, reason: `${duty}, but no controller of the tables can run it` };
+  const shortest = Math.max(Math.min(...own), rail.limits.minimumOnTime ?? 0);
+  if (!(shortest > 0)) return { name, possible: true, reason: duty };
+  const highest = low / shortest;
+  const bound = `the shortest on-time, ${formatQuantity(shortest, 's')}, allows at most ${formatQuantity(highest, 'Hz')}`;
+  if (highest >= rail.search.frequency.minimum) return { name, possible: true, reason: `${duty}; ${bound}` };
+  const searched = `the search starts at ${formatQuantity(rail.search.frequency.minimum, 'Hz')}`;
+  return { name, possible: false, reason: `${duty}: at maximum input ${bound}, and ${searched}` };
+}
+
+function percent(share: number): string {
+  return `${(share * 100).toPrecision(3)} %`;
 }
 
 /** Turns ratio with which a transformer stage reaches its highest duty at minimum input, and the duty left at maximum input. */

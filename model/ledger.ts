@@ -31,6 +31,7 @@ export const LOSS_SLOTS = [
   ['outputBulk', 'seriesResistance'],
   ['inputCeramic', 'seriesResistance'],
   ['inputBulk', 'seriesResistance'],
+  ['dividerCeramic', 'seriesResistance'],
   ['filterChoke', 'winding'],
   ['controller', 'quiescent'],
   ['controller', 'driveSupply'],

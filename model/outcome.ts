@@ -36,7 +36,14 @@ export function bad<T>(findings: readonly Finding[]): Outcome<T> {
 /** One line for a person: file, line, column, field, found, allowed, nearest. */
 export function describeFinding(finding: Finding): string {
   const place = [finding.file, finding.line, finding.column].filter((part) => part !== 0 && part !== '').join(':');
-  const field = finding.field === '' ? '' : ` ${finding.field}:`;
+  const field = finding.field === '' ? '' : ` ${cut(finding.field)}:`;
   const nearest = finding.nearest === undefined ? '' : `; nearest known: ${finding.nearest}`;
   return `${place}:${field} found ${finding.found}; allowed: ${finding.allowed}${nearest}`;
+}
+
+/** Longest path of a field in a message; a key that a person wrote can be of any length. */
+const LONGEST_FIELD = 120;
+
+function cut(field: string): string {
+  return field.length <= LONGEST_FIELD ? field : `${field.slice(0, LONGEST_FIELD - 1)}…`;
 }

@@ -3,7 +3,7 @@ import type { Design } from './design.ts';
 import type { Part } from './parts/common.ts';
 
 /** Room for every slot that a design may have. */
-const ROOM = 12;
+const ROOM = 16;
 
 /** Parts of one design. Rewritten for each design; entries beyond `length` are stale. */
 export class PartsList {
@@ -27,6 +27,8 @@ export function listParts(list: PartsList, design: Design): void {
   }
   put(list, 'inductor', design.inductor, phases * stage.chokes);
   if (stage.form !== undefined) put(list, 'transformer', design.transformer, phases);
+  if (design.clampDiode !== undefined) put(list, 'clampDiode', design.clampDiode, 2 * phases);
+  if (design.dividerCount > 0) put(list, 'dividerCeramic', design.inputCeramic, 2 * phases * design.dividerCount);
   put(list, 'outputCeramic', design.outputCeramic, design.outputCeramicCount);
   if (design.outputBulk !== undefined) put(list, 'outputBulk', design.outputBulk, design.outputBulkCount);
   put(list, 'inputCeramic', design.inputCeramic, design.inputCeramicCount);

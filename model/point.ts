@@ -41,6 +41,8 @@ const HOTTEST_DIODE = 448.15;
 const BOARD_SQUARE = 2.463e-4;
 /** Temperature coefficient of copper taken at 25 °C, where inductor rows state their resistance, 1/K. */
 const WINDING_TEMPCO = COPPER_TEMPCO / (1 + 5 * COPPER_TEMPCO);
+/** Efficiency of the auxiliary supply behind drivers that do not burn the input's rest (common practice, no source). */
+const AUXILIARY_EFFICIENCY = 0.85;
 /** Load under which a blocking stage is solved as if it carried this share of full load: its pulses still come. */
 const LEAST_LOAD = 1e-6;
 
@@ -98,7 +100,7 @@ export function solvePoint(
     addInductorLosses(design, state, solver.ledger);
     if (design.stage.form !== undefined) addTransformerCore(design, state, solver.ledger);
     addController(solver, design);
-    if (round === rounds - 1) addCapacitors(solver, flavour);
+    if (round === rounds - 1) addCapacitors(solver, design, flavour);
     if (design.filterChoke !== undefined) addFilterChoke(solver, design.filterChoke);
     balance(solver, design);
   }
@@ -261,8 +263,12 @@ function pulseShare(design: Design, state: StageState): number {
 
 function addController(solver: PointSolver, design: Design): void {
   const { controller } = design;
+  // Without a linear supply the controller lives on an auxiliary one at its drive voltage.
+  const supply = controller.linearDriveSupply
+    ? solver.state.inputVoltage
+    : Math.min(solver.state.inputVoltage, controller.driveVoltage / AUXILIARY_EFFICIENCY);
   const stages = design.powerStage === undefined ? 0 : solver.state.activePhases * design.powerStage.quiescentCurrent;
-  solver.ledger[SLOT['controller.quiescent']] += solver.state.inputVoltage * (controller.quiescentCurrent + stages);
+  solver.ledger[SLOT['controller.quiescent']] += supply * (controller.quiescentCurrent + stages);
 }
 
 /** Loss of the input filter's choke: dc alone, for its ripple is what the filter leaves. */
@@ -273,7 +279,7 @@ function addFilterChoke(solver: PointSolver, choke: Inductor): void {
   ledger[SLOT['filterChoke.winding']] += current * current * hot;
 }
 
-function addCapacitors(solver: PointSolver, flavour: Flavour): void {
+function addCapacitors(solver: PointSolver, design: Design, flavour: Flavour): void {
   const { state, ledger } = solver;
   sumOutput(solver, flavour);
   sumShifted(state.draw, state.drawCopies, solver.drawn);
@@ -283,6 +289,11 @@ function addCapacitors(solver: PointSolver, flavour: Flavour): void {
   } else {
     bankCurrents(flavour.output, solver.summed, solver.outputRipple);
     bankCurrents(flavour.input, solver.drawn, solver.inputRipple);
+  }
+  // Both halves of a divider carry half of the primary current.
+  if (design.dividerCount > 0) {
+    ledger[SLOT['dividerCeramic.seriesResistance']] +=
+      0.5 * state.activePhases * state.primaryMeanSquare * design.dividerResistance;
   }
   ledger[SLOT['outputCeramic.seriesResistance']] += solver.outputRipple.meanSquare1 * flavour.output.r1;
   ledger[SLOT['outputBulk.seriesResistance']] += solver.outputRipple.meanSquare2 * flavour.output.r2;

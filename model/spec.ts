@@ -3,9 +3,13 @@
  * back gives the same design, and so the same assessment.
  */
 import { z } from 'zod';
-import type { DesignRecord } from './assessment.ts';
+import type { DesignRecord, PointReport } from './assessment.ts';
+import { loopAt } from './handoff/loop.ts';
+import { fullLoad, type SolvedPoint, solveAt } from './handoff/solved-point.ts';
+import { type WaveformFigures, waveformFigures } from './handoff/waveform-figures.ts';
 import { bad, type Finding, good, type Outcome } from './outcome.ts';
-import { ARCHITECTURES } from './rail/rail.ts';
+import { shorten } from './quantity/parse.ts';
+import { ARCHITECTURES, type Rail } from './rail/rail.ts';
 
 const figure = z.object({
   name: z.string(),
@@ -48,6 +52,27 @@ const part = z.object({
   cost: z.number().describe('All pieces, in the currency of the rail'),
 });
 
+const waveform = z.object({
+  name: z.string(),
+  unit: z.string(),
+  mean: z.number(),
+  rms: z.number(),
+  peak: z.number(),
+  valley: z.number(),
+});
+
+const compensator = z.object({
+  form: z.literal('type-III').describe('R1 with R3-C3 beside it, R2-C1 with C2 beside it in feedback; ramp of 1 V'),
+  crossover: z.number().describe('Hz'),
+  phaseMargin: z.number().describe('degrees'),
+  r1: z.number().describe('ohm; chosen'),
+  r2: z.number().describe('ohm'),
+  r3: z.number().describe('ohm'),
+  c1: z.number().describe('F'),
+  c2: z.number().describe('F'),
+  c3: z.number().describe('F'),
+});
+
 const specShape = z.object({
   format: z.literal('chopfront-spec'),
   version: z.literal(1),
@@ -66,6 +91,14 @@ const specShape = z.object({
     .array(z.object({ part: z.string(), effect: z.string(), watts: z.number() }))
     .optional()
     .describe('Profile-weighted'),
+  requirement: z.record(z.string(), z.number()).optional().describe('What the sheet asks for, by name, SI base units'),
+  waveforms: z.array(waveform).optional().describe('Currents of one phase at full load, nominal input, usual values'),
+  compensator: compensator.optional(),
+  temperatures: z.record(z.string(), z.number()).optional().describe('K by part, the hottest over all judged points'),
+  hashes: z
+    .object({ rail: z.string(), parts: z.string() })
+    .optional()
+    .describe('Of sheet and parts tables in canonical form'),
   tolerances: z.record(z.string(), z.number()).optional().describe('Fractions assumed in the worst case'),
   cautions: z.array(z.string()).optional(),
 });
@@ -76,14 +109,52 @@ export type Spec = z.infer<typeof specShape>;
 /** JSON Schema (draft 2020-12) of a spec. */
 export const SPEC_SCHEMA: Readonly<Record<string, unknown>> = z.toJSONSchema(specShape);
 
+/** The loop as the spec holds it; nothing where no crossover is found. */
+function compensatorOf(point: SolvedPoint): Pick<Spec, 'compensator'> {
+  const { crossover, phaseMargin, parts } = loopAt(point);
+  if (!Number.isFinite(crossover)) return {};
+  return { compensator: { form: 'type-III', crossover, phaseMargin: (180 / Math.PI) * phaseMargin, ...parts } };
+}
+
+function requirementOf(rail: Rail): Record<string, number> {
+  const { input, output, step, limits } = rail;
+  return {
+    inputMinimum: input.minimum,
+    inputNominal: input.nominal,
+    inputMaximum: input.maximum,
+    outputMinimum: output.minimum,
+    outputNominal: output.nominal,
+    outputMaximum: output.maximum,
+    outputCurrent: output.current,
+    outputRipple: output.ripple,
+    ...(input.ripple === undefined ? {} : { inputRipple: input.ripple }),
+    ...(step === undefined ? {} : { stepCurrent: step.current, stepSlew: step.slew, stepDeviation: step.deviation }),
+    ambient: rail.ambient,
+    airSpeed: rail.airSpeed,
+    coolingArea: rail.coolingArea,
+    ...Object.fromEntries(Object.entries(limits).filter(([, value]) => typeof value === 'number')),
+    quantity: rail.quantity,
+  };
+}
+
+/** Highest temperature of each part over `points`, K. */
+export function hottest(points: readonly PointReport[]): Record<string, number> {
+  const highest: Record<string, number> = {};
+  for (const { temperatures } of points) {
+    for (const [part, value] of Object.entries(temperatures)) highest[part] = Math.max(value, highest[part] ?? 0);
+  }
+  return highest;
+}
+
 /** Reads a spec; every problem of shape is a finding in `file`. */
 export function readSpec(text: string, file: string): Outcome<Spec> {
   let data: unknown;
   try {
     data = JSON.parse(text);
   } catch (error) {
-    const found = error instanceof Error ? error.message : 'text';
-    return bad([{ file, line: 0, column: 0, field: '', found, allowed: 'a JSON spec' }]);
+    const reason = error instanceof Error ? shorten(error.message) : 'unreadable';
+    const allowed = 'a design in spec form, as JSON, such as chopfront handoff writes';
+    return bad([{ file, line: 0, column: 0, field: '', found: `no JSON (${reason})`, allowed }]);
   }
   const parsed = specShape.safeParse(data);
   if (parsed.success) return good(parsed.data);
@@ -95,7 +166,7 @@ export function readSpec(text: string, file: string): Outcome<Spec> {
         column: 0,
         field: issue.path.join('.'),
         found: foundAt(data, issue.path),
-        allowed: issue.message,
+        allowed: allowedBy(issue),
       }),
     ),
   );
@@ -104,6 +175,21 @@ export function readSpec(text: string, file: string): Outcome<Spec> {
 /** The design that a spec holds. */
 export function recordOfSpec(spec: Spec): DesignRecord {
   return { architecture: spec.architecture, genes: spec.genes, parts: spec.parts };
+}
+
+const SHAPES: Readonly<Record<string, string>> = {
+  string: 'a text',
+  number: 'a number',
+  boolean: 'true or false',
+  array: 'a list',
+  object: 'a map',
+  record: 'a map',
+};
+
+/** What may stand where zod complains, in our own words. */
+function allowedBy(issue: z.core.$ZodIssue): string {
+  if (issue.code === 'invalid_type') return SHAPES[issue.expected] ?? issue.expected;
+  return issue.code === 'invalid_value' ? issue.values.map(String).join(', ') : issue.message;
 }
 
 function foundAt(data: unknown, path: readonly PropertyKey[]): string {

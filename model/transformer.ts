@@ -15,6 +15,7 @@ import {
   layWinding,
   leakageInductance,
   magnetizingInductance,
+  parallelThatFit,
   skinDepth,
   WINDING_AC,
   type Winding,
@@ -141,8 +142,14 @@ function layBoth(t: Transformer, choice: TransformerChoice): void {
   const { core } = choice;
   const room = Math.max(0.1e-3, (core.windowHeight - GAPS * INSULATION) / 2);
   const windings = choice.form === 'centre-tap' ? 2 : 1;
-  t.primaryParallel = fits(choice.primary, choice.primaryTurns, core.windowBreadth, room);
-  t.secondaryParallel = fits(choice.secondary, choice.secondaryTurns, core.windowBreadth, room / windings);
+  t.primaryParallel = parallelThatFit(choice.primary, choice.primaryTurns, core.windowBreadth, room, MOST_PARALLEL);
+  t.secondaryParallel = parallelThatFit(
+    choice.secondary,
+    choice.secondaryTurns,
+    core.windowBreadth,
+    room / windings,
+    MOST_PARALLEL,
+  );
   layWinding(choice.primary, choice.primaryTurns, t.primaryParallel, core.windowBreadth, 2, t.primary);
   // Between two halves of the primary the field in the secondary is zero in its middle; a centre tap's idle half spoils that.
   layWinding(
@@ -157,14 +164,6 @@ function layBoth(t: Transformer, choice: TransformerChoice): void {
   const resistivity = copperResistivity(298.15);
   t.primaryResistance = wireResistance(resistivity, choice.primaryTurns * core.turnLength, t.primary.copperArea);
   t.secondaryResistance = wireResistance(resistivity, choice.secondaryTurns * core.turnLength, t.secondary.copperArea);
-}
-
-function fits(conductor: Conductor, turns: number, breadth: number, room: number): number {
-  const wires =
-    conductor.kind === 'foil'
-      ? room / (turns * conductor.outerSize)
-      : (Math.floor(room / conductor.outerSize) * Math.floor(breadth / conductor.outerSize)) / turns;
-  return Math.max(1, Math.min(MOST_PARALLEL, Math.floor(wires)));
 }
 
 function inductances(t: Transformer, choice: TransformerChoice): void {

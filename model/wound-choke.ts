@@ -12,6 +12,7 @@ import {
   gapKeepOut,
   igseConstant,
   layWinding,
+  parallelThatFit,
   windowFill,
   wireResistance,
   woundCost,
@@ -107,11 +108,7 @@ function gapOf(choke: WoundChoke, core: Core, material: Material, turns: number,
 
 function layChoke(choke: WoundChoke, core: Core, conductor: Conductor, turns: number): void {
   const height = Math.max(0.1e-3, core.windowHeight - INSULATION - gapKeepOut(choke.gap));
-  const wires =
-    conductor.kind === 'foil'
-      ? height / (turns * conductor.outerSize)
-      : (Math.floor(height / conductor.outerSize) * Math.floor(core.windowBreadth / conductor.outerSize)) / turns;
-  choke.parallel = Math.max(1, Math.min(MOST_PARALLEL, Math.floor(wires)));
+  choke.parallel = parallelThatFit(conductor, turns, core.windowBreadth, height, MOST_PARALLEL);
   layWinding(conductor, turns, choke.parallel, core.windowBreadth, 1, winding);
   choke.fill = windowFill(winding.build, core.windowHeight - height, core.windowHeight);
   choke.dcResistance = wireResistance(copperResistivity(298.15), turns * core.turnLength, winding.copperArea);

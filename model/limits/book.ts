@@ -9,7 +9,7 @@ export interface LimitDefinition {
   readonly unit: string;
   /** Whether the value must stay below or above what is allowed. */
   readonly sense: 'most' | 'least';
-  /** Whether it counts whole things or abilities: met exactly, it leaves no margin, and that is no worry. */
+  /** Whether it counts whole things, abilities or rating classes: met exactly, it leaves no margin, and that is no worry. */
   readonly whole?: boolean;
 }
 

@@ -98,10 +98,9 @@ function judgeTimes(e: Evaluator, index: number): void {
   const { state } = e.solver;
   // While pulses are skipped the controller itself holds the shortest on-time.
   const skipping = state.mode === MODE.skipping || state.mode === MODE.off;
-  const on = skipping ? controller.minimumOnTime : (state.dutyCycle * period) / design.stage.chokeMultiple;
-  if (controller.minimumOnTime > 0) {
-    book.judge(places.minimumOnTime, on, controller.minimumOnTime, controller.minimumOnTime, index);
-  }
+  const on = skipping ? design.shortestOnTime : (state.dutyCycle * period) / design.stage.chokeMultiple;
+  const { shortestOnTime } = design;
+  if (shortestOnTime > 0) book.judge(places.minimumOnTime, on, shortestOnTime, shortestOnTime, index);
   if (controller.minimumOffTime > 0) {
     const whole = design.stage.form?.doubleEnded === true ? 0.5 * period : period;
     book.judge(places.minimumOffTime, whole - on, controller.minimumOffTime, controller.minimumOffTime, index);

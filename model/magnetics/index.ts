@@ -58,7 +58,7 @@ export {
   type WindingAtFrequency,
   windingLossAt,
 } from './winding-frequency.ts';
-export { createWinding, gapKeepOut, layWinding, type Winding, windowFill } from './winding-layout.ts';
+export { createWinding, gapKeepOut, layWinding, parallelThatFit, type Winding, windowFill } from './winding-layout.ts';
 export {
   effectiveResistanceFactor,
   harmonicLoss,

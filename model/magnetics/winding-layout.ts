@@ -27,7 +27,8 @@ const ROUND = 0.5 * Math.sqrt(Math.PI);
  * Lays `turns` of `parallel` conductors side by side over `breadth` m and fills `into`. A conductor wider than the breadth
  * yields one to a layer: the build tells that it does not fit. `sections` (1, or 2 where the other winding lies between two
  * halves) divides the layers that build up field.
- * Round wire by Dowell's porosity; a litz of n strands as √n × √n layers of strands.
+ * Parallel foils of one turn are not transposed: field enters them as one foil of their joint thickness, so they are one layer.
+ * Round wire by Dowell's porosity; parallel wires lie side by side in one layer (`parallelThatFit` sees to it); a litz of n strands as √n × √n layers of strands.
  * @source dowell-1966, porosity; litz as square strand layers after Wojda and Kazimierczuk (2012)
  * @valid turns, parallel, sections ≥ 1
  */
@@ -41,11 +42,11 @@ export function layWinding(
 ): void {
   into.turns = turns;
   if (conductor.kind === 'foil') {
-    into.layers = turns * parallel;
-    into.build = into.layers * conductor.outerSize;
+    into.layers = turns;
+    into.build = turns * parallel * conductor.outerSize;
     into.copperArea = conductor.size * breadth * parallel;
-    into.dowellThickness = conductor.size;
-    into.dowellLayers = into.layers / sections;
+    into.dowellThickness = conductor.size * parallel;
+    into.dowellLayers = turns / sections;
     return;
   }
   const wires = turns * parallel;
@@ -58,6 +59,25 @@ export function layWinding(
   const equal = ROUND * conductor.size;
   into.dowellThickness = equal * Math.sqrt(Math.min(1, equal / pitch));
   into.dowellLayers = (into.layers * root) / sections;
+}
+
+/**
+ * Conductors of one turn that can lie in parallel in `room` m of height over `breadth` m, 1 … `most`: round ones no more than stand
+ * side by side in one layer, for those of different layers would not share the current.
+ * @derivation whole conductors in a rectangle
+ * @valid turns ≥ 1, room and breadth above 0
+ */
+export function parallelThatFit(
+  conductor: Conductor,
+  turns: number,
+  breadth: number,
+  room: number,
+  most: number,
+): number {
+  if (conductor.kind === 'foil') return Math.max(1, Math.min(most, Math.floor(room / (turns * conductor.outerSize))));
+  const perLayer = Math.floor(breadth / conductor.outerSize);
+  const wires = (Math.floor(room / conductor.outerSize) * perLayer) / turns;
+  return Math.max(1, Math.min(most, perLayer, Math.floor(wires)));
 }
 
 /**

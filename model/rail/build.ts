@@ -71,6 +71,7 @@ function limitsOf(limits: Sheet['limits']): SheetLimits {
   const { height, volume, mass, cost } = limits;
   const boardArea = limits['board-area'];
   const noLoadPower = limits['no-load-power'];
+  const minimumOnTime = limits['minimum-on-time'];
   return {
     ...(height === undefined ? {} : { height }),
     ...(volume === undefined ? {} : { volume }),
@@ -79,6 +80,7 @@ function limitsOf(limits: Sheet['limits']): SheetLimits {
     ...(cost === undefined ? {} : { cost }),
     efficiency: limits.efficiency.map((entry) => ({ load: entry.load, atLeast: entry['at-least'] })),
     ...(noLoadPower === undefined ? {} : { noLoadPower }),
+    ...(minimumOnTime === undefined ? {} : { minimumOnTime }),
   };
 }
 

@@ -31,6 +31,7 @@ const UNITS: Readonly<Record<string, string>> = {
   'limits.efficiency[].load': '%',
   'limits.efficiency[].atLeast': '%',
   'limits.noLoadPower': 'W',
+  'limits.minimumOnTime': 's',
   'avoid[].from': 'Hz',
   'avoid[].to': 'Hz',
   'tolerances.inductance': '%',

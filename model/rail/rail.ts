@@ -75,6 +75,8 @@ export interface SheetLimits {
   /** In the sheet's currency. */
   readonly cost?: number;
   readonly efficiency: readonly EfficiencyLimit[];
+  /** Shortest on-time that may be planned with, whatever the controller promises, s. */
+  readonly minimumOnTime?: number;
   /** Input power at no load and nominal input, W. */
   readonly noLoadPower?: number;
 }

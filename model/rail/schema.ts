@@ -54,6 +54,7 @@ const limits = keyed({
   cost: money.optional(),
   efficiency: listOf(keyed({ load, 'at-least': share }), 0, 20, 'loads with the least efficiency there'),
   'no-load-power': upTo('power', 1e5).optional(),
+  'minimum-on-time': upTo('time', 1e-3).optional(),
 });
 
 const search = keyed({

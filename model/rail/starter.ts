@@ -57,6 +57,7 @@ limits:
   efficiency:
     - {load: 100 %, at-least: 90 %}
   # no-load-power: 100 mW
+  # minimum-on-time: 50 ns  # shortest on-time to plan with, whatever a controller promises
 
 # Bands that the switching frequency must stay out of; harmonics: 3 keeps the second and third out too.
 # avoid:

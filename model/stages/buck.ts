@@ -63,7 +63,7 @@ function solveBuck(design: Design, state: StageState): void {
 function solveForward(design: Design, state: StageState, current: number): void {
   steady.current = current;
   steady.blocking = design.stage.diode || design.emulates;
-  steady.shortestRise = design.controller.minimumOnTime;
+  steady.shortestRise = design.shortestOnTime;
   const drop = design.stage.diode ? design.diodeDrop(state.lowTemperature) : 0;
   forwardVoltages(state, drop, current);
   solveBentChoke(design, state, steady);
@@ -91,7 +91,7 @@ function keepDriving(state: StageState): void {
 function solveReverse(design: Design, state: StageState, current: number): void {
   steady.current = current;
   steady.blocking = design.emulates;
-  steady.shortestRise = design.controller.minimumOnTime;
+  steady.shortestRise = design.shortestOnTime;
   steady.rise = state.outputVoltage - current * (state.lowResistance + state.pathResistance);
   steady.fall = state.inputVoltage - state.outputVoltage + current * (state.highResistance + state.pathResistance);
   keepDriving(state);

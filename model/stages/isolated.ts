@@ -45,7 +45,7 @@ export function solveIsolated(form: IsolatedForm, design: Design, state: StageSt
   steady.current = current;
   // The chokes of a doubler couple through the winding: a pause in one is not a pause of the stage, so it always runs through.
   steady.blocking = design.emulates && !form.doubler;
-  steady.shortestRise = design.controller.minimumOnTime;
+  steady.shortestRise = design.shortestOnTime;
   voltages(form, transformer, state, phaseCurrent, current);
   solveBentChoke(design, state, steady);
   applyForward(steady, state);

@@ -226,6 +226,7 @@ const RECORD_FUNCTIONS = [
     'harmonicLoss',
     'triangleLoss',
     'layWinding',
+    'parallelThatFit',
   ],
   ...['prepareInductor', 'fluxLinkage', 'currentOfLinkage', 'coreTemperatureFactor', 'materialViolation'],
   ...['prepareWinding', 'materialConstants'],
