@@ -63,10 +63,10 @@ export function inspectTableText(text: string, file: string): PartsReport {
   const bad = new Set(findings.map(({ line }) => line));
   const good = rows.map((row, i) => ({ row, line: lines[i] ?? 0 })).filter(({ line }) => !bad.has(line));
   const kept = good.map(({ row }) => row);
-  const shipped = shippedRows(kind);
+  const builtIn = shippedRows(kind);
   const lineOf = new Map(good.map(({ row, line }) => [row.name, line]));
   const currency = kept[0]?.currency;
-  const ranges = compared(kind, kept, shipped);
+  const ranges = compared(kind, kept, builtIn);
   return {
     file,
     kind: nameOfKind(kind),
@@ -78,7 +78,7 @@ export function inspectTableText(text: string, file: string): PartsReport {
     odd: oddRows(kind, kept, ranges)
       .map((row) => ({ ...row, line: lineOf.get(row.name) ?? 0 }))
       .sort((a, b) => a.line - b.line),
-    remarks: remarksOn(kind, kept, shipped, currency),
+    remarks: remarksOn(kind, kept, builtIn, currency),
   };
 }
 
@@ -90,7 +90,18 @@ export function rejectedIn(reports: readonly PartsReport[]): string {
     .join(', ');
 }
 
+const read = new Map<PartKind, readonly RowOf<PartKind>[]>();
+
+/** Rows of the built-in table of a kind, read once. */
 function shippedRows<K extends PartKind>(kind: K): readonly RowOf<K>[] {
+  const known = read.get(kind);
+  if (known !== undefined) return known as readonly RowOf<K>[];
+  const rows = readShipped(kind);
+  read.set(kind, rows);
+  return rows;
+}
+
+function readShipped<K extends PartKind>(kind: K): readonly RowOf<K>[] {
   const { text, file } = builtInText(kind);
   const outcome = readTable(kind, text, file);
   if (outcome.ok) return outcome.value;

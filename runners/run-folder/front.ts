@@ -2,8 +2,9 @@
 import { readFileSync } from 'node:fs';
 import { z } from 'zod';
 import type { FrontFile } from '../../model/index.ts';
-import { reasonOf, refusal, systemCode } from '../errors.ts';
+import { refusal, systemCode } from '../errors.ts';
 import { RUN_FILES, runFile } from './folder.ts';
+import { issueText } from './issue.ts';
 
 /** One design of a front. */
 export type FrontDesign = FrontFile['designs'][number];
@@ -31,12 +32,11 @@ const SHAPE = z.looseObject({
 export function readFront(folder: string): FrontFile {
   try {
     const front: FrontFile = JSON.parse(readFileSync(runFile(folder, 'frontJson'), 'utf8'));
-    const issue = SHAPE.safeParse(front).error?.issues[0];
-    if (issue !== undefined) throw new Error(`${issue.path.join('.')}: ${issue.message}`);
+    SHAPE.parse(front);
     return front;
   } catch (error) {
     if (systemCode(error) === 'ENOENT') throw refusal('run-empty', { folder });
-    throw refusal('run-damaged', { folder, file: RUN_FILES.frontJson, reason: reasonOf(error) });
+    throw refusal('run-damaged', { folder, file: RUN_FILES.frontJson, reason: issueText(error) });
   }
 }
 

@@ -2,8 +2,9 @@
 import { readFileSync } from 'node:fs';
 import { join } from 'node:path';
 import { z } from 'zod';
-import { reasonOf, refusal, systemCode } from '../errors.ts';
+import { refusal, systemCode } from '../errors.ts';
 import { writeWhole } from './files.ts';
+import { issueText } from './issue.ts';
 
 const count = z.number().int().nonnegative();
 
@@ -82,12 +83,6 @@ export function readRecord(folder: string): RunRecord {
   } catch (error) {
     const code = systemCode(error);
     if (code === 'ENOENT' || code === 'ENOTDIR') throw refusal('run-missing', { folder });
-    throw refusal('run-damaged', { folder, file: NAME, reason: firstIssue(error) });
+    throw refusal('run-damaged', { folder, file: NAME, reason: issueText(error) });
   }
-}
-
-function firstIssue(error: unknown): string {
-  if (!(error instanceof z.ZodError)) return reasonOf(error);
-  const issue = error.issues[0];
-  return issue === undefined ? 'not a run record' : `${issue.path.join('.')}: ${issue.message}`;
 }
