@@ -9,6 +9,7 @@ import { defineHandoff } from './commands/handoff.ts';
 import { defineMerge } from './commands/merge.ts';
 import { definePage } from './commands/page.ts';
 import { defineParts } from './commands/parts.ts';
+import type { SetStatus } from './commands/shared.ts';
 import { defineShow } from './commands/show.ts';
 import { defineStatus } from './commands/status.ts';
 import { defineSweep } from './commands/sweep.ts';
@@ -55,9 +56,6 @@ export async function main(args: readonly string[]): Promise<number> {
     return explain(error, commandNamed(program, args));
   }
 }
-
-/** What a command gets to say how it ended, where that is not 0. */
-export type SetStatus = (status: number) => void;
 
 function build(setStatus: SetStatus): Command {
   const program = new Command('chopfront')

@@ -1,7 +1,6 @@
 /** `chopfront assess`: judges a design that came from elsewhere, in spec form, and says what of a run dominates it. */
 import type { Command } from 'commander';
-import type { SetStatus } from '../main.ts';
-import { examples } from './shared.ts';
+import { examples, type SetStatus } from './shared.ts';
 
 interface AssessOptions {
   readonly json?: boolean;

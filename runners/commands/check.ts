@@ -1,8 +1,7 @@
 /** `chopfront check`: what a sheet means before any search: facts, architectures, baseline, size of the space, cautions. */
 import type { Command } from 'commander';
 import { STATUS } from '../errors.ts';
-import type { SetStatus } from '../main.ts';
-import { examples } from './shared.ts';
+import { examples, type SetStatus } from './shared.ts';
 
 interface CheckOptions {
   readonly json?: boolean;

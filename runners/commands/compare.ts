@@ -1,7 +1,6 @@
 /** `chopfront compare`: what a changed price list, requirement or version did to the front. */
 import type { Command } from 'commander';
-import type { SetStatus } from '../main.ts';
-import { examples } from './shared.ts';
+import { examples, type SetStatus } from './shared.ts';
 
 interface CompareOptions {
   readonly json?: boolean;

@@ -2,8 +2,7 @@
 import { Argument, type Command } from 'commander';
 import { SHELLS } from '../completion/shells.ts';
 import { refusal } from '../errors.ts';
-import type { SetStatus } from '../main.ts';
-import { examples } from './shared.ts';
+import { examples, type SetStatus } from './shared.ts';
 
 const MORE = `
 Design ids are read from front.csv of the run named before them; nothing is started for it.

@@ -2,8 +2,7 @@
 import type { Command } from 'commander';
 import { SHIPPED_RAILS } from '../../model/rail/shipped.ts';
 import { refusal } from '../errors.ts';
-import type { SetStatus } from '../main.ts';
-import { examples } from './shared.ts';
+import { examples, type SetStatus } from './shared.ts';
 
 interface DraftOptions {
   readonly scenario?: string;

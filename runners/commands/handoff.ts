@@ -1,8 +1,7 @@
 /** `chopfront handoff`: writes what others need of a chosen design into a folder. */
 import type { Command } from 'commander';
 import { reasonOf, refusal } from '../errors.ts';
-import type { SetStatus } from '../main.ts';
-import { examples } from './shared.ts';
+import { examples, type SetStatus } from './shared.ts';
 
 interface HandoffOptions {
   readonly out: string;

@@ -1,7 +1,6 @@
 /** `chopfront merge`: joins runs of the same sheet and parts into one. */
 import type { Command } from 'commander';
-import type { SetStatus } from '../main.ts';
-import { examples, wholeOption } from './shared.ts';
+import { examples, type SetStatus, wholeOption } from './shared.ts';
 
 interface MergeCommandOptions {
   readonly expect?: number;

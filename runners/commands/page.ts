@@ -1,7 +1,6 @@
 /** `chopfront page`: rebuilds the page of a run from what the run folder holds. */
 import type { Command } from 'commander';
-import type { SetStatus } from '../main.ts';
-import { examples } from './shared.ts';
+import { examples, type SetStatus } from './shared.ts';
 
 /** Adds the command to the program. */
 export function definePage(program: Command, _setStatus: SetStatus): void {

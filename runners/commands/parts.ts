@@ -2,8 +2,7 @@
 import { Argument, type Command } from 'commander';
 import { KIND_NAMES } from '../../model/parts/built-in.ts';
 import { refusal, STATUS } from '../errors.ts';
-import type { SetStatus } from '../main.ts';
-import { examples } from './shared.ts';
+import { examples, type SetStatus } from './shared.ts';
 
 interface CheckOptions {
   readonly json?: boolean;

@@ -2,6 +2,9 @@
 import { InvalidArgumentError } from 'commander';
 import { readDuration } from '../terminal/duration.ts';
 
+/** What a command gets to say how it ended, where that is not 0. */
+export type SetStatus = (status: number) => void;
+
 /** Text of `--help` with examples, each a command line without the program's name. */
 export function examples(lines: readonly string[]): string {
   return `\nExamples:\n${lines.map((line) => `  chopfront ${line}`).join('\n')}\n`;

@@ -1,7 +1,6 @@
 /** `chopfront show`: one design of a run in the terminal. */
 import type { Command } from 'commander';
-import type { SetStatus } from '../main.ts';
-import { examples } from './shared.ts';
+import { examples, type SetStatus } from './shared.ts';
 
 interface ShowOptions {
   readonly json?: boolean;

@@ -1,8 +1,7 @@
 /** `chopfront status`: how one run, or every shard of a sweep, stands. */
 import type { Command } from 'commander';
 import { STATUS } from '../errors.ts';
-import type { SetStatus } from '../main.ts';
-import { examples } from './shared.ts';
+import { examples, type SetStatus } from './shared.ts';
 
 interface StatusOptions {
   readonly json?: boolean;

@@ -1,9 +1,16 @@
 /** `chopfront sweep`: searches a sheet's design space into a run folder. */
 import { type Command, InvalidArgumentError, Option } from 'commander';
 import { INDEX_VARIABLES } from '../cluster/shard.ts';
-import type { SetStatus } from '../main.ts';
 import type { SweepOptions } from '../sweep/options.ts';
-import { countOption, durationOption, examples, shardOption, shareOption, wholeOption } from './shared.ts';
+import {
+  countOption,
+  durationOption,
+  examples,
+  type SetStatus,
+  shardOption,
+  shareOption,
+  wholeOption,
+} from './shared.ts';
 
 const MORE = `
 With no budget given, the sweep ends after 1M evaluations, or before that when the front is steady.
