@@ -13,6 +13,7 @@ import { listParts, PartsList } from './parts-list.ts';
 import type { PlannedPoint } from './plan.ts';
 import type { PointSolver } from './point.ts';
 import type { RailProblem } from './problem.ts';
+import type { Rail } from './rail/rail.ts';
 import { MODES } from './stages/state.ts';
 import { tracesOf } from './traces.ts';
 
@@ -168,13 +169,20 @@ function costShares(e: Evaluator, parts: readonly PartUse[]): Share[] {
 function efficiencyCurves(e: Evaluator): Assessment['efficiencyCurves'] {
   const { rail, solver } = e;
   const lines = [...new Set([rail.input.minimum, rail.input.nominal, rail.input.maximum])];
+  const loads = curveLoads(rail);
   return lines.map((inputVoltage) => ({
     inputVoltage,
-    load: CURVE_LOADS,
-    efficiency: CURVE_LOADS.map((load) => {
-      const planned = { inputVoltage, outputVoltage: rail.output.nominal, load, share: 0 };
-      solveActive(e, e.usual, planned);
-      return 1 - solver.loss / (solver.outputPower + solver.loss);
+    load: loads,
+    efficiency: loads.map((load) => {
+      solveActive(e, e.usual, { inputVoltage, outputVoltage: rail.output.nominal, load, share: 0 });
+      const out = solver.outputPower;
+      return 1 - solver.loss / (out > 0 ? out + solver.loss : -out);
     }),
   }));
+}
+
+/** Loads of the curves; both signs where the profile has both. */
+function curveLoads(rail: Rail): readonly number[] {
+  if (!rail.profile.some((point) => point.fraction < 0)) return CURVE_LOADS;
+  return [...CURVE_LOADS.map((load) => -load).reverse(), ...CURVE_LOADS];
 }

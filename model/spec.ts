@@ -3,13 +3,10 @@
  * back gives the same design, and so the same assessment.
  */
 import { z } from 'zod';
-import type { DesignRecord, PointReport } from './assessment.ts';
-import { loopAt } from './handoff/loop.ts';
-import { fullLoad, type SolvedPoint, solveAt } from './handoff/solved-point.ts';
-import { type WaveformFigures, waveformFigures } from './handoff/waveform-figures.ts';
+import type { DesignRecord } from './assessment.ts';
 import { bad, type Finding, good, type Outcome } from './outcome.ts';
 import { shorten } from './quantity/parse.ts';
-import { ARCHITECTURES, type Rail } from './rail/rail.ts';
+import { ARCHITECTURES } from './rail/rail.ts';
 
 const figure = z.object({
   name: z.string(),
@@ -108,43 +105,6 @@ export type Spec = z.infer<typeof specShape>;
 
 /** JSON Schema (draft 2020-12) of a spec. */
 export const SPEC_SCHEMA: Readonly<Record<string, unknown>> = z.toJSONSchema(specShape);
-
-/** The loop as the spec holds it; nothing where no crossover is found. */
-function compensatorOf(point: SolvedPoint): Pick<Spec, 'compensator'> {
-  const { crossover, phaseMargin, parts } = loopAt(point);
-  if (!Number.isFinite(crossover)) return {};
-  return { compensator: { form: 'type-III', crossover, phaseMargin: (180 / Math.PI) * phaseMargin, ...parts } };
-}
-
-function requirementOf(rail: Rail): Record<string, number> {
-  const { input, output, step, limits } = rail;
-  return {
-    inputMinimum: input.minimum,
-    inputNominal: input.nominal,
-    inputMaximum: input.maximum,
-    outputMinimum: output.minimum,
-    outputNominal: output.nominal,
-    outputMaximum: output.maximum,
-    outputCurrent: output.current,
-    outputRipple: output.ripple,
-    ...(input.ripple === undefined ? {} : { inputRipple: input.ripple }),
-    ...(step === undefined ? {} : { stepCurrent: step.current, stepSlew: step.slew, stepDeviation: step.deviation }),
-    ambient: rail.ambient,
-    airSpeed: rail.airSpeed,
-    coolingArea: rail.coolingArea,
-    ...Object.fromEntries(Object.entries(limits).filter(([, value]) => typeof value === 'number')),
-    quantity: rail.quantity,
-  };
-}
-
-/** Highest temperature of each part over `points`, K. */
-export function hottest(points: readonly PointReport[]): Record<string, number> {
-  const highest: Record<string, number> = {};
-  for (const { temperatures } of points) {
-    for (const [part, value] of Object.entries(temperatures)) highest[part] = Math.max(value, highest[part] ?? 0);
-  }
-  return highest;
-}
 
 /** Reads a spec; every problem of shape is a finding in `file`. */
 export function readSpec(text: string, file: string): Outcome<Spec> {

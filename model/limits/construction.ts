@@ -54,7 +54,7 @@ function judgeBands(e: Evaluator): void {
   const { oscillator } = rail.tolerances;
   for (const band of rail.avoid) {
     const clear = bandClearance(design.frequency, oscillator, band);
-    book.judge(places.avoidedBands, clear, 0, 1, -1);
+    book.judge(places.avoidedBands, clear * design.frequency, 0, design.frequency, -1);
   }
 }
 

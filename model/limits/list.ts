@@ -51,7 +51,7 @@ const OFFERS: readonly Offer[] = [
   most('controllerFrequency', 'Hz'),
   least('controllerLowestFrequency', 'Hz'),
   { ...least('controllerAbilities', ''), whole: true },
-  least('avoidedBands', '', (rail) => rail.avoid.length > 0),
+  least('avoidedBands', 'Hz', (rail) => rail.avoid.length > 0),
   most('chokeWindow', '', wound),
   { ...most('chokeReach', '', wound), whole: true },
   { ...most('chokeMaterial', '', wound), whole: true },

@@ -46,11 +46,15 @@ export function stepNetlist(problem: RailProblem, id: string, point: SolvedPoint
   lines.keep('v(out)');
   lines.keep('v(d)');
   const title = `chopfront ${MODEL_VERSION}: averaged loop and load step, design ${id} for ${problem.rail.name}`;
-  const text = lines.text(title, ['Units are SI base units. Averaged: no ripple. Worst-case bank.'], [
-    `.nodeset v(out)=${numberText(point.state.outputVoltage)} v(inv)=${numberText(point.state.outputVoltage)}`,
-    '.options method=gear reltol=1e-4 abstol=1e-6 vntol=1e-6',
-    `.tran {tunit/200} ${numberText(end)} 0 {tunit/200}`,
-  ]);
+  const text = lines.text(
+    title,
+    ['Units are SI base units. Averaged: no ripple. Worst-case bank.'],
+    [
+      `.nodeset v(out)=${numberText(point.state.outputVoltage)} v(inv)=${numberText(point.state.outputVoltage)}`,
+      '.options method=gear reltol=1e-4 abstol=1e-6 vntol=1e-6',
+      `.tran {tunit/200} ${numberText(end)} 0 {tunit/200}`,
+    ],
+  );
   return { text, loop, up, down, end };
 }
 
