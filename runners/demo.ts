@@ -12,7 +12,7 @@ import { table } from './terminal/table.ts';
 const SHEET = packagePath('model', 'rails', 'buoy-sensors.yaml');
 const FOLDER = packagePath('runs', 'demo');
 /** About a minute on two cores. */
-const EVALUATIONS = '2M';
+const EVALUATIONS = '1M';
 
 rmSync(FOLDER, { recursive: true, force: true });
 const status = await main(['sweep', SHEET, '--out', FOLDER, '--evaluations', EVALUATIONS, '--seed', 'demo']);

@@ -1,9 +1,8 @@
 /** The work behind `chopfront merge`: checks that runs belong together, joins them one by one, writes the joined run. */
-import { mkdirSync } from 'node:fs';
 import { resolve } from 'node:path';
 import { reasonOf, refusal, STATUS } from '../errors.ts';
 import { type Inputs, problemOf } from '../inputs.ts';
-import { lookAt } from '../run-folder/folder.ts';
+import { lookAt, makeFolder } from '../run-folder/folder.ts';
 import { type Found, readFound, type Source, writeFound } from '../run-folder/found.ts';
 import { takeLock } from '../run-folder/lock.ts';
 import { createJoiner } from '../run-folder/merge.ts';
@@ -26,7 +25,7 @@ export async function mergeRuns(out: string, folders: readonly string[], expect?
   const first = sameInputs(records);
   if (expect !== undefined) refuseMissing(out, records, expect);
   const inputs = readSnapshot(first.folder, first.record);
-  mkdirSync(out, { recursive: true });
+  makeFolder(out);
   const lock = takeLock(out);
   try {
     return await write(out, inputs, first.record, records);

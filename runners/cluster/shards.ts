@@ -6,9 +6,18 @@ const NAME = /^shard-\d{5,}$/;
 
 /** Paths of the shard folders in `folder`, in order; undefined where it holds none or is a run itself. */
 export function shardFoldersIn(folder: string): string[] | undefined {
-  if (!existsSync(folder) || existsSync(join(folder, 'run.json'))) return undefined;
-  const names = readdirSync(folder)
+  if (existsSync(join(folder, 'run.json'))) return undefined;
+  const names = namesIn(folder)
     .filter((name) => NAME.test(name) && existsSync(join(folder, name, 'run.json')))
     .sort();
   return names.length === 0 ? undefined : names.map((name) => join(folder, name));
+}
+
+/** What a folder holds; nothing where it is none or cannot be read, which whoever opens it as a run then says. */
+function namesIn(folder: string): string[] {
+  try {
+    return readdirSync(folder);
+  } catch {
+    return [];
+  }
 }

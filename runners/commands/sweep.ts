@@ -35,6 +35,7 @@ export function defineSweep(program: Command, setStatus: SetStatus): void {
     .option('--resume', 'go on with a run that was stopped');
   addScaling(command);
   command
+    .option('--no-page', 'do not draw the page at the end')
     .option('--log <form>', 'json: progress as one JSON object a line', jsonOnly)
     .addOption(new Option('--checkpoint <duration>', 'save this often').argParser(durationOption).hideHelp())
     .addOption(new Option('--epoch-limit <duration>', 'longest an epoch may take').argParser(durationOption).hideHelp())

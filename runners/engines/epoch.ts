@@ -9,11 +9,21 @@ export function epochRunner(problem: Problem): (task: EpochTask) => EpochResult 
   const noted = noting(problem, () => cells);
   return (task) => {
     cells = new Float64Array(task.note);
+    const spent = { variation: 0, model: 0, ranking: 0, archive: 0, transfer: 0 };
+    const begun = now();
     const island = unpackIsland(task.island);
-    const neighbours = task.neighbours.map(unpackIsland);
-    const next = step(noted, island, immigrantsFor(ringAround(island, neighbours), island.index));
-    return { ok: true, island: packIsland(next) };
+    const immigrants = immigrantsFor(ringAround(island, task.neighbours.map(unpackIsland)), island.index);
+    const opened = now();
+    const next = step(noted, island, immigrants, { now, spent });
+    const stepped = now();
+    const bytes = packIsland(next);
+    spent.transfer = opened - begun + (now() - stepped);
+    return { ok: true, island: bytes, spent };
   };
+}
+
+function now(): number {
+  return performance.now() / 1000;
 }
 
 /** The ring as far as an island can see it: itself and its neighbours, each in its place; the others are not looked at. */

@@ -10,6 +10,7 @@
  * stack of an error do not survive the way between threads. The note is shared memory in which the worker writes each design
  * before it evaluates it; when the worker dies, the design that killed it is read from there.
  */
+import type { TimeSplit } from '../../optimizer/index.ts';
 import type { Problem } from '../../optimizer/problem.ts';
 
 /** What a worker is born with; plain data. */
@@ -33,9 +34,15 @@ export interface EpochTask {
   readonly note: SharedArrayBuffer;
 }
 
+/** Where the time of an epoch went, s; it never influences a result. */
+export interface EpochTimes extends TimeSplit {
+  /** Packing and unpacking. */
+  transfer: number;
+}
+
 /** What became of a task. */
 export type EpochResult =
-  | { readonly ok: true; readonly island: Uint8Array }
+  | { readonly ok: true; readonly island: Uint8Array; readonly spent: EpochTimes }
   | { readonly ok: false; readonly reason: string };
 
 /** Runs epochs, several at once. */

@@ -37,6 +37,11 @@ export function prepareFolder(folder: string, resume: boolean): void {
   if (state === 'other') throw refusal('folder-not-run', { folder });
   if (state === 'run' && !resume) throw refusal('folder-has-run', { folder });
   if (state !== 'run' && resume) throw refusal('resume-nothing', { folder });
+  makeFolder(folder);
+}
+
+/** Makes a folder where there is none. Throws the refusal `folder-unusable` where it cannot be made or written. */
+export function makeFolder(folder: string): void {
   try {
     mkdirSync(folder, { recursive: true });
     accessSync(folder, constants.W_OK | constants.X_OK);

@@ -101,7 +101,7 @@ async function sweepInputs(
       );
       return where.task && stop.signal === 'SIGTERM' ? STATUS.requeue : SIGNALS[stop.signal];
     }
-    return await reportEnd(folder, problem, end, { page: !where.task });
+    return await reportEnd(folder, problem, end, { page: options.page && !where.task, json: options.log === 'json' });
   } finally {
     stop.dispose();
   }

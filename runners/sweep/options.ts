@@ -16,6 +16,8 @@ export interface SweepOptions {
   readonly on?: 'slurm';
   readonly partition?: string;
   readonly timeLimit?: string;
+  /** False with --no-page. */
+  readonly page: boolean;
   readonly log?: 'json';
   /** s. */
   readonly checkpoint?: number;

@@ -1,5 +1,6 @@
 /** What of a sweep's rings goes into a checkpoint beside the islands, and the rings that come back out of it. */
 import { z } from 'zod';
+import type { EpochTimes } from '../engines/protocol.ts';
 import { refusal } from '../errors.ts';
 import { type Checkpoint, readCheckpoint } from '../run-folder/checkpoint.ts';
 import type { Fault } from '../run-folder/record.ts';
@@ -14,6 +15,7 @@ export interface RingState {
   readonly islands: number;
   readonly history: History;
   readonly faults: readonly Fault[];
+  readonly spent: EpochTimes;
 }
 
 /** A sweep as a checkpoint gives it back. */
@@ -38,6 +40,7 @@ const STATE = z.object({
       epochEvaluations: z.number(),
       islands: z.number(),
       history: z.custom<History>((value) => typeof value === 'object' && value !== null && 'rows' in value),
+      spent: z.custom<EpochTimes>((value) => typeof value === 'object' && value !== null && 'model' in value),
       faults: z.array(z.custom<Fault>((value) => typeof value === 'object' && value !== null && 'island' in value)),
     }),
   ),
@@ -45,8 +48,8 @@ const STATE = z.object({
 
 /** What to save of a ring. */
 export function ringState(ring: Ring): RingState {
-  const { shard, epoch, epochEvaluations, slots, history } = ring;
-  return { shard, epoch, epochEvaluations, islands: slots.length, history, faults: settledFaults(ring) };
+  const { shard, epoch, epochEvaluations, slots, history, spent } = ring;
+  return { shard, epoch, epochEvaluations, islands: slots.length, history, faults: settledFaults(ring), spent };
 }
 
 /** Packed islands of all rings, ring by ring, as they were when each ring's epoch was complete. */

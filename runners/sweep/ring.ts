@@ -5,6 +5,7 @@
  * Island i may run epoch e + 1 once its neighbours have completed epoch e, so threads need not wait for the slowest island
  * of every epoch; what is saved and counted is the ring at the last epoch that all islands have completed.
  */
+import type { EpochTimes } from '../engines/protocol.ts';
 import type { Fault } from '../run-folder/record.ts';
 import { type History, newHistory } from './history.ts';
 
@@ -27,6 +28,8 @@ export interface Ring {
   readonly epochEvaluations: number;
   readonly history: History;
   readonly faults: Fault[];
+  /** Where the time of its epochs went, s. */
+  readonly spent: EpochTimes;
   /** Whether its budget is used up. */
   done: boolean;
 }
@@ -43,6 +46,8 @@ export interface Slot {
   tries: number;
 }
 
+const NO_TIME: EpochTimes = { variation: 0, model: 0, ranking: 0, archive: 0, transfer: 0 };
+
 /** How far an island may be ahead of the ring. */
 const LEAD = 1;
 
@@ -55,10 +60,12 @@ export interface RingParts {
   readonly islands: readonly IslandState[];
   readonly history?: History;
   readonly faults?: readonly Fault[];
+  readonly spent?: EpochTimes;
 }
 
 /** A ring of these parts; an island that is named in `faults` has failed. */
-export function createRing({ shard, epoch, epochEvaluations, islands, history, faults = [] }: RingParts): Ring {
+export function createRing(parts: RingParts): Ring {
+  const { shard, epoch, epochEvaluations, islands, faults = [], history = newHistory(), spent = NO_TIME } = parts;
   const slots = islands.map((state, i) => ({
     states: new Map([[epoch, state]]),
     epoch,
@@ -66,7 +73,7 @@ export function createRing({ shard, epoch, epochEvaluations, islands, history, f
     failed: faults.some((fault) => fault.island === i),
     tries: 0,
   }));
-  return { shard, slots, epoch, epochEvaluations, history: history ?? newHistory(), faults: [...faults], done: false };
+  return { shard, slots, epoch, epochEvaluations, history, faults: [...faults], spent: { ...spent }, done: false };
 }
 
 /** Indices of islands whose next epoch can run now, those that are furthest behind first. */

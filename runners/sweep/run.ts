@@ -212,11 +212,17 @@ function recordOf(
     nearMisses: nearMisses.count,
     hypervolume,
     share: meanShare(plan.budget, plan.identity.shards, rings, seconds),
-    trust,
+    trust: { ...trust, timeSplit: timeSplitOf(rings) },
     faults: rings.flatMap((ring) => ring.faults),
     started,
     updated: new Date().toISOString(),
   };
+}
+
+/** Seconds of all threads together, by what they were spent on. */
+function timeSplitOf(rings: readonly Ring[]): Record<string, number> {
+  const names = ['model', 'variation', 'ranking', 'archive', 'transfer'] as const;
+  return Object.fromEntries(names.map((name) => [name, rings.reduce((sum, ring) => sum + ring.spent[name], 0)]));
 }
 
 function faultLine(fault: Fault): string {

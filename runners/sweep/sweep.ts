@@ -2,7 +2,7 @@
  * The sweep itself: hands ready epochs to an engine, counts, records history, saves, and ends when the budget is used, a
  * stop is asked for, or nothing is left to run. Knows no rail, no terminal and no file name: these come as functions.
  */
-import type { Engine, EpochResult } from '../engines/protocol.ts';
+import type { Engine, EpochResult, EpochTimes } from '../engines/protocol.ts';
 import { createNote, readNote } from '../engines/protocol.ts';
 import { refusal } from '../errors.ts';
 import type { Fault } from '../run-folder/record.ts';
@@ -151,7 +151,10 @@ async function runEpoch(
 }
 
 function takeIn(setup: SweepSetup, ring: Ring, island: number, result: EpochResult, note: SharedArrayBuffer): boolean {
-  if (result.ok) return completeEpoch(ring, island, { bytes: result.island, ...setup.tally(result.island) });
+  if (result.ok) {
+    addTimes(ring.spent, result.spent);
+    return completeEpoch(ring, island, { bytes: result.island, ...setup.tally(result.island) });
+  }
   const slot = ring.slots[island];
   if (slot === undefined) return false;
   slot.running = false;
@@ -162,6 +165,10 @@ function takeIn(setup: SweepSetup, ring: Ring, island: number, result: EpochResu
   const fault: Fault = { shard: ring.shard, island, epoch: slot.epoch, reason: result.reason, design };
   setup.onFault(fault);
   return failIsland(ring, fault);
+}
+
+function addTimes(total: EpochTimes, more: EpochTimes): void {
+  for (const name of ['variation', 'model', 'ranking', 'archive', 'transfer'] as const) total[name] += more[name];
 }
 
 function closeEpoch(setup: SweepSetup, ring: Ring, seconds: number): void {

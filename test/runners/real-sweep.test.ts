@@ -1,5 +1,5 @@
 /** The whole path on a shipped sheet: sweep, show, assess, handoff, page, merge, compare, with the built program. */
-import { existsSync, mkdirSync, readFileSync, writeFileSync } from 'node:fs';
+import { existsSync, readFileSync, writeFileSync } from 'node:fs';
 import { join } from 'node:path';
 import { beforeAll, describe, expect, it } from 'vitest';
 import type { FrontFile } from '../../model/index.ts';
@@ -7,7 +7,7 @@ import { checkpointNames } from '../../runners/run-folder/checkpoint.ts';
 import { chopfront, newFolder, startChopfront, until } from './processes.ts';
 
 const SHEET = new URL('../../model/rails/buoy-sensors.yaml', import.meta.url).pathname;
-const ARGS = ['--evaluations', '16k', '--seed', 'test'];
+const ARGS = ['--evaluations', '16k', '--seed', 'test', '--no-page'];
 const BYTES = ['front.csv', 'front.json', 'near-misses.csv', 'history.csv', 'archive.bin'];
 const run = join(newFolder(), 'run');
 const bytesOf = (folder: string): string[] => BYTES.map((name) => readFileSync(join(folder, name), 'latin1'));
@@ -15,6 +15,7 @@ let front: FrontFile;
 
 beforeAll(async () => {
   const ended = await chopfront('sweep', SHEET, '--out', run, '--threads', '2', ...ARGS);
+  expect(await chopfront('page', run)).toMatchObject({ status: 0, stdout: `${join(run, 'page.html')}\n` });
   expect(ended).toMatchObject({ status: 0 });
   front = JSON.parse(readFileSync(join(run, 'front.json'), 'utf8'));
 });
@@ -134,7 +135,15 @@ describe('what cannot be met', () => {
   it('ends with status 3, the limits in the way, by how much, and the nearest designs', async () => {
     const sheet = join(newFolder(), 'rail.yaml');
     writeFileSync(sheet, readFileSync(SHEET, 'utf8').replace('volume: 8 cm³', 'volume: 8 mm³'));
-    const ended = await chopfront('sweep', sheet, '--out', join(newFolder(), 'run'), '--evaluations', '8k');
+    const ended = await chopfront(
+      'sweep',
+      sheet,
+      '--out',
+      join(newFolder(), 'run'),
+      '--evaluations',
+      '8k',
+      '--no-page',
+    );
     expect(ended.status).toBe(3);
     expect(ended.stderr).toMatch(/no design keeps every limit after \d+ evaluations/);
     expect(ended.stderr).toMatch(/volume +broken by \d of \d, by [\d.]+ % or more/);
@@ -144,7 +153,7 @@ describe('what cannot be met', () => {
 
 describe('several runs', () => {
   const shards = newFolder();
-  const ARGS_OF_SHARDS = ['--evaluations', '12k', '--seed', 's', '--shards', '2'];
+  const ARGS_OF_SHARDS = ['--evaluations', '12k', '--seed', 's', '--shards', '2', '--no-page'];
 
   it('shards merged in any order, twice, equal the same shards on one machine, to the byte', async () => {
     const whole = join(newFolder(), 'run');
@@ -174,7 +183,7 @@ describe('several runs', () => {
     const sheet = join(newFolder(), 'rail.yaml');
     writeFileSync(sheet, readFileSync(SHEET, 'utf8').replace('ripple: 20 mV', 'ripple: 30 mV'));
     const other = join(newFolder(), 'run');
-    await chopfront('sweep', sheet, '--out', other, '--evaluations', '8k');
+    await chopfront('sweep', sheet, '--out', other, '--evaluations', '8k', '--no-page');
     const ended = await chopfront('merge', newFolder(), run, other);
     expect(ended).toMatchObject({ status: 2 });
     expect(ended.stderr).toContain('was made from another sheet');
@@ -191,15 +200,16 @@ describe('several runs', () => {
 });
 
 describe('progress for machines', () => {
-  it('--log json writes one JSON object a line', async () => {
+  it('--log json writes one JSON object a line, and one about the end on stdout', async () => {
     const folder = join(newFolder(), 'run');
-    const { stderr } = await chopfront('sweep', SHEET, '--out', folder, '--evaluations', '8k', '--log', 'json');
-    for (const line of stderr
-      .trimEnd()
-      .split('\n')
-      .filter((text) => text !== '')) {
-      expect(['progress', 'message']).toContain(JSON.parse(line).event);
-    }
-    mkdirSync(folder, { recursive: true });
+    const { stdout, stderr } = await chopfront('sweep', SHEET, '--out', folder, '--evaluations', '8k', '--log', 'json');
+    const lines = stderr.split('\n').filter((text) => text !== '');
+    for (const line of lines) expect(['progress', 'message']).toContain(JSON.parse(line).event);
+    expect(JSON.parse(stdout)).toMatchObject({
+      event: 'end',
+      folder,
+      evaluations: 8000,
+      page: join(folder, 'page.html'),
+    });
   });
 });

@@ -2,7 +2,7 @@
  * A sweep survives: the same seed gives the same bytes with any number of threads, stopped, killed or not, and whatever goes
  * wrong inside a worker costs at most an epoch. Real processes sweep the toy problem.
  */
-import { readdirSync, readFileSync, truncateSync, writeFileSync } from 'node:fs';
+import { existsSync, readdirSync, readFileSync, truncateSync, writeFileSync } from 'node:fs';
 import { join } from 'node:path';
 import { beforeAll, describe, expect, it } from 'vitest';
 import { checkpointNames } from '../../runners/run-folder/checkpoint.ts';
@@ -10,9 +10,9 @@ import { readRecord } from '../../runners/run-folder/record.ts';
 import { newFolder, startToy, sweepToy, until } from './processes.ts';
 import type { Trap } from './toy.ts';
 
-const EVALUATIONS = 4000;
+const EVALUATIONS = 2400;
 // Slow enough that a sweep can be caught in the middle, the same in every sweep below.
-const source = { work: 20_000 };
+const source = { work: 15_000 };
 const filesOf = (folder: string) => ({
   front: readFileSync(join(folder, 'front.csv'), 'utf8'),
   history: readFileSync(join(folder, 'history.csv'), 'utf8'),
@@ -64,12 +64,26 @@ describe('the same seed', () => {
     expect(readRecord(folder).status).toBe('done');
   });
 
+  it('leaves at once at the second SIGINT, without damage', async () => {
+    const folder = newFolder();
+    // Epochs that take longer than the grace that the first SIGINT gives them.
+    const order = { folder, evaluations: EVALUATIONS, threads: 2, source };
+    const { child, ended } = startToy({ ...order, source: { work: 5_000_000 } });
+    await until(() => existsSync(join(folder, 'rail.yaml')));
+    child.kill('SIGINT');
+    await new Promise((done) => setTimeout(done, 200));
+    child.kill('SIGINT');
+    expect((await ended).status).toBe(130);
+    expect(await sweepToy({ ...order, resume: true })).toMatchObject({ status: 0 });
+    expect(filesOf(folder)).toEqual(whole);
+  });
+
   it('gives the same bytes when it was killed at 20 random moments and resumed after each', async () => {
     for (let round = 0; round < 20; round++) {
       const folder = newFolder();
       const order = { folder, evaluations: EVALUATIONS, threads: 2, source, checkpoint: 0.01 };
       const { child, ended } = startToy(order);
-      await new Promise((done) => setTimeout(done, 20 + 900 * Math.random()));
+      await new Promise((done) => setTimeout(done, 20 + 700 * Math.random()));
       child.kill('SIGKILL');
       await ended;
       expect(await sweepToy({ ...order, resume: true })).toMatchObject({ status: 0 });
@@ -150,7 +164,7 @@ describe('a damaged folder', () => {
 describe('shards', () => {
   it('are closed: all on one machine hold what each of them holds alone', async () => {
     const all = newFolder();
-    const order = { evaluations: EVALUATIONS, threads: 2, shards: 3 };
+    const order = { evaluations: 2 * EVALUATIONS, threads: 2, shards: 3 };
     await sweepToy({ ...order, folder: all });
     const rows = new Set(filesOf(all).history.split('\n'));
     for (const shard of [0, 1, 2]) {
