@@ -1,9 +1,9 @@
 /** `sweep --on slurm`: checks the sheet here and now, then hands shards and merge to the scheduler. */
-import { mkdirSync } from 'node:fs';
 import { join, resolve } from 'node:path';
 import { refusal, STATUS } from '../errors.ts';
 import { problemOf, readSheet } from '../inputs.ts';
 import { packagePath } from '../package-path.ts';
+import { makeFolder } from '../run-folder/folder.ts';
 import type { SweepOptions } from '../sweep/options.ts';
 import { say } from '../terminal/output.ts';
 import { submit } from './slurm.ts';
@@ -14,7 +14,7 @@ export function submitSweep(sheet: string | undefined, options: SweepOptions): n
   if (options.shards === undefined) throw refusal('usage', { text: '--on slurm needs --shards', command: 'sweep ' });
   problemOf(readSheet(sheet));
   const out = resolve(options.out);
-  mkdirSync(out, { recursive: true });
+  makeFolder(out);
   const threads = options.threads ?? 1;
   const jobs = submit({
     out,
