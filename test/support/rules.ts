@@ -72,7 +72,7 @@ function isUnportable(name: string): boolean {
   return member !== undefined && !EXACT.has(member) && !/^[A-Z][A-Z0-9_]*$/.test(member);
 }
 
-/** Groups of files that import each other in a circle. */
+/** Files that import each other in a circle when the program runs; types may refer to each other both ways. */
 export function cycles(files: readonly Syntax[]): readonly string[] {
   const known = new Map(files.map((file) => [file.path, file]));
   const state = new Map<string, 'open' | 'done'>();
@@ -84,7 +84,7 @@ export function cycles(files: readonly Syntax[]): readonly string[] {
       return;
     }
     state.set(path, 'open');
-    for (const target of targetsOf(known.get(path))) if (known.has(target)) enter(target, [...trail, path]);
+    for (const target of loadedBy(known.get(path))) if (known.has(target)) enter(target, [...trail, path]);
     state.set(path, 'done');
   };
   for (const { path } of files) enter(path, []);
@@ -121,6 +121,13 @@ export function sourcesOf(file: Syntax): readonly string[] {
 /** The path that a relative import names; undefined where it names a package. */
 export function resolve(path: string, from: string): string | undefined {
   return from.startsWith('.') ? posix.join(posix.dirname(path), from) : undefined;
+}
+
+/** The files that are loaded when `file` is. */
+function loadedBy(file: Syntax | undefined): readonly string[] {
+  if (file === undefined) return [];
+  const kept = [...file.imports, ...file.reexports].filter(({ erased }) => !erased);
+  return kept.flatMap(({ from }) => resolve(file.path, from) ?? []);
 }
 
 function targetsOf(file: Syntax | undefined): readonly string[] {

@@ -9,6 +9,8 @@ import type { TextFile } from './project.ts';
 export interface Import {
   readonly from: string;
   readonly names: readonly string[];
+  /** Whether only types are imported, so that nothing of it is left in the running program. */
+  readonly erased: boolean;
 }
 
 /** A name exported from another file under a name of this one; `*` as both for `export * from`. */
@@ -57,9 +59,12 @@ export function parseFile({ path, text }: TextFile): Syntax {
         names: statement.entries.map(
           ({ importName }) => importName.name ?? (importName.kind === 'Default' ? 'default' : '*'),
         ),
+        erased: statement.entries.length > 0 && statement.entries.every(({ isType }) => isType),
       })),
-      ...dynamic.filter((from) => LITERAL.test(from)).map((from) => ({ from: from.slice(1, -1), names: ['*'] })),
-      ...found.typeImports.map((from) => ({ from, names: ['*'] })),
+      ...dynamic
+        .filter((from) => LITERAL.test(from))
+        .map((from) => ({ from: from.slice(1, -1), names: ['*'], erased: false })),
+      ...found.typeImports.map((from) => ({ from, names: ['*'], erased: true })),
     ],
     reexports: entries.flatMap((entry) =>
       entry.moduleRequest === null
@@ -69,6 +74,7 @@ export function parseFile({ path, text }: TextFile): Syntax {
               from: entry.moduleRequest.value,
               names: [entry.importName.name ?? '*'],
               as: [entry.exportName.name ?? '*'],
+              erased: entry.isType,
             },
           ],
     ),
