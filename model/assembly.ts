@@ -8,11 +8,11 @@ import type { Part } from './parts/common.ts';
 import { listParts, PartsList } from './parts-list.ts';
 
 /** Board area over the footprints of the parts: spacing, routing, vias. */
-export const AREA_FACTOR = 1.4;
+const AREA_FACTOR = 1.4;
 /** Board thickness, m. */
 export const BOARD_THICKNESS = 1.6e-3;
 /** Board density, kg/m³. */
-export const BOARD_DENSITY = 1850;
+const BOARD_DENSITY = 1850;
 /** Volume around the boxed parts over the parts' own: parts of unlike height leave air above the flat ones. */
 export const PACKING_FACTOR = 1.25;
 /** Board price, currency per m² (four layers, thousands of pieces). */

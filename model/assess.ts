@@ -127,7 +127,7 @@ function lossItems(ledger: Float64Array): LossItem[] {
 }
 
 /** The parts list of `design`, prices at `quantity` pieces. */
-export function partUses(design: Design, quantity: number): PartUse[] {
+function partUses(design: Design, quantity: number): PartUse[] {
   const list = new PartsList();
   listParts(list, design);
   const uses: PartUse[] = [];

@@ -118,7 +118,7 @@ export function boxVolume(part: Part): number {
 }
 
 /** Capacitance of `row` at a bias of `volts`, F; the bias curve of the parts table. */
-export function capacitanceOrder(row: Ceramic, volts: number): number {
+function capacitanceOrder(row: Ceramic, volts: number): number {
   return row.capacitance / (1 + volts / row.halvingVoltage);
 }
 

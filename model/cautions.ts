@@ -8,7 +8,7 @@ import type { Rail } from './rail/rail.ts';
 /** Dc voltage above which touch is dangerous, V: the limit of class ES1 in IEC 62368-1 (from memory). */
 export const TOUCH_VOLTAGE = 60;
 /** Surface temperature above which a caution is shown, K: 70 °C, metal touched briefly (common practice, no source). */
-export const TOUCH_TEMPERATURE = 343.15;
+const TOUCH_TEMPERATURE = 343.15;
 
 /** What every result carries. */
 export const STANDING_CAUTION =

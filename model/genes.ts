@@ -5,7 +5,7 @@ import type { Part } from './parts/common.ts';
 import type { Rail } from './rail/rail.ts';
 
 /** Order of the genes in a gene vector. */
-export const GENE_NAMES = [
+const GENE_NAMES = [
   'architecture',
   'phases',
   'frequency',
@@ -47,11 +47,11 @@ export const STOCKED = 'stocked';
 export const WOUND = 'wound';
 
 /** Options of the gene `legBuild`. */
-export const DISCRETE = 'discrete';
+const DISCRETE = 'discrete';
 export const PACKAGED = 'power stage';
 
 /** Options of the gene `bridgeControl`. */
-export const BRIDGE_CONTROLS = ['hard-switched', 'phase-shifted'] as const;
+const BRIDGE_CONTROLS = ['hard-switched', 'phase-shifted'] as const;
 
 /** Most turns that a gene counts. */
 const MOST_CHOKE_TURNS = 60;

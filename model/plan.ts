@@ -28,7 +28,7 @@ export function planPoints(rail: Rail): PointPlan {
 }
 
 /** Every load fraction at which limits are judged, by falling size. */
-export function judgedLoads(rail: Rail): readonly number[] {
+function judgedLoads(rail: Rail): readonly number[] {
   const loads = new Set(rail.profile.map((point) => point.fraction));
   loads.add(1);
   for (const limit of rail.limits.efficiency) loads.add(limit.load);

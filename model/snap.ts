@@ -37,7 +37,7 @@ export function nearestRow(series: InductorSeries, inductance: number): number {
 }
 
 /** `value`, at least 100, at three significant digits: finer than any oscillator is set. */
-export function significant(value: number): number {
+function significant(value: number): number {
   let unit = 0;
   while (unit + 1 < DECADES.length && value >= DECADES[unit + 1] * 100) unit++;
   // A whole number times an exact power of ten is the double nearest to the decimal, so the text reads back the same.

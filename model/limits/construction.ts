@@ -62,7 +62,7 @@ function judgeBands(e: Evaluator): void {
  * Smallest distance of the frequency (and its harmonics, as the band asks) to the band as a fraction of the frequency;
  * below 0 inside. `oscillator` is the tolerance of the frequency, a fraction.
  */
-export function bandClearance(frequency: number, oscillator: number, band: AvoidedBand): number {
+function bandClearance(frequency: number, oscillator: number, band: AvoidedBand): number {
   let least = Number.MAX_VALUE;
   for (let k = 1; k <= band.harmonics; k++) {
     const below = band.from / (k * frequency) - (1 + oscillator);

@@ -44,7 +44,7 @@ export function submit(job: SlurmJob): Submitted {
 }
 
 /** The array job's script. */
-export function shardScript(job: SlurmJob): string {
+function shardScript(job: SlurmJob): string {
   const directives = [
     `--job-name=${job.name}`,
     `--array=0-${job.shards - 1}`,
@@ -58,7 +58,7 @@ export function shardScript(job: SlurmJob): string {
 }
 
 /** The script of the job that checks and merges. */
-export function mergeScript(job: SlurmJob): string {
+function mergeScript(job: SlurmJob): string {
   const directives = [`--job-name=${job.name}-merge`, `--output=${join(job.out, 'slurm', 'merge.log')}`];
   return script(job, directives, job.mergeArguments);
 }

@@ -56,7 +56,7 @@ export function readFound(folder: string): Found {
 }
 
 /** The bytes of `archive.bin`. */
-export function packFound(found: Found): Uint8Array {
+function packFound(found: Found): Uint8Array {
   const { archive, nearMisses, ...rest } = found;
   const header: Header = { ...rest, designs: archive.count, nearMisses: nearMisses.count };
   const arrays = [archive, nearMisses].flatMap(({ genes, objectives, violations }) => [genes, objectives, violations]);
@@ -65,7 +65,7 @@ export function packFound(found: Found): Uint8Array {
 }
 
 /** What those bytes hold. Throws an `Error` that says what is wrong with them. */
-export function unpackFound(bytes: Uint8Array): Found {
+function unpackFound(bytes: Uint8Array): Found {
   const { header, parts } = unseal(KIND, bytes);
   const { designs, nearMisses, ...rest } = header as Header;
   const doubles = parts.slice(0, 6).map((part) => new Float64Array(part.buffer));

@@ -18,12 +18,12 @@ export function publish(folder: string, problem: RailProblem, found: Found): Fro
 }
 
 /** The front that the sheet's front size leaves of an archive. */
-export function frontOf(problem: RailProblem, found: Pick<Found, 'archive'>): FrontFile {
+function frontOf(problem: RailProblem, found: Pick<Found, 'archive'>): FrontFile {
   return frontFile(problem, chooseFront(problem, found.archive, problem.rail.settings.frontSize));
 }
 
 /** The table of near misses: the broken limit, then what `front.csv` tells of a design; margins below zero are the miss. */
-export function nearMissCsv(problem: RailProblem, found: Pick<Found, 'archive' | 'nearMisses'>): string {
+function nearMissCsv(problem: RailProblem, found: Pick<Found, 'archive' | 'nearMisses'>): string {
   const misses = mergeNearMisses(problem, [found.nearMisses], found.archive);
   const genes = rowsOf(misses, problem.genes.length);
   const limits = new Map(genes.map((row, i) => [problem.id(row), problem.limits[misses.limit[i] ?? -1] ?? '']));
