@@ -12,6 +12,7 @@ import {
   type Operator,
   refineMember,
   type Space,
+  stepAround,
   toCoordinates,
   toGenes,
 } from './variation/index.ts';
@@ -27,7 +28,7 @@ const SCATTER = 0.3;
  * Part of the refinements that start from a champion: the flat ends of a front add too little hypervolume to hold a place in the population,
  * yet the best in each objective is what one asks for first.
  */
-const CHAMPIONS = 0.25;
+const CHAMPIONS = 0.3;
 
 /** Places in `OPERATORS` (island.ts) of those that need more than parents drawn at random. */
 const NEIGHBOURS = OPERATORS.indexOf('neighbours');
@@ -135,8 +136,10 @@ function makeChild(world: World, nursery: Nursery, row: number, attempt: number)
   const { parents } = nursery;
   parents[0] = tournament(world);
   if (operator === REFINEMENT) {
-    if (!world.trial && random.uniform() < CHAMPIONS) parents[0] = champion(world, parents[0]);
-    refineMember(space, coordinates, world.stride, parents[0], coordinates, row * n, random);
+    const end = !world.trial && random.uniform() < CHAMPIONS;
+    if (end) parents[0] = champion(world, parents[0]);
+    if (end && random.uniform() < 0.5) stepAround(space, coordinates, parents[0], coordinates, row * n, random);
+    else refineMember(space, coordinates, world.stride, parents[0], coordinates, row * n, random);
   } else {
     if (operator === NEIGHBOURS) neighbours(world, nursery);
     else {

@@ -3,6 +3,6 @@ export { crossover } from './crossover.ts';
 export { differential } from './differential.ts';
 export { mutate } from './mutation.ts';
 export type { Operator } from './operator.ts';
-export { refineMember } from './refinement.ts';
+export { refineMember, stepAround } from './refinement.ts';
 export { drawOperator, learn } from './shares.ts';
 export { CHOICE, createSpace, LINE, type Space, toCoordinates, toGenes, WHOLE } from './space.ts';

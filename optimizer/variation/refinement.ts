@@ -11,7 +11,8 @@ const FINEST = -4;
 const COARSEST = -1;
 
 /**
- * Writes to `child[at …]` the member at `pool[member · n …]` moved on along `stride[member · n …]` by 0.5 … 2 of its length, or with one gene
+ * Writes to `child[at …]` the member at `pool[member · n …]` moved on along `stride[member · n …]` by 0.5 … 2 of its length, each gene a little more or
+ * less so that curved edges can be followed, or with one gene
  * stepped when the stride is all zero or one time in two.
  */
 export function refineMember(
@@ -33,6 +34,27 @@ export function refineMember(
   else child[at + g] += random.uniform() < 0.5 ? -1 : 1;
 }
 
+/**
+ * Writes to `child[at …]` the member at `pool[member · n …]` with every gene on a line moved by a normal step of one deviation, which is drawn
+ * evenly over the decades; whole numbers now and then move by one. Where limits meet at a narrow angle, single genes cannot move and this can.
+ */
+export function stepAround(
+  space: Space,
+  pool: Float64Array,
+  member: number,
+  child: Float64Array,
+  at: number,
+  random: Random,
+): void {
+  const { n, kind } = space;
+  const deviation = decadeStep(random);
+  for (let g = 0; g < n; g++) {
+    child[at + g] = pool[member * n + g];
+    if (kind[g] === LINE) child[at + g] += deviation * random.normal();
+    else if (kind[g] !== CHOICE && random.uniform() * n < 0.5) child[at + g] += random.uniform() < 0.5 ? -1 : 1;
+  }
+}
+
 /** Moves on along the stride; false when there is none. */
 function follow(
   space: Space,
@@ -48,7 +70,8 @@ function follow(
   for (let g = 0; g < n; g++) {
     const step = stride[from + g];
     if (step === 0 || kind[g] === CHOICE) continue;
-    child[at + g] += kind[g] === LINE ? length * step : Math.round(length * step);
+    const stretched = length * step * (0.7 + 0.6 * random.uniform());
+    child[at + g] += kind[g] === LINE ? stretched : Math.round(stretched);
     moved = true;
   }
   return moved;
@@ -56,7 +79,11 @@ function follow(
 
 /** A step along a line, of either sign, whose size is spread evenly over the decades. */
 export function lineStep(random: Random): number {
-  const decades = FINEST + (COARSEST - FINEST) * random.uniform();
-  const size = exp(decades * Math.LN10);
+  const size = decadeStep(random);
   return random.uniform() < 0.5 ? -size : size;
+}
+
+/** A size spread evenly over the decades from the finest to the coarsest step. */
+function decadeStep(random: Random): number {
+  return exp((FINEST + (COARSEST - FINEST) * random.uniform()) * Math.LN10);
 }
