@@ -5,4 +5,4 @@ export { mutate } from './mutation.ts';
 export type { Operator } from './operator.ts';
 export { refineMember, stepAround } from './refinement.ts';
 export { drawOperator, learn } from './shares.ts';
-export { CHOICE, createSpace, LINE, type Space, toCoordinates, toGenes, WHOLE } from './space.ts';
+export { createSpace, LINE, type Space, toCoordinates, toGenes } from './space.ts';

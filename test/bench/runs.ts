@@ -53,7 +53,7 @@ function row(work: string, problem: Problem, plainMs: number, target: number): R
 }
 
 /** Median time after one run to warm up, milliseconds. */
-export function median(repeats: number, run: () => void): number {
+function median(repeats: number, run: () => void): number {
   run();
   const times = Array.from({ length: repeats }, () => {
     const start = performance.now();
