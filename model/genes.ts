@@ -1,7 +1,6 @@
 /** The genes of a converter design: one fixed list, with the place of each by name. */
 import type { Gene } from '../optimizer/problem.ts';
 import { type Catalogue, isFullBridge } from './catalogue.ts';
-import type { Part } from './parts/common.ts';
 import type { Rail } from './rail/rail.ts';
 
 /** Order of the genes in a gene vector. */
@@ -64,7 +63,7 @@ export const GENE = Object.fromEntries(GENE_NAMES.map((name, index) => [name, in
 >;
 
 /** Genes whose value names a part (or an architecture), so that a record holds the name and not the number. */
-export const NAMED_GENES: readonly GeneName[] = [
+const NAMED_GENES: readonly GeneName[] = [
   'architecture',
   'inductorSeries',
   'highSwitch',
@@ -201,9 +200,4 @@ function inductanceSpan(rail: Rail, catalogue: Catalogue): { low: number; high: 
     }
   }
   return { low, high };
-}
-
-/** Name of the part that a gene's value stands for. */
-export function optionName(options: readonly Part[], value: number): string {
-  return options[value]?.name ?? '';
 }

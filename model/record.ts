@@ -1,7 +1,7 @@
 /** A design as names and numbers, and back: what files hold, what a person reads, and what a design's id is made of. */
 import type { Gene } from '../optimizer/problem.ts';
 import type { DesignRecord } from './assessment.ts';
-import { GENE, type GeneName, NAMED_GENES, NUMERIC_GENES, STOCKED, WOUND } from './genes.ts';
+import { GENE, type GeneName, NUMERIC_GENES, STOCKED, WOUND } from './genes.ts';
 import { shortHash } from './hash.ts';
 import { bad, type Finding, good, type Outcome } from './outcome.ts';
 import type { Architecture } from './rail/rail.ts';
@@ -141,9 +141,4 @@ function outsideRange(
     if (value >= gene.low && value <= gene.high) continue;
     refuse(`genes.${name}`, `${value} ${gene.unit}`.trim(), `${gene.low} to ${gene.high} ${gene.unit}`.trim());
   }
-}
-
-/** Genes that name a part or the architecture. */
-export function isNamed(name: GeneName): boolean {
-  return NAMED_GENES.includes(name);
 }

@@ -30,6 +30,3 @@ export function jsonReporter(write: Write): Reporter {
     end: () => {},
   };
 }
-
-/** Shows nothing. */
-export const silentReporter: Reporter = { show: () => {}, say: () => {}, end: () => {} };

@@ -1,5 +1,5 @@
 /** Finding, making and refusing run folders; what each file in one is called is decided here and nowhere else. */
-import { accessSync, constants, existsSync, mkdirSync, readdirSync, statSync } from 'node:fs';
+import { accessSync, constants, existsSync, mkdirSync, readdirSync } from 'node:fs';
 import { join } from 'node:path';
 import { reasonOf, refusal, systemCode } from '../errors.ts';
 
@@ -53,11 +53,6 @@ export function makeFolder(folder: string): void {
 /** Path of a file of the run. */
 export function runFile(folder: string, name: keyof typeof RUN_FILES): string {
   return join(folder, RUN_FILES[name]);
-}
-
-/** Whether a path is a folder. */
-export function isFolder(path: string): boolean {
-  return statSync(path, { throwIfNoEntry: false })?.isDirectory() ?? false;
 }
 
 // A lock and half-written files do not make a folder count as used: they may be all that a killed start left behind. Nor do

@@ -30,12 +30,3 @@ export function shareUsed(budget: Budget, shards: number, standing: Standing): n
   if (budget.steady !== undefined && gain !== undefined && gain < budget.steady) shares.push(1);
   return Math.min(1, Math.max(...shares));
 }
-
-/** The budget in words. */
-export function describeBudget(budget: Budget): string {
-  const parts: string[] = [];
-  if (budget.evaluations !== undefined) parts.push(`${budget.evaluations} evaluations`);
-  if (budget.seconds !== undefined) parts.push(`${budget.seconds} s`);
-  if (budget.steady !== undefined) parts.push(`steady within ${budget.steady * 100} %`);
-  return parts.join(' or ');
-}

@@ -69,7 +69,7 @@ export interface Sweep {
 }
 
 /** An epoch is tried this often before its island is given up. */
-export const TRIES = 3;
+const TRIES = 3;
 
 /** Starts a sweep. */
 export function startSweep(setup: SweepSetup): Sweep {
