@@ -17,10 +17,14 @@ export { type ArchitectureVerdict, explainRail, type Fact, type RailExplanation 
 export { type FamilyTally, familyReason } from './families.ts';
 export { type FrontDesign, type FrontFile, frontCsv, frontFile, quoteCell } from './front-file.ts';
 export { stageNetlist } from './handoff/netlist/index.ts';
+export { stepNetlist } from './handoff/netlist/loop.ts';
 export type { LossTerm, Prediction, Reading } from './handoff/netlist/predictions.ts';
+export { designNote, type HandoffContext } from './handoff/note.ts';
 export { fullLoad, solveAt } from './handoff/solved-point.ts';
+export { type NamedFile, takeAway } from './handoff/take-away.ts';
 export { bad, describeFinding, type Finding, good, type Outcome } from './outcome.ts';
 export * from './parts/index.ts';
+export { type Gain, gainOf, type Miss, type RequirementPrice, requirementPrices } from './prices.ts';
 export { createRailProblem, type Judgement, type RailProblem } from './problem.ts';
 export * from './quantity/index.ts';
 export * from './rail/index.ts';

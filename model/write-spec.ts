@@ -82,4 +82,3 @@ export function hottest(points: readonly PointReport[]): Record<string, number> 
   }
   return highest;
 }
-

@@ -103,6 +103,10 @@ export const ERRORS = {
     'no sbatch here; run this where the scheduler is installed, or leave --on out to sweep on this machine',
   ],
   'slurm-refused': [1, 'the scheduler refused the job: {reason}'],
+  'simulator-missing': [
+    2,
+    'no circuit simulator here: install ngspice, or the optional package eecircuit-engine, and try again',
+  ],
   'page-failed': [1, 'the page could not be drawn: {reason}'],
 } as const satisfies Record<string, readonly [number, string]>;
 

@@ -9,6 +9,7 @@ import { defineHandoff } from './commands/handoff.ts';
 import { defineMerge } from './commands/merge.ts';
 import { definePage } from './commands/page.ts';
 import { defineParts } from './commands/parts.ts';
+import { defineProve } from './commands/prove.ts';
 import type { SetStatus } from './commands/shared.ts';
 import { defineShow } from './commands/show.ts';
 import { defineStatus } from './commands/status.ts';
@@ -27,6 +28,7 @@ const DEFINITIONS = [
   defineShow,
   defineAssess,
   defineHandoff,
+  defineProve,
   defineMerge,
   defineStatus,
   defineCompare,

@@ -2,21 +2,12 @@
 import { pauses } from '../../stages/state.ts';
 import type { SolvedPoint } from '../solved-point.ts';
 import { type Instant, type Lines, numberText } from './lines.ts';
+import type { PhaseSite } from './phase-site.ts';
 import { writePrimary } from './primary.ts';
 import { type PulseTimes, pulseTimes, startCurrents } from './pulses.ts';
 
 /** Coupling of the windings beside the leakage inductance, which is written as its own inductor. */
 const COUPLING = 0.99999;
-
-/** One phase while it is written. */
-export interface PhaseSite {
-  readonly lines: Lines;
-  readonly point: SolvedPoint;
-  readonly times: PulseTimes;
-  /** Number of the phase, from 0, and its delay, s. */
-  readonly k: number;
-  readonly shift: number;
-}
 
 /** Writes all active phases. */
 export function writeIsolated(lines: Lines, point: SolvedPoint): void {

@@ -1,6 +1,6 @@
 /** The primary side of a transformer stage: switches with body diodes, their gates, the divider of a half bridge. */
-import type { PhaseSite } from './isolated.ts';
 import type { Instant } from './lines.ts';
+import type { PhaseSite } from './phase-site.ts';
 
 /** Writes the primary of one phase between nodes `pa` and `pb`. */
 export function writePrimary(site: PhaseSite): void {

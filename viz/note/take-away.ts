@@ -1,0 +1,15 @@
+/** Every file that a design leaves as, the printable note among them: what the page's buttons and `handoff` both hand out. */
+import { designNote, type HandoffContext } from '../../model/handoff/note.ts';
+import { type NamedFile, takeAway } from '../../model/handoff/take-away.ts';
+import type { RailProblem } from '../../model/problem.ts';
+import { noteHtml } from './html.ts';
+
+/** The files of the design of `genes`, in the order in which they are offered. */
+export function takeAwayFiles(problem: RailProblem, genes: Float64Array, context: HandoffContext = {}): NamedFile[] {
+  const snapped = Float64Array.from(genes);
+  problem.snap(snapped);
+  return [
+    ...takeAway(problem, snapped, context),
+    { name: 'note.html', text: noteHtml(designNote(problem, snapped, context)) },
+  ];
+}
