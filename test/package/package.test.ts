@@ -3,6 +3,7 @@ import { execFileSync, spawnSync } from 'node:child_process';
 import { existsSync, mkdirSync, mkdtempSync, readdirSync, readFileSync, rmSync, writeFileSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
+import { Ajv2020 } from 'ajv/dist/2020.js';
 import { afterAll, describe, expect, test } from 'vitest';
 import { lacking } from '../support/needs.ts';
 import { ROOT, readText, trackedPaths } from '../support/project.ts';
@@ -80,10 +81,16 @@ describe.runIf(installed)('installed in an empty folder', () => {
     expect(readdirSync(join(folder, 'run'))).toEqual(expect.arrayContaining(['front.json', 'front.csv', 'page.html']));
   });
 
-  test('the schema is where the package says', () => {
-    const schema = JSON.parse(readFileSync(join(folder, 'node_modules/chopfront/dist/model/spec.schema.json'), 'utf8'));
-    expect(schema.properties.format).toMatchObject({ const: 'chopfront-spec' });
-    expect(node("console.log(import.meta.resolve('chopfront/spec.schema.json'))").stdout).toContain('spec.schema.json');
+  test('a spec that is handed over fits the published schema, and a damaged one does not', () => {
+    const at = node("process.stdout.write(import.meta.resolve('chopfront/spec.schema.json'))").stdout;
+    const fits = new Ajv2020().compile(JSON.parse(readFileSync(new URL(at), 'utf8')));
+    const { designs } = JSON.parse(readFileSync(join(folder, 'run', 'front.json'), 'utf8'));
+    expect(chopfront('handoff', 'run', designs[0].id, '--out', 'chosen').status).toBe(0);
+    const spec = JSON.parse(readFileSync(join(folder, 'chosen', 'spec.json'), 'utf8'));
+    expect(fits(spec)).toBe(true);
+    expect(spec.id).toBe(designs[0].id);
+    expect(fits({ ...spec, format: 'another' })).toBe(false);
+    expect(fits({ ...spec, parts: { ...spec.parts, highSwitch: 7 } })).toBe(false);
   });
 
   test('both library faces load in plain Node; nothing else can be reached', () => {
