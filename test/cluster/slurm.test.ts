@@ -7,14 +7,16 @@ import { join } from 'node:path';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { readRecord } from '../../runners/run-folder/record.ts';
 import { chopfront, newFolder, startChopfront } from '../runners/processes.ts';
+import { lacking } from '../support/needs.ts';
 import { type PrivateSlurm, startSlurm, waitFor, whyNoSlurm } from './private-slurm.ts';
 
 const SHEET = new URL('../../model/rails/buoy-sensors.yaml', import.meta.url).pathname;
 const BYTES = ['front.csv', 'front.json', 'near-misses.csv', 'history.csv', 'archive.bin'];
 const SIZE = ['--shards', '4', '--evaluations', '64k', '--seed', 'cluster', '--threads', '1'];
 const why = whyNoSlurm();
+const here = why === '' || lacking('slurm', why);
 
-describe.skipIf(why !== '')(`on a private Slurm ${why}`, () => {
+describe.runIf(here)('on a private Slurm', () => {
   let slurm: PrivateSlurm;
   beforeAll(async () => {
     slurm = await startSlurm(newFolder(), 2);

@@ -7,6 +7,7 @@ import { readFileSync, rmSync } from 'node:fs';
 import { join } from 'node:path';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { checkpointNames, readCheckpoint } from '../../runners/run-folder/checkpoint.ts';
+import { lacking } from '../support/needs.ts';
 import { newFolder, startToy, sweepToy, until } from './processes.ts';
 
 const order = { evaluations: 4000, threads: 2, source: { work: 20_000 }, checkpoint: 0.05 };
@@ -30,7 +31,9 @@ function mayMount(): boolean {
   return true;
 }
 
-describe.skipIf(!mayMount())('on a small file system (needs the right to mount a tmpfs)', () => {
+const small = mayMount() || lacking('mount', 'mounting a tmpfs is not allowed here');
+
+describe.runIf(small)('on a small file system', () => {
   const point = newFolder();
   const run = join(point, 'run');
   afterAll(() => {
