@@ -5,8 +5,8 @@
 
 /** Designs an island breeds from. */
 export const POPULATION = 50;
-/** Children made between two selections. */
-export const BATCH = 10;
+/** Children made between two selections, as a part of the population. */
+export const BATCH_SHARE = 0.2;
 /** Generations (of `population` evaluations each) in an epoch, the unit of checkpoints and migration. */
 export const EPOCH_GENERATIONS = 50;
 /** Epochs in which each family is searched by itself, when the budget is not known. */

@@ -5,7 +5,7 @@ import { CEILINGS, type Island } from './island.ts';
 import { type Bench, createBench, judge } from './judge.ts';
 import type { Problem } from './problem.ts';
 import { NO_DESIGNS } from './ring.ts';
-import { BATCH, STALLED_GENERATIONS } from './settings.ts';
+import { STALLED_GENERATIONS } from './settings.ts';
 import { createSurvival, type Survival, survive } from './survive.ts';
 import { learn } from './variation/index.ts';
 import { addRows, closeWorld, openWorld, type Watch, type World } from './world.ts';
@@ -24,7 +24,7 @@ export function step(problem: Problem, island: Island, immigrants: Designs = NO_
   let idle = 0;
   while (world.counters.evaluations < target && idle < STALLED_GENERATIONS) {
     const left = target - world.counters.evaluations;
-    const made = world.count === 0 ? founders(world, tools, left) : batch(world, tools, Math.min(BATCH, left));
+    const made = world.count === 0 ? founders(world, tools, left) : batch(world, tools, Math.min(world.batch, left));
     idle = made === 0 ? idle + 1 : 0;
   }
   return closeWorld(world);

@@ -3,7 +3,7 @@
  * that fits, with an ε-relaxed start (Takahama, Sakai 2006) while nothing feasible is known.
  */
 import { weighViolations } from './judge.ts';
-import { BATCH, REFERENCE_MARGIN, RELAXED_GENERATIONS, RELAXED_SHARE } from './settings.ts';
+import { REFERENCE_MARGIN, RELAXED_GENERATIONS, RELAXED_SHARE } from './settings.ts';
 import type { World } from './world.ts';
 
 /** Scratch of survival. */
@@ -137,7 +137,7 @@ function relaxed(world: World, all: number): number {
     world.relaxation = Number.isFinite(threshold) ? threshold : 0;
     world.relaxedGenerations = RELAXED_GENERATIONS;
   }
-  world.relaxedGenerations = Math.max(0, world.relaxedGenerations - BATCH / world.keep);
+  world.relaxedGenerations = Math.max(0, world.relaxedGenerations - world.batch / world.keep);
   const part = world.relaxedGenerations / RELAXED_GENERATIONS;
   return world.relaxation * part * part;
 }

@@ -16,7 +16,7 @@ import type { Island } from './island.ts';
 import type { Problem } from './problem.ts';
 import { type Random, restoreRandom } from './random.ts';
 import { type ConstrainedRanker, createConstrainedRanker } from './ranking/index.ts';
-import { BATCH, NEAR_MISS_SHARE, NICHE } from './settings.ts';
+import { BATCH_SHARE, NEAR_MISS_SHARE, NICHE } from './settings.ts';
 import { createSpace, type Space, toCoordinates } from './variation/index.ts';
 
 /** Where an epoch's time went, in the unit of the caller's clock. */
@@ -49,6 +49,8 @@ export interface World {
   readonly capacity: number;
   /** Members kept at a selection. */
   readonly keep: number;
+  /** Children made between two selections. */
+  readonly batch: number;
   readonly genes: Float64Array;
   readonly coordinates: Float64Array;
   /** The move, in coordinates, that made each row out of its first parent; zero where unknown. */
@@ -129,7 +131,8 @@ export function openWorld(problem: Problem, island: Island, guests: number, watc
   const limits = problem.limits.length;
   const trial = island.epoch < island.plan.trialEpochs && problem.families.names.length > 1;
   const keep = trial ? Math.max(island.plan.population, NICHE * island.families.length) : island.plan.population;
-  const capacity = Math.max(keep, island.population.count) + Math.max(guests, BATCH, keep);
+  const batch = Math.max(1, Math.round(keep * BATCH_SHARE));
+  const capacity = Math.max(keep, island.population.count) + Math.max(guests, keep);
   const near = createNearMisses(nearMissGrid(problem));
   insertAllNearMisses(near, island.nearMisses);
   const world: World = {
@@ -142,6 +145,7 @@ export function openWorld(problem: Problem, island: Island, guests: number, watc
     limits,
     capacity,
     keep,
+    batch,
     genes: new Float64Array(capacity * n),
     coordinates: new Float64Array((capacity + m) * n),
     stride: new Float64Array((capacity + m) * n),

@@ -47,7 +47,8 @@ function commit(): string {
 
 function json(qualityRows: readonly QualityRow[], timeRows: readonly Row[]): string {
   // JSON has no NaN: what was not measured or not set is null.
-  return `${JSON.stringify([...qualityRows, ...timeRows], null, 1)}\n`;
+  const rows = qualityRows.map(({ ms: _, ...row }) => row);
+  return `${JSON.stringify([...rows, ...timeRows], null, 1)}\n`;
 }
 
 function tables(): string {
