@@ -128,6 +128,7 @@ export function solveRipple(
   bankRipple(flavour.output, solver.summed, solver.outputRipple);
   sumShifted(state.draw, state.drawCopies, solver.drawn);
   bankRipple(flavour.input, solver.drawn, solver.inputRipple);
+  resonate(solver, flavour);
 }
 
 function ask(solver: PointSolver, design: Design, flavour: Flavour, planned: PlannedPoint, phases: number): void {
@@ -271,6 +272,25 @@ function addController(solver: PointSolver, design: Design): void {
   solver.ledger[SLOT['controller.quiescent']] += supply * (controller.quiescentCurrent + stages);
 }
 
+/**
+ * Source inductance and input bank form a resonance; the bank's current and voltage rise by 1/|1 − x² + j·x/Q| at the ripple's
+ * frequency, x = corner over ripple frequency, the whole ripple taken as its fundamental.
+ */
+function resonate(solver: PointSolver, flavour: Flavour): void {
+  const { sourceInductance, sourceResistance } = solver.rail.input;
+  if (!(sourceInductance > 0)) return;
+  const { input } = flavour;
+  const capacitance = input.c1 + input.c2;
+  const turn = (2 * Math.PI) / solver.drawn.period;
+  const x2 = 1 / (sourceInductance * capacitance * turn * turn);
+  const damping = (sourceResistance + input.r1) * capacitance * turn * x2;
+  const gain = 1 / Math.sqrt((1 - x2) * (1 - x2) + damping * damping);
+  const ripple = solver.inputRipple;
+  ripple.ripple *= gain;
+  ripple.meanSquare1 *= gain * gain;
+  ripple.meanSquare2 *= gain * gain;
+}
+
 /** Loss of the input filter's choke: dc alone, for its ripple is what the filter leaves. */
 function addFilterChoke(solver: PointSolver, choke: Inductor): void {
   const { state, ledger } = solver;
@@ -290,6 +310,7 @@ function addCapacitors(solver: PointSolver, design: Design, flavour: Flavour): v
     bankCurrents(flavour.output, solver.summed, solver.outputRipple);
     bankCurrents(flavour.input, solver.drawn, solver.inputRipple);
   }
+  resonate(solver, flavour);
   // Both halves of a divider carry half of the primary current.
   if (design.dividerCount > 0) {
     ledger[SLOT['dividerCeramic.seriesResistance']] +=

@@ -1,6 +1,7 @@
 /** Exact periodic steady state of a capacitor bank under a piecewise-linear current: ripple voltage and group currents. */
 import type { Waveform } from '../waveform/waveform.ts';
 import type { Bank, BankRipple } from './bank.ts';
+import { isPair, pairRipple } from './bank-pair.ts';
 import { walkState } from './bank-state.ts';
 import { beginWalk, walk } from './bank-walk.ts';
 
@@ -14,9 +15,14 @@ import { beginWalk, walk } from './bank-walk.ts';
  * Extremes: both ends of every segment, and inside it wherever the derivative (a line plus an exponential) crosses zero.
  * Reference level: the mean charge of the walk starts at 0, so only differences of `highest` and `lowest` mean anything.
  * @derivation the two-capacitor network above, solved in closed form; checked against ΔI/(8·f·C) and the exact table for C and series resistance
- * @valid c1 > 0; two groups with inductance: the current is split by capacitance and resistance, not by inductance
+ * Two groups with inductance ring against each other: those go by `pairRipple`.
+ * @valid c1 > 0
  */
 export function bankRipple(bank: Bank, current: Waveform, into: BankRipple): void {
+  if (isPair(bank)) {
+    pairRipple(bank, current, true, into);
+    return;
+  }
   walkPeriod(bank, current, true);
   into.highest = walkState.highest;
   into.lowest = walkState.lowest;
@@ -32,6 +38,10 @@ export function bankRipple(bank: Bank, current: Waveform, into: BankRipple): voi
  * @valid as `bankRipple`
  */
 export function bankCurrents(bank: Bank, current: Waveform, into: BankRipple): void {
+  if (isPair(bank)) {
+    pairRipple(bank, current, false, into);
+    return;
+  }
   walkPeriod(bank, current, false);
   into.highest = 0;
   into.lowest = 0;

@@ -3,6 +3,7 @@ import { exp } from '../../optimizer/maths/index.ts';
 import type { Waveform } from '../waveform/waveform.ts';
 import type { Bank } from './bank.ts';
 import { voltageThere } from './bank-extremes.ts';
+import { isPair, pairTrace } from './bank-pair.ts';
 import { walkState } from './bank-state.ts';
 import { beginWalk, enterSegment, walk } from './bank-walk.ts';
 
@@ -18,6 +19,7 @@ export interface BankTrace {
  * @valid as `bankRipple`; points ≥ 1
  */
 export function bankTrace(bank: Bank, current: Waveform, points: number): BankTrace {
+  if (isPair(bank)) return centred(pairTrace(bank, current));
   beginWalk(bank, current);
   const time: number[] = [];
   const value: number[] = [];
@@ -35,6 +37,11 @@ export function bankTrace(bank: Bank, current: Waveform, points: number): BankTr
     walk(bank, current, i, false);
     start += d;
   }
+  return centred({ time, value });
+}
+
+/** The same with its values about their mean. */
+function centred({ time, value }: BankTrace): BankTrace {
   const middle = value.reduce((sum, v) => sum + v, 0) / value.length;
   return { time, value: value.map((v) => v - middle) };
 }

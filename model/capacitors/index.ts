@@ -7,6 +7,7 @@ export {
   setGroup1,
   setGroup2,
 } from './bank.ts';
+export { isPair, pairTransient } from './bank-pair.ts';
 export { bankCurrents, bankRipple } from './bank-ripple.ts';
 export { type BankTrace, bankTrace } from './bank-trace.ts';
 export { ceramicCapacitance, ceramicWorstFactor } from './ceramic.ts';

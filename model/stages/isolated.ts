@@ -51,7 +51,7 @@ export function solveIsolated(form: IsolatedForm, design: Design, state: StageSt
   applyForward(steady, state);
   state.effectiveInductance = steady.inductance;
   writeCurrents(form, transformer, state, chokes, design.phaseShifted);
-  writeFlux(form, design, transformer, state, current);
+  writeFlux(form, design, transformer, state);
 }
 
 /** Volts across the choke in both intervals, after the drops of switches, windings, rectifiers and choke. */
@@ -85,9 +85,10 @@ function writeCurrents(form: IsolatedForm, t: Transformer, state: StageState, ch
   state.highMeanSquare = form.doubleEnded ? 0.5 * state.primaryMeanSquare : state.primaryMeanSquare;
   if (form.doubler) {
     state.secondaryMeanSquare = driven * square;
-    state.lowMeanSquare = square * (1 + 2 * h);
+    // While the legs of a shifted bridge short the primary its current dies away: the rectifiers' share goes from all in one to halves.
+    state.lowMeanSquare = shifted ? square * (1.5 + h) : square * (1 + 2 * h);
   } else if (form.centreTap) {
-    state.secondaryMeanSquare = square * (0.5 * h + 0.25 * l);
+    state.secondaryMeanSquare = square * (0.5 * h + (shifted ? 0.375 : 0.25) * l);
     state.lowMeanSquare = state.secondaryMeanSquare;
   } else {
     state.secondaryMeanSquare = square * h;
@@ -121,7 +122,7 @@ function writeWaveforms(form: IsolatedForm, t: Transformer, state: StageState): 
 }
 
 /** Flux, magnetizing current, duty lost to leakage, rectifier stress. */
-function writeFlux(form: IsolatedForm, design: Design, t: Transformer, state: StageState, current: number): void {
+function writeFlux(form: IsolatedForm, design: Design, t: Transformer, state: StageState): void {
   const on = form.doubleEnded && !form.doubler ? 0.5 * state.dutyCycle : state.dutyCycle;
   const volts = form.share * state.inputVoltage;
   const voltSeconds = (volts * on) / design.frequency;
@@ -130,9 +131,19 @@ function writeFlux(form: IsolatedForm, design: Design, t: Transformer, state: St
   const swing = voltSeconds / t.magnetizing;
   state.magnetizingPeak = form.doubleEnded ? 0.5 * swing : swing;
   // Sabaté 1990: a shifted bridge turns its current round through the whole swing, a hard-switched one from rest.
-  const edges = design.phaseShifted ? 4 : form.doubleEnded ? 2 : 1;
-  state.lostDuty = (edges * t.leakage * design.frequency * current) / (t.ratio * volts);
+  const edges = (form.doubleEnded && !form.doubler ? 2 : 1) * (design.phaseShifted ? 2 : 1);
+  state.lostDuty = (edges * t.leakage * design.frequency * Math.max(0, state.peakCurrent)) / (t.ratio * volts);
+  if (!form.doubleEnded) addMagnetizing(t, state);
   state.rectifierVoltage = rectifierVoltage(form, state.inputVoltage, t.ratio);
+}
+
+/** The magnetizing current of a single-ended stage rises with each pulse: ∫(i + m)² − ∫i² over it, m from 0 to its peak. */
+function addMagnetizing(t: Transformer, state: StageState): void {
+  const m = state.magnetizingPeak;
+  const middle = (0.5 * (state.valleyCurrent + state.peakCurrent)) / t.ratio;
+  const more = (m * middle + (m * m) / 3) * state.highShare;
+  state.primaryMeanSquare += more;
+  state.highMeanSquare += more;
 }
 
 /** Volts that one rectifier blocks, without ringing. `inputVoltage` V, `ratio` Np/Ns. */

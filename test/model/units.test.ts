@@ -220,6 +220,8 @@ const RECORD_FUNCTIONS = [
     'bankRipple',
     'bankCurrents',
     'bankTrace',
+    'isPair',
+    'pairTransient',
     'outputAt',
     'besselJ',
     'dowellHarmonics',
