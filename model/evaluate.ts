@@ -59,6 +59,11 @@ export class Evaluator {
   /** W, loss at full load, usual values. */
   fullLoss = 0.5;
 
+  /** Changes what `prepare` filled in, for a sample of the spread; absent in a search. */
+  adjust: ((e: Evaluator) => void) | undefined;
+  /** Conductance of the sink that is built, W/K, where it is not to be sized again. */
+  builtSink: number | undefined;
+
   constructor(rail: Rail, catalogue: Catalogue, stages: readonly Stage[]) {
     this.rail = rail;
     this.catalogue = catalogue;
@@ -91,12 +96,18 @@ function prepare(e: Evaluator, genes: Float64Array): void {
   e.filterNeed = 0;
   prepareFlavour(e.usual, design, e.rail);
   prepareFlavour(e.worst, design, e.rail);
+  e.adjust?.(e);
   assemble(e.assembly, design, e.rail.quantity);
   e.book.clear();
 }
 
 /** Judges the worst points on the bare board, and again with the heat sink where any of them needs one. */
 function judgeAllWorst(e: Evaluator, listener?: PointListener): void {
+  if (e.builtSink !== undefined) {
+    e.sink = e.builtSink;
+    judgeWorst(e, listener);
+    return;
+  }
   e.sink = 0;
   const needed = judgeWorst(e);
   if (needed > 0) {

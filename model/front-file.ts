@@ -15,6 +15,8 @@ export interface FrontDesign {
   readonly margins: Readonly<Record<string, number>>;
   /** Smallest margin as a fraction of what is allowed. */
   readonly worstMargin: number;
+  /** Share of samples within tolerances that keep every limit, 0 … 1; absent where no spread was run. */
+  readonly yield?: number;
 }
 
 interface NamedUnit {
@@ -81,6 +83,7 @@ function frontDesign(problem: RailProblem, genes: Float64Array): FrontDesign {
 /** `front.csv`: id, architecture, numeric genes, parts, objectives, margins, worst margin; units in the header. */
 export function frontCsv(file: FrontFile): string {
   const column = ({ name, unit }: NamedUnit): string => header(name, unit);
+  const spread = file.designs.some((design) => design.yield !== undefined);
   const head = [
     'id',
     'family',
@@ -89,6 +92,7 @@ export function frontCsv(file: FrontFile): string {
     ...file.objectives.map(column),
     ...file.limits.map(({ name, unit }) => header(`${name} margin`, unit, true)),
     'worst margin',
+    ...(spread ? ['yield'] : []),
   ];
   const lines = file.designs.map((design) => [
     design.id,
@@ -98,6 +102,7 @@ export function frontCsv(file: FrontFile): string {
     ...file.objectives.map(({ unit }, i) => cell(design.objectives[i], unit)),
     ...file.limits.map(({ name, unit }) => cell(design.margins[name], unit, true)),
     cell(design.worstMargin, ''),
+    ...(spread ? [cell(design.yield, '')] : []),
   ]);
   return `${[head, ...lines].map((line) => line.map(quoteCell).join(',')).join('\n')}\n`;
 }

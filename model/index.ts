@@ -31,5 +31,6 @@ export * from './rail/index.ts';
 export type { Architecture, ObjectiveName, Rail } from './rail/rail.ts';
 export { ARCHITECTURES, OBJECTIVES } from './rail/rail.ts';
 export { readSpec, recordOfSpec, SPEC_SCHEMA, type Spec } from './spec.ts';
+export { CAUSES, drawSamples, type Spread, spreadOf, summarise } from './spread/index.ts';
 export { MODEL_VERSION } from './version.ts';
 export { writeSpec } from './write-spec.ts';

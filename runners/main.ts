@@ -12,6 +12,7 @@ import { defineParts } from './commands/parts.ts';
 import { defineProve } from './commands/prove.ts';
 import type { SetStatus } from './commands/shared.ts';
 import { defineShow } from './commands/show.ts';
+import { defineSpread } from './commands/spread.ts';
 import { defineStatus } from './commands/status.ts';
 import { defineSweep } from './commands/sweep.ts';
 import { Refusal, reasonOf, refusal, STATUS } from './errors.ts';
@@ -29,6 +30,7 @@ const DEFINITIONS = [
   defineAssess,
   defineHandoff,
   defineProve,
+  defineSpread,
   defineMerge,
   defineStatus,
   defineCompare,

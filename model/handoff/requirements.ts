@@ -46,6 +46,8 @@ export function requirementOf(design: Design, rail: Rail, assessment: Assessment
       const volts = design.stage.lowBlocking(bus, design.transformer.ratio);
       return { resistance: design.low.onResistance, voltage: volts / derating.switchVoltage, ...height };
     }
+    case 'powerStage':
+      return { voltage: bus / derating.switchVoltage, ...given('current', limit('switchCurrent')), ...height };
     case 'diode':
       return { voltage: bus / derating.switchVoltage, ...given('current', limit('switchCurrent')), ...height };
     case 'inductor':

@@ -23,12 +23,34 @@ function readVector(run: Run, name: string, reading: Reading): number {
   if (values === undefined) throw new Error(`the simulator gave no ${name}`);
   if (reading === 'mean') return meanOf(run.time, values);
   if (reading === 'rms') return rmsOf(run.time, values);
-  let [low, high] = [Number.POSITIVE_INFINITY, Number.NEGATIVE_INFINITY];
-  for (let i = 0; i < values.length; i++) {
-    low = Math.min(low, values[i] ?? low);
-    high = Math.max(high, values[i] ?? high);
+  return swingOf(run.time, values);
+}
+
+/** Share of the kept time that a level must last to count: shorter spikes come of a simulator's step across an inductance. */
+const LASTING = 1e-4;
+
+/** Peak to peak of the levels that last. */
+export function swingOf(time: ArrayLike<number>, values: ArrayLike<number>): number {
+  const order = Array.from({ length: values.length }, (_, i) => i).sort((a, b) => at(values, a) - at(values, b));
+  const least = LASTING * (at(time, time.length - 1) - at(time, 0));
+  return levelFrom(order.reverse(), time, values, least) - levelFrom(order.reverse(), time, values, least);
+}
+
+/** The first value of `order` whose points, with those before it, last `least` s. */
+function levelFrom(
+  order: readonly number[],
+  time: ArrayLike<number>,
+  values: ArrayLike<number>,
+  least: number,
+): number {
+  let lasts = 0;
+  for (const i of order) {
+    const from = at(time, Math.max(0, i - 1));
+    const to = at(time, Math.min(time.length - 1, i + 1));
+    lasts += 0.5 * (to - from);
+    if (lasts >= least) return at(values, i);
   }
-  return high - low;
+  return Number.NaN;
 }
 
 /** Mean over the kept time. */

@@ -15,6 +15,8 @@ export interface Prediction {
   readonly value: number;
   /** Largest relative difference that counts as agreement. */
   readonly band: number;
+  /** Difference, in the unit, that never counts: far below what the sheet allows. */
+  readonly floor?: number;
   readonly reading: Reading;
   /** Vectors of the simulation, such as `v(out)`. */
   readonly vectors: readonly string[];
@@ -32,17 +34,26 @@ export interface LossTerm {
 /** Bands of agreement: stated once. */
 export const BANDS = { mean: 0.01, ripple: 0.05, rms: 0.02, conduction: 0.03, input: 0.03, bank: 0.05 } as const;
 
+/** Share of an allowed ripple below which a difference is of no matter (series inductance of the input bank is not in the netlist). */
+const FLOOR = 0.05;
+
 /** What is predicted of `point`. */
 export function predictionsOf(point: SolvedPoint): Prediction[] {
-  const { state, solver } = point;
+  const { state, solver, rail } = point;
   const choke = new Float64Array(4);
   measure(state.choke, choke);
   const { form } = point.design.stage;
   const side = form?.doubler === true ? 'a' : '';
   const list: Prediction[] = [
     one('mean output voltage', 'V', state.outputVoltage, BANDS.mean, 'mean', 'v(out)'),
-    one('output ripple', 'V', solver.outputRipple.ripple, BANDS.ripple, 'peak-to-peak', 'v(out)'),
-    one('input ripple', 'V', solver.inputRipple.ripple, BANDS.ripple, 'peak-to-peak', 'v(in)'),
+    {
+      ...one('output ripple', 'V', solver.outputRipple.ripple, BANDS.ripple, 'peak-to-peak', 'v(out)'),
+      floor: FLOOR * rail.output.ripple,
+    },
+    {
+      ...one('input ripple', 'V', solver.inputRipple.ripple, BANDS.ripple, 'peak-to-peak', 'v(in)'),
+      floor: FLOOR * (rail.input.ripple ?? 0),
+    },
     one('mean input current', 'A', meanDraw(point), BANDS.input, 'mean', 'i(vmsource)'),
     one('choke ripple', 'A', choke[PEAK] - choke[VALLEY], BANDS.ripple, 'peak-to-peak', `i(vmc${side}0)`),
     one('choke rms', 'A', Math.sqrt(choke[MEAN_SQUARE]), BANDS.rms, 'rms', `i(vmc${side}0)`),
