@@ -47,8 +47,15 @@ export interface RailProblem extends Problem {
   id(genes: Float64Array): string;
 }
 
-/** The space of `rail` over `tables`, or why there is none. */
-export function createRailProblem(rail: Rail, tables: PartsTables): Outcome<RailProblem> {
+/**
+ * The space of `rail` over `tables`, or why there is none. The search starts from `incumbents` too; one that cannot stand in
+ * this space is a finding.
+ */
+export function createRailProblem(
+  rail: Rail,
+  tables: PartsTables,
+  incumbents: readonly DesignRecord[] = [],
+): Outcome<RailProblem> {
   const serving = servingStages(rail);
   if (!serving.ok) return serving;
   const stages = serving.value;
@@ -56,7 +63,12 @@ export function createRailProblem(rail: Rail, tables: PartsTables): Outcome<Rail
   const narrowed: Rail = { ...rail, search: { ...rail.search, architectures } };
   const catalogue = createCatalogue(narrowed, tables);
   if (!catalogue.ok) return catalogue;
-  return good(new ConverterSpace(narrowed, catalogue.value, stages));
+  const space = new ConverterSpace(narrowed, catalogue.value, stages);
+  const seeds = incumbents.map((record, i) => space.genesFrom(record, rail.incumbents?.[i] ?? `incumbent ${i + 1}`));
+  const findings = seeds.flatMap((seed) => (seed.ok ? [] : seed.findings));
+  if (findings.length > 0) return bad(findings);
+  space.seeds = seeds.flatMap((seed) => (seed.ok ? [seed.value] : []));
+  return good(space);
 }
 
 /** The stages that can serve `rail`, or one finding for each that cannot where none can. */
@@ -86,7 +98,7 @@ class ConverterSpace implements RailProblem {
   readonly limitDefinitions: readonly LimitDefinition[];
   readonly numericGenes: readonly GeneName[];
   readonly families: Families;
-  readonly seeds: readonly Float64Array[] = [];
+  seeds: readonly Float64Array[] = [];
   private readonly evaluator: Evaluator;
   private readonly readers;
   private readonly space: RecordSpace;

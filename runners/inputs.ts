@@ -6,6 +6,7 @@ import { dirname, resolve } from 'node:path';
 import {
   BUILT_IN_TABLES,
   createRailProblem,
+  type DesignRecord,
   describeFinding,
   type Finding,
   joinTables,
@@ -14,8 +15,11 @@ import {
   type PartsTables,
   type Rail,
   type RailProblem,
+  readPlainDesign,
   readRail,
+  readSpec,
   readTable,
+  recordOfSpec,
 } from '../model/index.ts';
 import { unknownPartNames } from '../model/parts-choice.ts';
 import { refusal } from './errors.ts';
@@ -39,6 +43,8 @@ export interface TableText extends NamedText {
 export interface InputTexts {
   readonly rail: NamedText;
   readonly tables: readonly TableText[];
+  /** Designs that exist already, in the sheet's order; absent where it names none. */
+  readonly incumbents?: readonly NamedText[];
 }
 
 /** The texts, read. */
@@ -46,6 +52,7 @@ export interface Inputs {
   readonly texts: InputTexts;
   readonly rail: Rail;
   readonly tables: PartsTables;
+  readonly incumbents: readonly DesignRecord[];
   /** Remarks that do not forbid anything. */
   readonly remarks: readonly string[];
 }
@@ -60,7 +67,16 @@ export function readSheet(path: string): Inputs {
   const tables = rail.parts.tables.flatMap((name) =>
     name === 'built-in' ? builtIn() : [ownTable(name, dirname(path))],
   );
-  return readInputs({ rail: text, tables });
+  const incumbents = (rail.incumbents ?? []).map((name) => {
+    return { file: name, text: readText(resolve(dirname(path), name), 'a design named in the sheet') };
+  });
+  return readInputs({ rail: text, tables, ...(incumbents.length === 0 ? {} : { incumbents }) });
+}
+
+/** A design as a spec or as a plain list. Throws the refusal `findings` where it is neither. */
+export function readDesign(text: NamedText): DesignRecord {
+  if (!text.text.trimStart().startsWith('{')) return take(readPlainDesign(text.text, text.file));
+  return recordOfSpec(take(readSpec(text.text, text.file)));
 }
 
 /** Reads texts that were gathered before, such as a run's snapshot. Throws refusals that name every problem found. */
@@ -78,7 +94,8 @@ export function readInputs(texts: InputTexts): Inputs {
   const tables = take(joined);
   const unknown = unknownPartNames(texts.rail, sheet, tables);
   if (unknown.length > 0) throw refuseFindings(unknown);
-  return { texts, rail: sheet, tables, remarks: remarks.map(describeFinding) };
+  const incumbents = (texts.incumbents ?? []).map(readDesign);
+  return { texts, rail: sheet, tables, incumbents, remarks: remarks.map(describeFinding) };
 }
 
 /** The built-in table of a kind. */
@@ -89,7 +106,7 @@ export function builtInText(kind: PartKind): TableText {
 
 /** The problem that the inputs pose. Throws the refusal `no-space` where nothing can be searched. */
 export function problemOf(inputs: Inputs): RailProblem {
-  const outcome = createRailProblem(inputs.rail, inputs.tables);
+  const outcome = createRailProblem(inputs.rail, inputs.tables, inputs.incumbents);
   if (outcome.ok) return outcome.value;
   throw refusal('no-space', { reasons: linesOf(outcome.findings) });
 }

@@ -3,6 +3,7 @@
  * units and the sheet's currency. `pack.ts` turns it into the compact island inside the page and back.
  */
 import type { FrontDesign, FrontFile } from '../model/front-file.ts';
+import type { Proof } from '../model/handoff/proof.ts';
 import type { PartsTables } from '../model/parts/tables.ts';
 import type { Rail } from '../model/rail/rail.ts';
 
@@ -88,6 +89,8 @@ export interface PageData {
   readonly notCovered: readonly string[];
   /** Ids of front designs that the sheet named as existing ones. */
   readonly incumbents?: readonly string[];
+  /** Circuit simulations of designs, by id; absent where none were made. */
+  readonly proofs?: readonly Proof[];
 }
 
 /** Texts that the build leaves beside the compiled code and the runner reads from there. */

@@ -1,7 +1,6 @@
 /** How a proof is laid out in the terminal. */
-import { formatQuantity } from '../../model/index.ts';
+import { formatQuantity, type Proof } from '../../model/index.ts';
 import { percent } from '../progress/figures.ts';
-import type { Proof } from '../simulate/proof.ts';
 import type { Paint } from '../terminal/colour.ts';
 import { table } from '../terminal/table.ts';
 

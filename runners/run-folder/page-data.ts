@@ -6,6 +6,7 @@ import { type Inputs, problemOf, take } from '../inputs.ts';
 import { rowsOf } from '../sweep/grid.ts';
 import { type Found, readFound } from './found.ts';
 import { readFront } from './front.ts';
+import { readProofs } from './proofs.ts';
 import { type RunRecord, readRecord } from './record.ts';
 import { readSnapshot } from './snapshot.ts';
 
@@ -33,6 +34,8 @@ export function gatherPage(folder: string): PageData {
     ),
     cautions: explanation.cautions,
     notCovered: explanation.notCovered,
+    incumbents: problem.seeds.map((genes) => problem.id(genes)),
+    proofs: readProofs(folder),
   };
 }
 

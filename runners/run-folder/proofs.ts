@@ -1,8 +1,8 @@
 /** Proofs kept in a run folder: `proof-<id>.json`, written whole, read by the page. */
 import { readdirSync } from 'node:fs';
 import { join } from 'node:path';
+import type { Proof } from '../../model/index.ts';
 import { reasonOf, refusal } from '../errors.ts';
-import type { Proof } from '../simulate/proof.ts';
 import { readText, writeWhole } from './files.ts';
 
 /** Writes `proof` into a run folder. Throws the refusal `file-unwritable`. */

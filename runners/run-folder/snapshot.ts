@@ -1,9 +1,9 @@
 /** The snapshot of sheet and parts that a run keeps, so that it can be resumed, shown and merged whatever became of the originals. */
 import { mkdirSync } from 'node:fs';
 import { basename, join } from 'node:path';
-import { BUILT_IN_TABLES, canonicalParts, canonicalRail } from '../../model/index.ts';
+import { BUILT_IN_TABLES, canonicalParts, canonicalRail, readRail } from '../../model/index.ts';
 import { refusal } from '../errors.ts';
-import { type Inputs, type InputTexts, readInputs, type TableText } from '../inputs.ts';
+import { type Inputs, type InputTexts, type NamedText, readInputs, type TableText } from '../inputs.ts';
 import { readText, writeWhole } from './files.ts';
 import { RUN_FILES } from './folder.ts';
 import { hashOf } from './hashes.ts';
@@ -28,7 +28,30 @@ export function writeSnapshot(folder: string, texts: InputTexts): StoredTables {
   for (const [i, { stored }] of tables.entries()) {
     writeWhole(join(folder, RUN_FILES.parts, stored), texts.tables[i]?.text ?? '');
   }
+  writeIncumbents(folder, texts);
   return tables;
+}
+
+/** Folder of the designs that the sheet names as existing ones. */
+const INCUMBENTS = 'incumbents';
+
+function writeIncumbents(folder: string, texts: InputTexts): void {
+  if (texts.incumbents === undefined) return;
+  mkdirSync(join(folder, INCUMBENTS), { recursive: true });
+  for (const [i, { text }] of texts.incumbents.entries()) writeWhole(incumbentPath(folder, i), text);
+}
+
+/** The snapshot's incumbents: as many as the sheet names. */
+function readIncumbents(folder: string, rail: NamedText): Pick<InputTexts, 'incumbents'> {
+  const read = readRail(rail.text, rail.file);
+  const names = read.ok ? (read.value.incumbents ?? []) : [];
+  if (names.length === 0) return {};
+  const what = "a design of the run's snapshot";
+  return { incumbents: names.map((file, i) => ({ file, text: readText(incumbentPath(folder, i), what) })) };
+}
+
+function incumbentPath(folder: string, i: number): string {
+  return join(folder, INCUMBENTS, `${String(i + 1).padStart(2, '0')}.txt`);
 }
 
 /** Reads a run's snapshot. Throws refusals where it cannot be read. */
@@ -40,7 +63,7 @@ export function readSnapshot(folder: string, record: RunRecord): Inputs {
     if (known === undefined) throw refusal('run-damaged', { folder, file: 'run.json', reason: `no parts are ${kind}` });
     return { kind: known.kind, file, text };
   });
-  return readInputs({ rail, tables });
+  return readInputs({ rail, tables, ...readIncumbents(folder, rail) });
 }
 
 /** Hashes of the canonical sheet and parts. */
