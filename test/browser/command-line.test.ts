@@ -6,6 +6,7 @@ import { join } from 'node:path';
 import { fileURLToPath, pathToFileURL } from 'node:url';
 import type { Page } from 'playwright-core';
 import { afterAll, describe, expect, test } from 'vitest';
+import { lacking } from '../support/needs.ts';
 import { launchAll, openTab, textOf } from './browser.ts';
 
 const ROOT = fileURLToPath(new URL('../..', import.meta.url));
@@ -27,7 +28,10 @@ afterAll(async () => {
   rmSync(folder, { recursive: true, force: true });
 });
 
-if (started.length === 0) test.skip(`no browser starts here: ${reasons.join('; ')}`, () => {});
+const isHere = started.length > 0 || lacking('a browser', reasons.join('; '));
+test.runIf(isHere)('a browser starts here', () => {
+  expect(started[0]?.browser.isConnected()).toBe(true);
+});
 
 async function taken(page: Page, name: string): Promise<string> {
   const coming = page.waitForEvent('download');

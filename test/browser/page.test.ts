@@ -5,6 +5,7 @@ import { afterAll, describe, expect, test } from 'vitest';
 import { createRailProblem, frontCsv, frontFile, writeSpec } from '../../model/index.ts';
 import { pack } from '../../viz/pack.ts';
 import { recordOf } from '../../viz/scene.ts';
+import { lacking } from '../support/needs.ts';
 import { launchAll, openTab, textOf } from './browser.ts';
 import { bundle, pagesFolder, realPage } from './built.ts';
 import { type Probe, probe } from './probe.ts';
@@ -22,7 +23,11 @@ afterAll(async () => {
   folder.remove();
 });
 
-for (const reason of reasons) test.skip(`not tried in every browser: ${reason}`, () => {});
+for (const reason of reasons) process.stderr.write(`not tried in every browser: ${reason}\n`);
+const isHere = started.length > 0 || lacking('a browser', reasons.join('; '));
+test.runIf(isHere)('a browser starts here', () => {
+  expect(started[0]?.browser.isConnected()).toBe(true);
+});
 
 const openId = (page: Page) => textOf(page, '#open-head .id');
 const address_ = (page: Page) => page.evaluate(() => location.hash);

@@ -5,6 +5,7 @@ import { createRequire } from 'node:module';
 import type { Page } from 'playwright-core';
 import { afterAll, describe, expect, test } from 'vitest';
 import type { PageData } from '../../viz/data.ts';
+import { lacking } from '../support/needs.ts';
 import { fixture } from '../viz/fixture.ts';
 import { launchAll, openTab, textOf } from './browser.ts';
 import { inventedPage, pagesFolder } from './built.ts';
@@ -25,7 +26,10 @@ afterAll(async () => {
   folder.remove();
 });
 
-if (started.length === 0) test.skip(`no browser starts here: ${reasons.join('; ')}`, () => {});
+const isHere = started.length > 0 || lacking('a browser', reasons.join('; '));
+test.runIf(isHere)('a browser starts here', () => {
+  expect(started[0]?.browser.isConnected()).toBe(true);
+});
 
 /** What axe finds at WCAG 2.2 A and AA. */
 async function violations(page: Page): Promise<string[]> {

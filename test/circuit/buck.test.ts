@@ -4,9 +4,10 @@
  * ripple, not switching or core loss.
  */
 import { describe, expect, it } from 'vitest';
+import { needs } from '../support/needs.ts';
 import { buckCases } from './buck-cases.ts';
 import { rowsOf } from './case.ts';
-import { hasNative, runNative, runWasm } from './simulator.ts';
+import { runNative, runWasm } from './simulator.ts';
 
 describe.each(buckCases())('$name', (circuit) => {
   it('mean output within 1 %, ripple within 5 %, rms within 2 %, conduction loss within 3 %', async () => {
@@ -16,7 +17,7 @@ describe.each(buckCases())('$name', (circuit) => {
   });
 });
 
-describe.runIf(hasNative())("the system's own simulator", () => {
+describe.runIf(needs('ngspice'))("the system's own simulator", () => {
   it.each(buckCases())('agrees: $name', (circuit) => {
     const rows = rowsOf(circuit, runNative(circuit.netlist));
     expect(rows.filter((row) => !row.passed)).toEqual([]);

@@ -53,11 +53,6 @@ function withPatience<T>(work: Promise<T>): Promise<T> {
   });
 }
 
-/** Whether the system has its own simulator. */
-export function hasNative(): boolean {
-  return existsSync(NATIVE);
-}
-
 /** Runs `netlist` in the system's simulator. */
 export function runNative(netlist: string): Run {
   const folder = mkdtempSync(join(tmpdir(), 'circuit-'));
