@@ -32,6 +32,7 @@ export * from './quantity/index.ts';
 export * from './rail/index.ts';
 export type { Architecture, ObjectiveName, Rail } from './rail/rail.ts';
 export { ARCHITECTURES, OBJECTIVES } from './rail/rail.ts';
+export { type Representative, representativesOf } from './representatives.ts';
 export { readSpec, recordOfSpec, SPEC_SCHEMA, type Spec } from './spec.ts';
 export { CAUSES, drawSamples, type Spread, spreadOf, summarise } from './spread/index.ts';
 export { type Change, type Distance, type Standing, standingOf } from './standing.ts';

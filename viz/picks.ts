@@ -1,44 +1,19 @@
-/** A few designs worth a first look: the best in each objective and the most balanced one. */
+/** A few designs worth a first look, as the model chooses them, with labels for buttons: the balanced one first. */
+import { representativesOf } from '../model/representatives.ts';
 import type { Dataset } from './dataset.ts';
-import { spoken } from './labels.ts';
 
 export interface Pick {
   readonly label: string;
   readonly index: number;
 }
 
-const BEST: Readonly<Record<string, string>> = {
-  loss: 'Coolest',
-  inefficiency: 'Most efficient',
-  volume: 'Smallest',
-  cost: 'Cheapest',
-  'board-area': 'Least board',
-  mass: 'Lightest',
-  'full-load-loss': 'Coolest at full load',
-};
-
 /** The balanced design first, then the best in each objective, among `among`. */
 export function picksOf(dataset: Dataset, among: readonly number[]): readonly Pick[] {
-  if (among.length === 0) return [];
-  const best = dataset.objectives.map((objective) => ({
-    label: BEST[objective.name] ?? `Least ${spoken(objective.name)}`,
-    index: least(among, (i) => objective.values[i] ?? Number.POSITIVE_INFINITY),
+  const names = dataset.objectives.map(({ name }) => name);
+  const values = among.map((index) => dataset.objectives.map((objective) => objective.values[index] ?? 0));
+  const chosen = representativesOf(names, values).map(({ title, index }) => ({
+    label: `${title.charAt(0).toUpperCase()}${title.slice(1)}`,
+    index: among[index] ?? 0,
   }));
-  return [{ label: 'Balanced', index: balanced(dataset, among) }, ...best];
-}
-
-/** The design nearest to the corner of all best values, each objective scaled to its spread (least squares). */
-function balanced(dataset: Dataset, among: readonly number[]): number {
-  const spans = dataset.objectives.map((objective) => {
-    const values = among.map((i) => objective.values[i] ?? 0);
-    const low = Math.min(...values);
-    return { low, span: Math.max(...values) - low || 1 };
-  });
-  return least(among, (i) =>
-    spans.reduce((sum, { low, span }, k) => sum + (((dataset.objectives[k]?.values[i] ?? 0) - low) / span) ** 2, 0),
-  );
-}
-
-function least(among: readonly number[], value: (index: number) => number): number {
-  return among.reduce((best, i) => (value(i) < value(best) ? i : best), among[0] ?? 0);
+  return [...chosen.slice(-1), ...chosen.slice(0, -1)];
 }

@@ -59,11 +59,11 @@ describe('narrowing', () => {
 describe('first picks', () => {
   const all = dataset.designs.map((_, i) => i);
 
-  test('each is the best of all in its objective', () => {
+  test('each is within one per cent of the best in its objective', () => {
     const [, ...best] = picksOf(dataset, all);
     best.forEach((pick, k) => {
       const values = dataset.objectives[k]?.values ?? new Float64Array();
-      expect(values[pick.index]).toBe(Math.min(...values));
+      expect(values[pick.index]).toBeLessThanOrEqual(1.01 * Math.min(...values));
     });
   });
 
