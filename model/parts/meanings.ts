@@ -86,7 +86,7 @@ export const MEANINGS: { readonly [K in PartKind]: Meanings<RowOf<K>> } = {
   ceramics: {
     name: NAME,
     dielectric: 'class code, such as X7R or C0G',
-    capacitance: 'nominal',
+    capacitance: 'nominal value, at no bias and 25 °C',
     tolerance: '10 % means within ±10 %',
     voltageRating: 'rated voltage',
     halvingVoltage: 'bias V½ at which half the capacitance is left: C(V) = C·a/(1 + (V/V½)^p)',
@@ -102,7 +102,7 @@ export const MEANINGS: { readonly [K in PartKind]: Meanings<RowOf<K>> } = {
   bulks: {
     name: NAME,
     technology: 'polymer, wet electrolytic or film',
-    capacitance: 'nominal',
+    capacitance: 'nominal value, at no bias and 25 °C',
     tolerance: '20 % means within ±20 %',
     voltageRating: 'rated voltage',
     seriesResistance: 'at 100 kHz and 20 °C, end of life',

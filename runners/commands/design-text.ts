@@ -1,18 +1,28 @@
 /** How one design is laid out in the terminal. */
-import { type Assessment, formatQuantity, type LossItem, type PointReport, type Rail } from '../../model/index.ts';
+import {
+  type Assessment,
+  formatQuantity,
+  type LossItem,
+  type PointReport,
+  type Rail,
+  type RailProblem,
+} from '../../model/index.ts';
 import { percent } from '../progress/figures.ts';
 import type { Paint } from '../terminal/colour.ts';
 import { table } from '../terminal/table.ts';
 import { plain } from '../terminal/text.ts';
+import { stockLines } from './stock-text.ts';
 
-/** The text, several sections, of what a design is and how it stands. */
-export function designText(assessment: Assessment, rail: Rail, paint: Paint): string {
+/** The text, several sections, of what a design of `problem` is and how it stands. */
+export function designText(assessment: Assessment, problem: RailProblem, paint: Paint): string {
+  const { rail } = problem;
   const verdict = assessment.feasible ? paint('keeps every limit', 'good') : paint('breaks a limit', 'bad');
   const sections = [
     [`${paint(assessment.id, 'bold')}  ${plain(assessment.family)} for ${plain(rail.name)}: ${verdict}`],
     objectiveLines(assessment),
     valueLines(assessment),
     section('Parts', partLines(assessment, rail)),
+    section('Short of stock', stockLines(assessment, problem)),
     section('Where the watts go (mean over the load profile, nominal input)', lossLines(assessment.losses)),
     section('Load points', pointLines(assessment.points)),
     section('Temperatures (hottest point)', temperatureLines(assessment.points)),

@@ -29,5 +29,9 @@ async function runShow(folder: string, id: string, options: ShowOptions): Promis
   }
   const { designText } = await import('./design-text.ts');
   const { painter } = await import('../terminal/colour.ts');
-  sayPainted(designText(assessment, problem.rail, painter(process.stdout)));
+  sayPainted(designText(assessment, problem, painter(process.stdout)));
+  const { pricesIn } = await import('../run-folder/prices.ts');
+  const { pricesText } = await import('./prices-text.ts');
+  const prices = pricesText(pricesIn(folder));
+  if (prices !== '') sayPainted(`\n${prices}`);
 }
