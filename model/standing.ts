@@ -40,8 +40,11 @@ export interface Standing {
 export function standingOf(problem: RailProblem, genes: Float64Array, front: readonly Placed[]): Standing {
   const own = judged(problem, genes);
   const change = cheapestChange(problem, genes, own);
+  const id = problem.id(genes);
   return {
-    dominatedBy: front.filter(({ objectives }) => dominates(objectives, own.objectives)).map(({ id }) => id),
+    dominatedBy: front
+      .filter((other) => other.id !== id && dominates(other.objectives, own.objectives))
+      .map((other) => other.id),
     distances: problem.objectives.map(({ name, unit }, k) => {
       const rivals = front.filter(({ objectives }) =>
         objectives.every((value, j) => j === k || value <= own.objectives[j]),
