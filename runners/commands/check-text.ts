@@ -1,5 +1,5 @@
 /** How `check` lays out what a sheet means. */
-import type { Rail, RailExplanation } from '../../model/index.ts';
+import { formatQuantity, type Rail, type RailExplanation } from '../../model/index.ts';
 import { rounded } from '../progress/figures.ts';
 import { painter } from '../terminal/colour.ts';
 import { sayPainted } from '../terminal/output.ts';
@@ -25,7 +25,7 @@ export function showExplanation(rail: Rail, explanation: RailExplanation): void 
     'Architectures',
     ...architectures.map((one) => architectureLine(one)),
     '',
-    `Baseline: a series regulator would reach ${(100 * baseline.efficiency).toFixed(1)} % and turn ${baseline.loss.toPrecision(3)} W into heat.`,
+    `Baseline: a series regulator would reach ${(100 * baseline.efficiency).toFixed(1)} % and turn ${formatQuantity(baseline.loss, 'W')} into heat.`,
     `Space: about ${sizeText(spaceSize)} designs.`,
     '',
     ...listed('Cautions', cautions),

@@ -7,6 +7,7 @@ import {
   type Rail,
   type RailProblem,
 } from '../../model/index.ts';
+import { spoken } from '../../viz/labels.ts';
 import { percent } from '../progress/figures.ts';
 import type { Paint } from '../terminal/colour.ts';
 import { table } from '../terminal/table.ts';
@@ -26,7 +27,7 @@ export function designText(assessment: Assessment, problem: RailProblem, paint: 
     section('Where the watts go (mean over the load profile, nominal input)', lossLines(assessment.losses)),
     section('Load points', pointLines(assessment.points)),
     section('Temperatures (hottest point)', temperatureLines(assessment.points)),
-    section('Limits, tightest first', limitLines(assessment, paint)),
+    section('Limits, tightest first', limitLines(assessment, problem, paint)),
     section(
       'Cautions',
       assessment.cautions.map((text) => `  - ${plain(text)}`),
@@ -43,7 +44,7 @@ function section(head: string, lines: readonly string[]): string[] {
 }
 
 function objectiveLines(assessment: Assessment): string[] {
-  const rows = assessment.objectives.map(({ name, value, unit }) => [name, formatQuantity(value, unit)]);
+  const rows = assessment.objectives.map(({ name, value, unit }) => [spoken(name), formatQuantity(value, unit)]);
   return table([{ head: '' }, { head: '', right: true }], rows);
 }
 
@@ -51,7 +52,7 @@ const UNITS: Readonly<Record<string, string>> = { frequency: 'Hz', inductance: '
 
 function valueLines(assessment: Assessment): string[] {
   const rows = Object.entries(assessment.design.genes).map(([name, value]) => [
-    name,
+    spoken(name),
     UNITS[name] === undefined ? String(value) : formatQuantity(value, UNITS[name]),
   ]);
   return section('Values', table([{ head: '' }, { head: '', right: true }], rows));
@@ -59,7 +60,7 @@ function valueLines(assessment: Assessment): string[] {
 
 function partLines(assessment: Assessment, rail: Rail): string[] {
   const rows = assessment.parts.map((part) => [
-    part.slot,
+    spoken(part.slot),
     `${part.count} ×`,
     part.name,
     formatQuantity(part.volume, 'm³'),
@@ -76,8 +77,8 @@ function lossLines(losses: readonly LossItem[]): string[] {
   const total = losses.reduce((sum, item) => sum + item.watts, 0);
   const sorted = losses.filter((item) => item.watts > 0).sort((a, b) => b.watts - a.watts);
   const rows = sorted.map((item) => [
-    item.part,
-    item.effect,
+    spoken(item.part),
+    spoken(item.effect),
     formatQuantity(item.watts, 'W'),
     percent(item.watts / total),
     '▪'.repeat(Math.round((20 * item.watts) / total)),
@@ -115,18 +116,21 @@ function temperatureLines(points: readonly PointReport[]): string[] {
       hottest.set(slot, Math.max(value, hottest.get(slot) ?? 0));
     }
   }
-  const rows = [...hottest].sort((a, b) => b[1] - a[1]).map(([slot, value]) => [slot, formatQuantity(value, 'K')]);
+  const rows = [...hottest]
+    .sort((a, b) => b[1] - a[1])
+    .map(([slot, value]) => [spoken(slot), formatQuantity(value, 'K')]);
   return table([{ head: '' }, { head: '', right: true }], rows);
 }
 
-function limitLines(assessment: Assessment, paint: Paint): string[] {
+function limitLines(assessment: Assessment, problem: RailProblem, paint: Paint): string[] {
+  const senses = new Map(problem.limitDefinitions.map(({ name, sense }) => [name, sense]));
   const relative = (limit: Assessment['limits'][number]): number => limit.margin / (Math.abs(limit.allowed) || 1);
   const sorted = [...assessment.limits].sort((a, b) => b.violation - a.violation || relative(a) - relative(b));
   const rows = sorted.map((limit) => [
     limit.violation > 0 ? 'broken' : 'holds',
-    limit.name,
-    formatQuantity(limit.value, limit.unit),
-    formatQuantity(limit.allowed, limit.unit),
+    spoken(limit.name),
+    figure(limit.name, limit.value, limit.unit),
+    `at ${senses.get(limit.name) ?? 'most'} ${figure(limit.name, limit.allowed, limit.unit)}`,
     limit.violation > 0 ? `misses by ${percent(limit.violation)}` : '',
     limit.corner === undefined
       ? ''
@@ -135,4 +139,9 @@ function limitLines(assessment: Assessment, paint: Paint): string[] {
   const right = (head: string): { head: string; right: boolean } => ({ head, right: true });
   const lines = table([{ head: '' }, { head: '' }, right('has'), right('allowed'), { head: '' }, { head: '' }], rows);
   return lines.map((line) => (line.startsWith('  broken') ? paint(line, 'bad') : line));
+}
+
+/** A limit's figure: efficiencies are shares, which people write in per cent. */
+function figure(name: string, value: number, unit: string): string {
+  return name.startsWith('efficiency@') ? percent(value) : formatQuantity(value, unit);
 }

@@ -1,6 +1,7 @@
 /** When nothing keeps every limit: which limits stood in the way, by how much, and the designs that came nearest. */
 import type { RailProblem } from '../../model/index.ts';
 import type { Designs } from '../../optimizer/index.ts';
+import { spoken } from '../../viz/labels.ts';
 import { percent } from '../progress/figures.ts';
 import { table } from '../terminal/table.ts';
 
@@ -39,11 +40,14 @@ function limitsInTheWay(problem: RailProblem, designs: Designs, near: readonly n
   return worst
     .filter((limit) => limit.count > 0)
     .sort((a, b) => b.count - a.count || b.least - a.least)
-    .map(({ name, count, least }) => [name, `broken by ${count} of ${near.length}, by ${percent(least)} or more`]);
+    .map(({ name, count, least }) => [
+      spoken(name),
+      `broken by ${count} of ${near.length}, by ${percent(least)} or more`,
+    ]);
 }
 
 function describe(problem: RailProblem, genes: Float64Array): string[] {
   const { id, family, limits } = problem.assess(genes);
   const broken = limits.filter((limit) => limit.violation > 0).sort((a, b) => b.violation - a.violation);
-  return [id, family, broken.map((limit) => `${limit.name} by ${percent(limit.violation)}`).join(', ')];
+  return [id, family, broken.map((limit) => `${spoken(limit.name)} by ${percent(limit.violation)}`).join(', ')];
 }
