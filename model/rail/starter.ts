@@ -5,9 +5,12 @@ export function starterSheet(): string {
   return STARTER;
 }
 
-const STARTER = `# A rail sheet: what your step-down rail must do. Change the numbers, then look at what they mean:
+const STARTER = `# A rail sheet: what your step-down rail must do. Change the numbers to yours; what you do not know yet may stay as it is.
+# Then, in this order:
 #
-#   chopfront check rail.yaml
+#   chopfront check rail.yaml                       what the numbers mean, and what is wrong with them
+#   chopfront sweep rail.yaml --out runs/first      search; Ctrl-C saves, --resume goes on
+#   chopfront show runs/first DESIGN                one design of runs/first/page.html in the terminal
 #
 # Write quantities with their units: 48 V, 500 kHz, 4.7 µH (or uH), 10 mV, 55 °C, 85 %, 2 mΩ (or mohm), 25 cm² (or cm2).
 # Lines that start with # are comments. A key that is a comment here shows its default, or a limit that does not bind.
@@ -85,7 +88,10 @@ search:
 # Two to four of: loss, inefficiency, volume, cost, board-area, mass, full-load-loss. All are made small.
 objectives: [loss, volume, cost]
 
-# Your own tables stand beside the built-in ones, or instead of them.
+# Your own tables stand beside the built-in ones, or instead of them. To begin one, and to check it:
+#   chopfront parts template switches --out my-switches.csv
+#   chopfront parts check my-switches.csv
+# Its prices are in the currency above, with a column for each price break; a stock column is looked at in the end.
 # parts:
 #   tables: [built-in, my-switches.csv]
 #   bar: []              # names that must not be used

@@ -180,15 +180,15 @@ describe('many mistakes give all their messages at once, in the order of the tex
       .replace('share: 20 %', 'share: 10 %')
       .replace('[loss, volume, cost]', '[loss]');
     expect(complaints(text).map((line) => line.replace(/; allowed.*/, ''))).toEqual([
-      'rail.yaml:8:1: rail: found nothing',
-      'rail.yaml:8:1: rial: found the unknown key rial',
-      'rail.yaml:13:18: input.voltage.min: found 40 V',
-      'rail.yaml:21:12: output.current: found 6 V, which is a voltage',
-      'rail.yaml:22:11: output.ripple: found 30 without a unit',
-      'rail.yaml:32:3: load-profile: found shares that sum to 90 %',
-      'rail.yaml:36:13: light-load: found diode-emulate',
-      'rail.yaml:39:3: environment.ambeint: found the unknown key ambeint',
-      'rail.yaml:79:13: objectives: found one entry',
+      'rail.yaml:11:1: rail: found nothing',
+      'rail.yaml:11:1: rial: found the unknown key rial',
+      'rail.yaml:16:18: input.voltage.min: found 40 V',
+      'rail.yaml:24:12: output.current: found 6 V, which is a voltage',
+      'rail.yaml:25:11: output.ripple: found 30 without a unit',
+      'rail.yaml:35:3: load-profile: found shares that sum to 90 %',
+      'rail.yaml:39:13: light-load: found diode-emulate',
+      'rail.yaml:42:3: environment.ambeint: found the unknown key ambeint',
+      'rail.yaml:82:13: objectives: found one entry',
     ]);
   });
 
