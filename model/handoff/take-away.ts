@@ -3,7 +3,7 @@ import type { RailProblem } from '../problem.ts';
 import { writeSpec } from '../write-spec.ts';
 import { markdown } from './document.ts';
 import { magneticsSheet } from './magnetics.ts';
-import { stageNetlist } from './netlist/index.ts';
+import { stageNetlist } from './netlist/stage-netlist.ts';
 import { designNote, type HandoffContext } from './note.ts';
 import { partsCsv } from './parts-csv.ts';
 import { fullLoad, solveAt } from './solved-point.ts';

@@ -14,7 +14,7 @@ import { TABLES } from './tables.ts';
 import { TRANSFORMER } from './transformer.ts';
 import { WINDINGS } from './windings.ts';
 
-export { type CaseGroup, checkCase, type Mark, type ReferenceCase, type Verdict } from './case.ts';
+export { checkCase } from './case.ts';
 
 export const CASES: readonly CaseGroup[] = [
   ...BUCK,

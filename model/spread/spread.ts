@@ -2,8 +2,6 @@
 import type { RailProblem } from '../problem.ts';
 import { CAUSES, drawSamples, type SampleLayout, sampleLayout } from './sample.ts';
 
-export { CAUSES, drawSamples } from './sample.ts';
-
 /** A share with the interval in which the true one lies, 95 times in 100. */
 export interface Yield {
   readonly name: string;
