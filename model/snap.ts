@@ -55,7 +55,7 @@ export function isPackaged(genes: Float64Array, list: readonly Gene[], architect
 }
 
 const DISCRETE_GENES = [GENE.highSwitch, GENE.highParallel, GENE.lowSwitch, GENE.lowParallel];
-const LEG_GENES = [GENE.legBuild, GENE.powerStage];
+const LEG_GENES = [GENE.powerStage];
 const CHOKE_GENES = [GENE.chokeCore, GENE.chokeMaterial, GENE.chokeTurns, GENE.chokeConductor];
 const TRANSFORMER_GENES = [
   GENE.transformerCore,
@@ -66,25 +66,31 @@ const TRANSFORMER_GENES = [
   GENE.secondaryConductor,
 ];
 
+/** The one value of a gene that plays no part: the middle of its range, so that a design in which it does begins at no extreme. */
+function middle(gene: Gene): number {
+  return Math.floor(0.5 * (gene.low + gene.high));
+}
+
 function reset(genes: Float64Array, list: readonly Gene[], places: readonly number[]): void {
-  for (const place of places) genes[place] = list[place].low;
+  for (const place of places) genes[place] = middle(list[place]);
 }
 
 function rest(genes: Float64Array, list: readonly Gene[], architecture: Architecture): void {
   if (isPackaged(genes, list, architecture)) reset(genes, list, DISCRETE_GENES);
   else reset(genes, list, LEG_GENES);
+  if (architecture !== 'buck-synchronous') genes[GENE.legBuild] = 0;
   if (usesLowSwitch(architecture)) {
-    genes[GENE.diode] = list[GENE.diode].low;
+    genes[GENE.diode] = middle(list[GENE.diode]);
   } else {
-    genes[GENE.lowSwitch] = list[GENE.lowSwitch].low;
+    genes[GENE.lowSwitch] = middle(list[GENE.lowSwitch]);
     genes[GENE.lowParallel] = list[GENE.lowParallel].low;
   }
-  if (isWound(genes, list)) genes[GENE.inductorSeries] = list[GENE.inductorSeries].low;
+  if (isWound(genes, list)) genes[GENE.inductorSeries] = middle(list[GENE.inductorSeries]);
   else reset(genes, list, CHOKE_GENES);
   if (!hasTransformer(architecture)) reset(genes, list, TRANSFORMER_GENES);
   if (!isFullBridge(architecture)) genes[GENE.bridgeControl] = 0;
-  if (genes[GENE.outputBulkCount] === 0) genes[GENE.outputBulk] = list[GENE.outputBulk].low;
-  if (genes[GENE.inputBulkCount] === 0) genes[GENE.inputBulk] = list[GENE.inputBulk].low;
+  if (genes[GENE.outputBulkCount] === 0) genes[GENE.outputBulk] = middle(list[GENE.outputBulk]);
+  if (genes[GENE.inputBulkCount] === 0) genes[GENE.inputBulk] = middle(list[GENE.inputBulk]);
 }
 
 function clampGene(value: number, gene: Gene): number {

@@ -44,6 +44,8 @@ export interface Nursery {
   readonly distance: Float64Array;
   readonly range: Float64Array;
   readonly gene: Float64Array;
+  /** A child's genes before it was snapped. */
+  readonly drawn: Float64Array;
   readonly words: Uint32Array;
   readonly hash: Uint32Array;
 }
@@ -57,6 +59,7 @@ export function createNursery(world: World): Nursery {
     distance: new Float64Array(NEAREST),
     range: new Float64Array(world.m),
     gene,
+    drawn: new Float64Array(world.n),
     words: new Uint32Array(gene.buffer),
     hash: new Uint32Array(2),
   };
@@ -163,16 +166,30 @@ function measureStride(world: World, parent: number, row: number): void {
 /** Snaps the child in `coordinates` into a design; false when it was seen before. */
 function finish(world: World, nursery: Nursery, row: number, family: number): boolean {
   const { n, space, genes, coordinates, problem } = world;
-  const { gene } = nursery;
+  const { gene, drawn } = nursery;
   toGenes(space, coordinates, row * n, gene, 0);
   if (family >= 0) problem.families.confine(gene, family);
+  drawn.set(gene);
   problem.snap(gene);
   hashRow(nursery.words, nursery.hash);
   if (remember(world.seen, nursery.hash)) return false;
   genes.set(gene, row * n);
   toCoordinates(space, genes, row * n, coordinates, row * n);
+  keepHidden(world, nursery, row);
   world.family[row] = problem.families.of(gene);
   return true;
+}
+
+/**
+ * Genes that play no part in a design are snapped to one value; the row's coordinates keep what they were, so that a child in which they
+ * do play a part begins where the family left off, not at that one value.
+ */
+function keepHidden(world: World, nursery: Nursery, row: number): void {
+  const { n, space, coordinates } = world;
+  const { gene, drawn } = nursery;
+  for (let g = 0; g < n; g++) {
+    if (space.kind[g] !== LINE && Math.abs(drawn[g] - gene[g]) > 0.5) coordinates[row * n + g] = drawn[g];
+  }
 }
 
 function place(world: World, nursery: Nursery, seed: Float64Array, made: number): boolean {

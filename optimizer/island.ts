@@ -39,6 +39,8 @@ export interface Island {
   /** Families it tries in the first epochs, all when empty. */
   readonly families: Int32Array;
   readonly population: Designs;
+  /** Coordinates of the population, genes that play no part included; empty before the first epoch. */
+  readonly coordinates: Float64Array;
   /** ε-grid archive of feasible non-dominated designs, packed. */
   readonly archive: Designs;
   readonly nearMisses: NearMissDesigns;
@@ -87,6 +89,7 @@ function startIsland(problem: Problem, plan: Plan, index: number): Island {
     random: seedRandom(plan.seed, plan.shard, index),
     families: ownFamilies(families, plan.islands, index),
     population: none,
+    coordinates: new Float64Array(0),
     archive: none,
     nearMisses: { ...none, limit: new Int32Array(0) },
     seen: new Uint32Array(SEEN_SLOTS),

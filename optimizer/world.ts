@@ -183,6 +183,7 @@ export function openWorld(problem: Problem, island: Island, guests: number, watc
     stalled: island.stalled,
   };
   addRows(world, island.population);
+  world.coordinates.set(island.coordinates);
   for (let c = 0; c < m; c++) findChampion(world, c);
   return world;
 }
@@ -229,6 +230,7 @@ export function closeWorld(world: World): Island {
     epoch: island.epoch + 1,
     random: world.random.state(),
     families: island.families,
+    coordinates: world.coordinates.slice(0, count * n),
     population: {
       count,
       genes: world.genes.slice(0, count * n),
