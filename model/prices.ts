@@ -114,7 +114,7 @@ function least(designs: readonly Placed[], k: number): number {
 }
 
 /** Largest gain of a line as a fraction; 0 where it has none. */
-export function largest(line: RequirementPrice | undefined): number {
+function largest(line: RequirementPrice | undefined): number {
   return Math.max(0, ...(line?.gains ?? []).map(gainOf));
 }
 

@@ -15,7 +15,7 @@ import type { SolvedPoint } from './solved-point.ts';
 /** Phase margin asked for, rad: 55°, between the usual 45° and 60° (common practice, no source). */
 const MARGIN = (55 / 180) * Math.PI;
 /** Input resistor that the parts are given for, Ω (common practice, no source). */
-export const INPUT_RESISTOR = 10e3;
+const INPUT_RESISTOR = 10e3;
 /** Part of the wanted crossover at which the search for a lower one ends. */
 const LEAST_SHARE = 0.2;
 

@@ -26,9 +26,9 @@ export const CAUSES = [
 ] as const;
 
 /** Kelvin below the sheet's ambient from which samples are drawn evenly: a room's season (common practice, no source). */
-export const AMBIENT_SPAN = 30;
+const AMBIENT_SPAN = 30;
 /** Deviations in a stated tolerance: it is taken as three, and nothing is beyond it (common practice, no source). */
-export const SIGMAS = 3;
+const SIGMAS = 3;
 /** Most chokes of a design, and hours of the oldest service. */
 const CHOKES = 16;
 const OLDEST = 1e5;

@@ -38,7 +38,7 @@ async function runHandoff(folder: string, id: string, options: HandoffOptions): 
 }
 
 /** Writes `files` into `out`, each beside its name and renamed. Throws the refusals `file-exists` and `file-unwritable`. */
-export async function writeFiles(
+async function writeFiles(
   out: string,
   files: readonly { readonly name: string; readonly text: string }[],
   force: boolean,

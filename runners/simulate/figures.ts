@@ -30,7 +30,7 @@ function readVector(run: Run, name: string, reading: Reading): number {
 const LASTING = 1e-4;
 
 /** Peak to peak of the levels that last. */
-export function swingOf(time: ArrayLike<number>, values: ArrayLike<number>): number {
+function swingOf(time: ArrayLike<number>, values: ArrayLike<number>): number {
   const order = Array.from({ length: values.length }, (_, i) => i).sort((a, b) => at(values, a) - at(values, b));
   const least = LASTING * (at(time, time.length - 1) - at(time, 0));
   return levelFrom(order.reverse(), time, values, least) - levelFrom(order.reverse(), time, values, least);

@@ -11,7 +11,7 @@ import { build, type Plugin } from 'esbuild';
 import { packagePath } from '../../runners/package-path.ts';
 
 /** The reference evaluations: three line × three load points each, with the tolerance corners of the limits. */
-export const REFERENCES = ['two-phase synchronous buck', 'half-bridge with current doubler'] as const;
+const REFERENCES = ['two-phase synchronous buck', 'half-bridge with current doubler'] as const;
 
 /** One reference evaluation's figures. */
 export interface ModelTiming {

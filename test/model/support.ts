@@ -25,7 +25,7 @@ export function need<T>(outcome: Outcome<T>): T {
 const box = { length: 1e-3, width: 1e-3, height: 1e-3, mass: 1e-6, prices: [{ from: 1, price: 0.1 }] };
 
 /** A switch without any loss: what a test does not set costs nothing. */
-export function idealSwitch(over: Partial<Switch> = {}): Switch {
+function idealSwitch(over: Partial<Switch> = {}): Switch {
   return {
     ...box,
     name: 'switch',
@@ -57,7 +57,7 @@ export function idealSwitch(over: Partial<Switch> = {}): Switch {
 }
 
 /** A diode without drop, charge or leakage. */
-export function idealDiode(over: Partial<Diode> = {}): Diode {
+function idealDiode(over: Partial<Diode> = {}): Diode {
   return {
     ...box,
     name: 'diode',
@@ -80,7 +80,7 @@ export function idealDiode(over: Partial<Diode> = {}): Diode {
 }
 
 /** An inductor without loss that never saturates. */
-export function idealInductor(over: Partial<Inductor> = {}): Inductor {
+function idealInductor(over: Partial<Inductor> = {}): Inductor {
   return {
     ...box,
     name: 'choke',
@@ -104,7 +104,7 @@ export function idealInductor(over: Partial<Inductor> = {}): Inductor {
 }
 
 /** A ceramic capacitor that neither bias nor age changes. */
-export function idealCeramic(over: Partial<Ceramic> = {}): Ceramic {
+function idealCeramic(over: Partial<Ceramic> = {}): Ceramic {
   return {
     ...box,
     name: 'ceramic',
@@ -125,7 +125,7 @@ export function idealCeramic(over: Partial<Ceramic> = {}): Ceramic {
 }
 
 /** A controller with ideal drivers and no limits; its gap is one picosecond, for a gap of nothing leaves nothing to divide by. */
-export function idealController(over: Partial<Controller> = {}): Controller {
+function idealController(over: Partial<Controller> = {}): Controller {
   return {
     ...box,
     name: 'controller',

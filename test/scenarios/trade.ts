@@ -4,7 +4,7 @@ import { chooseSubset } from '../../optimizer/index.ts';
 import { balanced, least, type Member, membersOf, type Sweep } from './spaces.ts';
 
 /** Total loss over output power at every usual point of half load or more, the largest of one design. */
-export function worstLossShare(found: Sweep, member: Member): number {
+function worstLossShare(found: Sweep, member: Member): number {
   const points = found.problem.assess(member.genes).points.filter((p) => p.share > 0 && Math.abs(p.load) >= 0.5);
   return Math.max(...points.map((p) => p.loss / Math.abs(p.outputPower)));
 }

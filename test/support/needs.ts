@@ -31,7 +31,7 @@ export function lacking(name: string, reason: string): false {
 }
 
 /** Full path of the first of `names` that is an executable file in PATH or in the system's own folders. */
-export function programPath(...names: string[]): string | undefined {
+function programPath(...names: string[]): string | undefined {
   const folders = [...(process.env.PATH ?? '').split(delimiter), '/usr/bin', '/usr/sbin', '/usr/local/bin'];
   return names.flatMap((name) => folders.map((folder) => join(folder, name))).find(executable);
 }

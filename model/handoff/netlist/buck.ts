@@ -13,7 +13,7 @@ interface Gating {
 }
 
 /** Gates of one phase: before each edge both are off for the gap; the current's sign says which body diode carries it. */
-export function buckGating(point: SolvedPoint): Gating {
+function buckGating(point: SolvedPoint): Gating {
   const { design, state } = point;
   const period = 1 / state.frequency;
   const gap = design.diode === undefined ? design.driver.deadTime : 0;

@@ -147,6 +147,6 @@ function writeChoke(site: PhaseSite, side: string, node: string, current: number
 }
 
 /** The transformer's period as an instant. */
-export function periodOf(times: PulseTimes): Instant {
+function periodOf(times: PulseTimes): Instant {
   return { text: 'tper', value: times.period };
 }

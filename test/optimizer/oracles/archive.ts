@@ -29,7 +29,7 @@ export function plainArchive(
 }
 
 /** Order by objectives, then genes, lexicographically. */
-export function canonical(a: PlainDesign, b: PlainDesign): number {
+function canonical(a: PlainDesign, b: PlainDesign): number {
   return lexicographic(a.objectives, b.objectives) || lexicographic(a.genes, b.genes);
 }
 
