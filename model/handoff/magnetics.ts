@@ -1,6 +1,5 @@
 /** `magnetics.md`: the order sheet of every wound part, and of a stocked choke what it must carry. */
 import type { Assessment, LossItem } from '../assessment.ts';
-import type { Design } from '../design.ts';
 import type { Conductor } from '../parts/conductor.ts';
 import type { RailProblem } from '../problem.ts';
 import { formatDifference, formatQuantity } from '../quantity/index.ts';
@@ -145,9 +144,4 @@ function lossSection(title: string, assessment: Assessment, part: string, pieces
 
 function percent(value: number): string {
   return `${(100 * value).toFixed(0)} %`;
-}
-
-/** Whether a design has a part that is wound to order. */
-export function hasWoundPart(design: Design): boolean {
-  return design.stage.form !== undefined || design.chokeMaterial !== undefined;
 }

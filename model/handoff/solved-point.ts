@@ -6,7 +6,6 @@ import type { Bank } from '../capacitors/index.ts';
 import type { Design } from '../design.ts';
 import { Evaluator, judgeDesign, solveActive } from '../evaluate.ts';
 import type { Flavour } from '../flavour.ts';
-import { LOSS_SLOTS } from '../ledger.ts';
 import type { PlannedPoint } from '../plan.ts';
 import type { PointSolver } from '../point.ts';
 import type { RailProblem } from '../problem.ts';
@@ -58,10 +57,4 @@ export function solveAt(
   const { design, solver } = e;
   const { output, input } = flavour;
   return { rail: e.rail, design, planned, state: solver.state, solver, flavour, output, input };
-}
-
-/** W of one ledger slot at the solved point, all phases. */
-export function wattsOf(point: SolvedPoint, part: string, effect: string): number {
-  const place = LOSS_SLOTS.findIndex(([p, e]) => p === part && e === effect);
-  return place < 0 ? 0 : point.solver.ledger[place];
 }
