@@ -3,6 +3,7 @@ import { z } from 'zod';
 import type { EpochTimes } from '../engines/protocol.ts';
 import { refusal } from '../errors.ts';
 import { type Checkpoint, readCheckpoint } from '../run-folder/checkpoint.ts';
+import { issueText } from '../run-folder/issue.ts';
 import type { Fault } from '../run-folder/record.ts';
 import type { History } from './history.ts';
 import { createRing, type IslandState, islandsOf, type Ring, settledFaults } from './ring.ts';
@@ -57,24 +58,47 @@ export function packedIslands(rings: readonly Ring[]): Uint8Array[] {
   return rings.flatMap((ring) => islandsOf(ring).map((state) => state.bytes));
 }
 
-/** The newest whole checkpoint of a folder as rings. Throws the refusal `checkpoint-none` where there is none. */
+/** The newest whole checkpoint of a folder as rings. Throws the refusals `checkpoint-none` and `run-damaged`. */
 export function resumeFrom(folder: string, tally: (bytes: Uint8Array) => Omit<IslandState, 'bytes'>): Resumed {
   const { checkpoint, warnings } = readCheckpoint(folder);
   if (checkpoint === undefined) throw refusal('checkpoint-none', { folder });
-  const { seconds, started, rings } = STATE.parse(checkpoint.state);
-  let at = 0;
-  const made = rings.map((ring) => {
-    const islands = checkpoint.islands.slice(at, at + ring.islands).map((bytes) => ({ bytes, ...tally(bytes) }));
-    at += ring.islands;
-    return createRing({ ...ring, islands });
-  });
+  const { seconds, started, rings } = stateOf(folder, checkpoint);
   return {
-    rings: made,
+    rings: understood(folder, () => ringsOf(rings, checkpoint.islands, tally)),
     seconds,
     started,
     number: checkpoint.number,
     warnings: [...warnings, ...nodeWarning(checkpoint)],
   };
+}
+
+type State = z.infer<typeof STATE>;
+
+/** A whole checkpoint can still be of another layout than this program writes. */
+function stateOf(folder: string, { state }: Checkpoint): State {
+  return understood(folder, () => STATE.parse(state));
+}
+
+function ringsOf(
+  rings: State['rings'],
+  packed: readonly Uint8Array[],
+  tally: (bytes: Uint8Array) => Omit<IslandState, 'bytes'>,
+): Ring[] {
+  if (rings.reduce((sum, ring) => sum + ring.islands, 0) !== packed.length) throw new Error('islands are missing');
+  let at = 0;
+  return rings.map((ring) => {
+    const islands = packed.slice(at, at + ring.islands).map((bytes) => ({ bytes, ...tally(bytes) }));
+    at += ring.islands;
+    return createRing({ ...ring, islands });
+  });
+}
+
+function understood<T>(folder: string, read: () => T): T {
+  try {
+    return read();
+  } catch (error) {
+    throw refusal('run-damaged', { folder, file: 'its checkpoint', reason: issueText(error) });
+  }
 }
 
 function nodeWarning(checkpoint: Checkpoint): string[] {

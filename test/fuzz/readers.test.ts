@@ -18,10 +18,11 @@ import { inspectTableText } from '../../runners/commands/parts-report.ts';
 import { reportText } from '../../runners/commands/parts-text.ts';
 import { Refusal, reasonOf } from '../../runners/errors.ts';
 import { readInputs, readSheet } from '../../runners/inputs.ts';
-import { unpackCheckpoint } from '../../runners/run-folder/checkpoint.ts';
+import { unpackCheckpoint, writeCheckpoint } from '../../runners/run-folder/checkpoint.ts';
 import { readFront } from '../../runners/run-folder/front.ts';
 import { readRecord } from '../../runners/run-folder/record.ts';
 import { seal } from '../../runners/run-folder/sealed.ts';
+import { resumeFrom } from '../../runners/sweep/resume.ts';
 import { damaged, edited, nasty, renumbered, SHEETS, TABLES } from './cases.ts';
 
 const BUOY = new URL('../../model/rails/buoy-sensors.yaml', import.meta.url).pathname;
@@ -173,6 +174,32 @@ describe('checkpoints', () => {
         unpack(seal('checkpoint 1', { header, parts: [] }));
       }),
       { numRuns: 1000 },
+    );
+  });
+});
+
+describe('checkpoints that are whole but not ours', () => {
+  const folder = mkdtempSync(join(tmpdir(), 'chopfront-fuzz-'));
+  const ring = {
+    ...{ shard: 0, epoch: 4, epochEvaluations: 100, islands: 1, faults: [] },
+    history: { stride: 1, rows: [] },
+    spent: { model: 1, search: 1 },
+  };
+  const state = { seconds: 1, started: '2026-01-01T00:00:00.000Z', rings: [ring] };
+  const resume = (value: unknown, islands = 1) => {
+    const parts = Array.from({ length: islands }, () => Uint8Array.of(1));
+    writeCheckpoint(folder, { number: 1, node: process.version, state: value, islands: parts });
+    return resumeFrom(folder, () => ({ evaluations: 100, feasible: 10 }));
+  };
+
+  test('300 of any state are taken up or refused', () => {
+    expect(resume(state).rings).toHaveLength(1);
+    expect(() => resume(state, 0)).toThrow(/its checkpoint: cannot be understood \(islands are missing\)/);
+    fc.assert(
+      fc.property(damaged(state), (value) => {
+        orRefusal(() => resume(value));
+      }),
+      { numRuns: 300 },
     );
   });
 });
