@@ -44,6 +44,7 @@
  *     packDesigns(designs: Designs): Uint8Array     unpackDesigns(bytes: Uint8Array): Designs
  *     mergeArchives(problem, parts: readonly (Island | Designs)[]): Designs
  *     mergeNearMisses(problem, parts: readonly (Island | Designs)[], front: Designs): NearMissDesigns
+ *     createMerger(problem): Merger                            // joins islands one by one: front, near misses, a sample of what was evaluated
  *     chooseSubset(front: Designs, count: number, reference?: Float64Array): Designs
  *     hypervolumeOf(problem, front: Designs): number                                 // 0 … 1
  *     mergeRecords(islands): FamilyRecord                                            // family by family, over all islands
@@ -52,9 +53,10 @@
  * An epoch takes `plan.epochGenerations × plan.population` evaluations an island; `Island.counters`, `.record` (family by family), `.shares` (of
  * `OPERATORS`) tell how it goes. `watch` = { now, spent: { variation, model, ranking, archive } } adds up where the time went.
  */
-export type { Designs, NearMissDesigns } from './archive/index.ts';
+export { type DesignSample, type Designs, type NearMissDesigns, NO_SAMPLE } from './archive/index.ts';
 export { agreementOf, chooseSubset, hypervolumeOf, mergeArchives, mergeNearMisses, mergeRecords } from './front.ts';
 export { type Counters, type FamilyRecord, type Island, OPERATORS, startIslands } from './island.ts';
+export { createMerger, type Findings, type Merger } from './merger.ts';
 export { PACK_VERSION, packDesigns, packIsland, unpackDesigns, unpackIsland } from './pack.ts';
 export { createPlan, type Plan, type PlanOptions } from './plan.ts';
 export { type Families, type Gene, type GeneKind, type Objective, ONE_FAMILY, type Problem } from './problem.ts';

@@ -1,5 +1,5 @@
 /** An island: everything one population of the search knows, as plain data. */
-import type { Designs, NearMissDesigns } from './archive/index.ts';
+import { type DesignSample, type Designs, type NearMissDesigns, NO_SAMPLE } from './archive/index.ts';
 import type { Plan } from './plan.ts';
 import type { Problem } from './problem.ts';
 import { type RandomState, seedRandom } from './random.ts';
@@ -44,6 +44,8 @@ export interface Island {
   /** ε-grid archive of feasible non-dominated designs, packed. */
   readonly archive: Designs;
   readonly nearMisses: NearMissDesigns;
+  /** A sample of all feasible designs evaluated. */
+  readonly sample: DesignSample;
   /** Hashes of designs evaluated, one to a slot. */
   readonly seen: Uint32Array;
   /** Share of each operator, in the order of `OPERATORS`, and its remembered rate of archive entries. */
@@ -92,6 +94,7 @@ function startIsland(problem: Problem, plan: Plan, index: number): Island {
     coordinates: new Float64Array(0),
     archive: none,
     nearMisses: { ...none, limit: new Int32Array(0) },
+    sample: NO_SAMPLE,
     seen: new Uint32Array(SEEN_SLOTS),
     shares: new Float64Array(OPERATORS.length).fill(1 / OPERATORS.length),
     quality: new Float64Array(OPERATORS.length).fill(0.5),

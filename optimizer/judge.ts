@@ -63,7 +63,7 @@ const DOMINATING = 5;
 const MOST = 10;
 
 function countRow(world: World, row: number): void {
-  const { m, limits, objectives, violations, violationSum, violationCount, record, counters, family } = world;
+  const { m, limits, genes, objectives, violations, violationSum, violationCount, record, counters, family } = world;
   const f = family[row];
   counters.evaluations++;
   record.evaluated[f]++;
@@ -82,6 +82,7 @@ function countRow(world: World, row: number): void {
   if (!finite || broken > 0) return;
   counters.feasible++;
   crown(world, row);
+  world.sample.offer(genes, objectives, family, row);
   record.feasible[f]++;
   for (let c = 0; c < m; c++) {
     if (objectives[row * m + c] < record.best[f * m + c]) record.best[f * m + c] = objectives[row * m + c];

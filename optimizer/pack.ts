@@ -6,7 +6,7 @@ import type { Designs } from './archive/index.ts';
 import type { Island } from './island.ts';
 
 /** Version of the layout; another one is refused. */
-export const PACK_VERSION = 1;
+export const PACK_VERSION = 2;
 const MAGIC = 0x504f4843;
 
 type Numbers = Float64Array | Int32Array | Uint32Array;

@@ -29,6 +29,9 @@ export const STALLED_GENERATIONS = 8;
 export const SEEN_SLOTS = 1 << 16;
 /** Tries at a child that was not seen before. */
 export const TRIES = 8;
+/** Most feasible designs that an island's sample keeps, and that the sample of a whole search keeps. */
+export const ISLAND_SAMPLE = 4000;
+export const WHOLE_SAMPLE = 50_000;
 /** Largest violation, as a fraction of the limit, of a near miss. */
 export const NEAR_MISS_SHARE = 0.25;
 /** How far beyond the worst member of a front its hypervolume reference lies, as a part of the front's range. */

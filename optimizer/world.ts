@@ -3,12 +3,14 @@ import {
   type Archive,
   type ArchiveGrid,
   createNearMisses,
+  createSampler,
   type Designs,
   insertAllNearMisses,
   type NearMisses,
   type NearMissGrid,
   packArchive,
   packNearMisses,
+  type Sampler,
   unpackArchive,
 } from './archive/index.ts';
 import { createTruncation, type Truncation } from './hypervolume/index.ts';
@@ -16,7 +18,7 @@ import type { Island } from './island.ts';
 import type { Problem } from './problem.ts';
 import { type Random, restoreRandom } from './random.ts';
 import { type ConstrainedRanker, createConstrainedRanker } from './ranking/index.ts';
-import { BATCH_SHARE, NEAR_MISS_SHARE, NICHE } from './settings.ts';
+import { BATCH_SHARE, ISLAND_SAMPLE, NEAR_MISS_SHARE, NICHE } from './settings.ts';
 import { createSpace, type Space, toCoordinates } from './variation/index.ts';
 
 /** Where an epoch's time went, in the unit of the caller's clock. */
@@ -67,6 +69,7 @@ export interface World {
   readonly maker: Int32Array;
   readonly archive: Archive;
   readonly near: NearMisses;
+  readonly sample: Sampler;
   readonly seen: Uint32Array;
   readonly random: Random;
   readonly ranker: ConstrainedRanker;
@@ -158,6 +161,7 @@ export function openWorld(problem: Problem, island: Island, guests: number, watc
     maker: new Int32Array(capacity).fill(-1),
     archive: unpackArchive(archiveGrid(problem), island.archive),
     near,
+    sample: sampleOf(problem, island),
     seen: island.seen.slice(),
     random: restoreRandom(island.random),
     ranker: createConstrainedRanker(capacity, m),
@@ -186,6 +190,13 @@ export function openWorld(problem: Problem, island: Island, guests: number, watc
   world.coordinates.set(island.coordinates);
   for (let c = 0; c < m; c++) findChampion(world, c);
   return world;
+}
+
+/** The island's sample of feasible designs, ready for more. */
+function sampleOf(problem: Problem, island: Island): Sampler {
+  const sampler = createSampler(problem.genes.length, problem.objectives.length, ISLAND_SAMPLE);
+  sampler.addAll(island.sample);
+  return sampler;
 }
 
 /** Sets the champion of objective c from the archive that was brought along. */
@@ -239,6 +250,7 @@ export function closeWorld(world: World): Island {
     },
     archive: packArchive(world.archive),
     nearMisses: packNearMisses(world.near),
+    sample: world.sample.pack(),
     seen: world.seen,
     shares: world.shares,
     quality: world.quality,

@@ -16,3 +16,4 @@ export {
   packNearMisses,
   selectNearMisses,
 } from './near-misses.ts';
+export { createSampler, type DesignSample, NO_SAMPLE, type Sampler } from './sample.ts';

@@ -120,7 +120,7 @@ describe('packed islands', () => {
     expect(() => unpackIsland(new Uint8Array(100))).toThrow('these bytes are no packed island');
     const foreign = packed.slice();
     foreign[4] = 99;
-    expect(() => unpackIsland(foreign)).toThrow('packed by layout version 99, this one reads 1');
+    expect(() => unpackIsland(foreign)).toThrow('packed by layout version 99, this one reads 2');
   });
 
   it('may lie anywhere in a buffer', () => {

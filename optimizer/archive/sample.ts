@@ -1,0 +1,149 @@
+/**
+ * A bounded, fair sample of the feasible designs seen: those whose genes have the smallest hashes. What it holds depends on the set of designs
+ * shown to it and on its bound, never on their order or repetition (bottom-k sampling, Cohen, Kaplan 2007), so samples of islands and shards
+ * merge in any order to the same bytes.
+ */
+import { hashRow } from '../seen.ts';
+
+/** Designs by the hash of their genes, smallest first; plain data. */
+export interface DesignSample {
+  readonly count: number;
+  /** Hash of each design's snapped genes, a whole number of 53 bits; ascending, each once. */
+  readonly keys: Float64Array;
+  /** Row-major, one row of objectives a design. */
+  readonly objectives: Float64Array;
+  /** Index of each design's family. */
+  readonly family: Int32Array;
+}
+
+/** A sample that takes in designs. */
+export interface Sampler {
+  /** Shows row `row` of the arrays to the sample; the design must be feasible and its genes snapped. */
+  offer(genes: Float64Array, objectives: Float64Array, family: Int32Array, row: number): void;
+  /** Shows all designs of another sample. */
+  addAll(sample: DesignSample): void;
+  pack(): DesignSample;
+}
+
+/** A sample without designs. */
+export const NO_SAMPLE: DesignSample = {
+  count: 0,
+  keys: new Float64Array(0),
+  objectives: new Float64Array(0),
+  family: new Int32Array(0),
+};
+
+/** An empty sampler of at most `bound` designs with `genes` genes and `m` objectives. */
+export function createSampler(genes: number, m: number, bound: number): Sampler {
+  return new BottomSampler(genes, m, bound);
+}
+
+/** Places of newcomers between two sortings, as a part of the bound. */
+const ROOM = 0.25;
+/** 2²¹: 32 bits of one hash above 21 bits of another make a whole number that a double holds. */
+const HIGH = 2_097_152;
+
+/** Kernel. Rows 0 … held − 1 are settled: sorted, each key once; rows held … used − 1 are newcomers. */
+class BottomSampler implements Sampler {
+  private readonly n: number;
+  private readonly m: number;
+  private readonly bound: number;
+  private keys: Float64Array;
+  private objectives: Float64Array;
+  private family: Int32Array;
+  private readonly gene: Float64Array;
+  private readonly words: Uint32Array;
+  private readonly hash = new Uint32Array(2);
+  /** Key of the newcomer, and largest key that can still come in. */
+  private readonly mark = new Float64Array([0, Number.POSITIVE_INFINITY]);
+  private held = 0;
+  private used = 0;
+
+  constructor(genes: number, m: number, bound: number) {
+    const room = bound + Math.ceil(bound * ROOM) + 1;
+    this.n = genes;
+    this.m = m;
+    this.bound = bound;
+    this.keys = new Float64Array(room);
+    this.objectives = new Float64Array(room * m);
+    this.family = new Int32Array(room);
+    this.gene = new Float64Array(genes);
+    this.words = new Uint32Array(this.gene.buffer);
+  }
+
+  offer(genes: Float64Array, objectives: Float64Array, family: Int32Array, row: number): void {
+    const { n, gene, hash, mark } = this;
+    // Adding 0 turns −0 into 0, so that equal designs have equal hashes.
+    for (let g = 0; g < n; g++) gene[g] = genes[row * n + g] + 0;
+    hashRow(this.words, hash);
+    mark[0] = hash[0] * HIGH + (hash[1] >>> 11);
+    if (mark[0] <= mark[1]) this.take(objectives, family, row);
+  }
+
+  addAll({ count, keys, objectives, family }: DesignSample): void {
+    const { mark } = this;
+    for (let row = 0; row < count; row++) {
+      mark[0] = keys[row];
+      if (mark[0] <= mark[1]) this.take(objectives, family, row);
+    }
+  }
+
+  pack(): DesignSample {
+    this.settle();
+    const { held, m } = this;
+    return {
+      count: held,
+      keys: this.keys.slice(0, held),
+      objectives: this.objectives.slice(0, held * m),
+      family: this.family.slice(0, held),
+    };
+  }
+
+  private take(objectives: Float64Array, family: Int32Array, row: number): void {
+    const { m, used } = this;
+    this.keys[used] = this.mark[0];
+    for (let c = 0; c < m; c++) this.objectives[used * m + c] = objectives[row * m + c] + 0;
+    this.family[used] = family[row];
+    this.used = used + 1;
+    if (this.used === this.keys.length) this.settle();
+  }
+
+  /** Sorts the newcomers in among the settled, keeps each key once and no more than the bound. */
+  private settle(): void {
+    const { m, held, used, bound, keys, objectives, family } = this;
+    if (used === held) return;
+    const order = (a: number, b: number): number => compare(keys, objectives, family, m, a, b);
+    const fresh = Int32Array.from({ length: used - held }, (_, k) => held + k).sort(order);
+    this.keys = new Float64Array(keys.length);
+    this.objectives = new Float64Array(objectives.length);
+    this.family = new Int32Array(family.length);
+    let kept = 0;
+    for (let old = 0, k = 0; kept < bound && (old < held || k < fresh.length); ) {
+      const fromOld = k === fresh.length || (old < held && order(old, fresh[k]) <= 0);
+      const row = fromOld ? old++ : fresh[k++];
+      if (kept > 0 && this.keys[kept - 1] === keys[row]) continue;
+      this.keys[kept] = keys[row];
+      for (let c = 0; c < m; c++) this.objectives[kept * m + c] = objectives[row * m + c];
+      this.family[kept++] = family[row];
+    }
+    this.held = kept;
+    this.used = kept;
+    if (kept === bound) this.mark[1] = this.keys[kept - 1];
+  }
+}
+
+/** By key; two designs of one hash, which would be chance, by objectives and family. */
+function compare(
+  keys: Float64Array,
+  objectives: Float64Array,
+  family: Int32Array,
+  m: number,
+  a: number,
+  b: number,
+): number {
+  if (keys[a] !== keys[b]) return keys[a] - keys[b];
+  for (let c = 0; c < m; c++) {
+    if (objectives[a * m + c] !== objectives[b * m + c]) return objectives[a * m + c] - objectives[b * m + c];
+  }
+  return family[a] - family[b];
+}
