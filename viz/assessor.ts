@@ -19,7 +19,6 @@ export type Verdict = { readonly ok: true; readonly value: Assessment } | { read
 /** A file that the page offers: its bytes are the command line's. */
 export interface TakeAwayFile {
   readonly name: string;
-  readonly type: string;
   readonly text: string;
 }
 
@@ -34,7 +33,9 @@ export interface Assessor {
   values(design: DesignRecord): Readonly<Record<string, number | string>>;
   /** What may be moved on the sheet's own rail. */
   readonly genes: readonly Movable[];
-  /** Files of one design, such as its spec and parts list. */
+  /** Names of the files that a design leaves as, in the order of `takeAway`. */
+  readonly files: readonly string[];
+  /** Files of one design, such as its spec and parts list; none where it cannot be built here. */
   takeAway(design: DesignRecord): readonly TakeAwayFile[];
   /** `front.csv` of the designs with these ids. */
   frontCsv(ids: ReadonlySet<string>): string;

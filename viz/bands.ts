@@ -16,21 +16,20 @@ export function bandOf(objective: string, value: number, rail: Rail): number {
 }
 
 /**
- * Designs that the model cannot tell from design `open`: every objective that carries a band lies within it. What is
+ * Rows that the model cannot tell from the design `centre`, itself among them: every objective that carries a band lies within it. What is
  * known without the model, the price, may still tell them apart.
  */
 export function indistinguishable(
   names: readonly string[],
   rows: readonly { readonly objectives: readonly number[] }[],
-  open: number,
+  { objectives: centre }: { readonly objectives: readonly number[] },
   rail: Rail,
 ): readonly number[] {
-  const centre = rows[open]?.objectives ?? [];
   const widths = names.map((name, k) => bandOf(name, centre[k] ?? 0, rail) || Number.POSITIVE_INFINITY);
   if (!widths.some(Number.isFinite)) return [];
   return rows.flatMap((row, i) => {
     const near = widths.every((width, k) => Math.abs((row.objectives[k] ?? 0) - (centre[k] ?? 0)) <= width);
-    return near && i !== open ? [i] : [];
+    return near ? [i] : [];
   });
 }
 

@@ -35,6 +35,7 @@ const DETAILS: readonly (readonly [string, string])[] = [
   ['temperatures', 'How warm it gets'],
   ['makeup', 'What takes room and money'],
   ['parts', 'Parts'],
+  ['proof', 'Predicted and simulated'],
 ];
 
 /** Body of the page, without data. */

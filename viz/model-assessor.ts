@@ -4,9 +4,9 @@ import { frontCsv, frontFile } from '../model/front-file.ts';
 import { describeFinding, type Finding } from '../model/outcome.ts';
 import { createRailProblem, type RailProblem } from '../model/problem.ts';
 import type { Rail } from '../model/rail/rail.ts';
-import { writeSpec } from '../model/write-spec.ts';
 import type { Assessor, Movable, TakeAwayFile, Verdict } from './assessor.ts';
 import type { FrontDesign, PageData } from './data.ts';
+import { TAKE_AWAY, takeAwayFiles } from './note/take-away.ts';
 import { recordOf } from './scene.ts';
 
 /** Slot of a record in which a named gene's part stands, where it is not the gene's own name. */
@@ -16,7 +16,7 @@ const SLOTS: Readonly<Record<string, string>> = { inductorSeries: 'inductor' };
 const STRUCTURE: readonly string[] = ['architecture', 'chokeBuild', 'legBuild'];
 
 /** An assessor over the page's own rail and tables, or over none where they give no space. */
-export function modelAssessor(data: Pick<PageData, 'rail' | 'tables' | 'front'>): Assessor {
+export function modelAssessor(data: Pick<PageData, 'rail' | 'tables' | 'front' | 'nearMisses' | 'run'>): Assessor {
   const own = createRailProblem(data.rail, data.tables);
   if (!own.ok) return refusing(why(own.findings));
   const problem = own.value;
@@ -25,7 +25,8 @@ export function modelAssessor(data: Pick<PageData, 'rail' | 'tables' | 'front'>)
     genes: problem.genes.map(movable),
     assess: (design, rail, moves) => assess(spaces(rail), design, moves),
     values: (design) => valuesOf(problem, design),
-    takeAway: (design) => takeAway(problem, design),
+    files: TAKE_AWAY,
+    takeAway: (design) => takeAway(problem, data, design),
     frontCsv: (ids) =>
       csvOf(
         problem,
@@ -80,19 +81,31 @@ function valuesOf(problem: RailProblem, design: DesignRecord): Readonly<Record<s
   return Object.fromEntries(entries);
 }
 
-function takeAway(problem: RailProblem, design: DesignRecord): readonly TakeAwayFile[] {
+/** In the context that `chopfront handoff` gives, so that the bytes are the same. */
+function takeAway(
+  problem: RailProblem,
+  { front, nearMisses, run }: Pick<PageData, 'front' | 'nearMisses' | 'run'>,
+  design: DesignRecord,
+): readonly TakeAwayFile[] {
   const genes = problem.genesFrom(design);
   if (!genes.ok) return [];
-  const spec = `${JSON.stringify(writeSpec(problem, genes.value), undefined, 2)}\n`;
-  return [{ name: 'spec.json', type: 'application/json', text: spec }];
+  const hashes = { rail: run.railHash, parts: run.partsHash };
+  return takeAwayFiles(problem, genes.value, { designs: front.designs, nearMisses, hashes });
 }
 
+/** Margins are judged anew: the page keeps them in single precision. Yields come from the run alone. */
 function csvOf(problem: RailProblem, designs: readonly FrontDesign[]): string {
   const rows = designs.flatMap((design) => {
     const genes = problem.genesFrom(recordOf(design));
     return genes.ok ? [genes.value] : [];
   });
-  return frontCsv(frontFile(problem, rows));
+  const file = frontFile(problem, rows);
+  const yields = new Map(designs.map((design) => [design.id, design.yield]));
+  const withYield = (design: FrontDesign): FrontDesign => {
+    const share = yields.get(design.id);
+    return share === undefined ? design : { ...design, yield: share };
+  };
+  return frontCsv({ ...file, designs: file.designs.map(withYield) });
 }
 
 function refusing(reason: string): Assessor {
@@ -100,6 +113,7 @@ function refusing(reason: string): Assessor {
     genes: [],
     assess: () => ({ ok: false, why: reason }),
     values: () => ({}),
+    files: [],
     takeAway: () => [],
     frontCsv: () => '',
   };

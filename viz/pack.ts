@@ -12,6 +12,8 @@ interface PackedDesigns {
   readonly objectives: readonly string[];
   readonly margins: Readonly<Record<string, string>>;
   readonly worstMargin: string;
+  /** Absent where no design has one. */
+  readonly yields?: string;
 }
 
 interface Packed {
@@ -90,6 +92,7 @@ function packDesigns(designs: readonly FrontDesign[], front: Front): PackedDesig
       ]),
     ),
     worstMargin: doubles((design) => design.worstMargin),
+    ...(designs.some((design) => design.yield !== undefined) ? { yields: doubles((design) => design.yield) } : {}),
   };
 }
 
@@ -106,6 +109,7 @@ function unpackDesigns(packed: PackedDesigns): readonly FrontDesign[] {
   const objectives = packed.objectives.map((text) => new Float64Array(bytes(text)));
   const margins = Object.entries(packed.margins).map(([name, text]) => [name, new Float32Array(bytes(text))] as const);
   const worst = new Float64Array(bytes(packed.worstMargin));
+  const yields = packed.yields === undefined ? undefined : new Float64Array(bytes(packed.yields));
   return packed.ids.map((id, i) => ({
     id,
     family: packed.families[family[i] ?? 0] ?? '',
@@ -119,6 +123,7 @@ function unpackDesigns(packed: PackedDesigns): readonly FrontDesign[] {
     objectives: objectives.map((values) => values[i] ?? Number.NaN),
     margins: present(margins.map(([name, values]) => [name, values[i] ?? Number.NaN])),
     worstMargin: worst[i] ?? Number.NaN,
+    ...present([['yield', yields?.[i] ?? Number.NaN]]),
   }));
 }
 

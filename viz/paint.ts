@@ -1,7 +1,7 @@
 /** Draws a scene into the page: the same code at build time in jsdom and live in the browser. */
 import type { Assessment } from '../model/assessment.ts';
 import { varies } from './dataset.ts';
-import { titled } from './labels.ts';
+import { capital } from './labels.ts';
 import { clear } from './marks/root.ts';
 import { paintDesigns, paintMovePicture, paintPicture } from './paint-picture.ts';
 import { fill, measured, placeOf, redraw } from './places.ts';
@@ -19,6 +19,7 @@ import { renderMind } from './views/mind.ts';
 import { renderOpenHead } from './views/open.ts';
 import { renderParts } from './views/parts.ts';
 import { renderPrices } from './views/prices.ts';
+import { renderProof } from './views/proof.ts';
 import { renderCount, renderRanges, shownQuantities } from './views/ranges.ts';
 import { renderTemperatures } from './views/temperatures.ts';
 import { type TradeoffOptions, type TradeoffScales, tradeoffDefaults } from './views/tradeoff-scales.ts';
@@ -30,7 +31,7 @@ import { renderKnobs, renderMove } from './views/whatif.ts';
 function paintFixed(document: Document, { data, known }: Bench): void {
   const place = (id: string) => placeOf(document, id);
   renderMasthead(place('masthead'), data.rail, data.run, data.front.designs.length, known.objectives);
-  renderPrices(place('prices'), data.front, data.nearMisses, data.rail);
+  renderPrices(place('prices'), data);
   renderFamilies(place('families'), data.families);
   renderTrust(place('trust'), data.run, data.history, { ...trustDefaults, ...measured(document, 'trust') });
   renderMind(place('mind'), data.cautions, data.notCovered);
@@ -53,7 +54,7 @@ export function paintNarrow(document: Document, bench: Bench, scene: Scene): voi
   fill(
     document,
     'add-range',
-    [['', 'choose …'], ...more.map((quantity) => [quantity.key, titled(quantity.label)] as const)],
+    [['', 'choose …'], ...more.map((quantity) => [quantity.key, capital(quantity.label)] as const)],
     '',
   );
   const isNarrowed = Object.keys(state.ranges).length + state.hidden.length > 0;
@@ -85,6 +86,11 @@ export function paintOpen(document: Document, bench: Bench, scene: Scene): void 
   });
   renderMakeup(place('makeup'), own.value, rail.currency);
   renderParts(place('parts'), own.value, rail.currency);
+  renderProof(
+    place('proof'),
+    own.value.id,
+    bench.data.proofs?.find((proof) => proof.id === own.value.id),
+  );
   paintPoint(document, bench, scene);
 }
 
@@ -97,6 +103,9 @@ export function paintOpenHead(document: Document, bench: Bench, scene: Scene, de
     isLeft: scene.kept.includes(index),
     isIncumbent: (bench.data.incumbents ?? []).includes(scene.state.open),
     alike: scene.alike.length,
+    isMiss: bench.dataset.misses.has(index),
+    yield: bench.dataset.rows[index]?.yield,
+    proof: bench.data.proofs?.find((proof) => proof.id === design.id),
   });
 }
 
@@ -143,7 +152,7 @@ export function paintCompare(document: Document, { dataset }: Bench, scene: Scen
 }
 
 export function paintAway(document: Document, bench: Bench, scene: Scene): void {
-  const files = scene.own?.ok === true ? bench.assessor.takeAway(scene.own.value.design) : [];
+  const files = scene.own?.ok === true ? bench.assessor.files : [];
   renderAway(placeOf(document, 'away'), scene.state.open, files, scene.kept.length);
 }
 

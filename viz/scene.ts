@@ -22,7 +22,7 @@ export interface Bench {
 export interface Scene {
   readonly state: State;
   readonly kept: readonly number[];
-  /** Index of the open design; absent where the front is empty. */
+  /** Row of the open design; absent where there is none. */
   readonly open?: number | undefined;
   readonly own?: Verdict | undefined;
   readonly moved?: Verdict | undefined;
@@ -31,7 +31,7 @@ export interface Scene {
 }
 
 export function benchOf(data: PageData, assessor: Assessor): Bench {
-  const dataset = datasetOf(data.front);
+  const dataset = datasetOf(data);
   const known = {
     objectives: dataset.objectives.map((objective) => objective.name),
     ids: dataset.index,
@@ -74,7 +74,7 @@ function heaviest({ profile }: PageData['rail']): number {
 /** Works out `state`; `judge` may remember verdicts between states, and what `before` knows already is taken from it. */
 export function sceneOf(bench: Bench, state: State, judge = judgeBy(bench), before?: Scene): Scene {
   const open = bench.dataset.index.get(state.open);
-  const design = open === undefined ? undefined : bench.dataset.designs[open];
+  const design = open === undefined ? undefined : bench.dataset.rows[open];
   return {
     state,
     kept: isSameChoice(before?.state, state) ? (before?.kept ?? []) : kept(bench.dataset, state),
@@ -91,7 +91,9 @@ function isSameChoice(a: State | undefined, b: State): boolean {
 }
 
 function alikeOf({ data, dataset, known }: Bench, open: number | undefined): readonly number[] {
-  return open === undefined ? [] : indistinguishable(known.objectives, dataset.designs, open, data.rail);
+  const row = open === undefined ? undefined : dataset.rows[open];
+  if (row === undefined) return [];
+  return indistinguishable(known.objectives, dataset.designs, row, data.rail).filter((i) => i !== open);
 }
 
 export type Judge = (design: FrontDesign, changes: State['changes']) => Verdict;

@@ -41,7 +41,7 @@ export function start(document: Document, data: PageData, assessor: Assessor): D
   const show = (state: State, isOwn: boolean) => {
     const before = scene;
     scene = sceneOf(bench, state, judge, before);
-    repaint(document, bench, scene, changesBetween(before.state, state), picture);
+    repaint(document, bench, before, scene, changesBetween(before.state, state), picture);
     if (isOwn) remember(document, scene.state);
   };
   listen(document, desk);
@@ -68,12 +68,15 @@ function remember(document: Document, state: State): void {
 function repaint(
   document: Document,
   bench: Bench,
+  before: Scene,
   scene: Scene,
   changed: ReadonlySet<Change>,
   picture: ReturnType<typeof attachPicture>,
 ): void {
   const has = (...names: Change[]) => names.some((name) => changed.has(name));
-  if (has('axes', 'ranges')) picture.redraw();
+  const isRescaled =
+    has('open') && (bench.dataset.misses.has(before.open ?? -1) || bench.dataset.misses.has(scene.open ?? -1));
+  if (has('axes', 'ranges') || isRescaled) picture.redraw();
   else if (has('open', 'pinned')) picture.overlay();
   else if (has('moved')) picture.moved();
   if (has('ranges')) paintNarrow(document, bench, scene);
@@ -144,7 +147,7 @@ function takeAway(document: Document, { bench, scene }: Desk, name: string): voi
   const { kept, own } = scene();
   if (name === 'front.csv') {
     const ids = new Set(kept.map((i) => bench.dataset.designs[i]?.id ?? ''));
-    download(document, { name, type: 'text/csv', text: bench.assessor.frontCsv(ids) });
+    download(document, { name, text: bench.assessor.frontCsv(ids) });
     return;
   }
   const files = own?.ok === true ? bench.assessor.takeAway(own.value.design) : [];

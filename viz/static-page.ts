@@ -13,7 +13,7 @@ export function staticPage(data: PageData, assets: PageAssets, assessor: Assesso
   const body = drawnBody(data, assessor);
   const style = assets.style.trim();
   const script = assets.script.trim();
-  if (/<\/(script|style)/i.test(script) || /<\//.test(style)) throw new Error('an asset would end its own element');
+  if (/<\/script|<!--/i.test(script) || /<\//.test(style)) throw new Error('an asset would end its own element');
   return `<!doctype html>
 <html lang="en">
 <head>

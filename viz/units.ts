@@ -88,6 +88,11 @@ export function marginPercent(fraction: number): string {
   return percent(fraction);
 }
 
+/** `50 % load`; where power flows back, `50 % load in reverse`. */
+export function loadWords(fraction: number): string {
+  return fraction < 0 ? `${percent(-fraction, 0)} load in reverse` : `${percent(fraction, 0)} load`;
+}
+
 /** Three significant digits without exponent; whole numbers of at most four digits stay whole. */
 export function digits(value: number): string {
   if (value === 0) return '0';

@@ -5,15 +5,17 @@ import { bandOf, indistinguishable } from '../../viz/bands.ts';
 import type { FrontDesign } from '../../viz/data.ts';
 import { kept } from '../../viz/narrow.ts';
 import { picksOf } from '../../viz/picks.ts';
-import { offersOf } from '../../viz/views/prices.ts';
+import { firstState, sceneOf } from '../../viz/scene.ts';
+import { renderPrices } from '../../viz/views/prices.ts';
 import { place as placeOn, valueAt } from '../../viz/views/ranges.ts';
 import { verdicts } from '../../viz/views/trust.ts';
 import { knobValue } from '../../viz/views/whatif.ts';
 import { applied, designKnobs, railKnobs } from '../../viz/whatif.ts';
 import { fixture, fixtureAssessor, RAIL } from './fixture.ts';
 import { bench, open } from './gallery.ts';
+import { cellsOf, place } from './page-at.ts';
 
-const { dataset } = bench;
+const { data, dataset } = bench;
 
 describe('narrowing', () => {
   const quantities = dataset.quantities.filter((quantity) => quantity.high > quantity.low);
@@ -62,7 +64,7 @@ describe('first picks', () => {
   test('each is within one per cent of the best in its objective', () => {
     const [, ...best] = picksOf(dataset, all);
     best.forEach((pick, k) => {
-      const values = dataset.objectives[k]?.values ?? new Float64Array();
+      const values = dataset.objectives[k]?.front ?? new Float64Array();
       expect(values[pick.index]).toBeLessThanOrEqual(1.01 * Math.min(...values));
     });
   });
@@ -88,7 +90,7 @@ describe('the model’s band', () => {
   test('what the model cannot tell apart is near in every objective that carries a band; price does not count', () => {
     const row = (loss: number, volume: number, cost: number) => ({ objectives: [loss, volume, cost] });
     const rows = [row(1, 1e-6, 3), row(1.0001, 1.1e-6, 9), row(1, 1.5e-6, 3), row(2, 1e-6, 3)];
-    expect(indistinguishable(['loss', 'volume', 'cost'], rows, 0, RAIL)).toEqual([1]);
+    expect(indistinguishable(['loss', 'volume', 'cost'], rows, row(1, 1e-6, 3), RAIL)).toEqual([0, 1]);
   });
 });
 
@@ -107,21 +109,51 @@ describe('what a limit costs', () => {
       { name: 'loss', unit: 'W' },
       { name: 'volume', unit: 'm³' },
     ],
-    limits: [{ name: 'output-ripple', unit: 'V' }],
+    limits: [{ name: 'outputRipple', unit: 'V' }],
     genes: [],
     designs: [design('a', [2, 1e-6]), design('b', [1.6, 2e-6])],
   };
+  const shownFor = (objectives: number[]) => {
+    const root = place();
+    const nearMisses = [{ limit: 'outputRipple', value: 0.022, allowed: 0.02, design: design('m', objectives) }];
+    renderPrices(root, { front, nearMisses, rail: RAIL });
+    return root;
+  };
 
-  test('the gain is against the front designs that are no worse elsewhere', () => {
-    const miss = { limit: 'output-ripple', value: 0.022, allowed: 0.02, design: design('m', [1.5, 1e-6]) };
-    const [offer] = offersOf(front, [miss], 2);
-    expect(offer).toMatchObject({ objective: 0, from: 2, to: 1.5, gain: 0.25, unit: 'V' });
-    expect(offer?.relaxation).toBeCloseTo(0.1, 12);
+  test('20 mV of ripple relaxed by a tenth buys a quarter of the loss, against the design with no more volume', () => {
+    expect(cellsOf(shownFor([1.5, 1e-6]))[1]).toEqual([
+      'Output ripple',
+      '20 mV → 22 mV (10.0 %)',
+      '−25.0 %2 W → 1.5 W',
+      '·',
+      'm',
+    ]);
   });
 
-  test('a miss that beats nothing is no offer', () => {
-    const miss = { limit: 'output-ripple', value: 0.022, allowed: 0.02, design: design('m', [2.5, 1e-6]) };
-    expect(offersOf(front, [miss], 2)).toEqual([]);
+  test('a miss that beats nothing is no offer, yet it can still be opened', () => {
+    const root = shownFor([2.5, 1e-6]);
+    expect(root.select('.prices').empty()).toBe(true);
+    expect(root.select('[data-act="open"]').attr('data-id')).toBe('m');
+  });
+});
+
+describe('a near miss', () => {
+  const [miss] = data.nearMisses;
+  if (miss === undefined) throw new Error('the invented sweep has near misses');
+  const scene = sceneOf(bench, { ...firstState(bench), open: miss.design.id, pinned: [miss.design.id] });
+
+  test('opens like any other design and is judged to break its limit', () => {
+    expect(scene.own?.ok === true && scene.own.value.limits.filter((limit) => limit.violation > 0).length).toBe(1);
+    expect(scene.own?.ok === true && scene.own.value.id).toBe(miss.design.id);
+    expect(scene.pinned).toEqual([bench.dataset.index.get(miss.design.id)]);
+  });
+
+  test('is in no count, range or pick', () => {
+    const row = bench.dataset.index.get(miss.design.id) ?? 0;
+    expect(row).toBeGreaterThanOrEqual(bench.dataset.designs.length);
+    expect(scene.kept).not.toContain(row);
+    expect(scene.kept).toHaveLength(bench.dataset.designs.length);
+    expect(picksOf(bench.dataset, scene.kept).map((one) => one.index)).not.toContain(row);
   });
 });
 

@@ -278,9 +278,10 @@ export function fixtureAssessor(): Assessor {
     },
     values: (design) => ({ ...design.genes, ...design.parts }),
     genes: movables(),
+    files: ['spec.json', 'parts.csv'],
     takeAway: (design) => [
-      { name: 'spec.json', type: 'application/json', text: `${JSON.stringify(design)}\n` },
-      { name: 'parts.csv', type: 'text/csv', text: 'part,count\n' },
+      { name: 'spec.json', text: `${JSON.stringify(design)}\n` },
+      { name: 'parts.csv', text: 'part,count\n' },
     ],
     frontCsv: (ids) => `id\n${[...ids].join('\n')}\n`,
   };

@@ -20,6 +20,7 @@ describe('the data island', () => {
         expect(design.margins[name]).toBe(Math.fround(margin));
       }
     });
+    expect(back.front.designs.every((design) => !('yield' in design))).toBe(true);
     expect(back.rail).toEqual(data.rail);
     expect(back.nearMisses.map((miss) => miss.design.id)).toEqual(data.nearMisses.map((miss) => miss.design.id));
   });
@@ -40,6 +41,12 @@ describe('the data island', () => {
     const text = pack({ ...data, rail: { ...data.rail, name: HOSTILE } });
     expect(text).not.toMatch(/[<\u2028\u2029]/);
     expect(unpack(text).rail.name).toBe(HOSTILE);
+  });
+
+  test('yields come back where there are any, and only where', () => {
+    const designs = data.front.designs.map((design, i) => (i % 2 === 0 ? { ...design, yield: i / 64 } : design));
+    const back = unpack(pack({ ...data, front: { ...data.front, designs } })).front.designs;
+    expect(back.map((design) => design.yield)).toEqual(designs.map((design) => design.yield));
   });
 
   test('an empty front and an empty cloud pack too', () => {

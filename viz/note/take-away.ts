@@ -4,6 +4,9 @@ import { type NamedFile, takeAway } from '../../model/handoff/take-away.ts';
 import type { RailProblem } from '../../model/problem.ts';
 import { noteHtml } from './html.ts';
 
+/** Names of the files, in the order of `takeAwayFiles`. */
+export const TAKE_AWAY = ['spec.json', 'stage.cir', 'parts.csv', 'magnetics.md', 'note.md', 'note.html'] as const;
+
 /** The files of the design of `genes`, in the order in which they are offered. */
 export function takeAwayFiles(problem: RailProblem, genes: Float64Array, context: HandoffContext = {}): NamedFile[] {
   const snapped = Float64Array.from(genes);

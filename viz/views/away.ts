@@ -1,5 +1,4 @@
 /** Take-away: one button a file, with what it is for. */
-import type { TakeAwayFile } from '../assessor.ts';
 import { counted } from '../labels.ts';
 import { clear, type Root } from '../marks/root.ts';
 
@@ -10,18 +9,13 @@ const PURPOSE: Readonly<Record<string, string>> = {
   'parts.csv': 'parts list for purchasing',
   'magnetics.md': 'order sheet for the wound parts',
   'note.html': 'design note that prints well',
-  'note.md': 'design note as plain text',
+  'note.md': 'the same note as plain text',
 };
 
-export function renderAway<E extends Element>(
-  root: Root<E>,
-  id: string,
-  files: readonly Pick<TakeAwayFile, 'name'>[],
-  left: number,
-): void {
+export function renderAway<E extends Element>(root: Root<E>, id: string, files: readonly string[], left: number): void {
   clear(root);
   const list = root.append('ul').attr('class', 'away');
-  for (const file of files) item(list, file.name, `${PURPOSE[file.name] ?? 'file'} · design ${id}`);
+  for (const name of files) item(list, name, `${PURPOSE[name] ?? 'file'} · design ${id}`);
   item(list, 'front.csv', `${counted(left, 'design')} left, for a spreadsheet`);
   root
     .append('p')

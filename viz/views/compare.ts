@@ -1,6 +1,6 @@
 /** Designs side by side: what differs comes first, most different on top; what is alike in all stands closed below. */
 import { type Dataset, type Quantity, shown } from '../dataset.ts';
-import { titled } from '../labels.ts';
+import { capital, titled } from '../labels.ts';
 import { clear, type Root } from '../marks/root.ts';
 import { familyName } from './legend.ts';
 import { letter } from './overlay.ts';
@@ -29,7 +29,7 @@ export function renderCompare<E extends Element>(root: Root<E>, dataset: Dataset
   const rows = rowsOf(dataset, pinned);
   const different = rows.filter((row) => row.spread > 0).sort((a, b) => a.rank - b.rank || b.spread - a.spread);
   const alike = rows.filter((row) => row.spread === 0);
-  const ids = pinned.map((i) => dataset.designs[i]?.id ?? '');
+  const ids = pinned.map((i) => dataset.rows[i]?.id ?? '');
   table(
     root
       .append('div')
@@ -103,7 +103,7 @@ function table(
 }
 
 function rowsOf(dataset: Dataset, pinned: readonly number[]): readonly Row[] {
-  const designs = pinned.flatMap((i) => dataset.designs[i] ?? []);
+  const designs = pinned.flatMap((i) => dataset.rows[i] ?? []);
   const words = (label: string, cells: readonly string[], rank: number): Row => ({
     label,
     cells,
@@ -117,6 +117,11 @@ function rowsOf(dataset: Dataset, pinned: readonly number[]): readonly Row[] {
       'Family',
       designs.map((design) => familyName(design.family)),
       1,
+    ),
+    words(
+      'Remark',
+      pinned.map((i) => dataset.remarks.get(i)?.join(', ') ?? 'none'),
+      -1,
     ),
     ...slots.map((slot) =>
       words(
@@ -139,7 +144,7 @@ function numbers(quantity: Quantity, pinned: readonly number[]): Row {
   const best = quantity.group === 'variable' || isAlike || pinned.length < 2 ? undefined : values.indexOf(target);
   const rank = quantity.group === 'objective' ? 0 : quantity.group === 'variable' ? 2 : 3;
   return {
-    label: titled(quantity.label),
+    label: capital(quantity.label),
     cells: values.map((value) => shown(quantity, value)),
     best,
     spread,

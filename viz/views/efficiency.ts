@@ -1,4 +1,7 @@
-/** Efficiency against load at the lowest, usual and highest input, over the time the profile spends at each load. */
+/**
+ * Efficiency against load at the lowest, usual and highest input, over the time the profile spends at each load. A load below
+ * zero is power that flows from the output back to the input.
+ */
 import { line, scaleLinear } from 'd3';
 import type { Assessment } from '../../model/assessment.ts';
 import type { Rail } from '../../model/rail/rail.ts';
@@ -43,6 +46,7 @@ export function renderEfficiency<E extends Element>(
   bottomAxis(svg, x, o, { title: 'Load', unit, ticks: 5 });
   leftAxis(svg, y, o, { title: 'Efficiency', unit, ticks: 5 });
   time(svg, rail, x, o);
+  if ((x.domain()[0] ?? 0) < 0) directions(svg, x, o);
   const labels = spread(
     curves.map((curve) => y(Math.max(y.domain()[0] ?? 0, last(curve)))),
     13,
@@ -51,7 +55,7 @@ export function renderEfficiency<E extends Element>(
     svg
       .append('path')
       .attr('class', `line input-${i}`)
-      .attr('d', pathOf(curve, x, y));
+      .attr('d', pathOf(curve, -1, x, y) + pathOf(curve, 1, x, y));
     svg
       .append('text')
       .attr('class', 'line-name')
@@ -67,21 +71,43 @@ function last(curve: Curve): number {
   return curve.efficiency[curve.efficiency.length - 1] ?? 0;
 }
 
+/** The curve on one side of no load: between the two directions there is none. */
 function pathOf(
   curve: Curve,
+  side: -1 | 1,
   x: (value: number) => number,
   y: { (value: number): number; domain(): number[] },
 ): string {
   const floor = y.domain()[0] ?? 0;
   const points = curve.load
     .map((load, i) => ({ load, efficiency: curve.efficiency[i] ?? 0 }))
-    .filter((point) => point.efficiency >= floor);
+    .filter((point) => Math.sign(point.load) === side && point.efficiency >= floor);
   return (
     line<{ load: number; efficiency: number }>(
       (point) => px(x(point.load)),
       (point) => px(y(point.efficiency)),
     )(points) ?? ''
   );
+}
+
+/** Which way power flows, left and right of no load. */
+function directions(svg: Root<SVGSVGElement>, x: (value: number) => number, o: typeof efficiencyDefaults): void {
+  const zero = px(x(0));
+  svg
+    .append('path')
+    .attr('class', 'zero')
+    .attr('d', `M${zero} ${o.top}V${o.height - o.bottom}`);
+  for (const [words, anchor, dx] of [
+    ['← to the input', 'end', -8],
+    ['to the output →', 'start', 8],
+  ] as const)
+    svg
+      .append('text')
+      .attr('class', 'line-name')
+      .attr('x', zero + dx)
+      .attr('y', o.height - o.bottom - 8)
+      .attr('text-anchor', anchor)
+      .text(words);
 }
 
 /** Share of time at each load as bars that stand on the axis. */
@@ -119,8 +145,15 @@ function numbers<E extends Element>(root: Root<E>, curves: readonly Curve[]): vo
   ]);
   numbersTable(
     root,
-    { summary: 'Numbers', caption: 'Efficiency over load' },
+    {
+      summary: 'Numbers',
+      caption: isTwoWay(curves) ? 'Efficiency over load; below zero, back to the input' : 'Efficiency over load',
+    },
     ['Load', ...curves.map((curve) => `at ${show(curve.inputVoltage, 'V')}`)],
     rows,
   );
+}
+
+function isTwoWay(curves: readonly Curve[]): boolean {
+  return curves.some((curve) => curve.load.some((load) => load < 0));
 }

@@ -1,6 +1,6 @@
 /** Why each family is on the front, or is not: one line each. */
 import type { FamilyNote } from '../data.ts';
-import { thousands } from '../labels.ts';
+import { inWords, thousands } from '../labels.ts';
 import { clear, type Root } from '../marks/root.ts';
 import { percent } from '../units.ts';
 import { familyMark, familyName } from './legend.ts';
@@ -35,6 +35,6 @@ export function renderFamilies<E extends Element>(root: Root<E>, notes: readonly
     row.append('td').text(thousands(note.evaluated));
     row.append('td').text(note.evaluated === 0 ? 'none' : percent(note.feasible / note.evaluated, 0));
     row.append('td').text(thousands(note.front));
-    row.append('td').attr('class', 'why').text(note.reason);
+    row.append('td').attr('class', 'why').text(inWords(note.reason));
   }
 }

@@ -1,6 +1,6 @@
 /** How close the design comes to each limit: tightest first, with the corner where it was judged worst. */
 import type { Assessment, Corner, LimitFigure } from '../../model/assessment.ts';
-import { titled } from '../labels.ts';
+import { capital, spokenLimit } from '../labels.ts';
 import { bar } from '../marks/bar.ts';
 import { clear, type Root } from '../marks/root.ts';
 import { percent, show, showDifference } from '../units.ts';
@@ -32,25 +32,18 @@ export function renderLimits<E extends Element>(root: Root<E>, design: Assessmen
   for (const limit of rows) {
     const state = verdict(limit, options.tight);
     const row = body.append('tr').attr('class', `whole ${state}`);
-    const name = row.append('th').attr('scope', 'row').text(limitName(limit.name));
+    const name = row
+      .append('th')
+      .attr('scope', 'row')
+      .text(capital(spokenLimit(limit.name)));
     if (state !== 'holds')
       name
         .append('span')
         .attr('class', 'flag')
         .text(state === 'broken' ? 'broken' : 'tight');
     row.append('td').text(written(limit, limit.value));
-    row.append('td').text(written(limit, limit.allowed));
-    bar(
-      row
-        .append('td')
-        .text(
-          isShare(limit)
-            ? `${limit.margin < 0 ? '' : '+'}${percent(limit.margin, 2)}`
-            : showDifference(limit.margin, limit.unit),
-        ),
-      Math.abs(limit.slack),
-      state,
-    );
+    row.append('td').text(`${sense(limit)}${written(limit, limit.allowed)}`);
+    bar(row.append('td').text(marginWords(limit)), Math.abs(limit.slack), state);
     row
       .append('td')
       .attr('class', 'where')
@@ -65,24 +58,45 @@ export function brokenLimits(limits: readonly LimitFigure[]): readonly string[] 
     .sort((a, b) => b.violation - a.violation)
     .map(
       (limit) =>
-        `${limitName(limit.name)}: ${written(limit, limit.value)} where ${written(limit, limit.allowed)} is allowed, missed by ${percent(limit.violation)}`,
+        `${capital(spokenLimit(limit.name))}: ${written(limit, limit.value)} where ${written(limit, limit.allowed)} is allowed, missed by ${percent(limit.violation)}`,
     );
 }
 
-/** `efficiency@50%` → `Efficiency at 50 % load`. */
-export function limitName(name: string): string {
-  const [, what = '', load] = /^(.*)@(.+)%$/.exec(name) ?? [];
-  return load === undefined ? titled(name) : `${titled(what)} at ${load}\u00a0% load`;
-}
+/** Fractions that people write in percent. */
+const SHARES = new Set([
+  'chokeWindow',
+  'chokeReach',
+  'chokeMaterial',
+  'transformerWindow',
+  'transformerMaterial',
+  'transformerDuty',
+]);
+/** 1 is yes, 0 is no. */
+const ANSWERS = new Set(['filterChoke', 'controllerAbilities']);
 
-/** Efficiencies are fractions that people write in percent. */
-function isShare(limit: Pick<LimitFigure, 'unit' | 'name'>): boolean {
-  return limit.unit === '' && limit.name.startsWith('efficiency');
+type Named = Pick<LimitFigure, 'unit' | 'name'>;
+
+function isShare({ unit, name }: Named): boolean {
+  return unit === '' && (name.startsWith('efficiency') || SHARES.has(name));
 }
 
 /** A limit's value for people. */
-export function written(limit: Pick<LimitFigure, 'unit' | 'name'>, value: number): string {
-  return isShare(limit) ? percent(value, 2) : show(value, limit.unit);
+export function written(limit: Named, value: number): string {
+  if (ANSWERS.has(limit.name)) return value >= 1 ? 'yes' : 'no';
+  return isShare(limit) ? percent(value, limit.name.startsWith('efficiency') ? 2 : 1) : show(value, limit.unit);
+}
+
+function marginWords(limit: LimitFigure): string {
+  if (ANSWERS.has(limit.name)) return limit.margin < 0 ? 'missing' : 'met';
+  const places = limit.name.startsWith('efficiency') ? 2 : 1;
+  if (isShare(limit)) return `${limit.margin < 0 ? '' : '+'}${percent(limit.margin, places)}`;
+  return showDifference(limit.margin, limit.unit);
+}
+
+/** `≤ ` where less is better, `≥ ` where more is, as the margin's sign tells; nothing where the two agree. */
+function sense({ name, value, allowed, margin }: LimitFigure): string {
+  if (ANSWERS.has(name) || value === allowed) return '';
+  return Math.sign(allowed - value) === Math.sign(margin) ? '≤\u00a0' : '≥\u00a0';
 }
 
 /** A count that is just met is no close call: such limits stand last. */

@@ -3,7 +3,7 @@ import type { Rail } from '../../model/rail/rail.ts';
 import type { RunRecord } from '../data.ts';
 import { listed, spoken, thousands } from '../labels.ts';
 import { clear, type Root } from '../marks/root.ts';
-import { percent, show } from '../units.ts';
+import { loadWords, percent, show } from '../units.ts';
 
 export function renderMasthead<E extends Element>(
   root: Root<E>,
@@ -47,7 +47,5 @@ function requirement(rail: Rail): string {
 
 /** Load profile in words: `40 % of the time at 2 % load, …`. */
 export function profileWords(rail: Rail): string {
-  return listed(
-    rail.profile.map((point) => `${percent(point.share, 0)} of the time at ${percent(point.fraction, 0)} load`),
-  );
+  return listed(rail.profile.map((point) => `${percent(point.share, 0)} of the time at ${loadWords(point.fraction)}`));
 }

@@ -1,5 +1,6 @@
 /** What lies over and under the marks: the model's band, rings, the crosshair of the open design, the moved design. */
 import { bandOf } from '../bands.ts';
+import { DISPUTED } from '../dataset.ts';
 import { clear, moved, px, type Root } from '../marks/root.ts';
 import {
   radiusOf,
@@ -74,6 +75,8 @@ function rings(plot: Root<SVGGElement>, input: TradeoffInput, { x, y }: Tradeoff
       .attr('dy', rank % 2 === 0 ? -8 : 17)
       .text(letter(rank));
   });
+  const disputed = input.dataset.designs.flatMap((_, i) => (isDisputed(input, i) ? [i] : []));
+  ring(disputed, 'disputed', 5.5);
   if (input.open !== undefined) crosshair(plot, input, input.open, { x, y, frame: o });
 }
 
@@ -81,8 +84,14 @@ function crosshair(plot: Root<SVGGElement>, input: TradeoffInput, open: number, 
   const [cx, cy] = [px(x(input.x.values[open] ?? 0)), px(y(input.y.values[open] ?? 0))];
   const gap = 13;
   const lines = `M${cx} ${frame.top - 6}V${cy - gap}M${cx} ${cy + gap}V${frame.height - frame.bottom}M${frame.left} ${cy}H${cx - gap}M${cx + gap} ${cy}H${frame.width - frame.right}`;
-  plot.append('path').attr('class', 'hair').attr('d', lines);
-  plot.append('circle').attr('class', 'open-ring').attr('cx', cx).attr('cy', cy).attr('r', gap);
+  const state = open >= input.dataset.designs.length ? ' missed' : '';
+  plot.append('path').attr('class', `hair${state}`).attr('d', lines);
+  plot.append('circle').attr('class', `open-ring${state}`).attr('cx', cx).attr('cy', cy).attr('r', gap);
+}
+
+/** Whether a circuit simulation contradicts the model about this design. */
+export function isDisputed({ dataset }: TradeoffInput, row: number): boolean {
+  return dataset.remarks.get(row)?.includes(DISPUTED) === true;
 }
 
 /** The moved design, tied to the open one. */

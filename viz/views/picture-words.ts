@@ -5,8 +5,9 @@ import { counted, listed, spoken, titled } from '../labels.ts';
 import { plainTable } from '../marks/numbers.ts';
 import { clear, type Root } from '../marks/root.ts';
 import type { Pick as FirstPick } from '../picks.ts';
-import { show } from '../units.ts';
+import { marginPercent, percent, show } from '../units.ts';
 import { familyName } from './legend.ts';
+import { isDisputed } from './overlay.ts';
 import type { TradeoffInput } from './tradeoff-scales.ts';
 
 export function renderPicks<E extends Element>(
@@ -38,7 +39,11 @@ export function pictureNote(input: TradeoffInput): string {
   }
   if (input.open !== undefined)
     words.push(`Tinted box: the model’s own error around the open design; ${alikeWords(input)}.`);
+  if (input.open !== undefined && input.dataset.misses.has(input.open))
+    words.push('The open design is a near miss: it breaks a limit, so it is not on the front.');
   if (input.incumbents.length > 0) words.push('Dashed ring: a design that exists already.');
+  if (input.dataset.designs.some((_, i) => isDisputed(input, i)))
+    words.push('Dotted red ring: simulation disagrees with the model.');
   if (input.dataset.designs.length > 0) words.push('Grey: further designs that the search kept.');
   return words.join(' ');
 }
@@ -53,7 +58,7 @@ function alikeWords({ alike, dataset, rail }: TradeoffInput): string {
 
 /** One design in a breath, for the hover card and for screen readers. */
 export function designWords(dataset: Dataset, index: number): readonly string[] {
-  const design = dataset.designs[index];
+  const design = dataset.rows[index];
   if (design === undefined) return [];
   const figures = dataset.objectives.map(
     (objective) => `${show(objective.values[index] ?? Number.NaN, objective.unit)} ${spoken(objective.name)}`,
@@ -63,19 +68,23 @@ export function designWords(dataset: Dataset, index: number): readonly string[] 
     frequency === undefined ? '' : show(frequency, 'Hz'),
     inductance === undefined ? '' : show(inductance, 'H'),
   ].filter((text) => text !== '');
-  return [familyName(design.family), ...figures, genes.join(', '), design.id];
+  return [familyName(design.family), ...figures, genes.join(', '), design.id, ...(dataset.remarks.get(index) ?? [])];
 }
 
 /** Table of the designs left, `most` at most, by the horizontal axis. */
 export function renderDesigns<E extends Element>(root: Root<E>, input: TradeoffInput, most: number): void {
   const { dataset } = input;
   const order = [...input.kept].sort((a, b) => (input.x.values[a] ?? 0) - (input.x.values[b] ?? 0)).slice(0, most);
+  const hasYield = dataset.byKey.has('y.yield');
+  const hasRemarks = order.some((i) => dataset.remarks.has(i));
   const head = [
     'Design',
     'Family',
     ...dataset.objectives.map((objective) => titled(objective.name)),
     'Frequency',
     'Tightest margin',
+    ...(hasYield ? ['Yield'] : []),
+    ...(hasRemarks ? ['Remark'] : []),
   ];
   const frequency = dataset.byKey.get('v.frequency');
   const rows = order.map((i) => [
@@ -83,7 +92,9 @@ export function renderDesigns<E extends Element>(root: Root<E>, input: TradeoffI
     familyName(dataset.designs[i]?.family ?? ''),
     ...dataset.objectives.map((objective) => show(objective.values[i] ?? Number.NaN, objective.unit)),
     frequency === undefined ? '' : show(frequency.values[i] ?? Number.NaN, 'Hz'),
-    show(dataset.designs[i]?.worstMargin ?? Number.NaN, ''),
+    marginPercent(dataset.designs[i]?.worstMargin ?? Number.NaN),
+    ...(hasYield ? [percent(dataset.designs[i]?.yield ?? Number.NaN)] : []),
+    ...(hasRemarks ? [dataset.remarks.get(i)?.join(', ') ?? ''] : []),
   ]);
   const table = plainTable(
     clear(root) as unknown as Root<HTMLDivElement>,

@@ -1,7 +1,7 @@
 /** Ranges that narrow everything: a histogram and two thumbs for each chosen quantity. */
 import type { Dataset, Quantity } from '../dataset.ts';
 import { shown, varies } from '../dataset.ts';
-import { thousands, titled } from '../labels.ts';
+import { capital, thousands } from '../labels.ts';
 import { clear, px, type Root } from '../marks/root.ts';
 import type { Interval, State } from '../state.ts';
 
@@ -23,7 +23,9 @@ export function shownQuantities(
     (one) =>
       (one.key in ranges && varies(one)) ||
       (varies(one) &&
-        (one.group === 'objective' || (one.group === 'variable' && options.variables.includes(one.name)))),
+        (one.group === 'objective' ||
+          one.group === 'yield' ||
+          (one.group === 'variable' && options.variables.includes(one.name)))),
   );
 }
 
@@ -47,7 +49,7 @@ export function renderRanges<E extends Element>(
     head
       .append('span')
       .attr('class', 'range-name')
-      .text((quantity) => titled(quantity.label));
+      .text((quantity) => capital(quantity.label));
     head.append('output').attr('class', 'range-span');
     row
       .append('svg')
@@ -76,7 +78,7 @@ function thumb(thumbs: d3Selection, name: 'low' | 'high', words: string, steps: 
     .attr('max', (quantity) => (quantity.whole ? quantity.high - quantity.low : steps))
     .attr('step', 1)
     .attr('data-end', name)
-    .attr('aria-label', (quantity) => `${titled(quantity.label)}, ${words}`);
+    .attr('aria-label', (quantity) => `${capital(quantity.label)}, ${words}`);
 }
 
 type d3Selection = import('d3').Selection<HTMLDivElement, Quantity, Element, unknown>;
@@ -113,7 +115,7 @@ function histogram(svg: SVGSVGElement, quantity: Quantity, kept: ReadonlySet<num
   const bins = quantity.whole ? Math.min(most, quantity.high - quantity.low + 1) : most;
   const all = new Uint32Array(bins);
   const left = new Uint32Array(bins);
-  quantity.values.forEach((value, i) => {
+  quantity.front.forEach((value, i) => {
     if (Number.isNaN(value)) return;
     const bin = Math.min(bins - 1, Math.floor(place(quantity, value) * (quantity.whole ? bins - 1 : bins)));
     all[bin] = (all[bin] ?? 0) + 1;

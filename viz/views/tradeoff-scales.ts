@@ -16,6 +16,7 @@ export interface TradeoffInput {
   readonly window?: readonly [number, number, number, number] | undefined;
   /** Indices of the designs that the ranges leave. */
   readonly kept: readonly number[];
+  /** Row of the open design; beyond the front's designs it is a near miss. */
   readonly open?: number | undefined;
   /** Designs that the model cannot tell from the open one. */
   readonly alike: readonly number[];
@@ -69,7 +70,7 @@ export interface TradeoffScales {
 
 /** Scales over the window, or over all designs with a little room around. */
 export function tradeoffScales(input: TradeoffInput, options: TradeoffOptions = tradeoffDefaults): TradeoffScales {
-  const [x0, x1, y0, y1] = input.window ?? [...roomy(input.x), ...roomy(input.y)];
+  const [x0, x1, y0, y1] = input.window ?? [...roomy(input.x, input.open), ...roomy(input.y, input.open)];
   return {
     x: scaleOf(input.x)
       .domain([x0, x1])
@@ -85,8 +86,11 @@ function scaleOf(quantity: Quantity): Scale {
   return quantity.log ? scaleLog() : scaleLinear();
 }
 
-function roomy({ low, high, log }: Quantity): readonly [number, number] {
-  if (!(high >= low)) return [0, 1];
+/** Room around the front, and around an open near miss that may lie outside it. */
+function roomy({ values, low: least, high: most, log }: Quantity, open: number | undefined): readonly [number, number] {
+  if (!(most >= least)) return [0, 1];
+  const own = values[open ?? 0] ?? least;
+  const [low, high] = [Math.min(least, own), Math.max(most, own)];
   if (log) return [low / 1.12, high * 1.3];
   const span = high - low || Math.abs(high) || 1;
   return [low - 0.06 * span, high + 0.06 * span];

@@ -1,11 +1,11 @@
 /** Currents and ripple over one switching period at one operating point, currents above voltages on the same time axis. */
 import { line, scaleLinear } from 'd3';
 import type { PointReport, Trace } from '../../model/assessment.ts';
-import { titled } from '../labels.ts';
+import { spoken, titled } from '../labels.ts';
 import { bottomAxis, canvasOf, type Frame, leftAxis, type Scale } from '../marks/axis.ts';
 import { numbersTable } from '../marks/numbers.ts';
 import { clear, px, type Root } from '../marks/root.ts';
-import { axisUnit, percent, show } from '../units.ts';
+import { axisUnit, loadWords, percent, show } from '../units.ts';
 
 export const waveformsDefaults = { width: 560, left: 50, right: 14, top: 44, bottom: 26, panel: 104, foot: 18 };
 
@@ -36,9 +36,9 @@ export function renderWaveforms<E extends Element>(root: Root<E>, point: PointRe
   numbers(root, point);
 }
 
-/** `12.8 V in, 50 % load, continuous`. */
+/** `12.8 V in, 50 % load, continuous`; `24 V in, 50 % load in reverse, reverse`. */
 export function operatingPoint(point: PointReport): string {
-  return `${show(point.inputVoltage, 'V')} in, ${percent(point.load, 0)} load, ${titled(point.mode).toLowerCase()}`;
+  return `${show(point.inputVoltage, 'V')} in, ${loadWords(point.load)}, ${spoken(point.mode)}`;
 }
 
 function panel(svg: Root<SVGSVGElement>, traces: readonly Trace[], unit: string, x: Scale, frame: Frame): void {

@@ -2,7 +2,7 @@
 import type { Assessment } from '../../model/assessment.ts';
 import type { Rail } from '../../model/rail/rail.ts';
 import type { Movable, Verdict } from '../assessor.ts';
-import { titled } from '../labels.ts';
+import { capital, titled } from '../labels.ts';
 import { clear, type Root } from '../marks/root.ts';
 import { digits, marginPercent, percent, show, showDifference } from '../units.ts';
 import { type DesignKnob, designKnobs, type RailKnob, railKnobs } from '../whatif.ts';
@@ -133,6 +133,7 @@ export function renderMove<E extends Element>(root: Root<E>, own: Assessment, mo
       .append('p')
       .attr('class', 'hint')
       .text('Move any knob: the moved design appears as a cross on the picture, and here is what changes.');
+    verdict(root, own, 'As chosen it ');
     return;
   }
   if (!moved.ok) {
@@ -161,13 +162,22 @@ export function renderMove<E extends Element>(root: Root<E>, own: Assessment, mo
           : `${showDifference(after - figure.value, figure.unit)} (${signed((after - figure.value) / figure.value)})`,
       );
   });
-  const broken = brokenLimits(moved.value.limits);
-  const verdict = root.append('p').attr('class', broken.length > 0 ? 'flagged' : 'kept');
-  verdict.text(
-    broken.length > 0
-      ? `Breaks ${broken.length === 1 ? 'one limit' : `${digits(broken.length)} limits`}`
-      : `Keeps every limit; tightest margin ${marginPercent(moved.value.worstMargin)}.`,
-  );
+  verdict(root, moved.value, '');
+}
+
+/** Whether every limit holds, and each that does not. A design as chosen that keeps them all needs no word. */
+function verdict<E extends Element>(root: Root<E>, { limits, worstMargin }: Assessment, start: string): void {
+  const broken = brokenLimits(limits);
+  if (broken.length === 0) {
+    if (start === '')
+      root
+        .append('p')
+        .attr('class', 'kept')
+        .text(`Keeps every limit; tightest margin ${marginPercent(worstMargin)}.`);
+    return;
+  }
+  const words = `${start}breaks ${broken.length === 1 ? 'one limit' : `${digits(broken.length)} limits`}`;
+  root.append('p').attr('class', 'flagged').text(capital(words));
   const list = root.append('ul').attr('class', 'broken');
   for (const sentence of broken) list.append('li').text(sentence);
 }
