@@ -18,6 +18,7 @@ export { type FamilyTally, familyReason } from './families.ts';
 export { type FrontDesign, type FrontFile, frontCsv, frontFile, quoteCell } from './front-file.ts';
 export { stepNetlist } from './handoff/netlist/loop.ts';
 export type { LossTerm, Prediction, Reading } from './handoff/netlist/predictions.ts';
+export { agreesWith } from './handoff/netlist/predictions.ts';
 export { stageNetlist } from './handoff/netlist/stage-netlist.ts';
 export { designNote, type HandoffContext } from './handoff/note.ts';
 export type { Proof, ProofCorner, ProofFigure, ProofLimit } from './handoff/proof.ts';

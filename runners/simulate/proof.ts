@@ -1,7 +1,9 @@
 /** A proof: a design's netlist simulated at several corners, predicted beside simulated. Plain data, stored in the run folder. */
 import {
+  agreesWith,
   type LimitFigure,
   MODEL_VERSION,
+  type Prediction,
   type Proof,
   type ProofCorner,
   type ProofFigure,
@@ -62,27 +64,27 @@ async function proveCorner(
   const netlist = stageNetlist(problem, id, solveAt(problem, genes, { ...corner, share: 0 }));
   try {
     const run = await simulator.run(netlist.text);
-    const figures = netlist.predictions.map((one) =>
-      figure(one.name, one.unit, one.value, readFigure(run, one), one.band, one.floor),
-    );
+    const figures = netlist.predictions.map((one) => figure(one, readFigure(run, one)));
     const loss = conductionIn(run, netlist.losses);
-    return { ...corner, figures: [...figures, figure('conduction loss', 'W', netlist.conduction, loss, CONDUCTION)] };
+    return {
+      ...corner,
+      figures: [
+        ...figures,
+        figure({ name: 'conduction loss', unit: 'W', value: netlist.conduction, band: CONDUCTION }, loss),
+      ],
+    };
   } catch (error) {
     return { ...corner, figures: [], failure: error instanceof Error ? error.message : String(error) };
   }
 }
 
 function figure(
-  name: string,
-  unit: string,
-  predicted: number,
+  prediction: Pick<Prediction, 'name' | 'unit' | 'value' | 'band' | 'floor' | 'bound'>,
   simulated: number,
-  band: number,
-  floor = 0,
 ): ProofFigure {
-  const difference = predicted / simulated - 1;
-  const agrees = Math.abs(difference) <= band || Math.abs(predicted - simulated) <= floor;
-  return { name, unit, predicted, simulated, difference, band, agrees };
+  const { name, unit, value, band } = prediction;
+  const difference = value / simulated - 1;
+  return { name, unit, predicted: value, simulated, difference, band, agrees: agreesWith(prediction, simulated) };
 }
 
 /** The sheet's ripple limits at the simulated corners and the load step in the closed loop at its worst corner. */
@@ -102,11 +104,10 @@ async function proveLimits(
   const simulated = limit === undefined ? undefined : await excursion(problem, id, genes, limit, simulator);
   if (limit === undefined || simulated === undefined) return { limits: ripple };
   const { value, allowed, unit } = limit;
-  const step = figure('load-step excursion', unit, value, simulated, STEP);
   // The prediction is a bound: a loop that does better agrees with it.
-  const agrees = simulated <= value * (1 + STEP);
+  const step = figure({ name: 'load-step excursion', unit, value, band: STEP, bound: true }, simulated);
   const held = { name: 'loadStep', unit, simulated, allowed, holds: simulated <= allowed };
-  return { limits: [...ripple, held], step: { ...step, agrees } };
+  return { limits: [...ripple, held], step };
 }
 
 function limitOf(name: string, corners: readonly ProofCorner[], figureName: string, allowed: number): ProofLimit {

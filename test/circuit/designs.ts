@@ -40,7 +40,7 @@ const HUNTS: readonly Hunt[] = [
 ];
 
 /** Evaluations of one hunt: enough that most designs keep every limit. */
-const EVALUATIONS = 6_000;
+const EVALUATIONS = 5_000;
 
 const tables = need(
   joinTables(

@@ -97,7 +97,7 @@ function bankResistance({ output }: SolvedPoint): number {
 
 function tail(predictions: readonly Prediction[], conduction: number, fine: boolean): string[] {
   const lines = [
-    `.options method=gear reltol=1e-4 abstol=${fine ? '1e-6' : '1e-5'} vntol=${fine ? '1e-6' : '1e-4'}`,
+    `.options method=${fine ? 'gear' : 'trap'} reltol=1e-4 abstol=${fine ? '1e-6' : '1e-5'} vntol=${fine ? '1e-6' : '1e-4'}`,
     '.tran {tmax} {tstop} {tfrom} {tmax} uic',
     '* what the model predicts, and the measurement beside it',
   ];

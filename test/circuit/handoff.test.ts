@@ -1,0 +1,95 @@
+/**
+ * The exported netlist of twenty designs over all architectures: the same file in the system's simulator and in the packaged
+ * one, against each other and against what the model says. Bands: mean output 1 %, ripple 5 %, rms 2 %, conduction 3 %
+ * (design of this project); a ripple or a capacitor current counts only from 5 % of what is allowed on.
+ */
+import { spawnSync } from 'node:child_process';
+import { mkdtempSync, rmSync, writeFileSync } from 'node:fs';
+import { tmpdir } from 'node:os';
+import { join } from 'node:path';
+import { beforeAll, describe, expect, it } from 'vitest';
+import { agreesWith, fullLoad, solveAt, stageNetlist } from '../../model/index.ts';
+import { conductionIn, readFigure } from '../../runners/simulate/figures.ts';
+import { nativePath, nativeSimulator } from '../../runners/simulate/native.ts';
+import { packagedSimulator } from '../../runners/simulate/packaged.ts';
+import type { Run, Simulator } from '../../runners/simulate/run.ts';
+import { needs } from '../support/needs.ts';
+import { type FoundDesign, foundDesigns } from './designs.ts';
+
+const found = foundDesigns();
+const netlists = new Map(
+  found.map(({ name, problem, genes }) => [
+    name,
+    stageNetlist(problem, problem.id(genes), solveAt(problem, genes, fullLoad(problem.rail))),
+  ]),
+);
+const native = nativePath();
+
+function netlistOf({ name }: FoundDesign) {
+  const netlist = netlists.get(name);
+  if (netlist === undefined) throw new Error(`no netlist of ${name}`);
+  return netlist;
+}
+
+it('twenty designs of seven architectures', () => {
+  expect(found).toHaveLength(20);
+  expect(new Set(found.map(({ problem, genes }) => problem.record(genes).architecture)).size).toBe(7);
+});
+
+describe.runIf(needs('ngspice'))('in the native simulator', () => {
+  const simulator: Simulator = nativeSimulator(native ?? '');
+
+  it.each(found)('the model agrees: $name', async (design) => {
+    const netlist = netlistOf(design);
+    const run = await simulator.run(netlist.text);
+    const beyond = netlist.predictions.flatMap((prediction) => {
+      const simulated = readFigure(run, prediction);
+      const { name, value } = prediction;
+      return agreesWith(prediction, simulated) ? [] : [`${name}: ${value} against ${simulated}`];
+    });
+    const loss = conductionIn(run, netlist.losses);
+    if (Math.abs(netlist.conduction / loss - 1) > 0.03)
+      beyond.push(`conduction: ${netlist.conduction} against ${loss}`);
+    expect(beyond).toEqual([]);
+  });
+
+  it('runs the file unchanged and prints the measurements', () => {
+    const folder = mkdtempSync(join(tmpdir(), 'chopfront-netlist-'));
+    try {
+      const design = found[0];
+      const { text, predictions } = netlistOf(design);
+      const file = join(folder, 'stage.cir');
+      writeFileSync(file, text);
+      const { stdout, stderr, status } = spawnSync(native ?? '', ['-b', file], { encoding: 'utf8' });
+      expect(status).toBe(0);
+      expect(stderr).not.toMatch(/error|warning|unknown|unrecognized/i);
+      const mean = /mean_output_voltage\s*=\s*(\S+)/.exec(stdout)?.[1];
+      expect(Math.abs(Number(mean) / predictions[0].value - 1)).toBeLessThan(0.01);
+    } finally {
+      rmSync(folder, { recursive: true });
+    }
+  });
+});
+
+describe.runIf(needs('ngspice'))('in both simulators', () => {
+  let packaged: Simulator | undefined;
+  beforeAll(async () => {
+    packaged = await packagedSimulator();
+  });
+
+  // One of each architecture: the packaged simulator is slow.
+  const each = [...new Map(found.map((design) => [design.problem.record(design.genes).architecture, design])).values()];
+
+  it.each(each)('within 0.5 %: $name', async (design) => {
+    const netlist = netlistOf(design);
+    const a: Run = await nativeSimulator(native ?? '').run(netlist.text);
+    const b = await packaged?.run(netlist.text);
+    if (b === undefined) throw new Error('the packaged simulator is a dependency of the tests');
+    const apart = netlist.predictions.flatMap((prediction) => {
+      const [x, y] = [readFigure(a, prediction), readFigure(b, prediction)];
+      const { name, floor = 0 } = prediction;
+      return Math.abs(x / y - 1) <= 0.005 || Math.abs(x - y) <= 0.1 * floor ? [] : [`${name}: ${x} against ${y}`];
+    });
+    expect(apart).toEqual([]);
+  });
+});
