@@ -1,14 +1,14 @@
 /** The price of a ripple limit. */
 import type { Section } from '../reference/markdown.ts';
-import { spentAt } from '../scenarios/ripple-limit.ts';
+import { wholeAndQuarter } from '../scenarios/ripple-limit.ts';
 import { percent, stated } from '../scenarios/statement.ts';
 import { line, section } from './section.ts';
 
-const RIPPLE = 40_000;
+const RIPPLE = 25_000;
 
 /** The winch with its ripple limit and with a quarter of it, as a section. */
 export function rippleSection(): Section {
-  const [whole, quarter] = [1, 0.25].map((share) => spentAt(share, RIPPLE));
+  const [whole, quarter] = wholeAndQuarter(RIPPLE);
   const dearer =
     quarter.phases > whole.phases || quarter.capacitance > whole.capacitance || quarter.volume > whole.volume;
   const rows = [

@@ -11,14 +11,24 @@ export interface Spent {
   readonly hypervolume: number;
 }
 
-/** Sweeps the sheet with `share` of its ripple limit. */
-export function spentAt(share: number, evaluations: number): Spent {
+/** Seeds of the sweeps at each limit: one alone may stop at a local optimum. */
+const SEEDS = ['a', 'b', 'c'];
+
+/** The sheet with its ripple limit and with a quarter of it; each seed may spend `evaluations` on each. */
+export function wholeAndQuarter(evaluations: number): readonly [whole: Spent, quarter: Spent] {
+  const quarter = spentAt(0.25, evaluations);
+  const whole = spentAt(1, evaluations);
+  // What keeps a quarter of the limit keeps the limit.
+  return [whole.volume <= quarter.volume ? whole : { ...quarter, hypervolume: whole.hypervolume }, quarter];
+}
+
+/** The smallest design of all seeds, and the largest hypervolume, with `share` of the ripple limit. */
+function spentAt(share: number, evaluations: number): Spent {
   const rail = shippedRail('buoy-winch');
-  const found = sweep(
-    spaceOf({ ...rail, output: { ...rail.output, ripple: share * rail.output.ripple } }),
-    evaluations,
-  );
-  return { ...smallest(found), hypervolume: found.hypervolume };
+  const problem = spaceOf({ ...rail, output: { ...rail.output, ripple: share * rail.output.ripple } });
+  const all = SEEDS.map((seed) => sweep(problem, evaluations, seed));
+  const best = all.map(smallest).reduce((least, one) => (one.volume < least.volume ? one : least));
+  return { ...best, hypervolume: Math.max(...all.map(({ hypervolume }) => hypervolume)) };
 }
 
 function smallest(found: Sweep): Omit<Spent, 'hypervolume'> {

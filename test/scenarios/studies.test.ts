@@ -2,7 +2,7 @@
 import { describe, expect, it } from 'vitest';
 import { smallestAt } from './heat-sink.ts';
 import { handSheet, handSweep, ratioGain, TRANSFORMER_FAMILIES } from './high-ratio.ts';
-import { spentAt } from './ripple-limit.ts';
+import { wholeAndQuarter } from './ripple-limit.ts';
 import { type Sweep, searching, shippedRail, spaceOf, sweep } from './spaces.ts';
 
 const BUCK = ['buck-synchronous'] as const;
@@ -68,7 +68,7 @@ describe('48 V to 12 V, 500 W, still air', () => {
 
 describe('a ripple limit cut to a quarter', () => {
   it('costs phases, capacitance or volume, and hypervolume', () => {
-    const [whole, quarter] = [1, 0.25].map((share) => spentAt(share, 10_000));
+    const [whole, quarter] = wholeAndQuarter(8_000);
     const dearer = [
       quarter.phases > whole.phases,
       quarter.capacitance > whole.capacitance,
