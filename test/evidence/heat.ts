@@ -5,8 +5,8 @@ import { percent, stated } from '../scenarios/statement.ts';
 import { line, section, TRADE } from './section.ts';
 
 /** Evaluations of each of the sweeps at a frequency. */
-const HEAT = 10_000;
-const HEAT_SEEDS = ['a', 'b', 'c', 'd'];
+const HEAT = 15_000;
+const HEAT_SEEDS = ['a', 'b', 'c', 'd', 'e', 'f'];
 
 /** The curve of the smallest design over frequency, as a section. */
 export function heatSection(): Section {

@@ -90,7 +90,7 @@ function frequencyTable(demo: Sweep): string[] {
     ]),
   );
   return [
-    'Mean shares of the full-load loss in the chosen designs. Switching losses rise with frequency and bound it from above through the efficiency limit; size bounds it from below.',
+    'Mean shares of the full-load loss in the chosen designs. Going faster buys volume and pays in switching loss, until the efficiency limit stops it; going slower buys nothing once the choke loses what the switches save.',
     '',
     '| kHz | designs | switching, dead time, gate | choke | switch conduction | mean volume, cm³ |',
     '|---|---:|---:|---:|---:|---:|',
