@@ -1,27 +1,14 @@
 /**
  * What a run has found, apart from how it goes on: the archive of feasible designs, the near misses, and where they came
- * from. It is what `merge`, `compare` and the page read; `archive.bin` holds it, sealed.
+ * from, and a sample of everything feasible. It is what `merge` and the page read; `archive.bin` holds it, sealed.
  */
 import { readFileSync } from 'node:fs';
-import type { Designs, NearMissDesigns } from '../../optimizer/index.ts';
+import type { DesignSample, Designs, NearMissDesigns } from '../../optimizer/index.ts';
 import { reasonOf, refusal, systemCode } from '../errors.ts';
-import type { HistoryRow } from '../sweep/history.ts';
 import { writeWhole } from './files.ts';
 import { RUN_FILES, runFile } from './folder.ts';
 import { seal, unseal } from './sealed.ts';
-
-/** One ring of islands that contributed. */
-export interface Source {
-  readonly seed: string;
-  readonly shards: number;
-  readonly shard: number;
-  readonly epoch: number;
-  readonly evaluations: number;
-  readonly feasible: number;
-  readonly history: readonly HistoryRow[];
-  /** How much of each family was tried, in the order of the problem's families; absent where it was not counted. */
-  readonly families?: readonly { readonly evaluated: number; readonly feasible: number }[];
-}
+import type { Source } from './sources.ts';
 
 /** What was found. */
 export interface Found {
@@ -31,14 +18,17 @@ export interface Found {
   readonly sources: readonly Source[];
   readonly archive: Designs;
   readonly nearMisses: NearMissDesigns;
+  /** At most 50,000 of the feasible designs evaluated. */
+  readonly sample: DesignSample;
 }
 
 type Header = Pick<Found, 'railHash' | 'partsHash' | 'sources'> & {
   readonly designs: number;
   readonly nearMisses: number;
+  readonly sampled: number;
 };
 
-const KIND = 'archive 1';
+const KIND = 'archive 2';
 
 /** Writes `archive.bin` into a run folder. */
 export function writeFound(folder: string, found: Found): void {
@@ -57,23 +47,26 @@ export function readFound(folder: string): Found {
 
 /** The bytes of `archive.bin`. */
 function packFound(found: Found): Uint8Array {
-  const { archive, nearMisses, ...rest } = found;
-  const header: Header = { ...rest, designs: archive.count, nearMisses: nearMisses.count };
+  const { archive, nearMisses, sample, ...rest } = found;
+  const counts = { designs: archive.count, nearMisses: nearMisses.count, sampled: sample.count };
+  const header: Header = { ...rest, ...counts };
   const arrays = [archive, nearMisses].flatMap(({ genes, objectives, violations }) => [genes, objectives, violations]);
-  const parts = [...arrays, nearMisses.limit].map((a) => new Uint8Array(a.buffer, a.byteOffset, a.byteLength));
+  const all = [...arrays, nearMisses.limit, sample.keys, sample.objectives, sample.family];
+  const parts = all.map((a) => new Uint8Array(a.buffer, a.byteOffset, a.byteLength));
   return seal(KIND, { header, parts });
 }
 
 /** What those bytes hold. Throws an `Error` that says what is wrong with them. */
 function unpackFound(bytes: Uint8Array): Found {
   const { header, parts } = unseal(KIND, bytes);
-  const { designs, nearMisses, ...rest } = header as Header;
+  const { designs, nearMisses, sampled, ...rest } = header as Header;
   const doubles = parts.slice(0, 6).map((part) => new Float64Array(part.buffer));
   const [genes, objectives, violations, missGenes, missObjectives, missViolations] = doubles;
-  const limit = parts[6];
+  const [limit, keys, points, family] = parts.slice(6);
   if (!genes || !objectives || !violations || !missGenes || !missObjectives || !missViolations || !limit) {
     throw new Error('parts are missing');
   }
+  if (!keys || !points || !family) throw new Error('the sample is missing');
   return {
     ...rest,
     archive: { count: designs, genes, objectives, violations },
@@ -83,6 +76,12 @@ function unpackFound(bytes: Uint8Array): Found {
       objectives: missObjectives,
       violations: missViolations,
       limit: new Int32Array(limit.buffer),
+    },
+    sample: {
+      count: sampled,
+      keys: new Float64Array(keys.buffer),
+      objectives: new Float64Array(points.buffer),
+      family: new Int32Array(family.buffer),
     },
   };
 }

@@ -1,16 +1,23 @@
-/** `history.csv`: how the front of each ring of islands grew. Nothing in it comes from the clock. */
-import type { Source } from './found.ts';
+/** `history.csv`: how the front of each ring of islands grew, and that of each island by itself. Nothing in it comes from the clock. */
+import type { Source } from './sources.ts';
 
 const HEAD = ['seed', 'shard', 'epoch', 'evaluations', 'feasible', 'front', 'hypervolume'];
 
-/** The table's text: a line for each row of each ring's history. */
+/** The table's text: a line for each row of each ring's history, a column for each island (empty where it was not measured). */
 export function historyCsv(sources: readonly Source[]): string {
-  const lines = sources.flatMap(({ seed, shard, history }) =>
-    history.map((row) =>
-      [cell(seed), shard, row.epoch, row.evaluations, row.feasible, row.frontSize, row.hypervolume].join(','),
-    ),
+  const most = sources.reduce(
+    (all, source) => source.history.reduce((n, row) => Math.max(n, row.islands.length), all),
+    0,
   );
-  return `${[HEAD.join(','), ...lines].join('\n')}\n`;
+  const islands = Array.from({ length: most }, (_, i) => i);
+  const lines = sources.flatMap(({ seed, shard, history }) =>
+    history.map((row) => {
+      const whole = [cell(seed), shard, row.epoch, row.evaluations, row.feasible, row.frontSize, row.hypervolume];
+      return [...whole, ...islands.map((i) => row.islands[i] ?? '')].join(',');
+    }),
+  );
+  const head = [...HEAD, ...islands.map((i) => `island ${i}`)];
+  return `${[head.join(','), ...lines].join('\n')}\n`;
 }
 
 // A seed is any text: quoted where it must be, and never a formula for a spreadsheet.

@@ -1,11 +1,12 @@
 /** Gathers what a page embeds from the files of a run. */
 import { explainRail, frontFile, type RailExplanation, type RailProblem } from '../../model/index.ts';
-import { type Designs, mergeNearMisses } from '../../optimizer/index.ts';
+import { mergeNearMisses } from '../../optimizer/index.ts';
 import type { Cloud, FamilyNote, NearMiss, PageData, RunRecord as PageRun } from '../../viz/data.ts';
 import { type Inputs, problemOf, take } from '../inputs.ts';
 import { rowsOf } from '../sweep/grid.ts';
 import { type Found, readFound } from './found.ts';
 import { readFront } from './front.ts';
+import { pageHistory } from './page-history.ts';
 import { readProofs } from './proofs.ts';
 import { type RunRecord, readRecord } from './record.ts';
 import { readSnapshot } from './snapshot.ts';
@@ -23,8 +24,8 @@ export function gatherPage(folder: string): PageData {
     rail: inputs.rail,
     tables: inputs.tables,
     front,
-    cloud: cloudOf(problem, found.archive),
-    history: found.sources.flatMap((source) => source.history).map((row) => ({ ...row, islands: [] })),
+    cloud: cloudOf(problem, found),
+    history: pageHistory(found.sources),
     nearMisses: nearMissesOf(problem, found),
     families: familyNotes(
       problem,
@@ -53,20 +54,9 @@ function agreementOf({ trust }: RunRecord): Pick<PageRun, 'agreement'> {
   return list.length > 1 ? { agreement: list } : {};
 }
 
-/** Most points behind the front. */
-const CLOUD = 50_000;
-
-function cloudOf(problem: RailProblem, designs: Designs): Cloud {
-  const step = Math.max(1, Math.ceil(designs.count / CLOUD));
-  const m = problem.objectives.length;
-  const family: number[] = [];
-  const objectives: number[] = [];
-  for (let i = 0; i < designs.count; i += step) {
-    const width = problem.genes.length;
-    family.push(problem.families.of(designs.genes.subarray(i * width, (i + 1) * width)));
-    objectives.push(...designs.objectives.subarray(i * m, (i + 1) * m));
-  }
-  return { families: problem.families.names, family, objectives };
+/** The sample of everything feasible that was evaluated. */
+function cloudOf(problem: RailProblem, { sample }: Found): Cloud {
+  return { families: problem.families.names, family: sample.family, objectives: sample.objectives };
 }
 
 function nearMissesOf(problem: RailProblem, found: Found): NearMiss[] {

@@ -12,6 +12,8 @@ export interface HistoryRow {
   readonly frontSize: number;
   /** Normalised by each objective's ideal and reference, 0 … 1. */
   readonly hypervolume: number;
+  /** The same of each island's own archive, in island order; empty in most rows of a long sweep. */
+  readonly islands: readonly number[];
 }
 
 /** Rows in order of epoch, each a multiple of `stride`. */
@@ -31,6 +33,16 @@ export function newHistory(): History {
 /** Whether the history wants a row at this epoch. */
 export function isDue(history: History, epoch: number): boolean {
   return epoch % history.stride === 0;
+}
+
+/** Rows with islands in each doubling of the epochs. */
+const APART = 32;
+
+/** Whether the row of this epoch tells the islands apart: all of the first 64, then 32 in each doubling. */
+export function tellsIslands(epoch: number): boolean {
+  let step = 1;
+  while (epoch / step > 2 * APART) step *= 2;
+  return epoch % step === 0;
 }
 
 /** Adds a row whose epoch is due. */

@@ -11,6 +11,7 @@ import { sweepLeftovers } from '../run-folder/files.ts';
 import type { Found } from '../run-folder/found.ts';
 import { takeLock } from '../run-folder/lock.ts';
 import { type Fault, type RunRecord, writeRecord } from '../run-folder/record.ts';
+import { listSources } from '../run-folder/sources.ts';
 import type { Budget } from './budget.ts';
 import { createMeter } from './meter.ts';
 import { packedIslands, resumeFrom, ringState } from './resume.ts';
@@ -118,7 +119,7 @@ async function carryOut(plan: RunPlan, search: Search, begun: Begun, saver: Save
   };
   const { budget, reporter, describeBest, problem, checkpoints } = plan;
   const { shards } = plan.identity;
-  const { measure, neighbours, tally } = search;
+  const { apart, measure, neighbours, tally } = search;
   const meter = createMeter({ rings, reporter, budget, shards, measure, describeBest, lastSave: () => saver.last });
   try {
     const sweep = startSweep({
@@ -130,6 +131,7 @@ async function carryOut(plan: RunPlan, search: Search, begun: Begun, saver: Save
       neighbours,
       tally,
       measure,
+      apart,
       geneNames: problem.genes.map((gene) => gene.name),
       secondsBefore: begun.seconds,
       save: (reason) => trySave(plan, save, reason),
@@ -168,16 +170,15 @@ function momentOf(plan: RunPlan, search: Search, begun: Begun, status: RunRecord
   const { rings } = begun;
   const { railHash, partsHash, seed, shards } = plan.identity;
   const survey = search.survey(rings.flatMap(islandsOf));
-  const { archive, nearMisses } = survey;
+  const { archive, nearMisses, sample } = survey;
   const sources = rings.map((ring) => {
     const { shard, epoch, history } = ring;
-    const families = search.families(islandsOf(ring));
-    return { seed, shards, shard, epoch, ...tallyOf(ring), history: history.rows, families };
+    return { seed, shards, shard, epoch, ...tallyOf(ring), history: history.rows, ...search.went(islandsOf(ring)) };
   });
   return {
     rings: rings.map(ringState),
     islands: packedIslands(rings),
-    found: { railHash, partsHash, sources, archive, nearMisses },
+    found: { railHash, partsHash, sources: listSources(sources), archive, nearMisses, sample },
     record: recordOf(plan, begun, survey, status, seconds),
   };
 }

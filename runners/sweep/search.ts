@@ -1,14 +1,14 @@
 /** The optimizer as a sweep uses it: islands as bytes in, counts, measures and findings out. */
 import {
+  createMerger,
   createPlan,
+  type DesignSample,
   type Designs,
   hypervolumeOf,
   type Island,
   joinDesigns,
   mergeArchives,
-  mergeNearMisses,
   type NearMissDesigns,
-  NO_DESIGNS,
   OPERATORS,
   type Plan,
   packIsland,
@@ -16,6 +16,7 @@ import {
   unpackIsland,
 } from '../../optimizer/index.ts';
 import type { Problem } from '../../optimizer/problem.ts';
+import type { RingWent, Source } from '../run-folder/sources.ts';
 import { measureDesigns } from './grid.ts';
 import type { Measure } from './measure.ts';
 import type { IslandState } from './ring.ts';
@@ -40,22 +41,19 @@ export interface Search {
   measure(islands: readonly IslandState[]): Measure;
   /** All that is to be said of islands together. */
   survey(islands: readonly IslandState[]): Survey;
-  /** How much of each family was tried, in the problem's order. */
-  families(islands: readonly IslandState[]): FamilyTally[];
+  /** Hypervolume of each island by itself. */
+  apart(islands: readonly IslandState[]): number[];
+  /** How much of each family was tried, in the problem's order, and how the search of a ring went. */
+  went(islands: readonly IslandState[]): Required<Pick<Source, 'families' | 'went'>>;
   /** All designs that the islands hold, feasible or not. */
   atHand(islands: readonly IslandState[]): Designs;
-}
-
-/** Designs of one family that were evaluated, and those of them that keep every limit. */
-export interface FamilyTally {
-  readonly evaluated: number;
-  readonly feasible: number;
 }
 
 /** What islands have found together. */
 export interface Survey {
   readonly archive: Designs;
   readonly nearMisses: NearMissDesigns;
+  readonly sample: DesignSample;
   readonly measure: Measure;
   /** How well the islands agree, what was avoided, which operators feed the archive. */
   readonly trust: Readonly<Record<string, unknown>>;
@@ -71,13 +69,18 @@ export function createSearch(problem: Problem): Search {
     measure: (islands) => measureDesigns(problem, mergeArchives(problem, open(islands))),
     survey: (islands) => {
       const opened = open(islands);
-      const archive = mergeArchives(problem, opened);
+      const merger = createMerger(problem);
+      for (const island of opened) merger.add(island);
+      const archive = merger.archive();
       const measure = measureDesigns(problem, archive);
-      // All of them: which of them beat the front is decided when the front is final.
-      const nearMisses = mergeNearMisses(problem, opened, NO_DESIGNS);
-      return { archive, nearMisses, measure, trust: trustOf(problem, opened, measure.hypervolume) };
+      const trust = trustOf(problem, opened, measure.hypervolume);
+      return { archive, nearMisses: merger.nearMisses(), sample: merger.sample(), measure, trust };
     },
-    families: (islands) => familiesOf(problem, open(islands)),
+    apart: (islands) => open(islands).map((island) => volumeOf(problem, island)),
+    went: (islands) => {
+      const opened = open(islands);
+      return { families: familiesOf(problem, opened), went: wentOf(opened) };
+    },
     atHand: (islands) => joinDesigns(open(islands).map((island) => island.population)),
   };
 }
@@ -105,7 +108,7 @@ function ringNeighbours(island: number, islands: number): readonly number[] {
   return [...new Set([(island + islands - 1) % islands, (island + 1) % islands])].filter((other) => other !== island);
 }
 
-function familiesOf(problem: Problem, islands: readonly Island[]): FamilyTally[] {
+function familiesOf(problem: Problem, islands: readonly Island[]): NonNullable<Source['families']> {
   const sum = (pick: (island: Island) => number): number => islands.reduce((total, island) => total + pick(island), 0);
   return problem.families.names.map((_, i) => ({
     evaluated: sum((island) => island.record.evaluated[i] ?? 0),
@@ -113,15 +116,24 @@ function familiesOf(problem: Problem, islands: readonly Island[]): FamilyTally[]
   }));
 }
 
-function trustOf(problem: Problem, islands: readonly Island[], whole: number): Survey['trust'] {
+function volumeOf(problem: Problem, island: Island): number {
+  return island.archive.count === 0 ? 0 : hypervolumeOf(problem, island.archive);
+}
+
+function wentOf(islands: readonly Island[]): RingWent {
   const sum = (pick: (island: Island) => number): number => islands.reduce((total, island) => total + pick(island), 0);
-  const own = islands.map((island) => (island.archive.count === 0 ? 0 : hypervolumeOf(problem, island.archive)));
   const shares = OPERATORS.map((name, i) => [name, sum((island) => island.shares[i] ?? 0) / islands.length]);
   return {
-    agreement: own.map((hypervolume) => (whole > 0 ? Math.min(1, hypervolume / whole) : 0)),
-    operatorShares: Object.fromEntries(shares),
+    islands: islands.length,
     duplicates: sum((island) => island.counters.duplicates),
     restarts: sum((island) => island.counters.restarts),
     notComputable: sum((island) => island.counters.notComputable),
+    operatorShares: Object.fromEntries(shares),
   };
+}
+
+function trustOf(problem: Problem, islands: readonly Island[], whole: number): Survey['trust'] {
+  const { islands: _, ...went } = wentOf(islands);
+  const agreement = islands.map((island) => (whole > 0 ? Math.min(1, volumeOf(problem, island) / whole) : 0));
+  return { agreement, ...went };
 }

@@ -7,7 +7,7 @@ import { createNote, readNote } from '../engines/protocol.ts';
 import { refusal } from '../errors.ts';
 import type { Fault } from '../run-folder/record.ts';
 import type { Budget } from './budget.ts';
-import { addRow, isDue } from './history.ts';
+import { addRow, isDue, tellsIslands } from './history.ts';
 import type { Measure } from './measure.ts';
 import {
   completeEpoch,
@@ -36,6 +36,8 @@ export interface SweepSetup {
   tally(bytes: Uint8Array): { readonly evaluations: number; readonly feasible: number };
   /** Measures the union of islands. */
   measure(islands: readonly IslandState[]): Measure;
+  /** Hypervolume of each island by itself. */
+  apart(islands: readonly IslandState[]): readonly number[];
   /** Seconds swept before this start. */
   readonly secondsBefore: number;
   /** Called when a checkpoint is due and at the end; throws where it cannot save. */
@@ -178,13 +180,15 @@ function closeEpoch(setup: SweepSetup, ring: Ring, seconds: number): void {
 
 function addHistory(setup: SweepSetup, ring: Ring): void {
   const { evaluations, feasible } = tallyOf(ring);
-  const { frontSize, hypervolume } = setup.measure(islandsOf(ring));
+  const islands = islandsOf(ring);
+  const { frontSize, hypervolume } = setup.measure(islands);
   addRow(ring.history, {
     epoch: ring.epoch,
     evaluations,
     feasible: evaluations === 0 ? 0 : feasible / evaluations,
     frontSize,
     hypervolume,
+    islands: tellsIslands(ring.epoch) ? setup.apart(islands) : [],
   });
 }
 

@@ -1,7 +1,7 @@
 /** When a sweep ends, and the record of how its front grew. */
 import { describe, expect, it } from 'vitest';
 import { shareUsed } from '../../runners/sweep/budget.ts';
-import { addRow, HISTORY_ROWS, isDue, lastGain, newHistory } from '../../runners/sweep/history.ts';
+import { addRow, HISTORY_ROWS, isDue, lastGain, newHistory, tellsIslands } from '../../runners/sweep/history.ts';
 
 const row = (epoch: number, hypervolume: number) => ({
   epoch,
@@ -9,6 +9,7 @@ const row = (epoch: number, hypervolume: number) => ({
   feasible: 1,
   frontSize: 1,
   hypervolume,
+  islands: [],
 });
 
 describe('a budget', () => {
@@ -43,5 +44,17 @@ describe('the history', () => {
       for (const one of [history, gone]) if (isDue(one, epoch)) addRow(one, row(epoch, 1));
     }
     expect(gone).toEqual(history);
+  });
+
+  it('tells the islands apart in each of the first 64 epochs, then 32 times in each doubling, in rows that stay', () => {
+    const told = Array.from({ length: 1024 }, (_, i) => i + 1).filter(tellsIslands);
+    const between = (low: number, high: number): number => told.filter((epoch) => epoch > low && epoch <= high).length;
+    expect([between(0, 64), between(64, 128), between(128, 256), between(512, 1024)]).toEqual([64, 32, 32, 32]);
+    const history = newHistory();
+    for (let epoch = 1; epoch <= 20_000; epoch++) {
+      if (isDue(history, epoch)) addRow(history, { ...row(epoch, 1), islands: tellsIslands(epoch) ? [1] : [] });
+    }
+    const late = history.rows.filter((one) => one.epoch > 10_000 && one.islands.length > 0);
+    expect(late.length).toBeGreaterThanOrEqual(16);
   });
 });

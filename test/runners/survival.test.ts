@@ -16,6 +16,8 @@ const source = { work: 15_000 };
 const filesOf = (folder: string) => ({
   front: readFileSync(join(folder, 'front.csv'), 'utf8'),
   history: readFileSync(join(folder, 'history.csv'), 'utf8'),
+  // Front, near misses, families, and the sample of everything feasible.
+  archive: readFileSync(join(folder, 'archive.bin'), 'latin1'),
 });
 const saved = (folder: string): boolean => {
   try {
