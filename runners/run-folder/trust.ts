@@ -22,7 +22,7 @@ export function trustOfSources(
 }
 
 /** Hypervolume that each ring reached alone, as a share of the whole, 0 … 1. */
-export function agreementOfSources(sources: readonly Source[], whole: number): number[] {
+function agreementOfSources(sources: readonly Source[], whole: number): number[] {
   return sources.map(({ history }) => (whole > 0 ? Math.min(1, (history.at(-1)?.hypervolume ?? 0) / whole) : 0));
 }
 

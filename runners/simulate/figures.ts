@@ -54,7 +54,7 @@ function levelFrom(
 }
 
 /** Mean over the kept time. */
-export function meanOf(time: ArrayLike<number>, values: ArrayLike<number>): number {
+function meanOf(time: ArrayLike<number>, values: ArrayLike<number>): number {
   let sum = 0;
   for (let i = 1; i < time.length; i++) {
     sum += 0.5 * (at(time, i) - at(time, i - 1)) * (at(values, i) + at(values, i - 1));
@@ -63,7 +63,7 @@ export function meanOf(time: ArrayLike<number>, values: ArrayLike<number>): numb
 }
 
 /** Root of the mean square over the kept time. */
-export function rmsOf(time: ArrayLike<number>, values: ArrayLike<number>): number {
+function rmsOf(time: ArrayLike<number>, values: ArrayLike<number>): number {
   let sum = 0;
   for (let i = 1; i < time.length; i++) {
     const [a, b] = [at(values, i - 1), at(values, i)];
