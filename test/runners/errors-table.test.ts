@@ -200,6 +200,11 @@ const EXPECTED: Readonly<Record<string, Row>> = {
     1,
     'the scheduler refused the job: sbatch: error: invalid partition specified: moon',
   ],
+  'simulator-missing': [
+    {},
+    2,
+    'no circuit simulator here: install ngspice, or the optional package eecircuit-engine, and try again',
+  ],
   'page-failed': [{ reason: 'page-data is empty' }, 1, 'the page could not be drawn: page-data is empty'],
 };
 

@@ -289,14 +289,50 @@ describe('parts barred and preferred', () => {
 
 describe('hostile names', () => {
   const HOSTILE = ['<b>x</b>', '</script>', '"quoted', '\u001b[2J', '\u202egnp', '=1+1', 'x'.repeat(10_000)];
-
-  test.each(HOSTILE)('%j as a part is refused, and shown as text', (name) => {
-    const report = inspectTableText(table(own(FIRST, `"${name.replaceAll('"', '""')}"`)), 'mine.csv');
-    expect(report.rejected).toBe(1);
-    const text = reportText(report, (line) => line);
+  const expectMereText = (text: string): void => {
     for (const line of text.split('\n')) {
       expect(line).not.toMatch(/[\p{Cc}\p{Cf}]/u);
       expect(line.length).toBeLessThan(1000);
+    }
+  };
+
+  test.each(HOSTILE)('%j as a part is refused, and shown as text', async (name) => {
+    const text = table(own(FIRST, `"${name.replaceAll('"', '""')}"`));
+    const report = inspectTableText(text, 'mine.csv');
+    expect(report.rejected).toBe(1);
+    expectMereText(reportText(report, (line) => line));
+  });
+
+  test.each(HOSTILE)('%j as a rail, a part to bar and a table is refused, and shown as text', (name) => {
+    const quoted = JSON.stringify(name);
+    const path = sheetWith(
+      `tables: [built-in, ${quoted}]\n  bar: [${quoted}]`,
+      {},
+      BUOY.replace('rail: buoy-sensors', `rail: ${quoted}`),
+    );
+    expect(() => readSheet(path)).toThrow(/rail\.yaml:\d+:\d+: /);
+    try {
+      readSheet(path);
+    } catch (error) {
+      expectMereText(error instanceof Error ? error.message : '');
+    }
+  });
+
+  test('JSON on stdout holds them escaped: it reads back the same and steers no terminal', async () => {
+    const folder = newFolder();
+    const name = 'mine\u202e\u009b2J.csv';
+    writeFileSync(join(folder, name), table(own(FIRST, 'A1')));
+    const { stdout, status } = await chopfront('parts', 'check', join(folder, name), '--json');
+    expect(status).toBe(0);
+    expectMereText(stdout);
+    expect(JSON.parse(stdout)[0].file).toBe(join(folder, name));
+  });
+
+  // Names that a table may hold: what a spreadsheet would take for a formula, or for two cells, is not among them.
+  test('no allowed name begins a formula or breaks a row of a CSV', () => {
+    for (const name of ['=A', '+A', '-A', '@A', 'A,B', 'A"B', 'A\tB', 'A;B']) {
+      const { rejected } = inspectTableText(table(own(FIRST, `"${name.replaceAll('"', '""')}"`)), 'mine.csv');
+      expect(rejected, name).toBe(1);
     }
   });
 });
