@@ -52,7 +52,11 @@ export function summarise(problem: RailProblem, genes: Float64Array, rows: Float
     Float64Array.from({ length: samples }, (_, i) => rows[i * layout.width + place]);
   const slacks = problem.limits.map((_, k) => column(first + k));
   const objectives = problem.objectives.map((_, k) => column(first + layout.limits + k));
-  const tightest = worstSlack(slacks, samples);
+  // A limit on a whole number that just holds is no risk, and would hide the one that is.
+  const fine = slacks.filter(
+    (slack, k) => problem.limitDefinitions[k].whole !== true || slack.some((value) => value < 0),
+  );
+  const tightest = worstSlack(fine, samples);
   const figures = [
     ...problem.objectives.map(({ name }, k) => ({ name, values: objectives[k] })),
     { name: 'tightest limit', values: tightest },
