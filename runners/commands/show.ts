@@ -30,8 +30,12 @@ async function runShow(folder: string, id: string, options: ShowOptions): Promis
   const { designText } = await import('./design-text.ts');
   const { painter } = await import('../terminal/colour.ts');
   sayPainted(designText(assessment, problem, painter(process.stdout)));
-  const { pricesIn } = await import('../run-folder/prices.ts');
+  const { requirementPrices } = await import('../../model/index.ts');
+  const { gatherPage } = await import('../run-folder/page-data.ts');
   const { pricesText } = await import('./prices-text.ts');
-  const prices = pricesText(pricesIn(folder));
-  if (prices !== '') sayPainted(`\n${prices}`);
+  const { familiesText } = await import('./families-text.ts');
+  const { front, nearMisses, families } = gatherPage(folder);
+  for (const text of [pricesText(requirementPrices(front, nearMisses)), familiesText(families)]) {
+    if (text !== '') sayPainted(`\n${text}`);
+  }
 }

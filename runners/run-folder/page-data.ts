@@ -1,9 +1,10 @@
 /** Gathers what a page embeds from the files of a run. */
-import { explainRail, frontFile, type RailExplanation, type RailProblem } from '../../model/index.ts';
+import { explainRail, frontFile, type RailProblem } from '../../model/index.ts';
 import { mergeNearMisses } from '../../optimizer/index.ts';
-import type { Cloud, FamilyNote, NearMiss, PageData, RunRecord as PageRun } from '../../viz/data.ts';
+import type { Cloud, NearMiss, PageData, RunRecord as PageRun } from '../../viz/data.ts';
 import { type Inputs, problemOf, take } from '../inputs.ts';
 import { rowsOf } from '../sweep/grid.ts';
+import { familyNotes } from './family-notes.ts';
 import { type Found, readFound } from './found.ts';
 import { readFront } from './front.ts';
 import { pageHistory } from './page-history.ts';
@@ -27,12 +28,7 @@ export function gatherPage(folder: string): PageData {
     cloud: cloudOf(problem, found),
     history: pageHistory(found.sources),
     nearMisses: nearMissesOf(problem, found),
-    families: familyNotes(
-      problem,
-      found,
-      front.designs.map((design) => design.family),
-      explanation.architectures,
-    ),
+    families: familyNotes(problem, found.sources, front.designs, explanation.architectures),
     cautions: explanation.cautions,
     notCovered: explanation.notCovered,
     incumbents: problem.seeds.map((genes) => problem.id(genes)),
@@ -70,27 +66,4 @@ function nearMissesOf(problem: RailProblem, found: Found): NearMiss[] {
     if (figure === undefined || design === undefined) return [];
     return [{ limit, value: figure.value, allowed: figure.allowed, design }];
   });
-}
-
-function familyNotes(
-  problem: RailProblem,
-  found: Found,
-  onFront: readonly string[],
-  architectures: RailExplanation['architectures'],
-): FamilyNote[] {
-  const tallies = found.sources.map((source) => source.families ?? []);
-  return problem.families.names.map((family, i) => {
-    const sum = (k: 'evaluated' | 'feasible'): number => tallies.reduce((all, tally) => all + (tally[i]?.[k] ?? 0), 0);
-    const counts = { evaluated: sum('evaluated'), feasible: sum('feasible') };
-    const front = onFront.filter((name) => name === family).length;
-    const impossible = architectures.find((one) => family.startsWith(one.name) && !one.possible);
-    return { family, ...counts, front, reason: impossible?.reason ?? reasonFor({ ...counts, front }) };
-  });
-}
-
-function reasonFor(counts: { evaluated: number; feasible: number; front: number }): string {
-  if (counts.front > 0) return `${counts.front} of its designs are on the front`;
-  if (counts.evaluated === 0) return 'not tried yet';
-  if (counts.feasible === 0) return 'none of its designs kept every limit';
-  return 'its designs keep every limit, but others are better in every objective';
 }

@@ -14,9 +14,19 @@ export interface Source {
   readonly feasible: number;
   readonly history: readonly HistoryRow[];
   /** How much of each family was tried, in the order of the problem's families; absent where it was not counted. */
-  readonly families?: readonly { readonly evaluated: number; readonly feasible: number }[];
+  readonly families?: readonly FamilyCount[];
   /** How its search went; absent where it was not counted. */
   readonly went?: RingWent;
+}
+
+/** What became of one family. */
+export interface FamilyCount {
+  readonly evaluated: number;
+  readonly feasible: number;
+  /** Smallest feasible value of each objective; empty where no design was feasible. */
+  readonly best: readonly number[];
+  /** How often each limit was missed, in the problem's order. */
+  readonly violated: readonly number[];
 }
 
 /** How the search of a ring went, over all its islands. */

@@ -8,6 +8,7 @@ import {
   type Island,
   joinDesigns,
   mergeArchives,
+  mergeRecords,
   type NearMissDesigns,
   OPERATORS,
   type Plan,
@@ -109,10 +110,13 @@ function ringNeighbours(island: number, islands: number): readonly number[] {
 }
 
 function familiesOf(problem: Problem, islands: readonly Island[]): NonNullable<Source['families']> {
-  const sum = (pick: (island: Island) => number): number => islands.reduce((total, island) => total + pick(island), 0);
+  const { evaluated, feasible, best, violated } = mergeRecords(islands);
+  const [m, limits] = [problem.objectives.length, problem.limits.length];
   return problem.families.names.map((_, i) => ({
-    evaluated: sum((island) => island.record.evaluated[i] ?? 0),
-    feasible: sum((island) => island.record.feasible[i] ?? 0),
+    evaluated: evaluated[i] ?? 0,
+    feasible: feasible[i] ?? 0,
+    best: [...best.subarray(i * m, (i + 1) * m)].filter(Number.isFinite),
+    violated: [...violated.subarray(i * limits, (i + 1) * limits)],
   }));
 }
 
