@@ -13,9 +13,9 @@ export const PARTS: Readonly<Record<string, string>> = {
   inductor: 'inductor',
   transformer: 'transformer',
   outputCeramic: 'output ceramic',
-  outputBulk: 'output bulk capacitor',
+  outputBulk: 'output bulk',
   inputCeramic: 'input ceramic',
-  inputBulk: 'input bulk capacitor',
+  inputBulk: 'input bulk',
   dividerCeramic: 'divider ceramic',
   filterChoke: 'input filter choke',
   controller: 'controller',
@@ -47,6 +47,17 @@ export const EFFECTS: Readonly<Record<string, string>> = {
   seriesResistance: 'series resistance',
   quiescent: 'quiescent current',
   driveSupply: 'drive supply',
+};
+
+/** Stages, as an engineer calls them. */
+export const ARCHITECTURE_WORDS: Readonly<Record<string, string>> = {
+  'buck-synchronous': 'synchronous buck',
+  'buck-diode': 'diode buck',
+  'two-switch-forward': 'two-switch forward',
+  'half-bridge-centre-tap': 'half bridge, centre tap',
+  'half-bridge-current-doubler': 'half bridge, current doubler',
+  'full-bridge-centre-tap': 'full bridge, centre tap',
+  'full-bridge-current-doubler': 'full bridge, current doubler',
 };
 
 /** What the search moves. */
@@ -111,10 +122,10 @@ export const LIMITS: Readonly<Record<string, string>> = {
   controllerAbilities: 'controller drives this stage',
   avoidedBands: 'clearance from avoided bands',
   chokeWindow: 'choke window filled',
-  chokeReach: 'choke inductance out of reach',
-  chokeMaterial: 'choke material out of its range',
+  chokeReach: 'choke inductance within reach',
+  chokeMaterial: 'choke material in its range',
   transformerWindow: 'transformer window filled',
-  transformerMaterial: 'transformer material out of its range',
+  transformerMaterial: 'transformer material in its range',
   transformerFlux: 'transformer flux density',
   transformerDuty: 'transformer duty',
   transformerTemperature: 'transformer temperature',
@@ -128,9 +139,9 @@ export const LIMITS: Readonly<Record<string, string>> = {
 
 /** Currents and voltages over a period, contributions that are no part, and modes. */
 const OTHERS: Readonly<Record<string, string>> = {
-  phaseCurrent: 'current of one phase',
-  summedCurrent: 'all phases summed',
-  inputCurrent: 'input current',
+  phaseCurrent: 'one phase',
+  summedCurrent: 'all phases',
+  inputCurrent: 'from the input',
   outputRipple: 'output ripple',
   inputRipple: 'input ripple',
   spacing: 'air between parts',
@@ -147,6 +158,7 @@ const SPOKEN: Readonly<Record<string, string>> = {
   ...VARIABLES,
   ...PARTS,
   ...OBJECTIVE_WORDS,
+  ...ARCHITECTURE_WORDS,
 };
 
 /** Lower-case words of a camel-case or hyphenated name; digits and units stay as they are. */
@@ -157,7 +169,10 @@ export function spoken(name: string): string {
 function apart(name: string): string {
   return name
     .replace(/([a-z0-9])([A-Z])/g, (_, before: string, after: string) => `${before} ${after.toLowerCase()}`)
-    .replace(/@([\d.]+)%/g, ' at $1\u00a0% load')
+    .replace(
+      /@(-?)([\d.]+)%/g,
+      (_, sign: string, load: string) => ` at ${load}\u00a0% load${sign === '' ? '' : ' in reverse'}`,
+    )
     .replace(/[-_]+/g, ' ');
 }
 
@@ -168,7 +183,7 @@ export function spokenLimit(name: string): string {
 
 /** A sentence of the model with the limits' names that stand in it put into words. */
 export function inWords(sentence: string): string {
-  return sentence.replace(/[a-z]+(?:[A-Z][a-z]+)+|efficiency@[\d.]+%/g, (name) => spokenLimit(name));
+  return sentence.replace(/[a-z]+(?:[A-Z][a-z]+)+|efficiency@-?[\d.]+%/g, (name) => spokenLimit(name));
 }
 
 /** The same with a capital first letter. */

@@ -1,9 +1,34 @@
 /** Units, labels and marks: what a reader sees of a number or a name. */
+import { readFileSync } from 'node:fs';
 import { describe, expect, test } from 'vitest';
-import { counted, listed, spoken, thousands, titled } from '../../viz/labels.ts';
+import { GENE } from '../../model/genes.ts';
+import { ARCHITECTURES, OBJECTIVES } from '../../model/index.ts';
+import { LOSS_SLOTS } from '../../model/ledger.ts';
+import { limitsOf } from '../../model/limits/list.ts';
+import type { Rail } from '../../model/rail/rail.ts';
+import {
+  ARCHITECTURE_WORDS,
+  counted,
+  EFFECTS,
+  inWords,
+  LIMITS,
+  listed,
+  OBJECTIVE_WORDS,
+  PARTS,
+  spoken,
+  spokenLimit,
+  thousands,
+  titled,
+  VARIABLES,
+} from '../../viz/labels.ts';
 import { markPath } from '../../viz/marks/mark.ts';
 import { axisUnit, digits, percent, show, showDifference } from '../../viz/units.ts';
+import { isLeast } from '../../viz/views/limits.ts';
 import { duration } from '../../viz/views/trust.ts';
+import { RAIL } from './fixture.ts';
+
+/** Words as a person writes them: no capital inside, no underscore. */
+const WORDS = /^[a-z0-9 ,.’%\u00a0-]+$/;
 
 const plain = (text: string) => text.replaceAll('\u00a0', ' ').replaceAll('\u202f', ' ');
 
@@ -58,6 +83,69 @@ describe('names', () => {
     [30000, '8 h 20 min'],
   ])('%d seconds read as %s', (seconds, text) => {
     expect(plain(duration(seconds))).toBe(text);
+  });
+});
+
+/** A sheet that has every limit there is. */
+const EVERYTHING: Rail = {
+  ...RAIL,
+  input: { ...RAIL.input, ripple: 0.1, sourceRipple: 0.01 },
+  search: { ...RAIL.search, architectures: ARCHITECTURES, woundChokes: true },
+  limits: {
+    ...RAIL.limits,
+    boardArea: 1e-3,
+    mass: 0.1,
+    cost: 10,
+    noLoadPower: 0.1,
+    efficiency: [
+      { load: 1, atLeast: 0.9 },
+      { load: -0.5, atLeast: 0.9 },
+    ],
+  },
+};
+
+/** Slots that the parts list fills, read from its source. */
+function partSlots(): string[] {
+  const text = readFileSync(new URL('../../model/parts-list.ts', import.meta.url), 'utf8');
+  return [...text.matchAll(/put\(list, '(\w+)'/g)].map(([, slot = '']) => slot);
+}
+
+describe('every name that the model can emit has words of its own', () => {
+  test.each(LOSS_SLOTS)('loss: %s, %s', (part, effect) => {
+    expect(Object.keys(PARTS)).toContain(part);
+    expect(Object.keys(EFFECTS)).toContain(effect);
+  });
+
+  const limits = limitsOf(EVERYTHING);
+
+  test('limits, with whether more or less is better', () => {
+    expect(limits.length).toBeGreaterThan(42);
+    for (const { name, sense } of limits) {
+      if (!name.startsWith('efficiency@')) expect(Object.keys(LIMITS)).toContain(name);
+      expect(spokenLimit(name)).toMatch(WORDS);
+      expect(isLeast(name), name).toBe(sense === 'least');
+    }
+  });
+
+  test('parts, genes, objectives, architectures', () => {
+    expect(partSlots().length).toBeGreaterThan(12);
+    for (const slot of partSlots()) expect(Object.keys(PARTS)).toContain(slot);
+    for (const gene of Object.keys(GENE)) expect([...Object.keys(VARIABLES), ...Object.keys(PARTS)]).toContain(gene);
+    for (const name of OBJECTIVES) expect(Object.keys(OBJECTIVE_WORDS)).toContain(name);
+    for (const name of ARCHITECTURES) expect(Object.keys(ARCHITECTURE_WORDS)).toContain(name);
+    for (const words of [PARTS, EFFECTS, VARIABLES, LIMITS, OBJECTIVE_WORDS, ARCHITECTURE_WORDS])
+      for (const name of Object.keys(words)) expect(spoken(name)).toMatch(WORDS);
+  });
+
+  test('an efficiency at a load in reverse says so', () => {
+    expect(plain(spokenLimit('efficiency@-50%'))).toBe('efficiency at 50 % load in reverse');
+    expect(plain(spokenLimit('efficiency@2.5%'))).toBe('efficiency at 2.5 % load');
+  });
+
+  test('a sentence of the model is put into words', () => {
+    expect(plain(inWords('missed most often: avoidedBands by 40 %, efficiency@100% by 3 %'))).toBe(
+      'missed most often: clearance from avoided bands by 40 %, efficiency at 100 % load by 3 %',
+    );
   });
 });
 

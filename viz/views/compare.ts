@@ -5,6 +5,9 @@ import { clear, type Root } from '../marks/root.ts';
 import { familyName } from './legend.ts';
 import { letter } from './overlay.ts';
 
+/** Heads over lines of one rank; the objectives need none. */
+const GROUPS: Readonly<Record<number, string>> = { 2: 'Values and parts', 3: 'Margins' };
+
 interface Row {
   readonly label: string;
   readonly cells: readonly string[];
@@ -90,14 +93,26 @@ function table(
       .attr('aria-label', `Unpin ${id}`)
       .text('×');
   });
-  const body = made.append('tbody');
+  let body = made.append('tbody');
+  let group = '';
   for (const row of rows) {
+    if (heads && GROUPS[row.rank] !== undefined && GROUPS[row.rank] !== group) {
+      group = GROUPS[row.rank] ?? '';
+      body = made.append('tbody');
+      body
+        .append('tr')
+        .attr('class', 'group')
+        .append('th')
+        .attr('scope', 'rowgroup')
+        .attr('colspan', ids.length + 1)
+        .text(group);
+    }
     const line = body.append('tr');
     line.append('th').attr('scope', 'row').text(row.label);
     row.cells.forEach((cell, column) => {
       const td = line.append('td');
-      td.append('bdi').text(cell);
       if (row.best === column) td.attr('class', 'best').append('span').attr('class', 'flag').text('best');
+      td.append('bdi').text(cell);
     });
   }
 }
@@ -138,14 +153,16 @@ function numbers(quantity: Quantity, pinned: readonly number[]): Row {
   const finite = values.filter((value) => Number.isFinite(value));
   const [low, high] = [Math.min(...finite), Math.max(...finite)];
   const size = Math.max(Math.abs(low), Math.abs(high)) || 1;
-  const isAlike = finite.length === values.length && high - low <= 1e-9 * size;
-  const spread = isAlike ? 0 : finite.length === 0 ? 0 : Math.max((high - low) / size, 1e-6);
+  const cells = values.map((value) => shown(quantity, value));
+  const isAlike = new Set(cells).size === 1;
+  const spread = isAlike ? 0 : Math.max((high - low) / size, 1e-6);
   const target = quantity.group === 'objective' ? low : high;
-  const best = quantity.group === 'variable' || isAlike || pinned.length < 2 ? undefined : values.indexOf(target);
-  const rank = quantity.group === 'objective' ? 0 : quantity.group === 'variable' ? 2 : 3;
+  const isRanked = quantity.group === 'objective' || quantity.group === 'yield';
+  const best = isRanked && !isAlike && pinned.length > 1 ? values.indexOf(target) : undefined;
+  const rank = isRanked ? 0 : quantity.group === 'variable' ? 2 : 3;
   return {
     label: capital(quantity.label),
-    cells: values.map((value) => shown(quantity, value)),
+    cells,
     best,
     spread,
     rank,

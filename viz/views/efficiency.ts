@@ -64,6 +64,10 @@ export function renderEfficiency<E extends Element>(
       .attr('dy', '0.32em')
       .text(show(curve.inputVoltage, 'V'));
   });
+  root
+    .append('p')
+    .attr('class', 'note')
+    .text('Grey bars on the axis: the share of its time that the rail spends at each load.');
   numbers(root, curves);
 }
 
@@ -105,7 +109,7 @@ function directions(svg: Root<SVGSVGElement>, x: (value: number) => number, o: t
       .append('text')
       .attr('class', 'line-name')
       .attr('x', zero + dx)
-      .attr('y', o.height - o.bottom - 8)
+      .attr('y', o.top - 10)
       .attr('text-anchor', anchor)
       .text(words);
 }

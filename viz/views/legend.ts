@@ -54,7 +54,7 @@ export function familyMark<E extends Element>(root: Root<E>, family: string): vo
   );
 }
 
-/** `buck-synchronous ×2` → `Buck synchronous ×2`. */
+/** `buck-synchronous ×2` → `Synchronous buck ×2`. */
 export function familyName(family: string): string {
   const { architecture, phases } = lookOf(family);
   return `${titled(architecture)} ×${phases}`;

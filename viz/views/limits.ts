@@ -42,7 +42,7 @@ export function renderLimits<E extends Element>(root: Root<E>, design: Assessmen
         .attr('class', 'flag')
         .text(state === 'broken' ? 'broken' : 'tight');
     row.append('td').text(written(limit, limit.value));
-    row.append('td').text(`${sense(limit)}${written(limit, limit.allowed)}`);
+    row.append('td').text(`${sense(limit.name)}${written(limit, limit.allowed)}`);
     bar(row.append('td').text(marginWords(limit)), Math.abs(limit.slack), state);
     row
       .append('td')
@@ -58,23 +58,22 @@ export function brokenLimits(limits: readonly LimitFigure[]): readonly string[] 
     .sort((a, b) => b.violation - a.violation)
     .map(
       (limit) =>
-        `${capital(spokenLimit(limit.name))}: ${written(limit, limit.value)} where ${written(limit, limit.allowed)} is allowed, missed by ${percent(limit.violation)}`,
+        `${capital(spokenLimit(limit.name))}: ${written(limit, limit.value)} where ${written(limit, limit.allowed)} is allowed, missed by ${percent(limit.violation, limit.violation < 1 ? 1 : 0)}`,
     );
 }
 
-/** Fractions that people write in percent. */
-const SHARES = new Set([
-  'chokeWindow',
-  'chokeReach',
-  'chokeMaterial',
-  'transformerWindow',
-  'transformerMaterial',
-  'transformerDuty',
-]);
+/** Fractions that people write in percent; efficiencies too. */
+const SHARES = new Set(['chokeWindow', 'transformerWindow', 'transformerDuty']);
+/** How far outside a range, as a fraction of it; 0 is inside. */
+const RANGES = new Set(['chokeReach', 'chokeMaterial', 'transformerMaterial']);
 /** 1 is yes, 0 is no. */
 const ANSWERS = new Set(['filterChoke', 'controllerAbilities']);
 
 type Named = Pick<LimitFigure, 'unit' | 'name'>;
+
+function isAnswer(name: string): boolean {
+  return ANSWERS.has(name) || RANGES.has(name);
+}
 
 function isShare({ unit, name }: Named): boolean {
   return unit === '' && (name.startsWith('efficiency') || SHARES.has(name));
@@ -83,20 +82,37 @@ function isShare({ unit, name }: Named): boolean {
 /** A limit's value for people. */
 export function written(limit: Named, value: number): string {
   if (ANSWERS.has(limit.name)) return value >= 1 ? 'yes' : 'no';
+  if (RANGES.has(limit.name)) return value <= 0 ? 'yes' : `${percent(value)} outside`;
   return isShare(limit) ? percent(value, limit.name.startsWith('efficiency') ? 2 : 1) : show(value, limit.unit);
 }
 
 function marginWords(limit: LimitFigure): string {
-  if (ANSWERS.has(limit.name)) return limit.margin < 0 ? 'missing' : 'met';
+  if (isAnswer(limit.name)) return limit.margin < 0 ? 'missing' : 'met';
   const places = limit.name.startsWith('efficiency') ? 2 : 1;
   if (isShare(limit)) return `${limit.margin < 0 ? '' : '+'}${percent(limit.margin, places)}`;
   return showDifference(limit.margin, limit.unit);
 }
 
-/** `≤ ` where less is better, `≥ ` where more is, as the margin's sign tells; nothing where the two agree. */
-function sense({ name, value, allowed, margin }: LimitFigure): string {
-  if (ANSWERS.has(name) || value === allowed) return '';
-  return Math.sign(allowed - value) === Math.sign(margin) ? '≤\u00a0' : '≥\u00a0';
+/** Limits that are kept by having more; efficiencies too. */
+const LEAST = new Set([
+  'filterChoke',
+  'minimumOnTime',
+  'minimumOffTime',
+  'driveVoltage',
+  'controllerLowestFrequency',
+  'controllerAbilities',
+  'avoidedBands',
+]);
+
+/** Whether more of the limit's quantity is better. */
+export function isLeast(name: string): boolean {
+  return LEAST.has(name) || name.startsWith('efficiency@');
+}
+
+/** `≤ ` where less is better, `≥ ` where more is; nothing where the answer is yes or no. */
+function sense(name: string): string {
+  if (isAnswer(name)) return '';
+  return isLeast(name) ? '≥\u00a0' : '≤\u00a0';
 }
 
 /** A count that is just met is no close call: such limits stand last. */

@@ -27,9 +27,14 @@ export function renderLosses<E extends Element>(
   const points = design.points.slice(0, profilePoints);
   const columns = [design.losses, ...points.map((point) => point.losses)];
   const lines = linesOf(columns, options);
-  const unit = axisUnit('W', Math.max(...lines.map((line) => line.watts[0] ?? 0)));
+  const unit = axisUnit(
+    'W',
+    design.losses.reduce((sum, item) => sum + item.watts, 0),
+  );
   const largest = Math.max(...lines.filter((line) => line.whole).flatMap((line) => line.watts), 1e-12);
-  const table = clear(root).append('table').attr('class', 'ledger');
+  const table = clear(root)
+    .append('table')
+    .attr('class', points.length > 4 ? 'ledger many' : 'ledger');
   table
     .append('caption')
     .attr('class', 'unseen')

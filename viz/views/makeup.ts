@@ -19,8 +19,8 @@ export function renderMakeup<E extends Element>(root: Root<E>, design: Assessmen
   for (const row of rows) {
     const line = body.append('tr').attr('class', 'whole');
     line.append('th').attr('scope', 'row').text(titled(row.name));
-    bar(line.append('td').text(text(row.volume, volume, 'm³')), row.volume / volume);
-    bar(line.append('td').text(text(row.cost, cost, currency)), row.cost / cost, 'money');
+    bar(shareCell(line, row.volume, volume, 'm³'), row.volume / volume);
+    bar(shareCell(line, row.cost, cost, currency), row.cost / cost, 'money');
   }
   const foot = table.append('tfoot').append('tr');
   foot.append('th').attr('scope', 'row').text('All');
@@ -32,6 +32,18 @@ function of(list: Assessment['volumes'], name: string): number {
   return list.filter((share) => share.name === name).reduce((total, share) => total + share.value, 0);
 }
 
-function text(value: number, total: number, unit: string): string {
-  return value === 0 ? '·' : `${show(value, unit)}  ${percent(value / total, 0)}`;
+/** The figure, and beside it its share of the whole; a dot where there is none. */
+function shareCell(
+  row: Root<HTMLTableRowElement>,
+  value: number,
+  total: number,
+  unit: string,
+): Root<HTMLTableCellElement> {
+  const cell = row.append('td').text(value === 0 ? '·' : show(value, unit));
+  if (value !== 0)
+    cell
+      .append('span')
+      .attr('class', 'share')
+      .text(percent(value / total, 0));
+  return cell;
 }

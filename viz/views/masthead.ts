@@ -39,6 +39,7 @@ function requirement(rail: Rail): string {
   ];
   if (rail.step !== undefined)
     words.push(`a ${show(rail.step.current, 'A')} step within ±${show(rail.step.deviation, 'V')}`);
+  if (rail.profile.some((point) => point.fraction < 0)) words.push('power flows both ways');
   words.push(
     `${show(rail.ambient, 'K')} ambient, ${rail.airSpeed === 0 ? 'still air' : `air at ${rail.airSpeed}\u00a0m/s`}`,
   );

@@ -67,9 +67,9 @@ function genesText(design: Assessment): string {
 function figures<E extends Element>(root: Root<E>, { design, yield: share }: OpenInput): void {
   const list = root.append('dl').attr('class', 'figures');
   const full = design.points.find((point) => point.load === 1);
-  const pairs = design.objectives.map((figure) => [spoken(figure.name), show(figure.value, figure.unit)]);
+  const pairs = design.objectives.map((figure) => [shortly(figure.name), show(figure.value, figure.unit)]);
   if (full !== undefined) pairs.push(['efficiency at full load', percent(full.efficiency)]);
-  if (share !== undefined) pairs.push(['yield in tolerance', percent(share)]);
+  if (share !== undefined) pairs.push(['yield within tolerances', percent(share)]);
   for (const [name = '', value = ''] of pairs) {
     const pair = list.append('div');
     pair.append('dt').text(name);
@@ -77,9 +77,15 @@ function figures<E extends Element>(root: Root<E>, { design, yield: share }: Ope
   }
 }
 
+/** `mean loss` for `loss, profile mean`. */
+function shortly(name: string): string {
+  const [what = '', of] = spoken(name).split(', profile ');
+  return of === undefined ? what : `${of} ${what}`;
+}
+
 function remarks(input: OpenInput): string {
   const words = input.isMiss
-    ? ['It is not on the front: relax the limit, or see under what each limit costs.']
+    ? ['It is not on the front; “What each limit costs”, below, says what it would buy.']
     : [`Tightest margin ${marginPercent(input.design.worstMargin)}${tightest(input.design)}.`];
   if (input.alike > 0)
     words.push(

@@ -1,6 +1,7 @@
 /** What lies over and under the marks: the model's band, rings, the crosshair of the open design, the moved design. */
 import { bandOf } from '../bands.ts';
 import { DISPUTED } from '../dataset.ts';
+import { colourOf, lookOf, markPath } from '../marks/mark.ts';
 import { clear, moved, px, type Root } from '../marks/root.ts';
 import {
   radiusOf,
@@ -84,9 +85,21 @@ function crosshair(plot: Root<SVGGElement>, input: TradeoffInput, open: number, 
   const [cx, cy] = [px(x(input.x.values[open] ?? 0)), px(y(input.y.values[open] ?? 0))];
   const gap = 13;
   const lines = `M${cx} ${frame.top - 6}V${cy - gap}M${cx} ${cy + gap}V${frame.height - frame.bottom}M${frame.left} ${cy}H${cx - gap}M${cx + gap} ${cy}H${frame.width - frame.right}`;
+  if (open >= input.dataset.designs.length) missMark(plot, input, open, moved(cx, cy));
   const state = open >= input.dataset.designs.length ? ' missed' : '';
   plot.append('path').attr('class', `hair${state}`).attr('d', lines);
   plot.append('circle').attr('class', `open-ring${state}`).attr('cx', cx).attr('cy', cy).attr('r', gap);
+}
+
+/** A near miss is drawn only while it is open: its family's mark, hollow. */
+function missMark(plot: Root<SVGGElement>, input: TradeoffInput, open: number, place: string): void {
+  const look = lookOf(input.dataset.rows[open]?.family ?? '');
+  plot
+    .append('path')
+    .attr('class', `miss-mark kind-${colourOf(look)}`)
+    .attr('d', markPath(look, 5))
+    .attr('fill-rule', 'evenodd')
+    .attr('transform', place);
 }
 
 /** Whether a circuit simulation contradicts the model about this design. */
@@ -94,22 +107,31 @@ export function isDisputed({ dataset }: TradeoffInput, row: number): boolean {
   return dataset.remarks.get(row)?.includes(DISPUTED) === true;
 }
 
-/** The moved design, tied to the open one. */
+/** Direction of a step on the screen, degrees. */
+function angle(dx: number, dy: number): number {
+  return (180 / Math.PI) * Math.atan2(dy, dx);
+}
+
+/** The moved design, tied to the open one; beyond the picture's edge an arrow points to it. */
 function change(
   plot: Root<SVGGElement>,
   input: TradeoffInput,
   changed: readonly number[],
-  { x, y }: TradeoffScales,
+  { x, y, frame }: TradeoffScales,
 ): void {
   const names = input.dataset.objectives.map((objective) => objective.name);
-  const [tx, ty] = [x(changed[names.indexOf(input.x.name)] ?? 0), y(changed[names.indexOf(input.y.name)] ?? 0)];
+  const [toX, toY] = [x(changed[names.indexOf(input.x.name)] ?? 0), y(changed[names.indexOf(input.y.name)] ?? 0)];
+  const tx = Math.max(frame.left + 10, Math.min(frame.width - frame.right - 10, toX));
+  const ty = Math.max(frame.top + 4, Math.min(frame.height - frame.bottom - 10, toY));
   const open = input.open ?? 0;
   const [fx, fy] = [x(input.x.values[open] ?? 0), y(input.y.values[open] ?? 0)];
   plot
     .append('path')
     .attr('class', 'moved-line')
     .attr('d', `M${px(fx)} ${px(fy)}L${px(tx)} ${px(ty)}`);
-  plot.append('path').attr('class', 'moved-mark').attr('d', 'M-7-7L7 7M7-7L-7 7').attr('transform', moved(tx, ty));
+  const mark = plot.append('path').attr('class', 'moved-mark');
+  if (tx === toX && ty === toY) mark.attr('d', 'M-7-7L7 7M7-7L-7 7').attr('transform', moved(tx, ty));
+  else mark.attr('d', 'M-9-7L3 0L-9 7').attr('transform', `${moved(tx, ty)}rotate(${px(angle(toX - fx, toY - fy))})`);
 }
 
 /** A, B, C … for the designs side by side. */

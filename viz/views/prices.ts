@@ -10,7 +10,7 @@ type PricesInput = Pick<PageData, 'front' | 'nearMisses' | 'rail'>;
 
 export function renderPrices<E extends Element>(root: Root<E>, { front, nearMisses, rail }: PricesInput): void {
   clear(root);
-  const prices = requirementPrices(front, nearMisses);
+  const prices = requirementPrices(front, nearMisses).filter(({ gains }) => gains.some(isTelling));
   if (prices.length > 0) {
     priceTable(root, front.objectives, prices);
     root
@@ -75,11 +75,16 @@ function priceTable<E extends Element>(
   }
 }
 
+/** Whether a gain shows in the printed digits. */
+function isTelling(gain: Gain): boolean {
+  return gainOf(gain) >= 0.0005;
+}
+
 /** `−12.0 %`, and below it from what to what; a dot where the objective gains nothing. */
 function gainCell(row: Root<HTMLTableRowElement>, gain: Gain): void {
   const share = gainOf(gain);
   const cell = row.append('td');
-  if (!(share > 0)) {
+  if (!isTelling(gain)) {
     cell.text('·');
     return;
   }

@@ -25,13 +25,14 @@ export function renderTrust<E extends Element>(
   o = trustDefaults,
 ): void {
   clear(root);
-  for (const sentence of verdicts(run, history, o.settled)) root.append('p').text(sentence);
-  if (history.length > 1) growth(root, history, o);
+  const left = root.append('div');
+  for (const sentence of verdicts(run, history, o.settled)) left.append('p').text(sentence);
+  if (history.length > 1) growth(left, history, o);
   facts(root.append('dl').attr('class', 'facts'), run);
   const islands = Math.max(0, ...history.map((row) => row.islands.length));
   const head = ['Evaluations', 'All', ...Array.from({ length: islands }, (_, i) => `Island ${i + 1}`)];
   numbersTable(
-    root,
+    left,
     { summary: 'Numbers', caption: 'Hypervolume by evaluations' },
     head,
     history.map((row) => [

@@ -56,19 +56,27 @@ function panel(svg: Root<SVGSVGElement>, traces: readonly Trace[], unit: string,
       .append('path')
       .attr('class', 'zero')
       .attr('d', `M${frame.left} ${px(y(0))}H${frame.width - frame.right}`);
-  let at = frame.left + 26;
+  let at = { x: frame.left + 26, y: frame.top - 26 };
   traces.forEach((trace, i) => {
     svg
       .append('path')
       .attr('class', `line trace-${i % 4}`)
       .attr('d', pathOf(trace, whole, x, y));
-    at = key(svg, trace.name, i, at, frame.top - 26);
+    at = key(svg, trace.name, i, at, frame);
   });
 }
 
-/** A short stroke and the trace's name; returns where the next key starts. */
-function key(svg: Root<SVGSVGElement>, name: string, i: number, x: number, y: number): number {
+interface Place {
+  readonly x: number;
+  readonly y: number;
+}
+
+/** A short stroke and the trace's name, on a second line where the first is full; returns where the next key starts. */
+function key(svg: Root<SVGSVGElement>, name: string, i: number, from: Place, frame: Frame): Place {
   const words = titled(name);
+  const width = 38 + 6.6 * words.length;
+  const isFull = from.x + width > frame.width - frame.right + 14;
+  const { x, y } = isFull ? { x: frame.left + 26, y: from.y + 15 } : from;
   svg
     .append('path')
     .attr('class', `line trace-${i % 4}`)
@@ -80,7 +88,7 @@ function key(svg: Root<SVGSVGElement>, name: string, i: number, x: number, y: nu
     .attr('y', y)
     .attr('dy', '0.32em')
     .text(words);
-  return x + 38 + 7 * words.length;
+  return { x: px(x + width), y };
 }
 
 /** The trace from 0 to the drawing's whole period: one that repeats sooner, as a summed current does, is drawn as often. */

@@ -159,7 +159,7 @@ export function renderMove<E extends Element>(root: Root<E>, own: Assessment, mo
       .text(
         after === figure.value
           ? 'none'
-          : `${showDifference(after - figure.value, figure.unit)} (${signed((after - figure.value) / figure.value)})`,
+          : `${showDifference(after - figure.value, figure.unit)} (${changeWords(after / figure.value)})`,
       );
   });
   verdict(root, moved.value, '');
@@ -182,6 +182,8 @@ function verdict<E extends Element>(root: Root<E>, { limits, worstMargin }: Asse
   for (const sentence of broken) list.append('li').text(sentence);
 }
 
-function signed(fraction: number): string {
-  return `${fraction < 0 ? '' : '+'}${percent(fraction)}`;
+/** `+12.0 %`; beyond tenfold `×65`. */
+function changeWords(ratio: number): string {
+  if (ratio >= 10) return `×${digits(Number(ratio.toPrecision(2)))}`;
+  return `${ratio < 1 ? '' : '+'}${percent(ratio - 1)}`;
 }

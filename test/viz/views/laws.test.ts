@@ -133,7 +133,7 @@ describe('side by side', () => {
     const rows = tables.map((table) =>
       Array.from(table.querySelectorAll('tbody tr'), (row) =>
         Array.from(row.children, (cell) => cell.textContent?.replace('best', '') ?? ''),
-      ),
+      ).filter((cells) => cells.length > 1),
     );
     for (const [, ...cells] of rows[0] ?? []) expect(new Set(cells).size, 'a difference').toBeGreaterThan(1);
     for (const [, ...cells] of rows[1] ?? []) expect(new Set(cells).size, 'alike').toBe(1);
