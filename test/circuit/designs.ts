@@ -52,7 +52,7 @@ const tables = need(
 );
 
 /** The space of a shipped rail, with its architectures narrowed to `architecture`. */
-export function shippedProblem(name: string, architecture?: Architecture): RailProblem {
+function shippedProblem(name: string, architecture?: Architecture): RailProblem {
   const file = `${name}.yaml`;
   const rail: Rail = need(readRail(readFileSync(new URL(`../../model/rails/${file}`, import.meta.url), 'utf8'), file));
   const narrowed =

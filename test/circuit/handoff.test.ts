@@ -8,7 +8,7 @@ import { mkdtempSync, rmSync, writeFileSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { beforeAll, describe, expect, it } from 'vitest';
-import { agreesWith, fullLoad, solveAt, stageNetlist } from '../../model/index.ts';
+import { agreesWith, fullLoad, solveAt, stageNetlist, stepNetlist } from '../../model/index.ts';
 import { conductionIn, readFigure } from '../../runners/simulate/figures.ts';
 import { nativePath, nativeSimulator } from '../../runners/simulate/native.ts';
 import { packagedSimulator } from '../../runners/simulate/packaged.ts';
@@ -31,6 +31,23 @@ function netlistOf({ name }: FoundDesign) {
   return netlist;
 }
 
+/** Limits of the sheet that a simulation misses: ripple at the stage's netlist, the step in the closed averaged loop at its worst corner. */
+async function missesOf({ problem, genes }: FoundDesign, run: Run, simulator: Simulator): Promise<string[]> {
+  const { rail } = problem;
+  const swing = (vector: string): number => readFigure(run, { reading: 'peak-to-peak', vectors: [vector] });
+  const misses = swing('v(out)') > rail.output.ripple ? ['output ripple'] : [];
+  if (rail.input.ripple !== undefined && swing('v(in)') > rail.input.ripple) misses.push('input ripple');
+  const limit = problem.assess(genes).limits.find(({ name }) => name === 'loadStep');
+  if (limit?.corner === undefined) return misses;
+  const point = solveAt(problem, genes, { ...limit.corner, share: 0 }, true);
+  const netlist = stepNetlist(problem, problem.id(genes), point);
+  if (netlist === undefined) return [...misses, 'no loop'];
+  const volts = (await simulator.run(netlist.text)).vectors.get('v(out)') ?? [];
+  const excursion = Math.max(...Array.from(volts, (v) => Math.abs(v - volts[0])));
+  if (excursion + 0.5 * point.solver.outputRipple.ripple > limit.allowed) misses.push('load step');
+  return misses;
+}
+
 it('twenty designs of seven architectures', () => {
   expect(found).toHaveLength(20);
   expect(new Set(found.map(({ problem, genes }) => problem.record(genes).architecture)).size).toBe(7);
@@ -38,6 +55,7 @@ it('twenty designs of seven architectures', () => {
 
 describe.runIf(needs('ngspice'))('in the native simulator', () => {
   const simulator: Simulator = nativeSimulator(native ?? '');
+  const swings: { name: string; misses: string[] }[] = [];
 
   it.each(found)('the model agrees: $name', async (design) => {
     const netlist = netlistOf(design);
@@ -47,10 +65,16 @@ describe.runIf(needs('ngspice'))('in the native simulator', () => {
       const { name, value } = prediction;
       return agreesWith(prediction, simulated) ? [] : [`${name}: ${value} against ${simulated}`];
     });
+    swings.push({ name: design.name, misses: await missesOf(design, run, simulator) });
     const loss = conductionIn(run, netlist.losses);
     if (Math.abs(netlist.conduction / loss - 1) > 0.03)
       beyond.push(`conduction: ${netlist.conduction} against ${loss}`);
     expect(beyond).toEqual([]);
+  });
+
+  it("the sheet's ripple and step limits hold in simulation for at least 19 of 20", () => {
+    expect(swings).toHaveLength(found.length);
+    expect(swings.filter(({ misses }) => misses.length > 0).length).toBeLessThanOrEqual(1);
   });
 
   it('runs the file unchanged and prints the measurements', () => {
