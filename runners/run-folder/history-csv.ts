@@ -1,4 +1,5 @@
 /** `history.csv`: how the front of each ring of islands grew, and that of each island by itself. Nothing in it comes from the clock. */
+import { csvCell } from './csv-cell.ts';
 import type { Source } from './sources.ts';
 
 const HEAD = ['seed', 'shard', 'epoch', 'evaluations', 'feasible', 'front', 'hypervolume'];
@@ -12,16 +13,10 @@ export function historyCsv(sources: readonly Source[]): string {
   const islands = Array.from({ length: most }, (_, i) => i);
   const lines = sources.flatMap(({ seed, shard, history }) =>
     history.map((row) => {
-      const whole = [cell(seed), shard, row.epoch, row.evaluations, row.feasible, row.frontSize, row.hypervolume];
+      const whole = [csvCell(seed), shard, row.epoch, row.evaluations, row.feasible, row.frontSize, row.hypervolume];
       return [...whole, ...islands.map((i) => row.islands[i] ?? '')].join(',');
     }),
   );
   const head = [...HEAD, ...islands.map((i) => `island ${i}`)];
   return `${[head.join(','), ...lines].join('\n')}\n`;
-}
-
-// A seed is any text: quoted where it must be, and never a formula for a spreadsheet.
-function cell(text: string): string {
-  const safe = /^[=+\-@\t\r]/.test(text) ? `'${text}` : text;
-  return /[",\n\r]/.test(safe) ? `"${safe.replaceAll('"', '""')}"` : safe;
 }

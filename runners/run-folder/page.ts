@@ -11,7 +11,7 @@ export async function writePage(folder: string): Promise<string> {
   const data = gatherPage(folder);
   const { buildPage } = await import('../../viz/page.ts');
   try {
-    const assets = { script: asset('live.js'), style: asset('theme.css') };
+    const assets = { script: pageAsset('live.js'), style: pageAsset('theme.css') };
     const path = runFile(folder, 'page');
     writeWhole(path, buildPage(data, assets));
     return path;
@@ -20,7 +20,8 @@ export async function writePage(folder: string): Promise<string> {
   }
 }
 
-function asset(name: string): string {
+/** A text that the build left for pages. Throws an `Error` where it is missing. */
+export function pageAsset(name: string): string {
   const path = packagePath('dist', 'viz', name);
   if (!existsSync(path)) throw new Error(`${path} is missing; run: npm run build`);
   return readText(path, 'a part of the page');
