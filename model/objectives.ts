@@ -1,5 +1,6 @@
 /** The objectives that the model offers: what each is, and the grid and reference that a rail gives it. */
 import type { Objective } from '../optimizer/problem.ts';
+import { hasTransformer } from './catalogue.ts';
 import type { Evaluator } from './evaluate.ts';
 import type { ObjectiveName, Rail } from './rail/rail.ts';
 
@@ -20,11 +21,15 @@ const VOLUME_PER_WATT = 2e-6;
 /** Cost that still counts where the sheet sets none, currency per watt and on top. */
 const COST_PER_WATT = 0.3;
 const COST_BASE = 5;
+/** The base where a transformer may be bought. */
+const COST_BASE_ISOLATED = 50;
 /** Mass that still counts where the sheet sets none, kg/m³ of the volume that counts. */
 const DENSITY = 2500;
 /** Height over which board area is taken from volume where the sheet sets none, m. */
 const USUAL_HEIGHT = 8e-3;
 
+const costBase = (rail: Rail): number =>
+  rail.search.architectures.some(hasTransformer) ? COST_BASE_ISOLATED : COST_BASE;
 const volumeReference = (rail: Rail): number => rail.limits.volume ?? VOLUME_PER_WATT * fullPower(rail);
 
 const OFFERS: Readonly<Record<ObjectiveName, Offer>> = {
@@ -37,7 +42,7 @@ const OFFERS: Readonly<Record<ObjectiveName, Offer>> = {
   volume: { unit: 'm³', reference: volumeReference, value: (e) => e.assembly.volume },
   cost: {
     unit: 'currency',
-    reference: (rail) => rail.limits.cost ?? COST_BASE + COST_PER_WATT * fullPower(rail),
+    reference: (rail) => rail.limits.cost ?? costBase(rail) + COST_PER_WATT * fullPower(rail),
     value: (e) => e.assembly.cost,
   },
   'board-area': {

@@ -61,6 +61,9 @@ export function layWinding(
   into.dowellLayers = (into.layers * root) / sections;
 }
 
+/** Most loose round wires that are wound side by side as one turn: beyond it one takes litz or foil (common practice, no source). */
+const MOST_LOOSE_WIRES = 8;
+
 /**
  * Conductors of one turn that can lie in parallel in `room` m of height over `breadth` m, 1 … `most`: round ones no more than stand
  * side by side in one layer, for those of different layers would not share the current.
@@ -77,7 +80,8 @@ export function parallelThatFit(
   if (conductor.kind === 'foil') return Math.max(1, Math.min(most, Math.floor(room / (turns * conductor.outerSize))));
   const perLayer = Math.floor(breadth / conductor.outerSize);
   const wires = (Math.floor(room / conductor.outerSize) * perLayer) / turns;
-  return Math.max(1, Math.min(most, perLayer, Math.floor(wires)));
+  const loose = conductor.kind === 'solid' ? MOST_LOOSE_WIRES : most;
+  return Math.max(1, Math.min(most, loose, perLayer, Math.floor(wires)));
 }
 
 /**

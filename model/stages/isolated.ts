@@ -2,6 +2,7 @@
  * What every transformer stage has in common: the rectified secondary wave drives one or two chokes, so the choke is solved
  * as a buck's, and currents, flux and stresses are carried back through the turns ratio. The forms differ in a few numbers.
  */
+import { expAt } from '../../optimizer/maths/index.ts';
 import type { Design } from '../design.ts';
 import { applyForward, ChokeSteadyState } from '../modes.ts';
 import type { Rail } from '../rail/rail.ts';
@@ -25,6 +26,7 @@ export interface IsolatedForm {
 }
 
 const steady = new ChokeSteadyState();
+const decay = new Float64Array(1);
 
 /** Why no transformer stage can serve `rail`; undefined where one can. */
 export function isolatedRefusal(rail: Rail): string | undefined {
@@ -79,16 +81,16 @@ function writeCurrents(form: IsolatedForm, t: Transformer, state: StageState, ch
   const n2 = t.ratio * t.ratio;
   // Share of the switching period in which the primary carries a pulse.
   const driven = form.doubler ? 2 * h : h;
-  // Legs that are shifted keep the primary shorted between pulses, so its current goes on through two switches.
-  const carried = shifted ? (form.doubler ? 1 : h + l) : driven;
-  state.primaryMeanSquare = (carried * square) / n2;
+  // Mean square of what goes on in the primary of a shifted bridge between pulses, on the secondary side, over that time.
+  const left = shifted ? dying(form, t, state) * b * b : 0;
+  const between = form.doubler ? 1 - 2 * h : l;
+  state.primaryMeanSquare = (driven * square + between * left) / n2;
   state.highMeanSquare = form.doubleEnded ? 0.5 * state.primaryMeanSquare : state.primaryMeanSquare;
   if (form.doubler) {
-    state.secondaryMeanSquare = driven * square;
-    // While the legs of a shifted bridge short the primary its current dies away: the rectifiers' share goes from all in one to halves.
-    state.lowMeanSquare = shifted ? square * (1.5 + h) : square * (1 + 2 * h);
+    state.secondaryMeanSquare = driven * square + between * left;
+    state.lowMeanSquare = 4 * h * square + between * (square + left);
   } else if (form.centreTap) {
-    state.secondaryMeanSquare = square * (0.5 * h + (shifted ? 0.375 : 0.25) * l);
+    state.secondaryMeanSquare = 0.5 * h * square + 0.25 * l * (square + left);
     state.lowMeanSquare = state.secondaryMeanSquare;
   } else {
     state.secondaryMeanSquare = square * h;
@@ -102,6 +104,23 @@ function writeCurrents(form: IsolatedForm, t: Transformer, state: StageState, ch
   state.chokes = chokes;
   state.drawCopies = state.activePhases;
   writeWaveforms(form, t, state);
+}
+
+/**
+ * Mean square over the time between pulses, as a share of the square it begins with, of the current that circulates in the shorted
+ * primary of a shifted bridge: it dies as e^(−t·R/L) in the leakage, so (1 − e^(−2x))/(2x) with x the time in those constants.
+ */
+function dying(form: IsolatedForm, t: Transformer, state: StageState): number {
+  const period = state.frequency > 0 ? 1 / state.frequency : 1;
+  const time = form.doubler ? 0.5 * (1 - 2 * state.highShare) * period : state.lowShare * period;
+  const n2 = t.ratio * t.ratio;
+  const primary = 2 * state.highResistance + state.primaryResistance;
+  const resistance = primary + n2 * (state.secondaryResistance + 2 * state.lowResistance);
+  const x = (time * resistance) / t.leakage;
+  if (!(x > 1e-6)) return 1;
+  decay[0] = -2 * x;
+  expAt(decay, 0);
+  return (1 - decay[0]) / (2 * x);
 }
 
 function writeWaveforms(form: IsolatedForm, t: Transformer, state: StageState): void {
