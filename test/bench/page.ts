@@ -1,8 +1,8 @@
 /** How fast the page is, in headless Chromium with software drawing: one line a figure, for the bench to print. */
 import type { Page } from 'playwright-core';
-import type { PageData } from '../../viz/data.ts';
 import { launchAll, openTab } from '../browser/browser.ts';
 import { pagesFolder, realPage } from '../browser/built.ts';
+import { filled } from '../browser/filled.ts';
 import { sweptData } from '../browser/sweep.ts';
 
 /** One figure with what it is held to. */
@@ -61,31 +61,6 @@ function figures(
     { name: 'panning the cloud', value: pan, unit: 'frames/s', target: 'at least 50' },
     { name: 'what-if to picture, 95th percentile', value: percentile(moves, 0.95), unit: 'ms', target: 'at most 30' },
   ];
-}
-
-/** The sweep's own designs, repeated with small shifts until there are enough to load the page. */
-function filled(data: PageData, count: number, points: number): PageData {
-  const own = data.front.designs;
-  const designs = Array.from({ length: count }, (_, i) => {
-    const design = own[i % own.length];
-    if (design === undefined) throw new Error('the sweep found nothing');
-    const shift = (k: number) => 1 + (Math.floor(i / own.length) * (k + 2) * 7) / 1000 / (k + 1);
-    return i < own.length
-      ? design
-      : { ...design, id: `${design.id}x${i}`, objectives: design.objectives.map((value, k) => value * shift(k)) };
-  });
-  const m = data.front.objectives.length;
-  const objectives = new Float64Array(points * m);
-  for (let i = 0; i < points; i++) {
-    const design = designs[(i * 7919) % count];
-    for (let k = 0; k < m; k++)
-      objectives[i * m + k] = (design?.objectives[k] ?? 0) * (1 + (((i * (k + 13) * 104729) % 1000) / 1000) ** 2);
-  }
-  return {
-    ...data,
-    front: { ...data.front, designs },
-    cloud: { families: data.cloud.families, family: new Uint8Array(points), objectives },
-  };
 }
 
 /** Milliseconds from the start of the load to the end of the script that takes the page over. */

@@ -42,8 +42,15 @@ export async function inventedPage(data: PageData): Promise<string> {
   return staticPage(data, assets, fixtureAssessor());
 }
 
+/** A folder for pages. */
+export interface PagesFolder {
+  /** Writes a page; gives its address. */
+  write(name: string, text: string): string;
+  remove(): void;
+}
+
 /** A folder for pages that goes away with `remove`. */
-export function pagesFolder(): { write(name: string, text: string): string; remove(): void } {
+export function pagesFolder(): PagesFolder {
   const folder = mkdtempSync(join(tmpdir(), 'chopfront-pages-'));
   return {
     write: (name, text) => {

@@ -3,10 +3,12 @@ import { select } from 'd3';
 import { JSDOM } from 'jsdom';
 import type { Root } from '../../viz/marks/root.ts';
 
-/** An empty `div` of a fresh document, as a D3 selection. */
+/** One for all places: a document costs far more than an element. */
+const { document } = new JSDOM('<!doctype html>').window;
+
+/** A fresh empty `div`, as a D3 selection. */
 export function place(): Root<HTMLDivElement> {
-  const { document } = new JSDOM('<!doctype html><div></div>').window;
-  return select(document.querySelector('div') as HTMLDivElement) as unknown as Root<HTMLDivElement>;
+  return select(document.createElement('div')) as unknown as Root<HTMLDivElement>;
 }
 
 /** Text of the cells, row by row, of the first table under `root`. */

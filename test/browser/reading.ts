@@ -1,56 +1,28 @@
 /** Whoever reads and however: light, dark, phone, screen reader, keyboard alone, without colour, with hostile names. */
-
 import { readFileSync } from 'node:fs';
 import { createRequire } from 'node:module';
-import type { Page } from 'playwright-core';
-import { afterAll, describe, expect, test } from 'vitest';
+import type { Browser, Page } from 'playwright-core';
+import { beforeAll, expect, test } from 'vitest';
 import type { PageData } from '../../viz/data.ts';
-import { lacking } from '../support/needs.ts';
 import { fixture } from '../viz/fixture.ts';
-import { launchAll, openTab, textOf } from './browser.ts';
-import { inventedPage, pagesFolder } from './built.ts';
+import { openTab, textOf } from './browser.ts';
+import { inventedPage, type PagesFolder } from './built.ts';
 
-const { started, reasons } = await launchAll();
-const folder = pagesFolder();
-const data = fixture(160, 2000);
-const pins = data.front.designs
-  .slice(0, 4)
-  .map((design) => `pin=${design.id}`)
-  .join('&');
-const plain = folder.write('plain.html', await inventedPage(data));
 const axe = readFileSync(createRequire(import.meta.url).resolve('axe-core/axe.min.js'), 'utf8');
 const LEVELS = ['wcag2a', 'wcag2aa', 'wcag21a', 'wcag21aa', 'wcag22aa'];
 
-afterAll(async () => {
-  for (const { browser } of started) await browser.close();
-  folder.remove();
-});
+/** Defines the tests, on pages written into `folder`. */
+export function reading(browser: Browser, folder: PagesFolder): void {
+  const data = fixture(160, 2000);
+  const pins = data.front.designs
+    .slice(0, 4)
+    .map((design) => `pin=${design.id}`)
+    .join('&');
+  let plain = '';
+  beforeAll(async () => {
+    plain = folder.write('plain.html', await inventedPage(data));
+  });
 
-const isHere = started.length > 0 || lacking('a browser', reasons.join('; '));
-test.runIf(isHere)('a browser starts here', () => {
-  expect(started[0]?.browser.isConnected()).toBe(true);
-});
-
-/** What axe finds at WCAG 2.2 A and AA. */
-async function violations(page: Page): Promise<string[]> {
-  await page.evaluate(axe);
-  return page.evaluate(async (levels) => {
-    const { axe } = globalThis as unknown as {
-      axe: {
-        run(
-          where: Document,
-          how: object,
-        ): Promise<{ violations: { id: string; nodes: { html: string; failureSummary: string }[] }[] }>;
-      };
-    };
-    const result = await axe.run(document, { runOnly: { type: 'tag', values: levels } });
-    return result.violations.flatMap(({ id, nodes }) =>
-      nodes.map((node) => `${id}: ${node.html.slice(0, 160)} ${node.failureSummary.slice(0, 200)}`),
-    );
-  }, LEVELS);
-}
-
-describe.each(started.slice(0, 1))('in $name', ({ browser }) => {
   test.each([
     ['light', 1280, 720],
     ['dark', 1280, 720],
@@ -176,22 +148,23 @@ describe.each(started.slice(0, 1))('in $name', ({ browser }) => {
     expect(complaints).toEqual([]);
     await context.close();
   });
-});
+}
 
-/** Bytes that a page of 2,000 designs and 50,000 points may have; raise it only with the reason in the same commit. */
-const CEILING = 3_000_000;
-
-test('a page of 2,000 designs and 50,000 points stays under 3 MB', async () => {
-  const one = fixture(120, 50_000);
-  const designs = Array.from({ length: 2000 }, (_, i) => {
-    const design = one.front.designs[i % one.front.designs.length];
-    if (design === undefined) throw new Error('no designs');
-    return {
-      ...design,
-      id: `${design.id}${i}`,
-      objectives: design.objectives.map((value, k) => value * (1 + ((i * (k + 3)) % 97) / 500)),
+/** What axe finds at WCAG 2.2 A and AA. */
+async function violations(page: Page): Promise<string[]> {
+  await page.evaluate(axe);
+  return page.evaluate(async (levels) => {
+    const { axe } = globalThis as unknown as {
+      axe: {
+        run(
+          where: Document,
+          how: object,
+        ): Promise<{ violations: { id: string; nodes: { html: string; failureSummary: string }[] }[] }>;
+      };
     };
-  });
-  const page = await inventedPage({ ...one, front: { ...one.front, designs } });
-  expect(Buffer.byteLength(page)).toBeLessThan(CEILING);
-});
+    const result = await axe.run(document, { runOnly: { type: 'tag', values: levels } });
+    return result.violations.flatMap(({ id, nodes }) =>
+      nodes.map((node) => `${id}: ${node.html.slice(0, 160)} ${node.failureSummary.slice(0, 200)}`),
+    );
+  }, LEVELS);
+}
