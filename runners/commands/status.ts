@@ -19,17 +19,17 @@ export function defineStatus(program: Command, setStatus: SetStatus): void {
 }
 
 async function runStatus(folders: readonly string[], options: StatusOptions): Promise<number> {
-  const { readRecord } = await import('../run-folder/record.ts');
-  const { shardFoldersIn } = await import('../cluster/shards.ts');
+  const { standingsOf } = await import('../cluster/standing.ts');
   const { say, sayJson, sayPainted } = await import('../terminal/output.ts');
-  const { statusLines, faultLines } = await import('./status-text.ts');
-  const all = folders.flatMap((folder) => shardFoldersIn(folder) ?? [folder]);
-  const rows = all.map((folder) => ({ folder, record: readRecord(folder) }));
+  const { statusLines, remarkLines } = await import('./status-text.ts');
+  const standings = standingsOf(folders);
   if (options.json === true) {
-    sayJson(rows.map(({ folder, record }) => ({ folder, ...record })));
+    const runs = standings.runs.map(({ folder, record, state }) => ({ folder, state, ...record }));
+    const missing = standings.missing.map((one) => ({ ...one, state: 'missing' }));
+    sayJson([...runs, ...missing]);
     return STATUS.done;
   }
-  for (const line of statusLines(rows)) sayPainted(line);
-  for (const line of faultLines(rows)) say(line);
+  for (const line of statusLines(standings.runs)) sayPainted(line);
+  for (const line of remarkLines(standings)) say(line);
   return STATUS.done;
 }

@@ -40,6 +40,17 @@ export function takeLock(folder: string): Lock {
   throw busy(folder, readOwner(path), ageOf(folder, path));
 }
 
+/** Whether a process holds the folder's lock now, as far as can be told from here; writes nothing. */
+export function isLocked(folder: string): boolean {
+  const path = join(folder, NAME);
+  try {
+    const age = Math.max(0, (Date.now() - statSync(path).mtimeMs) / 1000);
+    return !isStale(readOwner(path), age);
+  } catch {
+    return false;
+  }
+}
+
 // The owner's text is complete before the name exists: a link of a finished file either appears or fails.
 function claim(path: string, mine: Owner): boolean {
   const beside = `${path}.${mine.token}`;
