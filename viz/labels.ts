@@ -181,9 +181,10 @@ export function spokenLimit(name: string): string {
   return Object.hasOwn(LIMITS, name) ? (LIMITS[name] ?? name) : apart(name);
 }
 
-/** A sentence of the model with the limits' names that stand in it put into words. */
+/** A sentence of the model with the limits' names in it put into words, and no break between a number and its unit. */
 export function inWords(sentence: string): string {
-  return sentence.replace(/[a-z]+(?:[A-Z][a-z]+)+|efficiency@-?[\d.]+%/g, (name) => spokenLimit(name));
+  const said = sentence.replace(/[a-z]+(?:[A-Z][a-z]+)+|efficiency@-?[\d.]+%/g, (name) => spokenLimit(name));
+  return said.replace(/(\d) (?=[^\s,]{1,3}(?:[\s,]|$))/g, '$1\u00a0');
 }
 
 /** The same with a capital first letter. */

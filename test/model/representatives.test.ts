@@ -5,7 +5,7 @@ import { representativesOf } from '../../model/representatives.ts';
 describe('representatives of a front', () => {
   const names = ['loss', 'volume', 'cost'];
 
-  it('the best of each objective, and last the smallest product of all', () => {
+  it('the best of each objective, and last the one nearest to the best of everything', () => {
     const values = [
       [1, 9, 9],
       [9, 1, 9],
@@ -18,6 +18,15 @@ describe('representatives of a front', () => {
       { title: 'cheapest', index: 2 },
       { title: 'balanced', index: 3 },
     ]);
+  });
+
+  it('a corner of the front is never the balanced one where something lies between, however small its product', () => {
+    const values = [
+      [8, 1, 1],
+      [4, 3, 2],
+      [1, 20, 9],
+    ];
+    expect(representativesOf(names, values).at(-1)).toEqual({ title: 'balanced', index: 1 });
   });
 
   it('a per mille of loss buys no doubled cost: among alike designs the better bargain stands for them', () => {

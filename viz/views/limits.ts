@@ -3,7 +3,7 @@ import type { Assessment, Corner, LimitFigure } from '../../model/assessment.ts'
 import { capital, spokenLimit } from '../labels.ts';
 import { bar } from '../marks/bar.ts';
 import { clear, type Root } from '../marks/root.ts';
-import { percent, show, showDifference } from '../units.ts';
+import { digits, percent, show, showDifference } from '../units.ts';
 
 export const limitsDefaults = {
   /** Margins below this share of what is allowed are called tight. */
@@ -58,8 +58,15 @@ export function brokenLimits(limits: readonly LimitFigure[]): readonly string[] 
     .sort((a, b) => b.violation - a.violation)
     .map(
       (limit) =>
-        `${capital(spokenLimit(limit.name))}: ${written(limit, limit.value)} where ${written(limit, limit.allowed)} is allowed, missed by ${percent(limit.violation, limit.violation < 1 ? 1 : 0)}`,
+        `${capital(spokenLimit(limit.name))}: ${written(limit, limit.value)} where ${isLeast(limit.name) ? 'at least ' : ''}${written(limit, limit.allowed)} is ${isLeast(limit.name) ? 'asked' : 'allowed'}${missedWords(limit)}`,
     );
+}
+
+/** By how much; an efficiency in points, and nothing where the figures say it. */
+function missedWords(limit: LimitFigure): string {
+  if (isAnswer(limit.name)) return '';
+  if (limit.name.startsWith('efficiency')) return `, short by ${digits(-100 * limit.margin)} points`;
+  return `, missed by ${percent(limit.violation, limit.violation < 1 ? 1 : 0)}`;
 }
 
 /** Fractions that people write in percent; efficiencies too. */

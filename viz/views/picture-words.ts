@@ -44,7 +44,7 @@ export function pictureNote(input: TradeoffInput): string {
   if (input.incumbents.length > 0) words.push('Dashed ring: a design that exists already.');
   if (input.dataset.designs.some((_, i) => isDisputed(input, i)))
     words.push('Dotted red ring: simulation disagrees with the model.');
-  if (input.dataset.designs.length > 0) words.push('Grey: further designs that the search kept.');
+  if (input.dataset.designs.length > 0) words.push('Grey: a sample of all designs that keep every limit.');
   return words.join(' ');
 }
 

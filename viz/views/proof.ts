@@ -30,7 +30,8 @@ export function renderProof<E extends Element>(root: Root<E>, id: string, proof:
 
 /** One sentence: whether simulation bears the model out, and where not. */
 export function verdictOf(proof: Proof): string {
-  if (proof.agrees) return `A circuit simulation (${proof.simulator}) agrees with the model in every figure.`;
+  if (proof.agrees)
+    return `A circuit simulation (${proof.simulator.replace(/ \(.*/, '')}) agrees with the model in every figure.`;
   const figures = proof.corners.flatMap((corner) => corner.figures.filter((figure) => !figure.agrees));
   const names = [...new Set(figures.map((figure) => figure.name))];
   const failed = proof.corners.filter((corner) => corner.failure !== undefined).length;
