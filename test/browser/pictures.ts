@@ -3,56 +3,77 @@
  *
  *     node dist/test/browser/pictures.js runs/demo/page.html viz/pictures
  */
-import { mkdirSync } from 'node:fs';
+import { mkdirSync, writeFileSync } from 'node:fs';
 import { join } from 'node:path';
 import { pathToFileURL } from 'node:url';
 import type { Page } from 'playwright-core';
 import { launchAll, openTab } from './browser.ts';
+import { smallPng } from './small-png.ts';
 
 interface State {
   readonly name: string;
   readonly width: number;
   readonly height: number;
   readonly colorScheme: 'light' | 'dark';
-  readonly isWhole: boolean;
-  readonly act: (page: Page) => Promise<void>;
+  /** Brings the page into the state. */
+  readonly act?: (page: Page) => Promise<void>;
+  /** The part that is taken; the window where absent. */
+  readonly part?: string;
 }
 
-const nothing = async (): Promise<void> => {};
+const DESK = { width: 1280, height: 800, colorScheme: 'light' } as const;
 
 const STATES: readonly State[] = [
-  { name: 'light', width: 1280, height: 800, colorScheme: 'light', isWhole: false, act: nothing },
-  { name: 'dark', width: 1280, height: 800, colorScheme: 'dark', isWhole: false, act: nothing },
-  { name: 'phone', width: 390, height: 844, colorScheme: 'light', isWhole: false, act: nothing },
-  { name: 'whole', width: 1280, height: 800, colorScheme: 'light', isWhole: true, act: nothing },
-  { name: 'what-if', width: 1280, height: 800, colorScheme: 'light', isWhole: false, act: whatIf },
+  { ...DESK, name: 'page' },
+  { ...DESK, name: 'dark', colorScheme: 'dark' },
+  { ...DESK, name: 'phone', width: 390, height: 844 },
+  { ...DESK, name: 'what-if', act: whatIf, part: '#whatif-section' },
+  { ...DESK, name: 'side-by-side', act: sideBySide, part: '#compare-section' },
+  { ...DESK, name: 'near-miss', act: nearMiss },
+  { ...DESK, name: 'trust', part: '#trust-section' },
 ];
 
-/** Writes `light.png`, `dark.png`, … of the page at `path` into `folder`; returns their names, none where no browser starts. */
+/** Writes `page.png`, `dark.png`, … of the page at `path` into `folder`; returns their names, none where no browser starts. */
 async function takePictures(path: string, folder: string): Promise<readonly string[]> {
   const { started } = await launchAll();
   const browser = started[0]?.browser;
   mkdirSync(folder, { recursive: true });
   const taken: string[] = [];
-  for (const state of STATES) {
+  for (const { name, width, height, colorScheme, act, part } of STATES) {
     if (browser === undefined) break;
-    const { page, context } = await openTab(browser, pathToFileURL(path).href, {
-      viewport: { width: state.width, height: state.height },
-      colorScheme: state.colorScheme,
-    });
-    await state.act(page);
-    await page.screenshot({ path: join(folder, `${state.name}.png`), fullPage: state.isWhole });
-    taken.push(`${state.name}.png`);
+    const viewport = { width, height };
+    const { page, context } = await openTab(browser, pathToFileURL(path).href, { viewport, colorScheme });
+    await act?.(page);
+    await page.mouse.move(0, 0);
+    const picture = await (part === undefined ? page.screenshot() : page.locator(part).screenshot());
+    writeFileSync(join(folder, `${name}.png`), smallPng(picture));
+    taken.push(`${name}.png`);
     await context.close();
   }
   for (const one of started) await one.browser.close();
   return taken;
 }
 
+/** A lower frequency than the open design can bear. */
 async function whatIf(page: Page): Promise<void> {
-  await page.locator('#open-head').getByRole('button', { name: 'What if' }).click();
   await page.locator('#knob-frequency').focus();
-  for (let i = 0; i < 60; i++) await page.keyboard.press('ArrowLeft');
+  for (let i = 0; i < 50; i++) await page.keyboard.press('ArrowLeft');
+}
+
+/** The first picks, one beside the other. */
+async function sideBySide(page: Page): Promise<void> {
+  const picks = await page.locator('#picks button').count();
+  for (let i = 0; i < picks; i++) {
+    await page.locator('#picks button').nth(i).click();
+    const pin = page.locator('[data-act="pin"]');
+    if ((await pin.getAttribute('aria-pressed')) === 'false') await pin.click();
+  }
+}
+
+/** The near miss that would buy most. */
+async function nearMiss(page: Page): Promise<void> {
+  await page.locator('#prices [data-act="open"]').first().click();
+  await page.evaluate(() => scrollTo(0, 0));
 }
 
 const [page = '', folder = ''] = process.argv.slice(2);

@@ -67,7 +67,7 @@ function builtInTables(): PartsTables {
 }
 
 /** The value of an outcome that must be good. */
-export function given<T>(outcome: Outcome<T>): T {
+function given<T>(outcome: Outcome<T>): T {
   if (!outcome.ok) throw new Error(JSON.stringify(outcome.findings.slice(0, 3)));
   return outcome.value;
 }

@@ -3,16 +3,18 @@ import fc from 'fast-check';
 import { describe, expect, test } from 'vitest';
 import { bandOf, indistinguishable } from '../../viz/bands.ts';
 import type { FrontDesign } from '../../viz/data.ts';
+import { datasetOf } from '../../viz/dataset.ts';
 import { kept } from '../../viz/narrow.ts';
 import { picksOf } from '../../viz/picks.ts';
 import { firstState, sceneOf } from '../../viz/scene.ts';
+import { designWords } from '../../viz/views/picture-words.ts';
 import { renderPrices } from '../../viz/views/prices.ts';
 import { place as placeOn, valueAt } from '../../viz/views/ranges.ts';
 import { verdicts } from '../../viz/views/trust.ts';
 import { knobValue } from '../../viz/views/whatif.ts';
 import { applied, designKnobs, railKnobs } from '../../viz/whatif.ts';
 import { fixture, fixtureAssessor, RAIL } from './fixture.ts';
-import { bench, open } from './gallery.ts';
+import { bench, open, PROOF } from './gallery.ts';
 import { cellsOf, place } from './page-at.ts';
 
 const { data, dataset } = bench;
@@ -154,6 +156,28 @@ describe('a near miss', () => {
     expect(scene.kept).not.toContain(row);
     expect(scene.kept).toHaveLength(bench.dataset.designs.length);
     expect(picksOf(bench.dataset, scene.kept).map((one) => one.index)).not.toContain(row);
+  });
+});
+
+describe('remarks', () => {
+  const [first, second, third] = data.front.designs.map((design) => design.id);
+  const told = datasetOf({
+    ...data,
+    incumbents: [first ?? '', 'one that is not on the front'],
+    proofs: [
+      { ...PROOF, id: second ?? '', agrees: false },
+      { ...PROOF, id: third ?? '', agrees: true },
+    ],
+  });
+
+  test('an existing design, a design that simulation contradicts and a near miss say so; nobody else', () => {
+    const words = [first, second, third].map((id) => told.remarks.get(told.index.get(id ?? '') ?? -1));
+    expect(words).toEqual([['exists already'], ['simulation disagrees'], undefined]);
+    expect(told.remarks.size).toBe(2 + told.misses.size);
+  });
+
+  test('the hover card carries them', () => {
+    expect(designWords(told, told.index.get(first ?? '') ?? -1)).toContain('exists already');
   });
 });
 

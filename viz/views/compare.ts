@@ -108,7 +108,10 @@ function table(
         .text(group);
     }
     const line = body.append('tr');
-    line.append('th').attr('scope', 'row').text(row.label);
+    line
+      .append('th')
+      .attr('scope', 'row')
+      .text(group === GROUPS[3] ? row.label.replace(/, margin$/, '') : row.label);
     row.cells.forEach((cell, column) => {
       const td = line.append('td');
       if (row.best === column) td.attr('class', 'best').append('span').attr('class', 'flag').text('best');

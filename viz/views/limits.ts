@@ -56,15 +56,19 @@ export function brokenLimits(limits: readonly LimitFigure[]): readonly string[] 
   return limits
     .filter((limit) => limit.violation > 0)
     .sort((a, b) => b.violation - a.violation)
-    .map(
-      (limit) =>
-        `${capital(spokenLimit(limit.name))}: ${written(limit, limit.value)} where ${isLeast(limit.name) ? 'at least ' : ''}${written(limit, limit.allowed)} is ${isLeast(limit.name) ? 'asked' : 'allowed'}${missedWords(limit)}`,
-    );
+    .map((limit) => `${capital(spokenLimit(limit.name))}: ${brokenWords(limit)}`);
 }
 
-/** By how much; an efficiency in points, and nothing where the figures say it. */
+/** `30 mV where 20 mV is allowed, missed by 50.0 %`. */
+function brokenWords(limit: LimitFigure): string {
+  if (limit.name === 'avoidedBands') return `${show(-limit.value, limit.unit)} inside a band that the sheet avoids`;
+  if (isAnswer(limit.name)) return written(limit, limit.value);
+  const [least, asked] = isLeast(limit.name) ? ['at least ', 'asked'] : ['', 'allowed'];
+  return `${written(limit, limit.value)} where ${least}${written(limit, limit.allowed)} is ${asked}${missedWords(limit)}`;
+}
+
+/** By how much; an efficiency in points. */
 function missedWords(limit: LimitFigure): string {
-  if (isAnswer(limit.name)) return '';
   if (limit.name.startsWith('efficiency')) return `, short by ${digits(-100 * limit.margin)} points`;
   return `, missed by ${percent(limit.violation, limit.violation < 1 ? 1 : 0)}`;
 }

@@ -71,6 +71,21 @@ describe('limits', () => {
       'Output ripple: 30 mV where 20 mV is allowed, missed by 50.0 %',
     ]);
   });
+
+  test.each([
+    [
+      'efficiency@100%',
+      '',
+      0.9,
+      0.92,
+      'Efficiency at 100 % load: 90.00 % where at least 92.00 % is asked, short by 2 points',
+    ],
+    ['avoidedBands', 'Hz', -18e3, 0, 'Clearance from avoided bands: 18 kHz inside a band that the sheet avoids'],
+    ['controllerAbilities', '', 0, 1, 'Controller drives this stage: no'],
+  ])('%s broken reads as a sentence', (name, unit, value, allowed, sentence) => {
+    const broken = { name, unit, value, allowed, margin: value - allowed, slack: value - allowed, violation: 0.2 };
+    expect(brokenLimits([broken]).map((text) => text.replaceAll('\u00a0', ' '))).toEqual([sentence]);
+  });
 });
 
 describe('what a design is made of', () => {
