@@ -61,7 +61,7 @@ const head = {
 };
 
 /** An invented proof: one corner that disagrees in one figure, one that could not be simulated. */
-const PROOF: Proof = {
+export const PROOF: Proof = {
   format: 'chopfront-proof',
   version: 1,
   tool: '0.1.0',

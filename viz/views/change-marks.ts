@@ -6,7 +6,7 @@ import { bottomAxis, canvasOf, leftAxis, type Scale } from '../marks/axis.ts';
 import { px, type Root } from '../marks/root.ts';
 import { axisUnit } from '../units.ts';
 
-export const changesDefaults = { width: 420, height: 320, left: 52, right: 14, top: 30, bottom: 42, radius: 3.6 };
+const changesDefaults = { width: 420, height: 320, left: 52, right: 14, top: 30, bottom: 42, radius: 3.6 };
 
 type Options = typeof changesDefaults;
 type Objective = Comparison['objectives'][number];

@@ -78,7 +78,7 @@ describe('limits', () => {
       '',
       0.9,
       0.92,
-      'Efficiency at 100 % load: 90.00 % where at least 92.00 % is asked, short by 2 points',
+      'Efficiency at 100 % load: 90.00 % where at least 92.00 % is asked, short by 2.00 points',
     ],
     ['avoidedBands', 'Hz', -18e3, 0, 'Clearance from avoided bands: 18 kHz inside a band that the sheet avoids'],
     ['controllerAbilities', '', 0, 1, 'Controller drives this stage: no'],
