@@ -24,6 +24,8 @@ export interface Resumed {
   readonly rings: Ring[];
   /** Swept before, s. */
   readonly seconds: number;
+  /** Of these, spent on saving, s. */
+  readonly saving: number;
   /** ISO 8601. */
   readonly started: string;
   /** Number of the checkpoint. */
@@ -33,6 +35,7 @@ export interface Resumed {
 
 const STATE = z.object({
   seconds: z.number(),
+  saving: z.number(),
   started: z.string(),
   rings: z.array(
     z.object({
@@ -62,10 +65,11 @@ export function packedIslands(rings: readonly Ring[]): Uint8Array[] {
 export function resumeFrom(folder: string, tally: (bytes: Uint8Array) => Omit<IslandState, 'bytes'>): Resumed {
   const { checkpoint, warnings } = readCheckpoint(folder);
   if (checkpoint === undefined) throw refusal('checkpoint-none', { folder });
-  const { seconds, started, rings } = stateOf(folder, checkpoint);
+  const { seconds, saving, started, rings } = stateOf(folder, checkpoint);
   return {
     rings: understood(folder, () => ringsOf(rings, checkpoint.islands, tally)),
     seconds,
+    saving,
     started,
     number: checkpoint.number,
     warnings: [...warnings, ...nodeWarning(checkpoint)],

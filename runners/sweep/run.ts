@@ -84,6 +84,8 @@ export async function runSweep(plan: RunPlan): Promise<RunEnd> {
 interface Begun {
   readonly rings: readonly Ring[];
   readonly seconds: number;
+  /** Spent on saving, s; grows as the sweep goes on. */
+  saving: number;
   readonly started: string;
   readonly number: number;
   readonly warnings: readonly string[];
@@ -94,7 +96,7 @@ function begin(plan: RunPlan, search: Search): Begun {
   const { shard, shards } = plan.identity;
   const all = shard === undefined ? Array.from({ length: shards }, (_, i) => i) : [shard];
   const rings = all.map((one) => startRing(plan, search, one));
-  const begun = { rings, seconds: 0, started: new Date().toISOString(), number: 0, warnings: [] };
+  const begun = { rings, seconds: 0, saving: 0, started: new Date().toISOString(), number: 0, warnings: [] };
   writeRecord(plan.folder, momentOf(plan, search, begun, 'running', 0).record);
   plan.snapshot();
   return begun;
@@ -114,8 +116,10 @@ async function carryOut(plan: RunPlan, search: Search, begun: Begun, saver: Save
   const { rings } = begun;
   let seconds = (): number => begun.seconds;
   const save = (reason: 'interval' | 'end'): void => {
+    const before = performance.now();
     const status = reason === 'interval' ? 'running' : rings.every((ring) => ring.done) ? 'done' : 'stopped';
     saver.save(momentOf(plan, search, begun, status, seconds()));
+    begun.saving += (performance.now() - before) / 1000;
   };
   const { budget, reporter, describeBest, problem, checkpoints } = plan;
   const { shards } = plan.identity;
@@ -180,6 +184,7 @@ function momentOf(plan: RunPlan, search: Search, begun: Begun, status: RunRecord
     islands: packedIslands(rings),
     found: { railHash, partsHash, sources: listSources(sources), archive, nearMisses, sample },
     record: recordOf(plan, begun, survey, status, seconds),
+    saving: begun.saving,
   };
 }
 
@@ -213,14 +218,14 @@ function recordOf(
     nearMisses: nearMisses.count,
     hypervolume,
     share: meanShare(plan.budget, plan.identity.shards, rings, seconds),
-    trust: { ...trust, timeSplit: timeSplitOf(rings) },
+    trust: { ...trust, timeSplit: { ...timeSplitOf(rings), saving: begun.saving } },
     faults: rings.flatMap((ring) => ring.faults),
     started,
     updated: new Date().toISOString(),
   };
 }
 
-/** Seconds of all threads together, by what they were spent on. */
+/** Seconds of all threads together, by what they were spent on; saving is done beside them. */
 function timeSplitOf(rings: readonly Ring[]): Record<string, number> {
   const names = ['model', 'variation', 'ranking', 'archive', 'transfer'] as const;
   return Object.fromEntries(names.map((name) => [name, rings.reduce((sum, ring) => sum + ring.spent[name], 0)]));

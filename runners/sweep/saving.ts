@@ -16,6 +16,8 @@ export interface Moment {
   readonly islands: readonly Uint8Array[];
   readonly found: Found;
   readonly record: RunRecord;
+  /** Spent on saving up to now, s. */
+  readonly saving: number;
 }
 
 /** Saves moments into a folder. */
@@ -31,11 +33,11 @@ export function createSaver(folder: string, lock: Lock, number: number): Saver {
   let count = number;
   let last: number | undefined;
   return {
-    save({ rings, islands, found, record }: Moment): void {
+    save({ rings, islands, found, record, saving }: Moment): void {
       if (!existsSync(folder)) throw refusal('folder-vanished', { folder });
       if (!lock.held()) throw refusal('lock-lost', { folder });
       try {
-        const state = { seconds: record.seconds, started: record.started, rings };
+        const state = { seconds: record.seconds, saving, started: record.started, rings };
         writeCheckpoint(folder, { number: count + 1, node: process.version, state, islands });
         count += 1;
         writeFound(folder, found);

@@ -1,18 +1,33 @@
 /**
- * `npm run bench`: how fast the model judges designs and how fast the page draws, with machine, Node version and commit beside
- * the figures. `-- --json` prints one JSON object and nothing else.
+ * `npm run bench`: how fast the model judges designs, how well the runner uses the machine and how fast the page draws, with machine,
+ * Node version and commit beside the figures. `-- --json` prints one JSON object and nothing else; `--minutes 30` reads the memory of
+ * a half-hour sweep, in the place of one minute; `--only runner` (or `model`, `page`) leaves the rest out.
  */
 import { spawnSync } from 'node:child_process';
 import { cpus } from 'node:os';
+import { parseArgs } from 'node:util';
 import { packagePath } from '../../runners/package-path.ts';
 import { type ModelTiming, timeModel } from './model.ts';
 import { type PageFigure, timePage } from './page.ts';
+import { runnerLines, timeRunner } from './runner.ts';
 
+const { values } = parseArgs({
+  options: {
+    json: { type: 'boolean', default: false },
+    minutes: { type: 'string', default: '1' },
+    only: { type: 'string' },
+  },
+});
 const machine = describeMachine();
-const model = await timeModel();
-const page = await timePage();
-if (process.argv.includes('--json')) process.stdout.write(`${JSON.stringify({ machine, model, page })}\n`);
-else process.stdout.write(`${[machineLine(), ...model.flatMap(modelLines), ...pageLines()].join('\n')}\n`);
+const wanted = (part: string): boolean => values.only === undefined || values.only === part;
+const model = wanted('model') ? await timeModel() : [];
+const runner = wanted('runner') ? await timeRunner({ minutes: Number(values.minutes) }) : undefined;
+const page = wanted('page') ? await timePage() : undefined;
+if (values.json) process.stdout.write(`${JSON.stringify({ machine, model, runner, page })}\n`);
+else {
+  const parts = [model.flatMap(modelLines), runner === undefined ? [] : runnerLines(runner), pageLines()];
+  process.stdout.write(`${[machineLine(), ...parts.flat()].join('\n')}\n`);
+}
 
 interface Machine {
   readonly processor: string;
@@ -53,6 +68,7 @@ function modelLines(timing: ModelTiming): string[] {
 }
 
 function pageLines(): string[] {
+  if (page === undefined) return [];
   if (page.figures.length === 0) return ['', `page: not timed, ${page.note}`];
   const line = ({ name, value, unit, target }: PageFigure): string =>
     `  ${name.padEnd(36)}${Number(value.toPrecision(4))} ${unit} (${target})`;
