@@ -113,9 +113,9 @@ function writeCurrents(form: IsolatedForm, t: Transformer, state: StageState, ch
 function dying(form: IsolatedForm, t: Transformer, state: StageState): number {
   const period = state.frequency > 0 ? 1 / state.frequency : 1;
   const time = form.doubler ? 0.5 * (1 - 2 * state.highShare) * period : state.lowShare * period;
-  const n2 = t.ratio * t.ratio;
-  const primary = 2 * state.highResistance + state.primaryResistance;
-  const resistance = primary + n2 * (state.secondaryResistance + 2 * state.lowResistance);
+  const secondary = state.secondaryResistance + (form.doubler ? 2 : 1) * state.lowResistance;
+  const primary = form.inSeries * state.highResistance + state.primaryResistance;
+  const resistance = primary + t.ratio * t.ratio * secondary;
   const x = (time * resistance) / t.leakage;
   if (!(x > 1e-6)) return 1;
   decay[0] = -2 * x;
