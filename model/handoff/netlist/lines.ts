@@ -70,7 +70,7 @@ export class Lines {
 
   /** A diode with next to no drop of its own, in series with the drop `volts` and, where given, `resistance` (parameters). */
   diode(name: string, anode: string, cathode: string, volts: string, resistance?: string): void {
-    this.model('dideal', 'D(IS=1e-12 N=0.01 RS=1e-4 CJO=50p)');
+    this.model('dideal', 'D(IS=1e-9 N=0.01 RS=1e-4)');
     const end = resistance === undefined ? cathode : `r${name}`;
     this.elements.push(`D${name} ${anode} d${name} dideal`, `VD${name} d${name} ${end} DC {${volts}}`);
     if (resistance !== undefined) this.elements.push(`RD${name} ${end} ${cathode} {${resistance}}`);
