@@ -2,10 +2,8 @@
 import { buckCases } from './buck-cases.ts';
 import { type CircuitCase, compareAll, type Row } from './case.ts';
 
-export type { Row } from './case.ts';
-
 /** All cases of all architectures. */
-export function circuitCases(): CircuitCase[] {
+function circuitCases(): CircuitCase[] {
   return [...buckCases()];
 }
 

@@ -30,7 +30,7 @@ const tables = need(
   joinTables(
     BUILT_IN_TABLES.map(({ kind, file }) => ({
       kind,
-      rows: need(readTable(kind, readFileSync(new URL(`../../model/tables/${file}`, import.meta.url), 'utf8'), file)),
+      rows: need(readTable(kind, readFileSync(`model/tables/${file}`, 'utf8'), file)),
     })),
   ),
 );
@@ -38,7 +38,7 @@ const tables = need(
 /** The space of a shipped rail, with its architectures narrowed to `architecture`. */
 function shippedProblem(name: string, architecture?: Architecture): RailProblem {
   const file = `${name}.yaml`;
-  const rail: Rail = need(readRail(readFileSync(new URL(`../../model/rails/${file}`, import.meta.url), 'utf8'), file));
+  const rail: Rail = need(readRail(readFileSync(`model/rails/${file}`, 'utf8'), file));
   const narrowed =
     architecture === undefined ? rail : { ...rail, search: { ...rail.search, architectures: [architecture] } };
   return need(createRailProblem(narrowed, tables));
@@ -46,7 +46,7 @@ function shippedProblem(name: string, architecture?: Architecture): RailProblem 
 
 /** All twenty. */
 export function foundDesigns(): FoundDesign[] {
-  const held: readonly Held[] = JSON.parse(readFileSync(new URL('designs.json', import.meta.url), 'utf8'));
+  const held: readonly Held[] = JSON.parse(readFileSync('test/circuit/designs.json', 'utf8'));
   return held.map(({ rail, ...record }) => {
     const problem = shippedProblem(rail, record.architecture);
     const genes = need(problem.genesFrom(record));
