@@ -185,7 +185,7 @@ describe('checkpoints that are whole but not ours', () => {
     history: { stride: 1, rows: [] },
     spent: { model: 1, search: 1 },
   };
-  const state = { seconds: 1, started: '2026-01-01T00:00:00.000Z', rings: [ring] };
+  const state = { seconds: 1, saving: 0, started: '2026-01-01T00:00:00.000Z', rings: [ring] };
   const resume = (value: unknown, islands = 1) => {
     const parts = Array.from({ length: islands }, () => Uint8Array.of(1));
     writeCheckpoint(folder, { number: 1, node: process.version, state: value, islands: parts });
