@@ -100,5 +100,5 @@ objectives: [loss, volume, cost]
 # Designs that exist already, as spec files: the search starts from them.
 # incumbents: [present-design.json]
 
-# advanced: {islands: 8, population: 100, epoch-generations: 10, front-size: 500}
+# advanced: {islands: 8, population: 50, epoch-generations: 20, front-size: 500}
 `;
