@@ -4,6 +4,7 @@ import type { DesignRecord } from './assessment.ts';
 import { GENE, type GeneName, NUMERIC_GENES, STOCKED, WOUND } from './genes.ts';
 import { shortHash } from './hash.ts';
 import { bad, type Finding, good, type Outcome } from './outcome.ts';
+import { shorten } from './quantity/parse.ts';
 import type { Architecture } from './rail/rail.ts';
 
 /** Slot of the parts record in which each named gene stands. */
@@ -68,7 +69,7 @@ export function fromRecord(space: RecordSpace, record: DesignRecord, file: strin
   const findings: Finding[] = [];
   const genes = Float64Array.from(space.genes, (gene) => gene.low);
   const refuse = (field: string, found: string, allowed: string): void => {
-    findings.push({ file, line: 0, column: 0, field, found, allowed });
+    findings.push({ file, line: 0, column: 0, field: shorten(field), found: shorten(found), allowed });
   };
   const architecture = space.architectures.indexOf(record.architecture);
   if (architecture < 0) refuse('architecture', record.architecture, space.architectures.join(', '));
