@@ -33,7 +33,7 @@ ${drawn(comparison)}
 const STYLE = `
 .compared { margin-bottom: 0.8rem; }
 .compared > h2 { margin-bottom: 0.4rem; }
-.compared td:last-child { white-space: normal; }
+:is(.compared td:last-child, #figures th, #carried th) { white-space: normal; }
 .differences { padding-left: 1.1rem; overflow-wrap: anywhere; }
 .pairs { display: grid; gap: 1.2rem; grid-template-columns: repeat(auto-fit, minmax(min(100%, 24rem), 1fr)); }
 .change-legend { display: flex; flex-wrap: wrap; gap: 0.3rem 1.1rem; list-style: none; padding: 0; margin: 0.5rem 0; }

@@ -78,9 +78,9 @@ function countsText({ gained, lost, moved, kept }: Comparison): string {
 
 const WHY: Readonly<Record<Why['kind'], string>> = {
   unbuildable: 'cannot be built',
-  breaks: 'break a limit',
-  beaten: 'are beaten',
-  unbeaten: 'are beaten by nothing: not found or not kept',
+  breaks: 'breaking a limit',
+  beaten: 'beaten',
+  unbeaten: 'beaten by nothing (not found or not kept)',
 };
 
 function whyText(what: 'gained' | 'lost', changes: readonly Change[]): string[] {
