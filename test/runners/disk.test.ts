@@ -68,7 +68,9 @@ describe.runIf(small)('on a small file system', () => {
   });
 });
 
-describe('a folder that vanishes', () => {
+// Node 20 itself now and then aborts while a thread that still compiles is ended (assertion in node_platform.cc, seen once in hundreds of
+// runs): such a run says nothing of ours and is made again. A wrong message or status fails every time.
+describe('a folder that vanishes', { retry: 2 }, () => {
   it('ends the sweep with one line and status 1', async () => {
     const folder = join(newFolder(), 'run');
     const { ended } = startToy({ ...order, folder, evaluations: 40_000 });
