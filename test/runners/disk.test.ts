@@ -68,18 +68,24 @@ describe.runIf(small)('on a small file system', () => {
   });
 });
 
-// Node 20 itself now and then aborts while a thread that still compiles is ended (assertion in node_platform.cc, seen once in hundreds of
-// runs): such a run says nothing of ours and is made again. A wrong message or status fails every time.
-describe('a folder that vanishes', { retry: 2 }, () => {
+/** What Node 20 itself prints when it aborts while a thread that still compiles is ended: seen once, and nothing of ours. */
+const RUNTIME_ABORT = 'node_platform.cc';
+
+describe('a folder that vanishes', () => {
   it('ends the sweep with one line and status 1', async () => {
+    let outcome = await vanish();
+    if (outcome.stderr.includes(RUNTIME_ABORT)) outcome = await vanish();
+    expect(outcome.stderr).toContain('run: has vanished while the sweep ran');
+    expect(outcome.status).toBe(1);
+  });
+
+  async function vanish() {
     const folder = join(newFolder(), 'run');
     const { ended } = startToy({ ...order, folder, evaluations: 40_000 });
     await until(() => saved(folder));
     rmSync(folder, { recursive: true, maxRetries: 100, retryDelay: 1 });
-    const { status, stderr } = await ended;
-    expect(stderr).toContain('run: has vanished while the sweep ran');
-    expect(status).toBe(1);
-  });
+    return ended;
+  }
 });
 
 function saved(folder: string): boolean {
