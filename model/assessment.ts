@@ -1,5 +1,5 @@
 /** What the model says of one design, whole: the rich twin of the numbers that the search sees. SI base units. */
-import type { Architecture } from './rail/rail.ts';
+import type { Architecture } from './stages/list.ts';
 
 /** A design as a person names it: numbers by gene name, parts by slot. Choices that are parts stand under `parts` alone. */
 export interface DesignRecord {

@@ -16,7 +16,8 @@ import type { Material } from './parts/material.ts';
 import { type Leg, legOf } from './parts/power-stage.ts';
 import type { Switch } from './parts/switch.ts';
 import type { PartsTables } from './parts/tables.ts';
-import type { Architecture, Rail } from './rail/rail.ts';
+import type { Rail } from './rail/rail.ts';
+import { type Architecture, stageOf } from './stages/list.ts';
 
 /** Stocked inductors of one series by rising inductance. */
 export interface InductorSeries {
@@ -188,7 +189,7 @@ function controllersFor(rail: Rail, rows: readonly Controller[]): readonly Contr
 }
 
 function clampDiodes(rail: Rail, rows: readonly Diode[]): readonly Diode[] {
-  if (!rail.search.architectures.includes('two-switch-forward')) return [];
+  if (!rail.search.architectures.some(isClamped)) return [];
   const need = rail.input.maximum / rail.derating.switchVoltage;
   return sortBy(
     usable(rail, rows).filter((row) => row.voltageRating >= need),
@@ -197,7 +198,7 @@ function clampDiodes(rail: Rail, rows: readonly Diode[]): readonly Diode[] {
 }
 
 function legsFor(rail: Rail, tables: PartsTables): readonly Leg[] {
-  if (!rail.search.architectures.includes('buck-synchronous')) return [];
+  if (!rail.search.architectures.some(takesPowerStages)) return [];
   const need = rail.input.maximum / rail.derating.switchVoltage;
   const rows = usable(rail, tables.powerStages).filter((row) => within(row.voltageRating, need, RATING_SPAN));
   return sortBy(rows, (row) => -row.lowResistance).map(legOf);
@@ -205,12 +206,12 @@ function legsFor(rail: Rail, tables: PartsTables): readonly Leg[] {
 
 /** Whether an architecture has a transformer. */
 export function hasTransformer(architecture: Architecture): boolean {
-  return !architecture.startsWith('buck');
+  return stageOf(architecture)?.form !== undefined;
 }
 
 /** Whether an architecture has four primary switches, so that its legs may be shifted against each other. */
 export function isFullBridge(architecture: Architecture): boolean {
-  return architecture.startsWith('full-bridge');
+  return stageOf(architecture)?.highDevices === 4;
 }
 
 /** Switches that may rectify behind a transformer: from twice the output up to what a plain buck needs. */
@@ -223,7 +224,17 @@ function rectifierSwitches(rail: Rail, rows: readonly Switch[]): readonly Switch
 
 /** Whether an architecture rectifies with a switch. */
 export function usesLowSwitch(architecture: Architecture): boolean {
-  return architecture !== 'buck-diode';
+  return stageOf(architecture)?.diode !== true;
+}
+
+/** Whether a phase's leg may be a power stage. */
+export function takesPowerStages(architecture: Architecture): boolean {
+  return stageOf(architecture)?.packagedLegs === true;
+}
+
+/** Whether diodes clamp the primary switches to the input. */
+function isClamped(architecture: Architecture): boolean {
+  return stageOf(architecture)?.control === 'forward';
 }
 
 function missingKinds(rail: Rail, catalogue: Catalogue): Finding[] {
@@ -243,10 +254,10 @@ function missingKinds(rail: Rail, catalogue: Catalogue): Finding[] {
     wanted.push(['materials', catalogue.transformerMaterials.length, 'no distributed gap']);
     wanted.push(['conductors', catalogue.conductors.length, 'any size']);
   }
-  if (rail.search.architectures.includes('two-switch-forward')) {
+  if (rail.search.architectures.some(isClamped)) {
     wanted.push(['diodes', catalogue.clampDiodes.length, `a rating of at least ${rail.input.maximum} V with derating`]);
   }
-  if (rail.search.architectures.includes('buck-diode')) {
+  if (rail.search.architectures.some((architecture) => !usesLowSwitch(architecture))) {
     wanted.push(['diodes', catalogue.diodes.length, `a rating of at least ${rail.input.maximum} V with derating`]);
   }
   const { barred, preferred } = rail.parts;

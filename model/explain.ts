@@ -6,8 +6,9 @@ import type { Controller } from './parts/controller.ts';
 import type { PartsTables } from './parts/tables.ts';
 import { createRailProblem } from './problem.ts';
 import { formatQuantity } from './quantity/index.ts';
-import type { Architecture, Rail } from './rail/rail.ts';
+import type { Rail } from './rail/rail.ts';
 import type { Stage } from './stages/contract.ts';
+import type { Architecture } from './stages/list.ts';
 import { stageOf } from './stages/list.ts';
 
 /** A named line of text. */

@@ -31,12 +31,13 @@ export { type Gain, gainOf, type Miss, type RequirementPrice, requirementPrices 
 export { createRailProblem, type Judgement, type RailProblem } from './problem.ts';
 export * from './quantity/index.ts';
 export * from './rail/index.ts';
-export type { Architecture, ObjectiveName, Rail } from './rail/rail.ts';
-export { ARCHITECTURES, OBJECTIVES } from './rail/rail.ts';
+export type { ObjectiveName, Rail } from './rail/rail.ts';
+export { OBJECTIVES } from './rail/rail.ts';
 export { type Representative, representativesOf } from './representatives.ts';
 export { readSpec, recordOfSpec, SPEC_SCHEMA, type Spec } from './spec.ts';
 export { CAUSES, drawSamples } from './spread/sample.ts';
 export { type Spread, spreadOf, summarise } from './spread/spread.ts';
+export { ARCHITECTURES, type Architecture } from './stages/list.ts';
 export { type Change, type Distance, type Standing, standingOf } from './standing.ts';
 export { MODEL_VERSION } from './version.ts';
 export { writeSpec } from './write-spec.ts';

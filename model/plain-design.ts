@@ -5,7 +5,7 @@
 import type { DesignRecord } from './assessment.ts';
 import { bad, type Finding, good, type Outcome } from './outcome.ts';
 import { parseQuantity } from './quantity/index.ts';
-import { ARCHITECTURES, type Architecture } from './rail/rail.ts';
+import { ARCHITECTURES, type Architecture } from './stages/list.ts';
 
 /** Values with a unit; every other number is a count. */
 const UNITS = { frequency: 'frequency', inductance: 'inductance' } as const;

@@ -9,10 +9,11 @@ import type { LimitDefinition } from './limits/book.ts';
 import { objectiveReaders, objectivesOf } from './objectives.ts';
 import { bad, type Finding, good, type Outcome } from './outcome.ts';
 import type { PartsTables } from './parts/tables.ts';
-import type { Architecture, Rail } from './rail/rail.ts';
+import type { Rail } from './rail/rail.ts';
 import { fromRecord, type RecordSpace, recordId, toRecord } from './record.ts';
 import { isPackaged, isWound, nearestRow, snapGenes } from './snap.ts';
 import type { Stage } from './stages/contract.ts';
+import type { Architecture } from './stages/list.ts';
 import { stageOf } from './stages/list.ts';
 
 /** Figures of one design. */

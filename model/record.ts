@@ -5,7 +5,7 @@ import { GENE, type GeneName, NUMERIC_GENES, STOCKED, WOUND } from './genes.ts';
 import { shortHash } from './hash.ts';
 import { bad, type Finding, good, type Outcome } from './outcome.ts';
 import { shorten } from './quantity/parse.ts';
-import type { Architecture } from './rail/rail.ts';
+import type { Architecture } from './stages/list.ts';
 
 /** Slot of the parts record in which each named gene stands. */
 const SLOTS: readonly (readonly [GeneName, string])[] = [

@@ -1,9 +1,9 @@
 /** Moves a gene vector onto the nearest buildable design, and gives genes that play no part one canonical value. */
 import type { Gene } from '../optimizer/problem.ts';
 import type { Catalogue, InductorSeries } from './catalogue.ts';
-import { hasTransformer, isFullBridge, usesLowSwitch } from './catalogue.ts';
+import { hasTransformer, isFullBridge, takesPowerStages, usesLowSwitch } from './catalogue.ts';
 import { GENE, PACKAGED, WOUND } from './genes.ts';
-import type { Architecture } from './rail/rail.ts';
+import type { Architecture } from './stages/list.ts';
 
 /** Powers of ten as literals: a computed one could differ in its last digit between engines. */
 const DECADES = [1, 1e1, 1e2, 1e3, 1e4, 1e5, 1e6, 1e7, 1e8];
@@ -49,9 +49,9 @@ export function isWound(genes: Float64Array, list: readonly Gene[]): boolean {
   return list[GENE.chokeBuild].options?.[genes[GENE.chokeBuild]] === WOUND;
 }
 
-/** Whether the leg of snapped `genes` is a power stage: only a synchronous buck's can be. */
+/** Whether the leg of snapped `genes` is a power stage: only some architectures' can be. */
 export function isPackaged(genes: Float64Array, list: readonly Gene[], architecture: Architecture): boolean {
-  return architecture === 'buck-synchronous' && list[GENE.legBuild].options?.[genes[GENE.legBuild]] === PACKAGED;
+  return takesPowerStages(architecture) && list[GENE.legBuild].options?.[genes[GENE.legBuild]] === PACKAGED;
 }
 
 const DISCRETE_GENES = [GENE.highSwitch, GENE.highParallel, GENE.lowSwitch, GENE.lowParallel];
@@ -78,7 +78,7 @@ function reset(genes: Float64Array, list: readonly Gene[], places: readonly numb
 function rest(genes: Float64Array, list: readonly Gene[], architecture: Architecture): void {
   if (isPackaged(genes, list, architecture)) reset(genes, list, DISCRETE_GENES);
   else reset(genes, list, LEG_GENES);
-  if (architecture !== 'buck-synchronous') genes[GENE.legBuild] = 0;
+  if (!takesPowerStages(architecture)) genes[GENE.legBuild] = 0;
   if (usesLowSwitch(architecture)) {
     genes[GENE.diode] = middle(list[GENE.diode]);
   } else {

@@ -6,7 +6,7 @@ import { z } from 'zod';
 import type { DesignRecord } from './assessment.ts';
 import { bad, type Finding, good, type Outcome } from './outcome.ts';
 import { shorten } from './quantity/parse.ts';
-import { ARCHITECTURES } from './rail/rail.ts';
+import { ARCHITECTURES } from './stages/list.ts';
 
 const figure = z.object({
   name: z.string(),

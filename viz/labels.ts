@@ -2,6 +2,7 @@
  * Words for the names that data carry: `outputCeramicCount` and `output-ripple` become what a person would say. Every name
  * that the model can emit stands here; one that does not is split into words.
  */
+import { STAGES } from '../model/stages/list.ts';
 
 /** Slots of parts and the bodies that losses heat. */
 export const PARTS: Readonly<Record<string, string>> = {
@@ -49,16 +50,10 @@ export const EFFECTS: Readonly<Record<string, string>> = {
   driveSupply: 'drive supply',
 };
 
-/** Stages, as an engineer calls them. */
-export const ARCHITECTURE_WORDS: Readonly<Record<string, string>> = {
-  'buck-synchronous': 'synchronous buck',
-  'buck-diode': 'diode buck',
-  'two-switch-forward': 'two-switch forward',
-  'half-bridge-centre-tap': 'half bridge, centre tap',
-  'half-bridge-current-doubler': 'half bridge, current doubler',
-  'full-bridge-centre-tap': 'full bridge, centre tap',
-  'full-bridge-current-doubler': 'full bridge, current doubler',
-};
+/** Architectures, as an engineer says them. */
+export const ARCHITECTURE_WORDS: Readonly<Record<string, string>> = Object.fromEntries(
+  STAGES.map(({ architecture, words }) => [architecture, words]),
+);
 
 /** What the search moves. */
 export const VARIABLES: Readonly<Record<string, string>> = {

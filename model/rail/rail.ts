@@ -1,4 +1,5 @@
 /** A rail sheet after reading: every quantity in SI base units (temperatures in kelvin), every default filled in. */
+import type { Architecture } from '../stages/list.ts';
 
 /** What the input source and the output hold: their smallest, usual and largest voltage, V. */
 export interface VoltageRange {
@@ -17,18 +18,6 @@ export interface LoadPoint {
 
 /** What the stage does when the load is light. */
 export type LightLoadPolicy = 'forced-continuous' | 'diode-emulation' | 'phase-shedding';
-
-/** Architectures that a sheet may ask for; a transformer stage names its secondary too. */
-export const ARCHITECTURES = [
-  'buck-synchronous',
-  'buck-diode',
-  'two-switch-forward',
-  'half-bridge-centre-tap',
-  'half-bridge-current-doubler',
-  'full-bridge-centre-tap',
-  'full-bridge-current-doubler',
-] as const;
-export type Architecture = (typeof ARCHITECTURES)[number];
 
 /** Objectives that the model offers; all are minimised. */
 export const OBJECTIVES = ['loss', 'inefficiency', 'volume', 'cost', 'board-area', 'mass', 'full-load-loss'] as const;

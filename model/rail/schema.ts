@@ -2,9 +2,10 @@
 import type { z } from 'zod';
 import { readDecimal } from '../quantity/decimal.ts';
 import { parseQuantity, shorten } from '../quantity/parse.ts';
+import { ARCHITECTURES } from '../stages/list.ts';
 import { amount, count, keyed, leaf, listOf, matching, oneOf, textOr, upTo, yesNo } from './leaves.ts';
 import { PROFILE_NAMES } from './profiles.ts';
-import { ARCHITECTURES, OBJECTIVES } from './rail.ts';
+import { OBJECTIVES } from './rail.ts';
 
 const MOST_VOLTS = 2000;
 const MOST_AMPERES = 10000;

@@ -24,19 +24,23 @@ const BUCK = {
   addEdgeLosses,
 } as const;
 
-export const buckSynchronous: Stage = {
+export const buckSynchronous: Stage<'buck-synchronous'> = {
   ...BUCK,
   architecture: 'buck-synchronous',
+  words: 'synchronous buck',
   twoWay: true,
   diode: false,
+  packagedLegs: true,
   refusal: stepsDown,
 };
 
-export const buckDiode: Stage = {
+export const buckDiode: Stage<'buck-diode'> = {
   ...BUCK,
   architecture: 'buck-diode',
+  words: 'diode buck',
   twoWay: false,
   diode: true,
+  packagedLegs: false,
   refusal: (rail) => {
     if (rail.profile.some((point) => point.fraction < 0)) return 'a diode carries no current back from output to input';
     if (rail.output.battery && rail.input.takesPower) return "a diode cannot return the battery's energy to the input";

@@ -1,16 +1,23 @@
 /** What an architecture must say of itself. Adding one is a file that fills this in and a line in `list.ts`. */
 import type { Design } from '../design.ts';
-import type { Architecture, Rail } from '../rail/rail.ts';
+import type { Rail } from '../rail/rail.ts';
 import type { WindingForm } from '../transformer.ts';
 import type { IsolatedForm } from './isolated.ts';
+import type { Architecture } from './list.ts';
 import type { StageState } from './state.ts';
 
-export interface Stage {
-  readonly architecture: Architecture;
+/** `Name` is the architecture's own in the file that declares it, and any of the list elsewhere. */
+export interface Stage<Name extends string = Architecture> {
+  /** Name in sheets, records and families: lower case, hyphens. */
+  readonly architecture: Name;
+  /** The same as an engineer says it. */
+  readonly words: string;
   /** Whether power can run from output to input. */
   readonly twoWay: boolean;
   /** Whether the low position holds a diode instead of a switch. */
   readonly diode: boolean;
+  /** Whether a power stage, a half-bridge with its driver, may serve as one phase's leg. */
+  readonly packagedLegs: boolean;
   /** How the transformer between input and output is driven and rectified; absent without one. */
   readonly form?: IsolatedForm;
   readonly windings?: WindingForm;

@@ -1,18 +1,23 @@
 /** Builds a transformer stage from its form: what the files of the architectures share. */
 import { addIsolatedEdges } from '../isolated-edges.ts';
-import type { Architecture } from '../rail/rail.ts';
 import type { Stage } from './contract.ts';
 import { type IsolatedForm, isolatedDuty, isolatedRefusal, rectifierVoltage, solveIsolated } from './isolated.ts';
 
 /** Duty of the rising interval that is left to a stage after resets and dead times: half periods of a bridge, reset of a forward. */
 const HIGHEST = { bridge: 0.95, doubler: 0.475, forward: 0.47 } as const;
 
-/** The stage of `architecture` with `form`. */
-export function transformerStage(architecture: Architecture, form: IsolatedForm): Stage {
+/** The stage called `architecture` in data and `words` by people, with `form`. */
+export function transformerStage<const Name extends string>(
+  architecture: Name,
+  words: string,
+  form: IsolatedForm,
+): Stage<Name> {
   return {
     architecture,
+    words,
     twoWay: false,
     diode: false,
+    packagedLegs: false,
     form,
     windings: form.centreTap ? 'centre-tap' : form.doubler ? 'current-doubler' : 'forward',
     control: form.doubleEnded ? 'bridge' : 'forward',

@@ -9,8 +9,9 @@ import { BUILT_IN_TABLES } from '../../model/parts/built-in.ts';
 import { joinTables } from '../../model/parts/join.ts';
 import { readTable } from '../../model/parts/read-table.ts';
 import { createRailProblem, type RailProblem } from '../../model/problem.ts';
-import type { Architecture, Rail } from '../../model/rail/rail.ts';
+import type { Rail } from '../../model/rail/rail.ts';
 import { readRail } from '../../model/rail/read.ts';
+import type { Architecture } from '../../model/stages/list.ts';
 import { exp, expAt, log, logAt, pow, powAt, sincosAt } from '../../optimizer/maths/index.ts';
 import { need, randomFrom, randomGenes } from '../model/support.ts';
 

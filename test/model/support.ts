@@ -14,7 +14,8 @@ import type { Inductor } from '../../model/parts/inductor.ts';
 import type { Switch } from '../../model/parts/switch.ts';
 import type { PartsTables } from '../../model/parts/tables.ts';
 import { createRailProblem, type RailProblem } from '../../model/problem.ts';
-import type { Architecture, Rail } from '../../model/rail/rail.ts';
+import type { Rail } from '../../model/rail/rail.ts';
+import type { Architecture } from '../../model/stages/list.ts';
 
 /** The value of an outcome; its findings as an error, so that a test shows them. */
 export function need<T>(outcome: Outcome<T>): T {

@@ -1,7 +1,8 @@
 /** High step-down ratios: where arithmetic forbids the plain buck, and what a transformer is worth from 3.6 to 48. */
 import type { Controller } from '../../model/parts/controller.ts';
 import type { PartsTables } from '../../model/parts/tables.ts';
-import type { Architecture, Rail } from '../../model/rail/rail.ts';
+import type { Rail } from '../../model/rail/rail.ts';
+import type { Architecture } from '../../model/stages/list.ts';
 import { type Designs, hypervolumeOf } from '../../optimizer/index.ts';
 import { plainRail } from '../model/support.ts';
 import { builtInTables, type Sweep, spaceOf, sweep } from './spaces.ts';

@@ -1,6 +1,7 @@
 /** An invented sweep for the view tests: plausible in shape, consistent in itself, with no claim to physics. */
 import type { Assessment, DesignRecord, LossItem, PointReport, Trace } from '../../model/assessment.ts';
-import type { Architecture, Rail } from '../../model/rail/rail.ts';
+import type { Rail } from '../../model/rail/rail.ts';
+import type { Architecture } from '../../model/stages/list.ts';
 import type { Assessor, Movable, Verdict } from '../../viz/assessor.ts';
 import type { Front, FrontDesign, NearMiss, PageData } from '../../viz/data.ts';
 

@@ -1,4 +1,5 @@
 /** The mark of a family: as many corners as it has phases, and an inner cut that tells its architecture without colour. */
+import { ARCHITECTURES } from '../../model/stages/list.ts';
 
 /** What a family's name says: `buck-synchronous ×2` has two phases. */
 export interface Look {
@@ -6,16 +7,8 @@ export interface Look {
   readonly phases: number;
 }
 
-/** Order of the architectures, which numbers the cuts. */
-const ORDER = [
-  'buck-synchronous',
-  'buck-diode',
-  'two-switch-forward',
-  'half-bridge-centre-tap',
-  'half-bridge-current-doubler',
-  'full-bridge-centre-tap',
-  'full-bridge-current-doubler',
-];
+/** The order of the list of architectures numbers the cuts. */
+const NAMES: readonly string[] = ARCHITECTURES;
 
 /** Architecture and phases of a family; an unknown form counts as one phase. */
 export function lookOf(family: string): Look {
@@ -30,8 +23,8 @@ export function colourOf({ architecture, phases }: Look): number {
 }
 
 function rankOf(architecture: string): number {
-  const rank = ORDER.indexOf(architecture);
-  return rank < 0 ? ORDER.length - 1 : rank;
+  const rank = NAMES.indexOf(architecture);
+  return rank < 0 ? NAMES.length - 1 : rank;
 }
 
 /** Path of a family's mark about the origin, with about the area of a circle of radius `r`; fill with `evenodd`. */
@@ -46,18 +39,28 @@ function outline(phases: number, r: number): string {
   return star(phases, 1.45 * r, (phases === 5 ? 0.66 : 0.74) * r);
 }
 
-/** Inner shapes: none, hole, small dot in a hole, slit, two dots, cross slit, large hole. */
+/** Inner shapes: none, hole, bar, dot in a hole, upright bar, two bars, dot; after these, dots in a row, one more each. */
 function cut(kind: number, r: number): string {
   if (kind === 1) return circle(0.55 * r);
   if (kind === 2) return box(-0.8 * r, -0.17 * r, 1.6 * r, 0.34 * r);
   if (kind === 3) return `${circle(0.66 * r)}${circle(0.28 * r)}`;
   if (kind === 4) return box(-0.17 * r, -0.8 * r, 0.34 * r, 1.6 * r);
   if (kind === 5) return `${box(-0.6 * r, -0.42 * r, 1.2 * r, 0.26 * r)}${box(-0.6 * r, 0.16 * r, 1.2 * r, 0.26 * r)}`;
-  return kind === 6 ? circle(0.28 * r) : '';
+  if (kind === 6) return circle(0.28 * r);
+  return kind < 7 ? '' : row(kind - 5, r);
+}
+
+function row(count: number, r: number): string {
+  const pitch = (1.7 * r) / count;
+  return Array.from({ length: count }, (_, i) => dot((i - (count - 1) / 2) * pitch, 0.36 * pitch)).join('');
+}
+
+function dot(x: number, r: number): string {
+  return `M${n(x - r)} 0a${n(r)} ${n(r)} 0 1 1 ${n(2 * r)} 0a${n(r)} ${n(r)} 0 1 1 ${n(-2 * r)} 0Z`;
 }
 
 function circle(r: number): string {
-  return `M${n(-r)} 0a${n(r)} ${n(r)} 0 1 1 ${n(2 * r)} 0a${n(r)} ${n(r)} 0 1 1 ${n(-2 * r)} 0Z`;
+  return dot(0, r);
 }
 
 function box(x: number, y: number, width: number, height: number): string {

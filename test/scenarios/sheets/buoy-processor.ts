@@ -1,5 +1,5 @@
 /** One to forty at 60 A: the shortest on-time against transformer stages, mixed banks. */
-import type { Architecture } from '../../../model/rail/rail.ts';
+import type { Architecture } from '../../../model/stages/list.ts';
 import { least, objectiveIndex, type Sweep, searching, spaceOf, sweep } from '../spaces.ts';
 import { type Statement, stated } from '../statement.ts';
 import { turnsNear } from './questions.ts';

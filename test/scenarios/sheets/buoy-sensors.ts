@@ -1,6 +1,6 @@
 /** The demo sheet: a series regulator as baseline, diode against synchronous, light load, an avoided band. */
 import { explainRail } from '../../../model/explain.ts';
-import type { Architecture } from '../../../model/rail/rail.ts';
+import type { Architecture } from '../../../model/stages/list.ts';
 import { need } from '../../model/support.ts';
 import { builtInTables, objectiveIndex, type Sweep, spaceOf, sweep } from '../spaces.ts';
 import { percent, type Statement, stated, tally } from '../statement.ts';

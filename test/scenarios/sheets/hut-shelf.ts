@@ -1,7 +1,7 @@
 /** 400 V to 12 V: turns, leakage, cautions. */
 import { hasTransformer } from '../../../model/catalogue.ts';
 import { cautionsOf } from '../../../model/cautions.ts';
-import type { Architecture } from '../../../model/rail/rail.ts';
+import type { Architecture } from '../../../model/stages/list.ts';
 import type { Sweep } from '../spaces.ts';
 import { percent, type Statement, stated } from '../statement.ts';
 import { turnsNear } from './questions.ts';

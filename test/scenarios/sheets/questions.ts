@@ -1,6 +1,6 @@
 /** Questions that several sheets are asked of a sweep. */
 import type { PointReport } from '../../../model/assessment.ts';
-import type { Architecture } from '../../../model/rail/rail.ts';
+import type { Architecture } from '../../../model/stages/list.ts';
 import { least, type Member, type Sweep, searching, shippedRail, spaceOf, sweep } from '../spaces.ts';
 import { median, type Statement, stated } from '../statement.ts';
 
