@@ -3,27 +3,36 @@ import { hasTransformer } from '../catalogue.ts';
 import type { Rail } from '../rail/rail.ts';
 import type { LimitDefinition } from './book.ts';
 
-interface Offer extends LimitDefinition {
+interface Offer<Name extends string> extends LimitDefinition {
+  readonly name: Name;
   readonly when: (rail: Rail) => boolean;
 }
 
 const always = (): boolean => true;
 const wound = (rail: Rail): boolean => rail.search.woundChokes === true;
 const transformer = (rail: Rail): boolean => rail.search.architectures.some(hasTransformer);
-const most = (name: string, unit: string, when: (rail: Rail) => boolean = always): Offer => ({
+const most = <const Name extends string>(
+  name: Name,
+  unit: string,
+  when: (rail: Rail) => boolean = always,
+): Offer<Name> => ({
   name,
   unit,
   sense: 'most',
   when,
 });
-const least = (name: string, unit: string, when: (rail: Rail) => boolean = always): Offer => ({
+const least = <const Name extends string>(
+  name: Name,
+  unit: string,
+  when: (rail: Rail) => boolean = always,
+): Offer<Name> => ({
   name,
   unit,
   sense: 'least',
   when,
 });
 
-const OFFERS: readonly Offer[] = [
+const OFFERS = [
   most('outputRipple', 'V'),
   most('inputRipple', 'V', (rail) => rail.input.ripple !== undefined),
   { ...least('filterChoke', '', (rail) => rail.input.sourceRipple !== undefined), whole: true },
@@ -66,16 +75,25 @@ const OFFERS: readonly Offer[] = [
   most('mass', 'kg', (rail) => rail.limits.mass !== undefined),
   most('cost', 'currency', (rail) => rail.limits.cost !== undefined),
   most('noLoadPower', 'W', (rail) => rail.limits.noLoadPower !== undefined),
-];
+] as const;
+
+/** Name of a limit; a least efficiency carries its load in its name and is none of these. */
+export type LimitName = (typeof OFFERS)[number]['name'];
+
+/** Every name, in the order of the list. */
+export const LIMIT_NAMES: readonly LimitName[] = OFFERS.map(({ name }) => name);
 
 /** The limits of `rail`, always in the same order; one for each load with a least efficiency comes last. */
 export function limitsOf(rail: Rail): readonly LimitDefinition[] {
-  const listed = OFFERS.filter((offer) => offer.when(rail)).map(({ name, unit, sense, whole }) => ({
-    ...(whole === true ? { whole } : {}),
-    name,
-    unit: unit === 'currency' ? rail.currency : unit,
-    sense,
-  }));
+  const offers: readonly Offer<LimitName>[] = OFFERS;
+  const listed = offers
+    .filter((offer) => offer.when(rail))
+    .map(({ name, unit, sense, whole }) => ({
+      ...(whole === true ? { whole } : {}),
+      name,
+      unit: unit === 'currency' ? rail.currency : unit,
+      sense,
+    }));
   const efficiency = rail.limits.efficiency.map((limit) => ({
     name: efficiencyLimitName(limit.load),
     unit: '',

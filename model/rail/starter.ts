@@ -1,4 +1,6 @@
 /** The sheet that a person starts from: every key, explained in its comments, with numbers that make a sound rail. */
+import { ARCHITECTURES } from '../stages/list.ts';
+import { OBJECTIVES } from './rail.ts';
 
 /** A commented starter sheet; it reads without a finding. */
 export function starterSheet(): string {
@@ -74,8 +76,7 @@ limits:
 
 # The space to search.
 search:
-  # Also two-switch-forward, half-bridge-centre-tap, half-bridge-current-doubler, full-bridge-centre-tap,
-  # full-bridge-current-doubler, for large ratios.
+  # For large ratios also those with a transformer. There are: ${ARCHITECTURES.join(', ').replace(/(.{60,100}?,) /g, '$1\n  #   ')}.
   architectures: [buck-synchronous, buck-diode]
   phases: {from: 1, to: 4}
   frequency: {from: 50 kHz, to: 2 MHz}
@@ -85,7 +86,7 @@ search:
   # ceramics: 12         # most at the output and at the input, each
   # bulks: 4
 
-# Two to four of: loss, inefficiency, volume, cost, board-area, mass, full-load-loss. All are made small.
+# Two to four of: ${OBJECTIVES.join(', ')}. All are made small.
 objectives: [loss, volume, cost]
 
 # Your own tables stand beside the built-in ones, or instead of them. To begin one, and to check it:
