@@ -1,0 +1,116 @@
+/** One segment of a pair's walk: its matrices, its forced solution, the state across it. A kernel: it speaks through one record. */
+import { expAt, sincosAt } from '../../optimizer/maths/index.ts';
+import type { Waveform } from '../waveform/waveform.ts';
+import { CURRENT, counts, FORCED, KEPT, kept, pair, STEP, WHOLE } from './pair-state.ts';
+
+/** Fewest steps of a segment where there are two of them, and where there are more and so each is short. */
+const FEWEST = 8;
+const FEWEST_OF_MANY = 4;
+/** Most steps of a segment, and the angle of ringing that one may turn through (of a decay, one time constant). */
+const MOST = 32;
+const TURN = 0.7;
+
+const scratch = new Float64Array(2);
+
+/**
+ * Works out what segment `i` keeps: its matrices, forced solution and current.
+ * @derivation the network of `pair`: e^(A·h) with A − α·1 = [[−α, −g], [1/L, α]], ringing or, with more damping, two decays
+ * @valid a segment that lasts
+ */
+export function prepareSegment(current: Waveform, i: number): void {
+  const d = current.duration[i];
+  const { alpha, g, l } = pair;
+  const bend = alpha * alpha - g / l;
+  const omega = bend < 0 ? Math.sqrt(-bend) : 0;
+  let n = current.count > 3 ? FEWEST_OF_MANY : FEWEST;
+  const fastest = Math.max(omega / TURN, -alpha);
+  while (n < MOST && fastest * d > n) n *= 2;
+  counts[i] = n;
+  const h = d / n;
+  let even = 0;
+  let odd = 0;
+  if (bend < 0) {
+    scratch[0] = alpha * h;
+    expAt(scratch, 0);
+    const e = scratch[0];
+    scratch[0] = omega * h;
+    sincosAt(scratch, 0);
+    odd = (e * scratch[0]) / omega;
+    even = e * scratch[1];
+  } else {
+    const beta = Math.sqrt(bend);
+    // α + β by its twin, for the sum itself would cancel.
+    scratch[0] = (g / l / (alpha - beta)) * h;
+    scratch[1] = (alpha - beta) * h;
+    expAt(scratch, 0);
+    expAt(scratch, 1);
+    even = 0.5 * (scratch[0] + scratch[1]);
+    odd = beta * h > 1e-9 ? (scratch[0] - scratch[1]) / (2 * beta) : h * scratch[0];
+  }
+  const at = KEPT * i;
+  kept[at + STEP] = even - alpha * odd;
+  kept[at + STEP + 1] = -g * odd;
+  kept[at + STEP + 2] = odd / l;
+  kept[at + STEP + 3] = even + alpha * odd;
+  multiplySteps(at, n);
+  force(current, i, d);
+}
+
+/** The matrix of the whole segment: its steps are a power of two, so theirs is squared. */
+function multiplySteps(at: number, steps: number): void {
+  let a = kept[at + STEP];
+  let b = kept[at + STEP + 1];
+  let c = kept[at + STEP + 2];
+  let d = kept[at + STEP + 3];
+  for (let n = steps; n > 1; n >>= 1) {
+    const bc = b * c;
+    const sum = a + d;
+    a = a * a + bc;
+    b *= sum;
+    c *= sum;
+    d = d * d + bc;
+  }
+  kept[at + WHOLE] = a;
+  kept[at + WHOLE + 1] = b;
+  kept[at + WHOLE + 2] = c;
+  kept[at + WHOLE + 3] = d;
+}
+
+/** The solution that the state of segment `i` rings about, w0 + w1·t and y0 + y1·t, and the current a + s·t that forces it. */
+function force(current: Waveform, i: number, d: number): void {
+  const { g, r, r1, l, l1, c1, average } = pair;
+  const a = current.start[i] - average;
+  const s = (current.end[i] - current.start[i]) / d;
+  const y1 = s / (g * c1);
+  const w1 = r * y1 - r1 * s;
+  const y0 = (a / c1 - w1) / g;
+  const at = KEPT * i;
+  kept[at + FORCED] = l * y1 - r1 * a - l1 * s + r * y0;
+  kept[at + FORCED + 1] = w1;
+  kept[at + FORCED + 2] = y0;
+  kept[at + FORCED + 3] = y1;
+  kept[at + CURRENT] = a;
+  kept[at + CURRENT + 1] = s;
+}
+
+/**
+ * Takes the state across segment `i`: a jump of the current before it splits by inductance, then it rings about the forced solution.
+ * @derivation the network of `pair`
+ * @valid a segment that `prepareSegment` has seen
+ */
+export function crossSegment(current: Waveform, i: number): void {
+  const at = KEPT * i;
+  const d = current.duration[i];
+  const z = pair.w - kept[at + FORCED];
+  const u = pair.y + ((current.start[i] - pair.before) * pair.l1) / pair.l - kept[at + FORCED + 2];
+  const zEnd = kept[at + WHOLE] * z + kept[at + WHOLE + 1] * u;
+  const uEnd = kept[at + WHOLE + 2] * z + kept[at + WHOLE + 3] * u;
+  pair.d = d;
+  pair.z = z;
+  pair.u = u;
+  pair.zEnd = zEnd;
+  pair.uEnd = uEnd;
+  pair.w = zEnd + kept[at + FORCED] + kept[at + FORCED + 1] * d;
+  pair.y = uEnd + kept[at + FORCED + 2] + kept[at + FORCED + 3] * d;
+  pair.before = current.end[i];
+}
