@@ -36,8 +36,8 @@ export interface FrontFile {
   readonly designs: readonly FrontDesign[];
 }
 
-/** Slots of the parts record, in the order of the columns. */
-const PART_SLOTS = [
+/** Slots of the parts record that every file has a column for, in their order. */
+const PART_SLOTS: readonly string[] = [
   'highSwitch',
   'lowSwitch',
   'powerStage',
@@ -84,11 +84,12 @@ function frontDesign(problem: RailProblem, genes: Float64Array): FrontDesign {
 export function frontCsv(file: FrontFile): string {
   const column = ({ name, unit }: NamedUnit): string => header(name, unit);
   const spread = file.designs.some((design) => design.yield !== undefined);
+  const slots = slotsOf(file);
   const head = [
     'id',
     'family',
     ...file.genes.map(column),
-    ...PART_SLOTS,
+    ...slots,
     ...file.objectives.map(column),
     ...file.limits.map(({ name, unit }) => header(`${name} margin`, unit, true)),
     'worst margin',
@@ -98,13 +99,19 @@ export function frontCsv(file: FrontFile): string {
     design.id,
     design.family,
     ...file.genes.map(({ name, unit }) => cell(design.genes[name], unit)),
-    ...PART_SLOTS.map((slot) => design.parts[slot] ?? ''),
+    ...slots.map((slot) => design.parts[slot] ?? ''),
     ...file.objectives.map(({ unit }, i) => cell(design.objectives[i], unit)),
     ...file.limits.map(({ name, unit }) => cell(design.margins[name], unit, true)),
     cell(design.worstMargin, ''),
     ...(spread ? [cell(design.yield, '')] : []),
   ]);
   return `${[head, ...lines].map((line) => line.map(quoteCell).join(',')).join('\n')}\n`;
+}
+
+/** The usual slots, then those that a design of this front has besides: what its chokes and transformers are wound from. */
+function slotsOf({ designs }: FrontFile): readonly string[] {
+  const used = new Set(designs.flatMap(({ parts }) => Object.keys(parts)));
+  return [...PART_SLOTS, ...[...used].filter((slot) => !PART_SLOTS.includes(slot)).sort()];
 }
 
 /** A CSV cell that no spreadsheet takes for a formula, quoted where it must be. */

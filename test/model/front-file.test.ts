@@ -43,6 +43,12 @@ describe.each(RAIL_NAMES)('%s', (name) => {
     return { unit: head[at].unit, cells: table.slice(1).map((row) => row[at]) };
   };
 
+  it('names every part of every design, wound ones by core, material and conductors', () => {
+    for (const [i, { parts }] of file.designs.entries()) {
+      for (const [slot, part] of Object.entries(parts)) expect(column(slot).cells[i], slot).toBe(part);
+    }
+  });
+
   it('every gene and objective in the sheet reads back to the double that front.json holds', () => {
     const named = [
       ...file.genes.map((gene) => ({ ...gene, of: (i: number) => file.designs[i].genes[gene.name] })),

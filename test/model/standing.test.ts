@@ -1,6 +1,7 @@
 /** Where an incumbent stands, what requirements cost, and a design as a plain list. */
 import { describe, expect, it } from 'vitest';
 import { createRailProblem, gainOf, readPlainDesign, requirementPrices, standingOf } from '../../model/index.ts';
+import { NO_TABLES } from '../support/tables.ts';
 import { handMade, need, plainRail } from './support.ts';
 
 describe('requirement prices', () => {
@@ -80,16 +81,12 @@ describe('standing', () => {
 
   it('incumbents become seeds of the search; one that cannot stand here is refused by name', () => {
     const tables = {
+      ...NO_TABLES,
       switches: problem.catalogue.highSwitches,
       diodes: problem.catalogue.diodes,
       inductors: problem.catalogue.inductorSeries.flatMap(({ rows }) => rows),
       ceramics: [...problem.catalogue.outputCeramics, ...problem.catalogue.inputCeramics],
-      bulks: [],
       controllers: problem.catalogue.controllers,
-      powerStages: [],
-      cores: [],
-      materials: [],
-      conductors: [],
     };
     const unique = { ...tables, ceramics: [...new Map(tables.ceramics.map((row) => [row.name, row])).values()] };
     const record = problem.record(genes);

@@ -16,6 +16,7 @@ import type { PartsTables } from '../../model/parts/tables.ts';
 import { createRailProblem, type RailProblem } from '../../model/problem.ts';
 import type { Rail } from '../../model/rail/rail.ts';
 import type { Architecture } from '../../model/stages/list.ts';
+import { NO_TABLES } from '../support/tables.ts';
 
 /** The value of an outcome; its findings as an error, so that a test shows them. */
 export function need<T>(outcome: Outcome<T>): T {
@@ -239,6 +240,7 @@ export function handMade(made: HandMade, rail: Rail): { problem: RailProblem; ge
   const high = idealSwitch({ voltageRating: bus, ...made.high, name: 'high' });
   const low = idealSwitch({ voltageRating: bus, ...made.low, name: 'low' });
   const tables: PartsTables = {
+    ...NO_TABLES,
     switches: [high, low],
     diodes: [idealDiode({ voltageRating: bus, ...made.diode })],
     inductors: [idealInductor(made.inductor)],
@@ -248,7 +250,6 @@ export function handMade(made: HandMade, rail: Rail): { problem: RailProblem; ge
     ],
     bulks: made.outputBulk === undefined ? [] : [{ ...made.outputBulk, voltageRating: out, name: 'bulk' }],
     controllers: [idealController(made.controller)],
-    ...NO_OTHER_TABLES,
   };
   const problem = need(createRailProblem(suited, tables));
   const diode = architecture === 'buck-diode';
@@ -278,9 +279,6 @@ export function handMade(made: HandMade, rail: Rail): { problem: RailProblem; ge
   );
   return { problem, genes };
 }
-
-/** Tables of kinds that a buck does not use. */
-const NO_OTHER_TABLES = { cores: [], materials: [], conductors: [], powerStages: [] };
 
 /** The whole story of a hand-made design. */
 export function assessMade(made: HandMade, rail: Rail): Assessment {

@@ -4,6 +4,7 @@ import type { Rail } from '../../model/rail/rail.ts';
 import type { Architecture } from '../../model/stages/list.ts';
 import type { Assessor, Movable, Verdict } from '../../viz/assessor.ts';
 import type { Front, FrontDesign, NearMiss, PageData } from '../../viz/data.ts';
+import { NO_TABLES } from '../support/tables.ts';
 
 const FAMILIES: readonly (readonly [Architecture, number])[] = [
   ['buck-synchronous', 1],
@@ -146,18 +147,7 @@ function around(front: Front, everyone: readonly Assessment[]): Omit<PageData, '
       built: '2026-12-01T09:00:00Z',
     },
     rail: RAIL,
-    tables: {
-      switches: [],
-      diodes: [],
-      inductors: [],
-      ceramics: [],
-      bulks: [],
-      controllers: [],
-      cores: [],
-      materials: [],
-      conductors: [],
-      powerStages: [],
-    },
+    tables: NO_TABLES,
     history: Array.from({ length: 40 }, (_, epoch) => ({
       evaluations: (epoch + 1) * 6000,
       hypervolume: 0.6612 * (1 - Math.exp(-(epoch + 2) / 6)),
