@@ -5,6 +5,7 @@
 import { ceramicCapacitance } from './capacitors/index.ts';
 import { type Catalogue, priceAt } from './catalogue.ts';
 import { GENE } from './genes.ts';
+import { boardPath, sideSurface, surfaceCoefficient } from './heat/index.ts';
 import { createInductorAtFrequency, inductorThermalResistance, prepareInductor } from './magnetics/index.ts';
 import type { Bulk } from './parts/bulk.ts';
 import type { Ceramic } from './parts/ceramic.ts';
@@ -75,8 +76,10 @@ export class Design {
 
   /** Core and winding figures of the inductor at this frequency. */
   readonly inductorAt = createInductorAtFrequency();
-  /** Choke to board, K/W. */
+  /** Stocked choke to board, wound one to air, K/W. */
   inductorThermalResistance = 0.5;
+  /** Stocked choke to air by its sides, W/K; its top stands for the board that it covers. */
+  inductorFaces = 0.5;
 
   constructor(rail: Rail, catalogue: Catalogue, stages: readonly Stage[]) {
     this.stage = stages[0];
@@ -150,7 +153,7 @@ export function resolveDesign(
 
 /** Discrete switches under the controller's drivers, or a power stage under its own. */
 function resolveLeg(design: Design, genes: Float64Array, catalogue: Catalogue): void {
-  const packaged = design.stage.architecture === 'buck-synchronous' && genes[GENE.legBuild] > 0;
+  const packaged = design.stage.packagedLegs && genes[GENE.legBuild] > 0;
   const leg = packaged ? catalogue.legs[genes[GENE.powerStage]] : undefined;
   design.powerStage = leg?.stage;
   design.driver = leg?.driver ?? design.controller;
@@ -165,11 +168,7 @@ function resolveChoke(design: Design, genes: Float64Array, rail: Rail, catalogue
     const series = catalogue.inductorSeries[genes[GENE.inductorSeries]];
     design.inductor = series.rows[nearestRow(series, genes[GENE.inductance])];
     design.chokeMaterial = undefined;
-    design.inductorThermalResistance = inductorThermalResistance(
-      design.inductor.ratedCurrent,
-      design.inductor.ratedRise,
-      design.inductor.dcResistance,
-    );
+    stockedHeat(design, design.inductor, rail);
   } else {
     design.chokeMaterial = catalogue.materials[genes[GENE.chokeMaterial]];
     windChoke(
@@ -184,10 +183,27 @@ function resolveChoke(design: Design, genes: Float64Array, rail: Rail, catalogue
     );
     design.inductor = design.woundChoke;
     design.inductorThermalResistance = design.woundChoke.surfaceResistance;
+    design.inductorFaces = 0;
   }
   design.inductance = design.inductor.inductance;
   const ripple = design.frequency * design.stage.chokeMultiple;
   prepareInductor(design.inductor, ripple, rail.ambient + WINDING_RISE, design.inductorAt);
+}
+
+/** Rise at which the conductance of a choke's faces is taken, K. */
+const FACE_RISE = 40;
+/** Ambient of the rating of stocked chokes, K. */
+const RATING_AMBIENT = 298.15;
+
+/** Divides the rated conductance of a stocked choke between its faces, in the sheet's air, and its way into the board. */
+function stockedHeat(design: Design, row: Inductor, rail: Rail): void {
+  const sides = sideSurface(row.length, row.width, row.height);
+  const faces = sides + row.length * row.width;
+  const size = Math.sqrt(0.2 * faces);
+  const rated = inductorThermalResistance(row.ratedCurrent, row.ratedRise, row.dcResistance);
+  const still = surfaceCoefficient(row.ratedRise, size, 0, RATING_AMBIENT);
+  design.inductorThermalResistance = boardPath(rated, faces * still);
+  design.inductorFaces = sides * surfaceCoefficient(FACE_RISE, size, rail.airSpeed, rail.ambient);
 }
 
 /** Value of the gene `chokeBuild` from which on chokes are wound. */

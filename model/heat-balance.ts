@@ -23,8 +23,10 @@ export class HeatBalance {
   readonly slope = new Float64Array(HOT_PARTS);
   /** Part to board, K/W, all its pieces together. */
   readonly resistance = new Float64Array(HOT_PARTS);
-  /** 1 where the part gives its heat to the air by its own surface, 0 where the board carries it. */
+  /** 1 where the part gives all its heat to the air by its own surface, 0 where the board carries it or a share of it. */
   readonly toAir = new Uint8Array(HOT_PARTS);
+  /** Conductance of a part on the board to the air by its own faces, W/K, all its pieces together; 0 where it has none to speak of. */
+  readonly faces = new Float64Array(HOT_PARTS);
   /** Highest allowed temperature, K. */
   readonly allowed = new Float64Array(HOT_PARTS);
   /** Loss that heats the board alone, W, and its slope with board temperature, W/K. */
@@ -40,7 +42,7 @@ export class HeatBalance {
   /** K. */
   readonly temperature = new Float64Array(HOT_PARTS);
   boardTemperature = 300.5;
-  /** W, everything. */
+  /** W that all parts together make. */
   total = 0.5;
   /** Largest loop gain of heating, 0 … : at 1 the balance runs away. */
   runaway = 0.5;
@@ -56,30 +58,38 @@ export function solveHeat(h: HeatBalance): void {
   let { boardAllowed } = h;
   let toAir = 0;
   for (let i = 0; i < HOT_PARTS; i++) {
-    const gain = h.resistance[i] * h.slope[i];
-    if (gain > runaway) runaway = gain;
-    const rest = left(gain);
     if (h.toAir[i] === 1) {
-      const watts = (h.constant[i] + h.slope[i] * h.ambient) / rest;
+      const gain = h.resistance[i] * h.slope[i];
+      if (gain > runaway) runaway = gain;
+      const watts = (h.constant[i] + h.slope[i] * h.ambient) / left(gain);
       h.temperature[i] = warm(h, h.ambient + h.resistance[i] * watts);
       toAir += watts;
       continue;
     }
-    constant += h.constant[i] / rest;
-    slope += h.slope[i] / rest;
-    const most = h.allowed[i] * rest - h.resistance[i] * h.constant[i];
+    // What the faces carry off is a loss that shrinks with the part's temperature: only the rest reaches the board.
+    const atZero = h.constant[i] + h.faces[i] * h.ambient;
+    const net = h.slope[i] - h.faces[i];
+    const gain = h.resistance[i] * net;
+    if (gain > runaway) runaway = gain;
+    const rest = left(gain);
+    constant += atZero / rest;
+    slope += net / rest;
+    const most = h.allowed[i] * rest - h.resistance[i] * atZero;
     if (most < boardAllowed) boardAllowed = most;
   }
   const gain = slope / h.conductance;
   if (gain > runaway) runaway = gain;
   h.runaway = runaway;
   h.boardTemperature = warm(h, (h.ambient + constant / h.conductance) / left(gain));
-  h.total = constant + slope * h.boardTemperature + toAir;
   for (let i = 0; i < HOT_PARTS; i++) {
     if (h.toAir[i] === 1) continue;
-    const watts = (h.constant[i] + h.slope[i] * h.boardTemperature) / left(h.resistance[i] * h.slope[i]);
+    const net = h.slope[i] - h.faces[i];
+    const atZero = h.constant[i] + h.faces[i] * h.ambient;
+    const watts = (atZero + net * h.boardTemperature) / left(h.resistance[i] * net);
     h.temperature[i] = warm(h, h.boardTemperature + h.resistance[i] * watts);
+    toAir += h.faces[i] * (h.temperature[i] - h.ambient);
   }
+  h.total = constant + slope * h.boardTemperature + toAir;
   h.sinkNeeded = sinkFor(h, constant, slope, boardAllowed);
 }
 

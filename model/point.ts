@@ -167,6 +167,7 @@ function heatPaths(solver: PointSolver, design: Design): void {
   }
   heat.resistance[HOT.inductor] = design.inductorThermalResistance / (phases * stage.chokes);
   heat.toAir[HOT.inductor] = design.chokeMaterial === undefined ? 0 : 1;
+  heat.faces[HOT.inductor] = phases * stage.chokes * design.inductorFaces;
   heat.toAir[HOT.transformer] = 1;
   heat.resistance[HOT.transformer] = stage.form === undefined ? 0 : transformer.surfaceResistance / phases;
   heat.allowed[HOT.transformer] = transformer.maximumTemperature - spare;

@@ -20,3 +20,4 @@ export {
   surfacePower,
   surfaceRise,
 } from './surface.ts';
+export { boardPath, sideSurface } from './two-paths.ts';

@@ -2,6 +2,7 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import type { PointReport } from '../../model/assessment.ts';
+import { surfaceCoefficient } from '../../model/heat/index.ts';
 import type { Rail } from '../../model/rail/rail.ts';
 import { anyCase, type Case } from './real-parts.ts';
 import { momentsOf, pointOf, traceOf, watts } from './support.ts';
@@ -135,12 +136,16 @@ describe('sums and signs', () => {
     );
   });
 
-  it('the board rises over ambient in proportion to the whole loss, whatever the design', () => {
+  it('what is lost leaves by the board or by the sides of the chokes: the rest over the rise of the board is one conductance', () => {
+    // Boxes of 1 mm: four sides; the top stands for the board that the base covers.
+    const sides = 4e-6 * surfaceCoefficient(40, 1e-3, 0, 298.15);
     const conductances: number[] = [];
     fc.assert(
       fc.property(anyCase('buck-synchronous', -1, 1), (drawn) => {
         const point = settled(drawn);
-        conductances.push(point.loss / (point.temperatures.board - 298.15));
+        const { inductor, board } = point.temperatures;
+        const bySides = (drawn.made.phases ?? 1) * sides * (inductor - 298.15);
+        conductances.push((point.loss - bySides) / (board - 298.15));
       }),
       RUNS,
     );

@@ -9,6 +9,7 @@ function balance(over: { conductance: number; ambient: number }): HeatBalance {
   h.constant.fill(0);
   h.slope.fill(0);
   h.resistance.fill(0);
+  h.faces.fill(0);
   h.allowed.fill(1e4);
   h.boardConstant = 0;
   h.boardSlope = 0;
@@ -52,6 +53,8 @@ describe('any balance', () => {
       // A part's loss is what it is at the ambient; its line goes through zero somewhere below.
       h.constant[i] = 5 * shares[10 + i] - h.slope[i] * h.ambient;
       h.resistance[i] = 20 * shares[18 + i];
+      // Half of the parts have faces of their own, of up to 0.1 W/K.
+      h.faces[i] = Math.max(0, 0.2 * shares[26 + i] - 0.1);
     }
     h.boardSlope = 0.005 * shares[31];
     h.boardConstant = shares[30] - h.boardSlope * h.ambient;
@@ -59,19 +62,22 @@ describe('any balance', () => {
     return h;
   }
 
-  it('solves its own equations: part over board by its own path, board over ambient by all the heat', () => {
+  it('solves its own equations: part over board by what its faces leave, board over ambient by all that reaches it', () => {
     fc.assert(
       fc.property(drawn, (shares) => {
         const h = draw(shares);
         fc.pre(h.runaway < 0.9);
-        let total = h.boardConstant + h.boardSlope * h.boardTemperature;
+        let board = h.boardConstant + h.boardSlope * h.boardTemperature;
+        let total = board;
         for (let i = 0; i < HOT_PARTS; i++) {
           const watts = h.constant[i] + h.slope[i] * h.temperature[i];
-          expect(h.temperature[i] - h.boardTemperature).toBeCloseTo(h.resistance[i] * watts, 6);
+          const rest = watts - h.faces[i] * (h.temperature[i] - h.ambient);
+          expect(h.temperature[i] - h.boardTemperature).toBeCloseTo(h.resistance[i] * rest, 6);
+          board += rest;
           total += watts;
         }
         expect(h.total).toBeCloseTo(total, 6);
-        expect(h.boardTemperature - h.ambient).toBeCloseTo(total / h.conductance, 6);
+        expect(h.boardTemperature - h.ambient).toBeCloseTo(board / h.conductance, 6);
       }),
     );
   });
@@ -83,6 +89,23 @@ describe('any balance', () => {
         fc.pre(warm.runaway < 0.9 && warm.total > 0.1);
         const cool = draw([Math.min(1, shares[0] + 0.2), ...shares.slice(1)]);
         for (let i = 0; i < HOT_PARTS; i++) expect(cool.temperature[i]).toBeLessThanOrEqual(warm.temperature[i] + 1e-9);
+      }),
+    );
+  });
+
+  it('faces that give more to the air cool every part and the board', () => {
+    fc.assert(
+      fc.property(drawn, (shares) => {
+        const bare = draw([
+          ...shares.slice(0, 26),
+          ...Array<number>(HOT_PARTS).fill(0),
+          ...shares.slice(26 + HOT_PARTS),
+        ]);
+        fc.pre(bare.runaway < 0.9);
+        const faced = draw(shares);
+        expect(faced.boardTemperature).toBeLessThanOrEqual(bare.boardTemperature + 1e-9);
+        for (let i = 0; i < HOT_PARTS; i++)
+          expect(faced.temperature[i]).toBeLessThanOrEqual(bare.temperature[i] + 1e-9);
       }),
     );
   });

@@ -39,6 +39,7 @@ const UNITS: Readonly<Record<string, Dimension>> = {
   W: [2, 1, -3, 0, 0],
   'W/m': [1, 1, -3, 0, 0],
   T: [0, 1, -2, -1, 0],
+  'W/K': [2, 1, -3, 0, -1],
   'K/W': [-2, -1, 3, 0, 1],
   'W/(K·m³)': [-1, 1, -3, 0, -1],
 };
@@ -141,6 +142,8 @@ const ROWS: readonly Row[] = [
   row('hotSpotRise', m.hotSpotRise, '40 K', 'K'),
   row('pathTemperature', h.pathTemperature, '313 K, 2 W, 20 K/W', 'K'),
   row('parallelResistance', h.parallelResistance, '20 K/W, 30 K/W', 'K/W'),
+  row('sideSurface', h.sideSurface, '0.03 m, 0.02 m, 0.01 m', 'm²'),
+  row('boardPath', h.boardPath, '10 K/W, 0.05 W/K', 'K/W'),
   row('fixedPoint', h.fixedPoint, '313 K, 40 K/W, 1 W, 0.005 1/K', 'K', 'kelvin'),
   row('mixedFixedPoint', h.mixedFixedPoint, '313 K, 40 K/W, 0.5 W, 1 W, 0.005 1/K', 'K', 'kelvin'),
   row('sinkVolumeByIndex', h.sinkVolumeByIndex, '2 K/W, 2e4 W/(K·m³)', 'm³'),
