@@ -45,6 +45,15 @@ describe.each(documents.map(({ path, text }) => ({ path, text })))('$path', ({ p
   });
 });
 
+describe('DEVELOPERS.md', () => {
+  test('names every variable of the environment that is the project’s own', () => {
+    const texts = [...trackedTexts(/^(runners|test)\/.*\.ts$/), ...trackedTexts(/^\.ci\/run$/)].map(({ text }) => text);
+    const used = new Set(texts.flatMap((text) => text.match(/\bCHOPFRONT_[A-Z]\w+/g) ?? []));
+    expect(used.size).toBeGreaterThan(3);
+    expect([...used].filter((name) => !readText('DEVELOPERS.md').includes(name))).toEqual([]);
+  });
+});
+
 describe('README.md', () => {
   test('names every command, exit status, scenario, kind of table, objective and architecture', () => {
     const unnamed = commands.filter((name) => !new RegExp(`chopfront (\\w+ )?${name}\\b`).test(readme));

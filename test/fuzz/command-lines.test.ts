@@ -32,12 +32,13 @@ afterAll(() => {
 
 const COMMANDS = [
   ...['draft', 'check', 'parts', 'parts check', 'parts template', 'page', 'show', 'assess', 'handoff', 'merge'],
-  ...['status', 'compare', 'completion', 'sweep', 'help', ''],
+  ...['prove', 'spread', 'status', 'compare', 'completion', 'sweep', 'help', ''],
 ];
 const OPTIONS = [
   ...['--json', '--force', '--resume', '--help', '-h', '-V', '--version', '--no-such', '-x', '--', '--json=1'],
   ...['--out', '--run', '--scenario', '--csv', '--expect', '--seed', '--threads', '--evaluations', '--time', '--shard'],
-  ...['--shards', '--on', '--log', '--until-steady', '--index-from'],
+  ...['--shards', '--on', '--log', '--until-steady', '--index-from', '--page', '--no-page', '--partition', '--samples'],
+  ...['--time-limit', '--top', '--simulator', '--checkpoint', '--epoch-limit'],
 ];
 const VALUES = [
   'broken.yaml',

@@ -58,6 +58,13 @@ describe('a mistyped command line is one line and status 2', () => {
     ],
     ['bad duration', ['sweep', SHEET, '--out', 'x', '--time', 'soon'], 'give a duration, such as 90s, 30min, 8h'],
     ['bad share', ['sweep', SHEET, '--out', 'x', '--until-steady', '2'], 'give a share, such as 0.001 or 0.1%'],
+    ['bad form of log', ['sweep', SHEET, '--out', 'x', '--log', 'xml'], 'the only form is json'],
+    ['bad threads', ['sweep', SHEET, '--out', 'x', '--threads', '0'], 'give a whole number from 1 to 1024'],
+    [
+      'no shard',
+      ['sweep', SHEET, '--out', 'x', '--shard', 'first'],
+      'give I/K, such as 0/4 for the first shard of four',
+    ],
     ['bad shard', ['sweep', SHEET, '--out', 'x', '--shard', '4/4'], 'shards count from 0, so the last of 4 is 3'],
     [
       'contradicting shards',
