@@ -28,7 +28,18 @@ describe('a budget', () => {
     expect(shareUsed({ steady: 0.001 }, 1, { evaluations: 1, seconds: 1, history: grown })).toBe(1);
     addRow(grown, row(101, 0.9));
     expect(lastGain(grown)).toBeCloseTo(0.05 / 0.9, 10);
-    expect(shareUsed({ steady: 0.001 }, 1, { evaluations: 1, seconds: 1, history: grown })).toBe(0);
+    expect(shareUsed({ steady: 0.001 }, 1, { evaluations: 1, seconds: 1, history: grown })).toBeLessThan(0.02);
+  });
+
+  it('to be steady is used the more, the nearer the gain comes to the share asked for, and whole only below it', () => {
+    const grown = newHistory();
+    for (let epoch = 1; epoch <= 100; epoch++) addRow(grown, row(epoch, epoch / 100));
+    // A tenth was gained over the last tenth.
+    const used = (steady: number): number => shareUsed({ steady }, 1, { evaluations: 1, seconds: 1, history: grown });
+    expect(used(0.05)).toBeCloseTo(0.5, 2);
+    expect(used(0.01)).toBeCloseTo(0.1, 3);
+    expect(used(0.0999)).toBeLessThan(1);
+    expect(used(0.101)).toBe(1);
   });
 });
 
