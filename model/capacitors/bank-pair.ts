@@ -42,8 +42,9 @@ export function pairRipple(bank: Bank, current: Waveform, voltages: boolean, int
   into.highest = voltages ? pair.highest : 0;
   into.lowest = voltages ? pair.lowest : 0;
   into.ripple = into.highest - into.lowest;
-  into.meanSquare1 = pair.square1 / current.period;
-  into.meanSquare2 = pair.square2 / current.period;
+  // A group that hardly carries current is left with rounding, of either sign.
+  into.meanSquare1 = Math.max(0, pair.square1 / current.period);
+  into.meanSquare2 = Math.max(0, pair.square2 / current.period);
 }
 
 /**
