@@ -27,7 +27,19 @@ export { type NamedFile, takeAway } from './handoff/take-away.ts';
 export { bad, describeFinding, type Finding, good, type Outcome } from './outcome.ts';
 export * from './parts/index.ts';
 export { readPlainDesign } from './plain-design.ts';
-export { type Gain, gainOf, type Miss, type RequirementPrice, requirementPrices } from './prices.ts';
+export {
+  bestGainOf,
+  freeLimits,
+  type Gain,
+  gainOf,
+  howPriced,
+  isTelling,
+  type Miss,
+  RELAXED_BY,
+  type Relaxations,
+  type RequirementPrice,
+  requirementPrices,
+} from './prices.ts';
 export { createRailProblem, type Judgement, type RailProblem } from './problem.ts';
 export * from './quantity/index.ts';
 export * from './rail/index.ts';

@@ -45,6 +45,7 @@
  *     mergeArchives(problem, parts: readonly (Island | Designs)[]): Designs
  *     mergeNearMisses(problem, parts: readonly (Island | Designs)[], front: Designs): NearMissDesigns
  *     createMerger(problem): Merger                            // joins islands one by one: front, near misses, a sample of what was evaluated
+ *     restart(problem, seeds, { limit, share, evaluations, seed }): Restarted        // what one limit, relaxed by a little, stands in the way of
  *     chooseSubset(front: Designs, count: number, reference?: Float64Array): Designs
  *     hypervolumeOf(problem, front: Designs): number                                 // 0 … 1
  *     mergeRecords(islands): FamilyRecord                                            // family by family, over all islands
@@ -60,6 +61,7 @@ export { createMerger, type Findings, type Merger } from './merger.ts';
 export { PACK_VERSION, packDesigns, packIsland, unpackDesigns, unpackIsland } from './pack.ts';
 export { createPlan, type Plan, type PlanOptions } from './plan.ts';
 export { type Families, type Gene, type GeneKind, type Objective, ONE_FAMILY, type Problem } from './problem.ts';
+export { type Restart, type Restarted, relaxedProblem, restart } from './relaxed.ts';
 export { immigrantsFor, joinDesigns, NO_DESIGNS } from './ring.ts';
 export { type SearchOptions, type SearchResult, search } from './search.ts';
 export { step } from './step.ts';

@@ -5,6 +5,7 @@
 import type { FrontDesign, FrontFile } from '../model/front-file.ts';
 import type { Proof } from '../model/handoff/proof.ts';
 import type { PartsTables } from '../model/parts/tables.ts';
+import type { Relaxations } from '../model/prices.ts';
 import type { Rail } from '../model/rail/rail.ts';
 
 export type { FrontDesign };
@@ -59,6 +60,8 @@ export interface NearMiss {
   /** What the design has and what the limit allows, in the limit's unit. */
   readonly value: number;
   readonly allowed: number;
+  /** By what fraction it misses, as the search counts. */
+  readonly violation: number;
   readonly design: FrontDesign;
 }
 
@@ -84,6 +87,8 @@ export interface PageData {
   readonly cloud: Cloud;
   readonly history: readonly HistoryRow[];
   readonly nearMisses: readonly NearMiss[];
+  /** Short searches with a limit relaxed; absent where none were made. */
+  readonly relaxations?: Relaxations;
   readonly families: readonly FamilyNote[];
   readonly cautions: readonly string[];
   readonly notCovered: readonly string[];

@@ -16,7 +16,9 @@ const SLOTS: Readonly<Record<string, string>> = { inductorSeries: 'inductor' };
 const STRUCTURE: readonly string[] = ['architecture', 'chokeBuild', 'legBuild'];
 
 /** An assessor over the page's own rail and tables, or over none where they give no space. */
-export function modelAssessor(data: Pick<PageData, 'rail' | 'tables' | 'front' | 'nearMisses' | 'run'>): Assessor {
+export function modelAssessor(
+  data: Pick<PageData, 'rail' | 'tables' | 'front' | 'nearMisses' | 'relaxations' | 'run'>,
+): Assessor {
   const own = createRailProblem(data.rail, data.tables);
   if (!own.ok) return refusing(why(own.findings));
   const problem = own.value;
@@ -84,13 +86,13 @@ function valuesOf(problem: RailProblem, design: DesignRecord): Readonly<Record<s
 /** In the context that `chopfront handoff` gives, so that the bytes are the same. */
 function takeAway(
   problem: RailProblem,
-  { front, nearMisses, run }: Pick<PageData, 'front' | 'nearMisses' | 'run'>,
+  { front, nearMisses, relaxations, run }: Pick<PageData, 'front' | 'nearMisses' | 'relaxations' | 'run'>,
   design: DesignRecord,
 ): readonly TakeAwayFile[] {
   const genes = problem.genesFrom(design);
   if (!genes.ok) return [];
   const hashes = { rail: run.railHash, parts: run.partsHash };
-  return takeAwayFiles(problem, genes.value, { designs: front.designs, nearMisses, hashes });
+  return takeAwayFiles(problem, genes.value, { designs: front.designs, nearMisses, relaxations, hashes });
 }
 
 /** Margins are judged anew: the page keeps them in single precision. Yields come from the run alone. */

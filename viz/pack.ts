@@ -39,7 +39,7 @@ export function pack(data: PageData): string {
     plain,
     columns,
     designs: packDesigns(designs, front),
-    misses: nearMisses.map(({ limit, value, allowed }) => ({ limit, value, allowed })),
+    misses: nearMisses.map(({ limit, value, allowed, violation }) => ({ limit, value, allowed, violation })),
     missDesigns: packDesigns(
       nearMisses.map((miss) => miss.design),
       front,

@@ -1,7 +1,17 @@
 /** The design note: what was asked, what was chosen and why, what it beat, where the watts go, margins, risks, cautions. */
 import type { Assessment, LimitFigure } from '../assessment.ts';
 import type { FrontDesign } from '../front-file.ts';
-import { gainOf, type Miss, type PricedFront, requirementPrices } from '../prices.ts';
+import {
+  bestGainOf,
+  gainOf,
+  howPriced,
+  isTelling,
+  type Miss,
+  type PricedFront,
+  type Relaxations,
+  type RequirementPrice,
+  requirementPrices,
+} from '../prices.ts';
 import type { RailProblem } from '../problem.ts';
 import { formatDifference, formatQuantity } from '../quantity/index.ts';
 import type { Rail } from '../rail/rail.ts';
@@ -15,6 +25,7 @@ import { fullLoad, solveAt } from './solved-point.ts';
 export interface HandoffContext {
   readonly designs?: readonly FrontDesign[];
   readonly nearMisses?: readonly Miss[];
+  readonly relaxations?: Relaxations;
   readonly hashes?: SpecHashes;
 }
 
@@ -178,22 +189,31 @@ function prices(problem: RailProblem, context: HandoffContext): Section[] {
     limits: problem.limitDefinitions,
     designs: context.designs ?? [],
   };
-  const lines = requirementPrices(front, context.nearMisses ?? []).slice(0, PRICES);
+  const { nearMisses = [], relaxations } = context;
+  const lines = requirementPrices(front, nearMisses, relaxations).slice(0, PRICES);
   if (lines.length === 0) return [];
-  const rows = lines.map((line) => [
-    line.limit,
-    `${formatQuantity(line.allowed, line.unit)} to ${formatQuantity(line.relaxedTo, line.unit)}`,
-    ...line.gains.map((gain) =>
-      gainOf(gain) > 0 ? `${percent(gainOf(gain))} less, ${formatQuantity(gain.to, gain.unit)}` : '',
-    ),
-  ]);
+  const objectives = problem.objectives.map(({ name }) => `best ${name}`);
   return [
     {
       title: 'What requirements cost',
-      paragraphs: ['If one limit were relaxed so far: what each objective would gain at no more of the others.'],
-      table: { head: ['limit', 'relaxed', ...problem.objectives.map(({ name }) => name)], rows },
+      paragraphs: [
+        'If one limit were relaxed so far: the best of each objective, and the design that would gain most at no more of the others.',
+        howPriced(relaxations),
+      ],
+      table: { head: ['limit', 'relaxed', ...objectives, 'at no more of the others'], rows: lines.map(priceRow) },
     },
   ];
+}
+
+function priceRow({ limit, unit, allowed, relaxedTo, design, gains }: RequirementPrice): string[] {
+  const bests = gains.map((gain) =>
+    isTelling(bestGainOf(gain)) ? `${percent(bestGainOf(gain))} less, ${formatQuantity(gain.relaxed, gain.unit)}` : '',
+  );
+  const top = gains.reduce((a, b) => (gainOf(b) > gainOf(a) ? b : a));
+  const most = isTelling(gainOf(top))
+    ? `${top.objective} ${percent(gainOf(top))} less, ${formatQuantity(top.to, top.unit)} (${design})`
+    : '';
+  return [limit, `${formatQuantity(allowed, unit)} to ${formatQuantity(relaxedTo, unit)}`, ...bests, most];
 }
 
 function risks(assessment: Assessment): Section {

@@ -1,7 +1,9 @@
 /** The work behind `chopfront merge`: checks that runs belong together, joins them one by one, writes the joined run. */
+import { availableParallelism } from 'node:os';
 import { resolve } from 'node:path';
 import { reasonOf, refusal, STATUS } from '../errors.ts';
 import { type Inputs, problemOf } from '../inputs.ts';
+import { tryRestarts } from '../restarts/make.ts';
 import { lookAt, makeFolder } from '../run-folder/folder.ts';
 import { type Found, readFound, writeFound } from '../run-folder/found.ts';
 import { takeLock } from '../run-folder/lock.ts';
@@ -49,6 +51,8 @@ async function write(out: string, inputs: Inputs, first: RunRecord, runs: readon
   const found: Found = { railHash, partsHash, ...joiner.joined() };
   const tables = writeSnapshot(out, inputs.texts);
   writeFound(out, found);
+  const setup = { folder: out, problem, found, texts: inputs.texts, threads: availableParallelism() };
+  await tryRestarts({ ...setup, say: remark });
   const front = publish(out, problem, found);
   const { hypervolume } = measureDesigns(problem, found.archive);
   writeRecord(out, { ...sum.record(first, found, hypervolume), tables, frontSize: front.designs.length });

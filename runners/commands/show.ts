@@ -34,8 +34,9 @@ async function runShow(folder: string, id: string, options: ShowOptions): Promis
   const { gatherPage } = await import('../run-folder/page-data.ts');
   const { pricesText } = await import('./prices-text.ts');
   const { familiesText } = await import('./families-text.ts');
-  const { front, nearMisses, families } = gatherPage(folder);
-  for (const text of [pricesText(requirementPrices(front, nearMisses)), familiesText(families)]) {
+  const { front, nearMisses, relaxations, families } = gatherPage(folder);
+  const prices = requirementPrices(front, nearMisses, relaxations);
+  for (const text of [pricesText(prices, relaxations), familiesText(families)]) {
     if (text !== '') sayPainted(`\n${text}`);
   }
 }

@@ -11,6 +11,7 @@ export const RUN_FILES = {
   frontJson: 'front.json',
   nearMisses: 'near-misses.csv',
   archive: 'archive.bin',
+  restarts: 'restarts.bin',
   history: 'history.csv',
   page: 'page.html',
 } as const;

@@ -40,22 +40,34 @@ export function readFront(folder: string): FrontFile {
   }
 }
 
-/** The design whose id is, or begins with, `id`. Throws `unknown-design` and `ambiguous-design`. */
-export function findDesign(folder: string, front: FrontFile, id: string): FrontDesign {
-  const exact = front.designs.find((design) => design.id === id);
-  if (exact !== undefined) return exact;
-  const close = id.length < 2 ? [] : front.designs.filter((design) => design.id.startsWith(id));
-  if (close.length === 1 && close[0] !== undefined) return close[0];
-  if (close.length > 1) {
-    const ids = close.slice(0, 5).map((design) => design.id);
-    throw refusal('ambiguous-design', { folder, id, ids: ids.join(', ') });
-  }
+/**
+ * The design whose id is, or begins with, `id`: of the front, or where that has none, of the near misses. Throws `unknown-design` and
+ * `ambiguous-design`.
+ */
+export function findDesign(
+  folder: string,
+  front: FrontFile,
+  id: string,
+  nearMisses: () => readonly FrontDesign[],
+): FrontDesign {
+  const found = oneOf(folder, front.designs, id) ?? oneOf(folder, nearMisses(), id);
+  if (found !== undefined) return found;
   const some = front.designs.slice(0, 3).map((design) => design.id);
   throw refusal('unknown-design', {
     folder,
     id,
     nearest: some.length === 0 ? '' : `; it holds, for example, ${some.join(', ')}`,
   });
+}
+
+/** The one design of that id or beginning; undefined where there is none. Throws `ambiguous-design`. */
+function oneOf(folder: string, designs: readonly FrontDesign[], id: string): FrontDesign | undefined {
+  const exact = designs.find((design) => design.id === id);
+  if (exact !== undefined) return exact;
+  const close = id.length < 2 ? [] : designs.filter((design) => design.id.startsWith(id));
+  if (close.length < 2) return close[0];
+  const ids = close.slice(0, 5).map((design) => design.id);
+  throw refusal('ambiguous-design', { folder, id, ids: ids.join(', ') });
 }
 
 /** Whether objectives `a` dominate `b`: nowhere worse, somewhere better. */

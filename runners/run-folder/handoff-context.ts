@@ -4,6 +4,6 @@ import { gatherPage } from './page-data.ts';
 
 /** Front, near misses and hashes of the run in `folder`. Throws refusals where there is none. */
 export function handoffContext(folder: string): HandoffContext {
-  const { front, nearMisses, run } = gatherPage(folder);
-  return { designs: front.designs, nearMisses, hashes: { rail: run.railHash, parts: run.partsHash } };
+  const { front, nearMisses, relaxations, run } = gatherPage(folder);
+  return { designs: front.designs, nearMisses, relaxations, hashes: { rail: run.railHash, parts: run.partsHash } };
 }

@@ -1,15 +1,16 @@
 /** Gathers what a page embeds from the files of a run. */
-import { explainRail, frontFile, type RailProblem } from '../../model/index.ts';
-import { mergeNearMisses } from '../../optimizer/index.ts';
-import type { Cloud, NearMiss, PageData, RunRecord as PageRun } from '../../viz/data.ts';
+import { explainRail, type RailProblem, type Relaxations } from '../../model/index.ts';
+import type { Cloud, PageData, RunRecord as PageRun } from '../../viz/data.ts';
 import { type Inputs, problemOf, take } from '../inputs.ts';
 import { rowsOf } from '../sweep/grid.ts';
 import { familyNotes } from './family-notes.ts';
 import { type Found, readFound } from './found.ts';
 import { readFront } from './front.ts';
+import { nearMissesOf } from './near-misses.ts';
 import { pageHistory } from './page-history.ts';
 import { readProofs } from './proofs.ts';
 import { type RunRecord, readRecord } from './record.ts';
+import { type Restarts, readRestarts } from './restarts.ts';
 import { readSnapshot } from './snapshot.ts';
 
 /** Everything that the page of a run shows. Throws refusals where the run has nothing to show. */
@@ -19,6 +20,7 @@ export function gatherPage(folder: string): PageData {
   const problem = problemOf(inputs);
   const found = readFound(folder);
   const front = readFront(folder);
+  const restarts = readRestarts(folder, found.archive);
   const explanation = take(explainRail(inputs.rail, inputs.tables));
   return {
     run: pageRun(record),
@@ -27,7 +29,8 @@ export function gatherPage(folder: string): PageData {
     front,
     cloud: cloudOf(problem, found),
     history: pageHistory(found.sources),
-    nearMisses: nearMissesOf(problem, found),
+    nearMisses: nearMissesOf(problem, found, restarts),
+    ...(restarts === undefined ? {} : { relaxations: relaxationsOf(problem, restarts) }),
     families: familyNotes(problem, found.sources, front.designs, explanation.architectures),
     cautions: explanation.cautions,
     notCovered: explanation.notCovered,
@@ -55,15 +58,12 @@ function cloudOf(problem: RailProblem, { sample }: Found): Cloud {
   return { families: problem.families.names, family: sample.family, objectives: sample.objectives };
 }
 
-function nearMissesOf(problem: RailProblem, found: Found): NearMiss[] {
-  const nearMisses = mergeNearMisses(problem, [found.nearMisses], found.archive);
-  const genes = rowsOf(nearMisses, problem.genes.length);
-  const designs = new Map(frontFile(problem, genes).designs.map((design) => [design.id, design]));
-  return genes.flatMap((row, i) => {
-    const limit = problem.limits[nearMisses.limit[i] ?? -1] ?? '';
-    const figure = problem.assess(row).limits.find((one) => one.name === limit);
-    const design = designs.get(problem.id(row));
-    if (figure === undefined || design === undefined) return [];
-    return [{ limit, value: figure.value, allowed: figure.allowed, design }];
-  });
+function relaxationsOf(problem: RailProblem, { steps, limits, evaluations, level }: Restarts): Relaxations {
+  const rows = rowsOf(level, problem.genes.length);
+  const placed = rows.map((genes) => ({
+    id: problem.id(genes),
+    family: problem.families.names[problem.families.of(genes)] ?? '',
+    objectives: problem.judge(genes).objectives,
+  }));
+  return { steps, limits, evaluations, level: placed };
 }

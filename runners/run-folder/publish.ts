@@ -1,18 +1,18 @@
 /** The files of a run that people and other programs read, written from what was found. Same findings, same bytes. */
 import { type FrontFile, frontCsv, frontFile, type RailProblem } from '../../model/index.ts';
-import { mergeNearMisses } from '../../optimizer/index.ts';
 import { chooseFront, rowsOf } from '../sweep/grid.ts';
 import { writeWhole } from './files.ts';
 import { runFile } from './folder.ts';
 import type { Found } from './found.ts';
 import { historyCsv } from './history-csv.ts';
+import { nearMissesWith, type Restarts, readRestarts } from './restarts.ts';
 
 /** Writes `front.json`, `front.csv`, `near-misses.csv` and `history.csv`; returns the front. */
 export function publish(folder: string, problem: RailProblem, found: Found): FrontFile {
   const front = frontOf(problem, found);
   writeWhole(runFile(folder, 'frontJson'), `${JSON.stringify(front, undefined, 1)}\n`);
   writeWhole(runFile(folder, 'frontCsv'), frontCsv(front));
-  writeWhole(runFile(folder, 'nearMisses'), nearMissCsv(problem, found));
+  writeWhole(runFile(folder, 'nearMisses'), nearMissCsv(problem, found, readRestarts(folder, found.archive)));
   writeWhole(runFile(folder, 'history'), historyCsv(found.sources));
   return front;
 }
@@ -23,8 +23,12 @@ function frontOf(problem: RailProblem, found: Pick<Found, 'archive'>): FrontFile
 }
 
 /** The table of near misses: the broken limit, then what `front.csv` tells of a design; margins below zero are the miss. */
-function nearMissCsv(problem: RailProblem, found: Pick<Found, 'archive' | 'nearMisses'>): string {
-  const misses = mergeNearMisses(problem, [found.nearMisses], found.archive);
+function nearMissCsv(
+  problem: RailProblem,
+  found: Pick<Found, 'archive' | 'nearMisses'>,
+  restarts: Restarts | undefined,
+): string {
+  const misses = nearMissesWith(problem, found, restarts);
   const genes = rowsOf(misses, problem.genes.length);
   const limits = new Map(genes.map((row, i) => [problem.id(row), problem.limits[misses.limit[i] ?? -1] ?? '']));
   const file = frontFile(problem, genes);

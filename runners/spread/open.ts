@@ -3,7 +3,7 @@ import { pathToFileURL } from 'node:url';
 import type { FrontFile, RailProblem } from '../../model/index.ts';
 import { problemOf, take } from '../inputs.ts';
 import { packagePath } from '../package-path.ts';
-import { recordOf } from '../run-folder/design.ts';
+import { missDesigns, recordOf } from '../run-folder/design.ts';
 import { findDesign, readFront } from '../run-folder/front.ts';
 import { readRecord } from '../run-folder/record.ts';
 import { readSnapshot } from '../run-folder/snapshot.ts';
@@ -22,7 +22,8 @@ export function openRun(folder: string, ids: readonly string[], threads: number)
   const inputs = readSnapshot(folder, readRecord(folder));
   const problem = problemOf(inputs);
   const front = readFront(folder);
-  const chosen = ids.length > 0 ? ids.map((id) => findDesign(folder, front, id)) : front.designs;
+  const chosen =
+    ids.length > 0 ? ids.map((id) => findDesign(folder, front, id, () => missDesigns(folder, problem))) : front.designs;
   const designs = chosen.map((design) => take(problem.genesFrom(recordOf(design))));
   if (threads === 1) return { problem, front, designs, drawer: inlineDrawer(problem) };
   const module = pathToFileURL(packagePath('dist', 'runners', 'engines', 'rail-problem.js')).href;

@@ -9,6 +9,7 @@ import { type Inputs, problemOf, readSheet } from '../inputs.ts';
 import { packagePath } from '../package-path.ts';
 import { chooseReporter } from '../progress/choose.ts';
 import type { Reporter } from '../progress/figures.ts';
+import { tryRestarts } from '../restarts/make.ts';
 import { lookAt, prepareFolder } from '../run-folder/folder.ts';
 import { publish } from '../run-folder/publish.ts';
 import { type RunRecord, readRecord } from '../run-folder/record.ts';
@@ -141,8 +142,13 @@ function planOf(
     describeBest: (values) => describeValues(problem.objectives, values),
     snapshot: () => writeSnapshot(folder, inputs.texts),
     refresh: () => refresher.begin(),
-    publish: async (found) => {
+    publish: async (found, ending) => {
       await refresher.settled();
+      // A shard's limits are priced once, when the shards are merged.
+      if (ending === 'done' && where.shard === undefined && found.archive.count > 0) {
+        const setup = { folder, problem, found, texts: inputs.texts, threads, stop: stop.asked };
+        await tryRestarts({ ...setup, say: (text) => reporter.say(text) });
+      }
       publish(folder, problem, found);
     },
   };

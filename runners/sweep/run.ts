@@ -49,7 +49,7 @@ export interface RunPlan {
   /** Told that a checkpoint was written, to refresh what people look at in another process. */
   refresh(): void;
   /** Writes the final files, once refreshing has ended. */
-  publish(found: Found): Promise<void>;
+  publish(found: Found, ending: Ending): Promise<void>;
 }
 
 /** How a run ended. */
@@ -155,7 +155,7 @@ async function carryOut(plan: RunPlan, search: Search, begun: Begun, saver: Save
 async function conclude(plan: RunPlan, search: Search, begun: Begun, ending: Ending, seconds: number): Promise<RunEnd> {
   const islands = begun.rings.flatMap(islandsOf);
   const { found, record } = momentOf(plan, search, begun, ending, seconds);
-  await plan.publish(found);
+  await plan.publish(found, ending);
   return { ending, found, record, best: search.measure(islands).best, atHand: search.atHand(islands) };
 }
 

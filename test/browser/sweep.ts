@@ -89,6 +89,6 @@ function nearMisses(problem: RailProblem, designs: Designs & { readonly limit: A
     const design = frontFile(problem, [genes]).designs[0];
     return figure === undefined || design === undefined
       ? []
-      : [{ limit, value: figure.value, allowed: figure.allowed, design }];
+      : [{ limit, value: figure.value, allowed: figure.allowed, violation: figure.violation, design }];
   });
 }

@@ -1,6 +1,16 @@
 /** Where an incumbent stands, what requirements cost, and a design as a plain list. */
+import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
-import { createRailProblem, gainOf, readPlainDesign, requirementPrices, standingOf } from '../../model/index.ts';
+import {
+  bestGainOf,
+  createRailProblem,
+  freeLimits,
+  gainOf,
+  howPriced,
+  readPlainDesign,
+  requirementPrices,
+  standingOf,
+} from '../../model/index.ts';
 import { NO_TABLES } from '../support/tables.ts';
 import { handMade, need, plainRail } from './support.ts';
 
@@ -16,10 +26,17 @@ describe('requirement prices', () => {
       { id: 'b', family: 'f', objectives: [5, 8] },
     ],
   };
+  /** A design that has `value` of ripple where 20 mV is allowed. */
+  const miss = (id: string, value: number, objectives: number[]) => ({
+    limit: 'outputRipple',
+    value,
+    allowed: 0.02,
+    violation: value / 0.02 - 1,
+    design: { id, family: 'f', objectives },
+  });
 
   it('a limit relaxed by a tenth buys two fifths of the volume at no more loss', () => {
-    const design = { id: 'm', family: 'f', objectives: [6, 4.8] };
-    const [line] = requirementPrices(front, [{ limit: 'outputRipple', value: 0.022, allowed: 0.02, design }]);
+    const [line] = requirementPrices(front, [miss('m', 0.022, [6, 4.8])]);
     expect(line?.relaxation).toBeCloseTo(0.1, 12);
     // At a loss of at most 6 W the front's least volume is 8; the near miss has 4.8.
     const volume = line?.gains[1];
@@ -29,23 +46,57 @@ describe('requirement prices', () => {
   });
 
   it('a near miss that the front beats costs nothing and is not listed', () => {
-    const design = { id: 'm', family: 'f', objectives: [11, 9] };
-    expect(requirementPrices(front, [{ limit: 'outputRipple', value: 0.022, allowed: 0.02, design }])).toEqual([]);
+    expect(requirementPrices(front, [miss('m', 0.022, [11, 9])])).toEqual([]);
   });
 
-  it('a second line of one limit asks for less', () => {
-    const miss = (id: string, value: number, objectives: number[]) => ({
-      limit: 'outputRipple',
-      value,
-      allowed: 0.02,
-      design: { id, family: 'f', objectives },
-    });
+  it('each step of 2.5, 10 and 25 % has a line where it changes a best value, and says how far the limit must move for it', () => {
     const lines = requirementPrices(front, [
-      miss('m', 0.024, [5, 4]),
-      miss('n', 0.021, [7, 6]),
-      miss('o', 0.0239, [6, 5]),
+      miss('m', 0.0204, [4.5, 9]),
+      miss('n', 0.0218, [4, 9]),
+      miss('o', 0.024, [9, 3]),
     ]);
-    expect(lines.map(({ design }) => design)).toEqual(['m', 'n']);
+    const told = lines.map(({ relaxedTo, gains }) => [relaxedTo, ...gains.map(({ relaxed }) => relaxed)]);
+    expect(told).toEqual([
+      [0.0204, 4.5, 4],
+      [0.0218, 4, 4],
+      [0.024, 4, 3],
+    ]);
+    expect(lines[1]?.gains.map(bestGainOf)).toEqual([0.2, 0]);
+  });
+
+  it('a step that gains nothing more has no line', () => {
+    expect(requirementPrices(front, [miss('m', 0.0204, [4, 9]), miss('n', 0.024, [4, 9])])).toHaveLength(1);
+  });
+
+  it('what searching on gives with every limit kept is no price of a limit', () => {
+    const level = [{ id: 'l', family: 'f', objectives: [4, 9] }];
+    const made = { steps: [0.1], limits: ['outputRipple', 'loadStep'], evaluations: 1000, level };
+    const misses = [miss('m', 0.022, [4, 9])];
+    expect(requirementPrices(front, misses)).toHaveLength(1);
+    expect(requirementPrices(front, misses, made)).toEqual([]);
+    expect(freeLimits(requirementPrices(front, misses), made)).toEqual(['loadStep']);
+    expect(howPriced(made)).toContain('2 limits were each relaxed by 10 %');
+    expect(howPriced(made)).toContain('1000 evaluations');
+  });
+
+  it('relaxing a limit further never makes a best value worse, nor anything at all the best of the front', () => {
+    const design = fc.record({
+      value: fc.double({ min: 0.0201, max: 0.025, noNaN: true }),
+      objectives: fc.array(fc.double({ min: 1, max: 12, noNaN: true }), { minLength: 2, maxLength: 2 }),
+    });
+    const law = (designs: readonly { value: number; objectives: number[] }[]): void => {
+      const lines = requirementPrices(
+        front,
+        designs.map(({ value, objectives }, i) => miss(`m${i}`, value, objectives)),
+      );
+      for (const [i, line] of lines.entries()) {
+        for (const [k, { best, relaxed }] of line.gains.entries()) {
+          expect(relaxed).toBeLessThanOrEqual(best);
+          if (i > 0) expect(relaxed).toBeLessThanOrEqual(lines[i - 1]?.gains[k]?.relaxed ?? 0);
+        }
+      }
+    };
+    fc.assert(fc.property(fc.array(design, { maxLength: 12 }), law));
   });
 });
 

@@ -85,6 +85,23 @@ describe('handoff', () => {
   });
 });
 
+describe('a near miss', () => {
+  it('is shown, handed over and assessed like any other design, with the limit that it breaks', async () => {
+    const [limit = '', miss = ''] = readFileSync(join(run, 'near-misses.csv'), 'utf8').split('\n')[1]?.split(',') ?? [];
+    const shown = await chopfront('show', run, miss, '--json');
+    expect(shown).toMatchObject({ status: 0 });
+    const { feasible, limits } = JSON.parse(shown.stdout);
+    expect(feasible).toBe(false);
+    const broken = limits.filter(({ violation }: { violation: number }) => violation > 0);
+    expect(broken.map(({ name }: { name: string }) => name)).toEqual([limit]);
+    const out = join(newFolder(), 'miss');
+    expect(await chopfront('handoff', run, miss, '--out', out)).toMatchObject({ status: 0 });
+    expect(readdirSync(out).sort()).toEqual(FILES);
+    const assessed = await chopfront('assess', SHEET, join(out, 'spec.json'), '--run', run, '--json');
+    expect(JSON.parse(assessed.stdout)).toMatchObject({ id: miss, feasible: false });
+  });
+});
+
 describe('spread', () => {
   it('gives the same with one thread and with two', async () => {
     const one = await chopfront('spread', run, id, '--samples', '600', '--json');

@@ -8,7 +8,7 @@ import { chopfront, newFolder, startChopfront, until } from './processes.ts';
 
 const SHEET = new URL('../../model/rails/buoy-sensors.yaml', import.meta.url).pathname;
 const ARGS = ['--evaluations', '16k', '--seed', 'test', '--no-page'];
-const BYTES = ['front.csv', 'front.json', 'near-misses.csv', 'history.csv', 'archive.bin'];
+const BYTES = ['front.csv', 'front.json', 'near-misses.csv', 'history.csv', 'archive.bin', 'restarts.bin'];
 const run = join(newFolder(), 'run');
 const bytesOf = (folder: string): string[] => BYTES.map((name) => readFileSync(join(folder, name), 'latin1'));
 let front: FrontFile;

@@ -115,21 +115,31 @@ describe('what a limit costs', () => {
     genes: [],
     designs: [design('a', [2, 1e-6]), design('b', [1.6, 2e-6])],
   };
+  const made = { steps: [0.025, 0.1], limits: ['outputRipple', 'height'], evaluations: 3000, level: [] };
   const shownFor = (objectives: number[]) => {
     const root = place();
-    const nearMisses = [{ limit: 'outputRipple', value: 0.022, allowed: 0.02, design: design('m', objectives) }];
-    renderPrices(root, { front, nearMisses, rail: RAIL });
+    const nearMisses = [
+      { limit: 'outputRipple', value: 0.022, allowed: 0.02, violation: 0.1, design: design('m', objectives) },
+    ];
+    renderPrices(root, { front, nearMisses, relaxations: made, rail: RAIL });
     return root;
   };
 
-  test('20 mV of ripple relaxed by a tenth buys a quarter of the loss, against the design with no more volume', () => {
+  test('20 mV of ripple relaxed by a tenth lowers the best loss from 1.6 to 1.5 W; against the design with no more volume it is a quarter', () => {
     expect(cellsOf(shownFor([1.5, 1e-6]))[1]).toEqual([
       'Output ripple',
-      '20 mV → 22 mV (10.0 %)',
-      '−25.0 %2 W → 1.5 W',
+      '20 mV → 22 mV (+10.0 %)',
+      '−6.3 %1.6 W → 1.5 W',
       '·',
-      'm',
+      'loss −25.0 % m',
     ]);
+  });
+
+  test('it says how limits were relaxed, and which gained nothing', () => {
+    const words = shownFor([1.5, 1e-6]).selectAll('.hint').text();
+    expect(words).toContain('2 limits were each relaxed by 2.5\u00a0%, 10\u00a0%');
+    expect(words).toContain('3000\u00a0evaluations each time');
+    expect(words).toContain('Relaxed without any gain: height.');
   });
 
   test('a miss that beats nothing is no offer, yet it can still be opened', () => {

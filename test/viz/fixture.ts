@@ -154,6 +154,12 @@ function around(front: Front, everyone: readonly Assessment[]): Omit<PageData, '
       islands: [0, 1, 2, 3].map((island) => 0.655 * (1 - Math.exp(-(epoch + 1) / (7 + island)))),
     })),
     nearMisses: nearMisses(everyone),
+    relaxations: {
+      steps: [0.025, 0.1, 0.25],
+      limits: ['outputRipple', 'loadStep', 'highJunction', 'height'],
+      evaluations: 1846,
+      level: [],
+    },
     families: FAMILIES.map(([architecture, phases]) => familyNote(`${architecture} ×${phases}`, front, everyone)),
     cautions: ['Every figure comes from a model with stated tolerances: build and measure before release.'],
     notCovered: [
@@ -188,7 +194,15 @@ function nearMisses(everyone: readonly Assessment[]): readonly NearMiss[] {
     const broken = one.limits.filter((limit) => limit.violation > 0);
     const first = broken[0];
     return broken.length === 1 && first !== undefined && first.violation < 0.25
-      ? [{ limit: first.name, value: first.value, allowed: first.allowed, design: toFront(one) }]
+      ? [
+          {
+            limit: first.name,
+            value: first.value,
+            allowed: first.allowed,
+            violation: first.violation,
+            design: toFront(one),
+          },
+        ]
       : [];
   });
   return close.slice(0, 60);

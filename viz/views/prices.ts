@@ -1,31 +1,44 @@
 /** What each limit costs: a limit relaxed so far, and what each objective would gain; every near miss can be opened. */
-import { type Gain, gainOf, type RequirementPrice, requirementPrices } from '../../model/prices.ts';
+import {
+  bestGainOf,
+  freeLimits,
+  type Gain,
+  gainOf,
+  howPriced,
+  isTelling,
+  type Relaxations,
+  type RequirementPrice,
+  requirementPrices,
+} from '../../model/prices.ts';
 import type { PageData } from '../data.ts';
-import { capital, counted, spokenLimit, titled } from '../labels.ts';
+import { capital, counted, inWords, listed, spoken, spokenLimit, titled } from '../labels.ts';
 import { clear, type Root } from '../marks/root.ts';
-import { percent, show } from '../units.ts';
+import { percent, show, showDifference } from '../units.ts';
 import { written } from './limits.ts';
 
-type PricesInput = Pick<PageData, 'front' | 'nearMisses' | 'rail'>;
+type PricesInput = Pick<PageData, 'front' | 'nearMisses' | 'relaxations' | 'rail'>;
 
-export function renderPrices<E extends Element>(root: Root<E>, { front, nearMisses, rail }: PricesInput): void {
+export function renderPrices<E extends Element>(root: Root<E>, input: PricesInput): void {
+  const { front, nearMisses, relaxations, rail } = input;
   clear(root);
-  const prices = requirementPrices(front, nearMisses).filter(({ gains }) => gains.some(isTelling));
-  if (prices.length > 0) {
-    priceTable(root, front.objectives, prices);
-    root
-      .append('p')
-      .attr('class', 'hint')
-      .text('Each gain is against the best design of the front that has no more of the other objectives.');
-  } else {
-    root
-      .append('p')
-      .attr('class', 'hint')
-      .text(
-        `No design found that would beat the front by breaking one limit of ${rail.name} a little: no single limit stands in the way.`,
-      );
+  const prices = requirementPrices(front, nearMisses, relaxations);
+  const hint = (words: string): void => {
+    root.append('p').attr('class', 'hint').text(words);
+  };
+  if (prices.length > 0) priceTable(root, front.objectives, prices);
+  else {
+    hint(
+      `No design found that would beat the front by breaking one limit of ${rail.name} a little: no single limit stands in the way.`,
+    );
   }
-  if (nearMisses.length > 0) everyMiss(root, { front, nearMisses, rail });
+  hint(inWords(howPriced(relaxations)) + freeWords(prices, relaxations));
+  if (nearMisses.length > 0) everyMiss(root, input);
+}
+
+/** ` Relaxed without any gain: height and saturation.` */
+function freeWords(prices: readonly RequirementPrice[], relaxations: Relaxations | undefined): string {
+  const free = relaxations === undefined ? [] : freeLimits(prices, relaxations).map(spokenLimit);
+  return free.length === 0 ? '' : ` Relaxed without any gain: ${listed(free)}.`;
 }
 
 function region<E extends Element>(root: Root<E>, name: string): Root<HTMLDivElement> {
@@ -55,12 +68,12 @@ function priceTable<E extends Element>(
   objectives: PageData['front']['objectives'],
   prices: readonly RequirementPrice[],
 ): void {
-  const names = objectives.map(({ name }) => titled(name).split(',')[0] ?? '');
+  const names = objectives.map(({ name }) => `Best ${short(name)}`);
   const table = headed(
     region(root, 'What each limit costs'),
     'ledger prices',
-    'Limits, how far each is relaxed, and what each objective would gain',
-    ['If this limit', 'moved', ...names, 'near miss'],
+    'Limits, how far each is relaxed, how the best of each objective changes, and the design that gains most at no more of the others',
+    ['If this limit', 'moved', ...names, 'at no more of the others'],
   );
   const body = table.append('tbody');
   for (const price of prices) {
@@ -70,33 +83,41 @@ function priceTable<E extends Element>(
       .attr('scope', 'row')
       .text(capital(spokenLimit(price.limit)));
     row.append('td').text(relaxationWords(price));
-    for (const gain of price.gains) gainCell(row, gain);
-    opener(row.append('td'), price.design);
+    for (const gain of price.gains) gainCell(row, bestGainOf(gain), gain.best, gain.relaxed, gain.unit);
+    topCell(row, price);
   }
 }
 
-/** Whether a gain shows in the printed digits. */
-function isTelling(gain: Gain): boolean {
-  return gainOf(gain) >= 0.0005;
+function short(objective: string): string {
+  return spoken(objective).split(',')[0] ?? '';
 }
 
-/** `−12.0 %`, and below it from what to what; a dot where the objective gains nothing. */
-function gainCell(row: Root<HTMLTableRowElement>, gain: Gain): void {
-  const share = gainOf(gain);
+/** `−12.0 %`, and below it from what to what; a dot where nothing is gained. */
+function gainCell(row: Root<HTMLTableRowElement>, share: number, from: number, to: number, unit: string): void {
   const cell = row.append('td');
-  if (!isTelling(gain)) {
+  if (!isTelling(share)) {
     cell.text('·');
     return;
   }
   cell.attr('class', 'gained').append('strong').text(percent(-share));
-  cell.append('span').text(`${show(gain.from, gain.unit)} → ${show(gain.to, gain.unit)}`);
+  cell.append('span').text(`${show(from, unit)} → ${show(to, unit)}`);
 }
 
-/** `20 mV → 21.8 mV (9.0 %)`; a limit that allows nothing at all is told by how far it is broken. */
-function relaxationWords({ limit, unit, allowed, relaxedTo, relaxation }: RequirementPrice): string {
+/** The objective that one design gains most in, and that design. */
+function topCell(row: Root<HTMLTableRowElement>, { gains, design }: RequirementPrice): void {
+  const top = gains.reduce((a: Gain, b: Gain) => (gainOf(b) > gainOf(a) ? b : a));
+  const cell = row.append('td').attr('class', 'gained');
+  if (isTelling(gainOf(top))) cell.append('strong').text(`${short(top.objective)} ${percent(-gainOf(top))} `);
+  opener(cell, design);
+}
+
+/** `20 mV → 21.8 mV (+9.0 %)`, a temperature by kelvin; a limit that allows nothing at all is told by how far it is broken. */
+function relaxationWords({ limit, unit, allowed, relaxedTo }: RequirementPrice): string {
   const one = { name: limit, unit };
   if (allowed === 0) return `by ${unit === '' ? percent(Math.abs(relaxedTo)) : written(one, Math.abs(relaxedTo))}`;
-  return `${written(one, allowed)} → ${written(one, relaxedTo)} (${percent(relaxation)})`;
+  const share = relaxedTo / allowed - 1;
+  const by = unit === 'K' ? showDifference(relaxedTo - allowed, unit) : `${share < 0 ? '' : '+'}${percent(share)}`;
+  return `${written(one, allowed)} → ${written(one, relaxedTo)} (${by})`;
 }
 
 function opener(cell: Root<HTMLTableCellElement>, id: string): void {
