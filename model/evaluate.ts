@@ -8,6 +8,7 @@ import { filterImpedanceLimit } from './control/index.ts';
 import { Design, resolveDesign } from './design.ts';
 import { Flavour, prepareFlavour } from './flavour.ts';
 import { boardConductance, sinkCost, sinkMass, sinkVolume } from './heat/index.ts';
+import { HeatBalance } from './heat-balance.ts';
 import {
   chooseFilterChoke,
   filterCurrent,
@@ -21,9 +22,9 @@ import { LimitBook } from './limits/book.ts';
 import { judgeConstruction } from './limits/construction.ts';
 import { limitsOf } from './limits/list.ts';
 import { type LimitPlaces, limitPlaces } from './limits/places.ts';
-import { judgePoint, judgeRipple } from './limits/point.ts';
+import { judgeHeat, judgePoint, judgeRipple } from './limits/point.ts';
 import { type PlannedPoint, type PointPlan, planPoints } from './plan.ts';
-import { PointSolver, solvePoint, solveRipple } from './point.ts';
+import { PointSolver, settleHeat, settleLosses, solvePoint, solveRipple } from './point.ts';
 import type { Rail } from './rail/rail.ts';
 import type { Stage } from './stages/contract.ts';
 
@@ -43,6 +44,9 @@ export class Evaluator {
   readonly usual = new Flavour(false);
   readonly worst = new Flavour(true);
   readonly solver: PointSolver;
+  /** Heat of the usual points in turn, and of each worst point: those are balanced again once the heat sink is known. */
+  readonly usualHeat = new HeatBalance();
+  readonly worstHeat: readonly HeatBalance[];
   /** Conductance of the bare board, W/K. */
   readonly bareBoard: number;
   /** W by slot, profile-weighted. */
@@ -72,7 +76,8 @@ export class Evaluator {
     this.book = new LimitBook(limitsOf(rail));
     this.places = limitPlaces(this.book, rail);
     this.design = new Design(rail, catalogue, stages);
-    this.solver = new PointSolver(rail);
+    this.solver = new PointSolver(rail, this.usualHeat);
+    this.worstHeat = this.plan.worst.map(() => new HeatBalance());
     this.filterCurrent = filterCurrent(rail);
     this.bareBoard = boardConductance(rail.coolingArea, rail.airSpeed);
   }
@@ -93,7 +98,6 @@ function prepare(e: Evaluator, genes: Float64Array): void {
   const { design } = e;
   resolveDesign(design, genes, e.rail, e.catalogue, e.stages);
   design.filterChoke = undefined;
-  e.filterNeed = 0;
   prepareFlavour(e.usual, design, e.rail);
   prepareFlavour(e.worst, design, e.rail);
   e.adjust?.(e);
@@ -101,38 +105,59 @@ function prepare(e: Evaluator, genes: Float64Array): void {
   e.book.clear();
 }
 
-/** Judges the worst points on the bare board, and again with the heat sink where any of them needs one. */
+/** Judges the worst points: currents and ripple as each is solved, heat once the sink that they ask for is whole. */
 function judgeAllWorst(e: Evaluator, listener?: PointListener): void {
-  if (e.builtSink !== undefined) {
-    e.sink = e.builtSink;
-    judgeWorst(e, listener);
-    return;
+  e.sink = e.builtSink ?? 0;
+  e.filterNeed = 0;
+  solveWorst(e);
+  const { worstHeat, plan } = e;
+  for (let i = 0; i < worstHeat.length; i++) {
+    settleHeat(worstHeat[i], e.bareBoard + e.sink);
+    judgeHeat(e, worstHeat[i], plan.usual.length + i);
   }
-  e.sink = 0;
-  const needed = judgeWorst(e);
-  if (needed > 0) {
-    e.sink = needed;
-    e.book.clear();
-  }
-  if (needed > 0 || listener !== undefined) judgeWorst(e, listener);
+  if (listener !== undefined) showWorst(e, listener);
 }
 
-/** Judges every worst point; returns the conductance of the heat sink that they would still need, W/K. */
-function judgeWorst(e: Evaluator, listener?: PointListener): number {
+/**
+ * Solves and judges every worst point in turn. The heat sink begins with none and grows as a point asks for more; that point is
+ * then solved again, so none is solved hotter than its own limits allow.
+ */
+function solveWorst(e: Evaluator, shown?: (index: number) => void): void {
+  const { solver, plan } = e;
   // Every pass starts cold: what came before it must not show in its last digits.
-  e.solver.warm = false;
-  e.solver.wantsRipple = true;
-  const points = e.plan.worst;
-  const from = e.plan.usual.length;
-  let needed = 0;
-  for (let i = 0; i < points.length; i++) {
-    solveActive(e, e.worst, points[i]);
-    judgePoint(e, points[i], from + i);
-    needed = Math.max(needed, e.solver.heat.sinkNeeded);
+  solver.warm = false;
+  solver.wantsRipple = true;
+  for (let i = 0; i < plan.worst.length; i++) {
+    solver.heat = e.worstHeat[i];
+    solveActive(e, e.worst, plan.worst[i]);
+    if (growSink(e)) {
+      solveActive(e, e.worst, plan.worst[i]);
+      growSink(e);
+    }
+    judgePoint(e, plan.worst[i], plan.usual.length + i);
     noteRipple(e);
-    listener?.(e.solver, points[i], from + i);
+    shown?.(i);
   }
-  return needed;
+}
+
+/** Adds to the sink what the solved point still needs; whether it did. */
+function growSink(e: Evaluator): boolean {
+  const needed = e.solver.heat.sinkNeeded;
+  if (!(needed > 0) || e.builtSink !== undefined) return false;
+  e.sink += needed;
+  return true;
+}
+
+/** Solves the worst points once more, the same way, and shows each as it stands under the whole sink. */
+function showWorst(e: Evaluator, listener: PointListener): void {
+  const { sink, solver, plan } = e;
+  e.sink = e.builtSink ?? 0;
+  solveWorst(e, (i) => {
+    settleHeat(solver.heat, e.bareBoard + sink);
+    settleLosses(solver, e.design);
+    listener(solver, plan.worst[i], plan.usual.length + i);
+  });
+  e.sink = sink;
 }
 
 /** Judges ripple at input voltages inside the range where N chokes cancel worst, near D = (2j − 1)/(2N). */
@@ -182,6 +207,7 @@ function sumUsual(e: Evaluator, listener?: PointListener): void {
   e.loss = 0;
   e.inflow = 0;
   solver.warm = false;
+  solver.heat = e.usualHeat;
   for (let i = 0; i < e.plan.usual.length; i++) {
     const planned = e.plan.usual[i];
     solver.wantsRipple = listener !== undefined;

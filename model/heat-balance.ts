@@ -34,6 +34,9 @@ export class HeatBalance {
   boardSlope = 0.5;
   /** Highest board temperature that the board and what stands on it without a hot spot of its own allow, K. */
   boardAllowed = 300.5;
+  /** Rise of the bulk capacitors at output and input over the board, K. */
+  outputBulkRise = 0.5;
+  inputBulkRise = 0.5;
   /** K. */
   ambient = 300.5;
   /** Board and sink to ambient, W/K. */

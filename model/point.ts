@@ -6,7 +6,7 @@ import { powAt } from '../optimizer/maths/index.ts';
 import { type BankRipple, bankCurrents, bankRipple, createBankRipple } from './capacitors/index.ts';
 import type { Design } from './design.ts';
 import type { Flavour } from './flavour.ts';
-import { BOARD_MAXIMUM, HeatBalance, HOT, solveHeat } from './heat-balance.ts';
+import { BOARD_MAXIMUM, type HeatBalance, HOT, solveHeat } from './heat-balance.ts';
 import { LOSS_SLOTS, SLOT, sumSlots } from './ledger.ts';
 import {
   COPPER_TEMPCO,
@@ -53,7 +53,8 @@ const scratch = new Float64Array(2);
 export class PointSolver {
   readonly rail: Rail;
   readonly state = new StageState();
-  readonly heat = new HeatBalance();
+  /** Where the heat of the point at hand is balanced. */
+  heat: HeatBalance;
   readonly ledger = new Float64Array(LOSS_SLOTS.length);
   /** Summed choke current and summed draw from the input. */
   readonly summed = createWaveform(64);
@@ -64,13 +65,16 @@ export class PointSolver {
   warm = false;
   /** Whether ripple voltages are wanted, beside the currents that heat the capacitors. */
   wantsRipple = true;
+  /** W, ac loss of all chokes' windings at the reference temperature of rows. */
+  chokeAc = 0.5;
   /** W, all losses. */
   loss = 0.5;
   /** W, delivered to the load; negative in reverse flow. */
   outputPower = 0.5;
 
-  constructor(rail: Rail) {
+  constructor(rail: Rail, heat: HeatBalance) {
     this.rail = rail;
+    this.heat = heat;
   }
 }
 
@@ -97,7 +101,7 @@ export function solvePoint(
     design.stage.solve(design, state);
     solver.ledger.fill(0);
     design.stage.addEdgeLosses(design, state, solver.ledger);
-    addInductorLosses(design, state, solver.ledger);
+    addInductorLosses(solver, design);
     if (design.stage.form !== undefined) addTransformerCore(design, state, solver.ledger);
     addController(solver, design);
     if (round === rounds - 1) addCapacitors(solver, design, flavour);
@@ -105,8 +109,19 @@ export function solvePoint(
     balance(solver, design);
   }
   solver.warm = true;
-  writeResistiveLosses(solver, design);
   solver.outputPower = planned.outputVoltage * planned.load * rail.output.current;
+  settleLosses(solver, design);
+}
+
+/** Balances `heat` anew at another `conductance` to ambient, W/K, with the losses that it holds. */
+export function settleHeat(heat: HeatBalance, conductance: number): void {
+  heat.conductance = conductance;
+  solveHeat(heat);
+}
+
+/** Writes the losses that follow from the temperatures of the point's heat, and their sum. */
+export function settleLosses(solver: PointSolver, design: Design): void {
+  writeResistiveLosses(solver, design);
   solver.loss = sumSlots(solver.ledger, 0, solver.ledger.length);
 }
 
@@ -207,10 +222,11 @@ function resistances(state: StageState, design: Design): void {
 }
 
 /**
- * Ac winding loss and core loss. A ripple with a pause is taken as its own triangle for the share of time that it lasts: the
+ * Ac winding loss, at the reference temperature of rows, and core loss. A ripple with a pause is taken as its own triangle for the share of time that it lasts: the
  * same as the whole triangle where the pause closes.
  */
-function addInductorLosses(design: Design, state: StageState, ledger: Float64Array): void {
+function addInductorLosses(solver: PointSolver, design: Design): void {
+  const { state, ledger } = solver;
   const { inductor, inductorAt } = design;
   const n = state.activePhases * state.chokes;
   const lasts = state.highShare + state.lowShare;
@@ -225,8 +241,7 @@ function addInductorLosses(design: Design, state: StageState, ledger: Float64Arr
     watts,
   );
   const square = (state.rippleCurrent * state.rippleCurrent) / 12;
-  const resistance = inductor.dcResistance * (1 + WINDING_TEMPCO * (state.inductorTemperature - RESISTANCE_REFERENCE));
-  ledger[SLOT['inductor.windingAc']] += n * lasts * Math.max(0, watts[0] - square) * resistance;
+  solver.chokeAc = n * lasts * Math.max(0, watts[0] - square) * inductor.dcResistance;
   stockedCoreLossAt(inductor, inductorAt.coreScale, state.rippleCurrent, share, 1 - share, watts);
   ledger[SLOT['inductor.core']] += n * pulseShare(design, state) * watts[0];
 }
@@ -344,14 +359,16 @@ function balance(solver: PointSolver, design: Design): void {
   } else {
     diodeHeat(solver, design);
   }
-  resistive(heat, HOT.inductor, chokeWatts(state, design), WINDING_TEMPCO);
-  heat.constant[HOT.inductor] += ledger[SLOT['inductor.windingAc']] + ledger[SLOT['inductor.core']];
+  resistive(heat, HOT.inductor, chokeWatts(state, design) + solver.chokeAc, WINDING_TEMPCO);
+  heat.constant[HOT.inductor] += ledger[SLOT['inductor.core']];
   resistive(heat, HOT.transformer, transformerWatts(state, design), WINDING_TEMPCO);
   heat.constant[HOT.transformer] += ledger[SLOT['transformer.core']];
   const copper = copperWatts(state);
+  heat.outputBulkRise = bulkRise(design.outputBulk, design.outputBulkCount, solver.outputRipple.meanSquare2);
+  heat.inputBulkRise = bulkRise(design.inputBulk, design.inputBulkCount, solver.inputRipple.meanSquare2);
   heat.boardAllowed = Math.min(
-    bulkAllowance(solver, design.outputBulk, design.outputBulkCount, solver.outputRipple.meanSquare2),
-    bulkAllowance(solver, design.inputBulk, design.inputBulkCount, solver.inputRipple.meanSquare2),
+    bulkAllowance(solver, design.outputBulk, heat.outputBulkRise),
+    bulkAllowance(solver, design.inputBulk, heat.inputBulkRise),
   );
   heat.boardSlope = copper * COPPER_TEMPCO;
   heat.boardConstant =
@@ -364,10 +381,15 @@ function balance(solver: PointSolver, design: Design): void {
   state.boardTemperature = Math.min(HOTTEST, heat.boardTemperature);
 }
 
+/** Rise of a bulk capacitor over the board by its own heating, K: rated rise times the square of current over rating; 0 without one. */
+export function bulkRise(bulk: Bulk | undefined, count: number, square: number): number {
+  if (bulk === undefined) return 0;
+  return (bulk.ratedRise * square) / (count * count * bulk.rippleRating * bulk.rippleRating);
+}
+
 /** Board temperature that a bulk capacitor allows after its own heating, K; the board's own limit without one. */
-function bulkAllowance(solver: PointSolver, bulk: Bulk | undefined, count: number, square: number): number {
+function bulkAllowance(solver: PointSolver, bulk: Bulk | undefined, rise: number): number {
   if (bulk === undefined) return BOARD_MAXIMUM;
-  const rise = (bulk.ratedRise * square) / (count * count * bulk.rippleRating * bulk.rippleRating);
   return Math.min(BOARD_MAXIMUM, bulk.maximumTemperature - solver.rail.derating.temperature - rise);
 }
 
@@ -441,6 +463,7 @@ function writeResistiveLosses(solver: PointSolver, design: Design): void {
   }
   const choke = chokeWatts(state, design);
   ledger[SLOT['inductor.winding']] = heated(choke, WINDING_TEMPCO, temperature[HOT.inductor], reference);
+  ledger[SLOT['inductor.windingAc']] = heated(solver.chokeAc, WINDING_TEMPCO, temperature[HOT.inductor], reference);
   const windings = transformerWatts(state, design);
   ledger[SLOT['transformer.winding']] = heated(windings, WINDING_TEMPCO, temperature[HOT.transformer], reference);
   ledger[SLOT['board.copper']] = heated(copperWatts(state), COPPER_TEMPCO, heat.boardTemperature, 293.15);

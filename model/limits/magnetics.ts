@@ -1,6 +1,5 @@
 /** Limits of parts wound to order: window, material range, flux, reach of the gap, duty left by leakage and reset. */
 import type { Evaluator } from '../evaluate.ts';
-import { HOT } from '../heat-balance.ts';
 import { materialViolation, saturationFlux } from '../magnetics/index.ts';
 
 /** Flux that a single-ended core keeps without field, T (common practice, no source). */
@@ -28,7 +27,7 @@ function judgeChoke(e: Evaluator, index: number): void {
 
 function judgeTransformer(e: Evaluator, index: number): void {
   const { book, places, design, rail } = e;
-  const { state, heat } = e.solver;
+  const { state } = e.solver;
   const { transformer, transformerChoice, stage } = design;
   if (transformerChoice === undefined || stage.form === undefined) return;
   const { material } = transformerChoice;
@@ -48,12 +47,4 @@ function judgeTransformer(e: Evaluator, index: number): void {
   book.judge(places.transformerFlux, flux, most, most, -1);
   const duty = state.dutyCycle + state.lostDuty;
   book.judge(places.transformerDuty, duty, stage.highestDuty, stage.highestDuty, index);
-  const rise = Math.max(1, heat.allowed[HOT.transformer] - rail.ambient);
-  book.judge(
-    places.transformerTemperature,
-    heat.temperature[HOT.transformer],
-    heat.allowed[HOT.transformer],
-    rise,
-    index,
-  );
 }

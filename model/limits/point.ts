@@ -4,9 +4,10 @@ import type { Design } from '../design.ts';
 import { LOOP_INDUCTANCE } from '../edges.ts';
 import type { Evaluator } from '../evaluate.ts';
 import { turnOffTime } from '../gate-drive.ts';
-import { BOARD_MAXIMUM, HOT } from '../heat-balance.ts';
+import { BOARD_MAXIMUM, type HeatBalance, HOT } from '../heat-balance.ts';
 import type { Bulk } from '../parts/bulk.ts';
 import type { PlannedPoint } from '../plan.ts';
+import { bulkRise } from '../point.ts';
 import { MODE, type StageState } from '../stages/state.ts';
 import { stepExcursionOf } from '../step-response.ts';
 import { overshoot } from '../switches/index.ts';
@@ -18,9 +19,8 @@ const RUNAWAY_MAXIMUM = 0.9;
 /** Reused from point to point. */
 const stepCase = { inputVoltage: 0.5, outputVoltage: 0.5, inductance: 0.5, bank: createBank(), ripple: 0.5 };
 
-/** Notes every limit at the worst point that the solver holds; `index` names it in the report. */
+/** Notes every limit but those of heat at the worst point that the solver holds; `index` names it in the report. */
 export function judgePoint(e: Evaluator, planned: PlannedPoint, index: number): void {
-  judgeHeat(e, index);
   judgeCurrents(e, index);
   judgeOvershoot(e, planned, index);
   judgeTimes(e, index);
@@ -32,18 +32,34 @@ export function judgePoint(e: Evaluator, planned: PlannedPoint, index: number): 
 
 /** Notes ripple and capacitor limits of a line between the corners. */
 export function judgeRipple(e: Evaluator): void {
+  const { design, solver } = e;
+  const board = solver.heat.boardTemperature;
   judgeRippleAt(e, -1);
   judgeCapacitors(e, -1);
+  const { outputBulk, outputBulkCount, inputBulk, inputBulkCount } = design;
+  judgeBulkHeat(e, outputBulk, board + bulkRise(outputBulk, outputBulkCount, solver.outputRipple.meanSquare2), -1);
+  judgeBulkHeat(e, inputBulk, board + bulkRise(inputBulk, inputBulkCount, solver.inputRipple.meanSquare2), -1);
 }
 
-function judgeHeat(e: Evaluator, index: number): void {
+/** Notes the limits of heat at a worst point. */
+export function judgeHeat(e: Evaluator, heat: HeatBalance, index: number): void {
   const { book, places } = e;
-  const { heat } = e.solver;
   judgeTemperature(e, places.highJunction, heat.temperature[HOT.high], heat.allowed[HOT.high], index);
   judgeTemperature(e, places.lowJunction, heat.temperature[HOT.low], heat.allowed[HOT.low], index);
   judgeTemperature(e, places.inductorTemperature, heat.temperature[HOT.inductor], heat.allowed[HOT.inductor], index);
   judgeTemperature(e, places.boardTemperature, heat.boardTemperature, BOARD_MAXIMUM, index);
   book.judge(places.thermalRunaway, heat.runaway, RUNAWAY_MAXIMUM, RUNAWAY_MAXIMUM, index);
+  judgeBulkHeat(e, e.design.outputBulk, heat.boardTemperature + heat.outputBulkRise, index);
+  judgeBulkHeat(e, e.design.inputBulk, heat.boardTemperature + heat.inputBulkRise, index);
+  if (e.design.stage.form === undefined) return;
+  const { transformerTemperature } = places;
+  judgeTemperature(e, transformerTemperature, heat.temperature[HOT.transformer], heat.allowed[HOT.transformer], index);
+}
+
+function judgeBulkHeat(e: Evaluator, bulk: Bulk | undefined, temperature: number, index: number): void {
+  if (bulk === undefined) return;
+  const allowed = bulk.maximumTemperature - e.rail.derating.temperature;
+  judgeTemperature(e, e.places.bulkTemperature, temperature, allowed, index);
 }
 
 /** A temperature is missed by a fraction of the rise that was allowed. */
@@ -139,15 +155,6 @@ function judgeBulk(
   const each = square / (count * count);
   const allowed = bulk.rippleRating * e.rail.derating.rippleCurrent;
   e.book.judge(place, Math.sqrt(each), allowed, allowed, index);
-  const rise = (bulk.ratedRise * each) / (bulk.rippleRating * bulk.rippleRating);
-  const temperature = e.solver.heat.boardTemperature + rise;
-  judgeTemperature(
-    e,
-    e.places.bulkTemperature,
-    temperature,
-    bulk.maximumTemperature - e.rail.derating.temperature,
-    index,
-  );
 }
 
 function judgeStep(e: Evaluator, planned: PlannedPoint, index: number): void {
