@@ -2,7 +2,7 @@
 
 /** SI units that take the prefixes of thousands, and the range of powers each is spoken in. */
 const PREFIXED: Readonly<Record<string, readonly [number, number]>> = {
-  V: [-3, 3],
+  V: [-6, 3],
   A: [-6, 3],
   Ω: [-6, 6],
   H: [-9, 0],

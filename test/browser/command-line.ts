@@ -8,13 +8,17 @@ import type { SweptRun } from './run.ts';
 
 /** Defines the tests. */
 export function commandLine(browser: Browser, swept: SweptRun): void {
-  const { run, address, command, beside } = swept;
+  const { run, address, data, command, beside } = swept;
 
   test('every file taken from the page equals the one that handoff writes, byte for byte', async () => {
     const { page, context, complaints } = await openTab(browser, address);
-    for (const key of ['Home', 'End']) {
+    const walk = (key: string) => async () => {
       await page.locator('#picture').focus();
       await page.keyboard.press(key);
+    };
+    const nearMiss = () => page.locator('#prices [data-act="open"]').first().click();
+    for (const open of [walk('Home'), walk('End'), nearMiss]) {
+      await open();
       const id = await textOf(page, '#open-head .id');
       const out = beside(`out-${id}`);
       command('handoff', run, id, '--out', out);
@@ -27,6 +31,7 @@ export function commandLine(browser: Browser, swept: SweptRun): void {
         expect((await taken(page, name)).equals(written), `${name} of ${id}`).toBe(true);
       }
     }
+    expect(data.nearMisses.map(({ design }) => design.id)).toContain(await textOf(page, '#open-head .id'));
     expect(complaints).toEqual([]);
     await context.close();
   });

@@ -101,10 +101,7 @@ describe.runIf(needs('ngspice'))('in both simulators', () => {
     packaged = await packagedSimulator();
   });
 
-  // One of each architecture: the packaged simulator is slow.
-  const each = [...new Map(found.map((design) => [design.problem.record(design.genes).architecture, design])).values()];
-
-  it.each(each)('within 0.5 %: $name', async (design) => {
+  it.each(found)('within 0.5 %: $name', async (design) => {
     const netlist = netlistOf(design);
     const a: Run = await nativeSimulator(native ?? '').run(netlist.text);
     const b = await packaged?.run(netlist.text);

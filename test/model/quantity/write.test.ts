@@ -24,6 +24,7 @@ describe('formatQuantity writes four digits and an engineering prefix', () => {
     [5e6, 'A/s', '5 A/µs'],
     [2.8e-3, 'Ω', '2.8 mΩ'],
     [-0.0123, 'V', '-12.3 mV'],
+    [40.6e-6, 'V', '40.6 µV'],
     [0, 'W', '0 W'],
     [0.99996e-3, 'H', '1 mH'],
     [2.345, 'EUR', '2.35 EUR'],
