@@ -11,7 +11,7 @@ import { createJoiner } from '../run-folder/merge.ts';
 import { writePage } from '../run-folder/page.ts';
 import { publish } from '../run-folder/publish.ts';
 import { type RunRecord, readRecord, writeRecord } from '../run-folder/record.ts';
-import { readSnapshot, writeSnapshot } from '../run-folder/snapshot.ts';
+import { readSnapshot, tablesOf, writeSnapshot } from '../run-folder/snapshot.ts';
 import { measureDesigns } from '../sweep/grid.ts';
 import { remark, say } from '../terminal/output.ts';
 import { createRecordSum } from './record-sum.ts';
@@ -49,13 +49,16 @@ async function write(out: string, inputs: Inputs, first: RunRecord, runs: readon
   for (const folder of runs) sum.add(readRecord(folder), joiner.add(readFound(folder)));
   const { railHash, partsHash } = first;
   const found: Found = { railHash, partsHash, ...joiner.joined() };
-  const tables = writeSnapshot(out, inputs.texts);
+  const { hypervolume } = measureDesigns(problem, found.archive);
+  const record: RunRecord = { ...sum.record(first, found, hypervolume), tables: tablesOf(inputs.texts), frontSize: 0 };
+  // The sheet comes after the record and what was found, so that a merge that was killed can simply be run again.
+  writeRecord(out, record);
   writeFound(out, found);
+  writeSnapshot(out, inputs.texts);
   const setup = { folder: out, problem, found, texts: inputs.texts, threads: availableParallelism() };
   await tryRestarts({ ...setup, say: remark });
   const front = publish(out, problem, found);
-  const { hypervolume } = measureDesigns(problem, found.archive);
-  writeRecord(out, { ...sum.record(first, found, hypervolume), tables, frontSize: front.designs.length });
+  writeRecord(out, { ...record, frontSize: front.designs.length });
   await drawPage(out);
   say(
     `${out}: ${front.designs.length} designs on the front of ${runs.length} runs, hypervolume ${hypervolume.toFixed(5)}`,

@@ -4,6 +4,7 @@ import { join } from 'node:path';
 import { z } from 'zod';
 import { refusal, systemCode } from '../errors.ts';
 import { writeWhole } from './files.ts';
+import { RUN_RECORD } from './folder.ts';
 import { issueText } from './issue.ts';
 
 const count = z.number().int().nonnegative();
@@ -69,20 +70,18 @@ const RECORD = z.object({
 export type RunRecord = z.infer<typeof RECORD>;
 export type Fault = z.infer<typeof FAULT>;
 
-const NAME = 'run.json';
-
 /** Writes the record into a run folder. */
 export function writeRecord(folder: string, record: RunRecord): void {
-  writeWhole(join(folder, NAME), `${JSON.stringify(record, undefined, 2)}\n`);
+  writeWhole(join(folder, RUN_RECORD), `${JSON.stringify(record, undefined, 2)}\n`);
 }
 
 /** The record of a run folder. Throws the refusals `run-missing` and `run-damaged`. */
 export function readRecord(folder: string): RunRecord {
   try {
-    return RECORD.parse(JSON.parse(readFileSync(join(folder, NAME), 'utf8')));
+    return RECORD.parse(JSON.parse(readFileSync(join(folder, RUN_RECORD), 'utf8')));
   } catch (error) {
     const code = systemCode(error);
     if (code === 'ENOENT' || code === 'ENOTDIR') throw refusal('run-missing', { folder });
-    throw refusal('run-damaged', { folder, file: NAME, reason: issueText(error) });
+    throw refusal('run-damaged', { folder, file: RUN_RECORD, reason: issueText(error) });
   }
 }

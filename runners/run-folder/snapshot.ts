@@ -5,7 +5,7 @@ import { BUILT_IN_TABLES, canonicalParts, canonicalRail, readRail } from '../../
 import { refusal } from '../errors.ts';
 import { type Inputs, type InputTexts, type NamedText, readInputs, type TableText } from '../inputs.ts';
 import { readText, writeWhole } from './files.ts';
-import { RUN_FILES } from './folder.ts';
+import { INCUMBENTS, RUN_FILES, RUN_RECORD } from './folder.ts';
 import { hashOf } from './hashes.ts';
 import type { RunRecord } from './record.ts';
 
@@ -20,20 +20,15 @@ export function tablesOf(texts: InputTexts): StoredTables {
   });
 }
 
-/** Writes the snapshot into a run folder; returns what `run.json` says of its tables. */
-export function writeSnapshot(folder: string, texts: InputTexts): StoredTables {
-  writeWhole(join(folder, RUN_FILES.rail), texts.rail.text);
+/** Writes the snapshot into a run folder, the sheet last: where it is, all else is. */
+export function writeSnapshot(folder: string, texts: InputTexts): void {
   mkdirSync(join(folder, RUN_FILES.parts), { recursive: true });
-  const tables = tablesOf(texts);
-  for (const [i, { stored }] of tables.entries()) {
+  for (const [i, { stored }] of tablesOf(texts).entries()) {
     writeWhole(join(folder, RUN_FILES.parts, stored), texts.tables[i]?.text ?? '');
   }
   writeIncumbents(folder, texts);
-  return tables;
+  writeWhole(join(folder, RUN_FILES.rail), texts.rail.text);
 }
-
-/** Folder of the designs that the sheet names as existing ones. */
-const INCUMBENTS = 'incumbents';
 
 function writeIncumbents(folder: string, texts: InputTexts): void {
   if (texts.incumbents === undefined) return;
@@ -60,7 +55,7 @@ export function readSnapshot(folder: string, record: RunRecord): Inputs {
   const tables = record.tables.map(({ kind, file, stored }): TableText => {
     const text = readText(join(folder, RUN_FILES.parts, basename(stored)), "a parts table of the run's snapshot");
     const known = BUILT_IN_TABLES.find((table) => table.kind === kind);
-    if (known === undefined) throw refusal('run-damaged', { folder, file: 'run.json', reason: `no parts are ${kind}` });
+    if (known === undefined) throw refusal('run-damaged', { folder, file: RUN_RECORD, reason: `no parts are ${kind}` });
     return { kind: known.kind, file, text };
   });
   return readInputs({ rail, tables, ...readIncumbents(folder, rail) });

@@ -12,7 +12,7 @@ import { type PrivateSlurm, startSlurm, waitFor, whyNoSlurm } from './private-sl
 
 const SHEET = new URL('../../model/rails/buoy-sensors.yaml', import.meta.url).pathname;
 const BYTES = ['front.csv', 'front.json', 'near-misses.csv', 'history.csv', 'archive.bin'];
-const SIZE = ['--shards', '4', '--evaluations', '64k', '--seed', 'cluster', '--threads', '1'];
+const SIZE = ['--shards', '4', '--evaluations', '192k', '--seed', 'cluster', '--threads', '1'];
 const why = whyNoSlurm();
 const here = why === '' || lacking('slurm', why);
 

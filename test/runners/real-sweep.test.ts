@@ -1,5 +1,5 @@
 /** The whole path on a shipped sheet: sweep, show, assess, handoff, page, merge, compare, with the built program. */
-import { existsSync, readFileSync, writeFileSync } from 'node:fs';
+import { cpSync, existsSync, mkdirSync, readFileSync, writeFileSync } from 'node:fs';
 import { join } from 'node:path';
 import { beforeAll, describe, expect, it } from 'vitest';
 import type { FrontFile } from '../../model/index.ts';
@@ -50,6 +50,21 @@ describe('a swept folder', () => {
       }
     }
     expect(readFileSync(join(run, 'front.csv'), 'utf8').trimEnd().split('\n')).toHaveLength(front.designs.length + 1);
+  });
+
+  it('is started again where a start was killed before its snapshot was whole; no other folder is taken for that', async () => {
+    const begun = join(newFolder(), 'run');
+    mkdirSync(join(begun, 'parts'), { recursive: true });
+    cpSync(join(run, 'run.json'), join(begun, 'run.json'));
+    const resumed = await chopfront('sweep', '--out', begun, '--resume');
+    expect([resumed.status, resumed.stderr]).toEqual([2, expect.stringContaining('nothing to resume here')]);
+    const other = join(newFolder(), 'run');
+    cpSync(begun, other, { recursive: true });
+    expect((await chopfront('sweep', SHEET, '--out', begun, ...ARGS)).status).toBe(0);
+    expect(bytesOf(begun)).toEqual(bytesOf(run));
+    writeFileSync(join(other, 'run.json'), '{"kilometres": 12}');
+    const refused = await chopfront('sweep', SHEET, '--out', other, ...ARGS);
+    expect([refused.status, refused.stderr]).toEqual([2, expect.stringContaining('holds files but no run')]);
   });
 
   it('is the same to the byte with one thread', async () => {
@@ -171,6 +186,11 @@ describe('several runs', () => {
     expect(bytesOf(merged)).toEqual(bytesOf(whole));
     expect(await chopfront('merge', merged, shards)).toMatchObject({ status: 0 });
     expect(bytesOf(merged)).toEqual(bytesOf(whole));
+    // What a merge leaves that is killed before its snapshot is whole.
+    const begun = newFolder();
+    for (const name of ['run.json', 'archive.bin']) cpSync(join(merged, name), join(begun, name));
+    expect(await chopfront('merge', begun, shards)).toMatchObject({ status: 0 });
+    expect(bytesOf(begun)).toEqual(bytesOf(whole));
   });
 
   it('missing shards are named, with how to run them', async () => {
