@@ -41,6 +41,10 @@ export class Design {
   controller: Controller;
   /** Shortest on-time of controller and sheet, s: below it pulses are skipped. */
   shortestOnTime = 0.5;
+  /** Gap between the switches of a leg, s; 0 before a diode. */
+  gap = 0.5;
+  /** Current that moves a leg's node from rail to rail within the gap, A. */
+  gapCurrent = 0.5;
   /** What drives the gates: the controller, or the power stage's own driver. */
   driver: Driver;
   /** The power stage of a phase; absent with discrete switches. */
@@ -134,6 +138,7 @@ export function resolveDesign(
   design.controller = catalogue.controllers[genes[GENE.controller]];
   design.shortestOnTime = Math.max(design.controller.minimumOnTime, rail.limits.minimumOnTime ?? 0);
   resolveLeg(design, genes, catalogue);
+  resolveGap(design);
   design.outputCeramic = catalogue.outputCeramics[genes[GENE.outputCeramic]];
   design.outputCeramicCount = genes[GENE.outputCeramicCount];
   design.outputBulkCount = genes[GENE.outputBulkCount];
@@ -161,6 +166,16 @@ function resolveLeg(design: Design, genes: Float64Array, catalogue: Catalogue): 
   design.highParallel = packaged ? 1 : genes[GENE.highParallel];
   design.low = leg?.low ?? catalogue.lowSwitches[genes[GENE.lowSwitch]];
   design.lowParallel = packaged ? 1 : genes[GENE.lowParallel];
+}
+
+/** Charge of a node that is taken at least, C: one without any moves at once. */
+const LEAST_CHARGE = 1e-15;
+
+function resolveGap(design: Design): void {
+  design.gap = design.diode === undefined ? design.driver.deadTime : 0;
+  const own = design.lowParallel * design.low.outputCharge;
+  const node = design.stage.form === undefined ? own + design.highParallel * design.high.outputCharge : own;
+  design.gapCurrent = design.gap > 0 ? Math.max(LEAST_CHARGE, node) / design.gap : 1;
 }
 
 function resolveChoke(design: Design, genes: Float64Array, rail: Rail, catalogue: Catalogue): void {

@@ -15,6 +15,18 @@ export class ChokeSteadyState {
   current = 0.5;
   /** H. */
   inductance = 0.5;
+  /**
+   * Drops of body diodes over those of their switches, V, each times the share of the set period that one gap takes: of the device
+   * that carries the falling interval, and of the one that carries the rising one.
+   */
+  gapFall = 0;
+  gapRise = 0;
+  /** Current that moves the node from rail to rail within a gap, A, above 0. */
+  gapCurrent = 1;
+  /** The same where the node waits for its charge before an edge that its own current brings about; 0 where it moves at once. */
+  waitCurrent = 0;
+  /** Mean voltage that the gaps take off the node over a set period, V; `settleGaps` takes it from the ripple last solved. */
+  gapVolts = 0;
   /** Set switching frequency, Hz. */
   frequency = 0.5;
   /** Whether the current may not cross zero (diode or diode emulation). */
@@ -35,14 +47,15 @@ export class ChokeSteadyState {
 }
 
 /**
- * Solves `s`. Continuous: D = fall/(rise + fall), ΔI = rise·D/(L·f). Discontinuous where blocking and I < ΔI/2:
- * D² = 2·L·f·I·fall/(rise·(rise + fall)) (Erickson & Maksimović, Fundamentals of Power Electronics, ch. 5, with drops).
+ * Solves `s`. Continuous: D = (fall + g)/(rise + fall), g what the gaps take, ΔI = rise·D/(L·f). Discontinuous where blocking and
+ * I < ΔI/2: D² = 2·L·f·I·fall/(rise·(rise + fall)) without gaps (Erickson & Maksimović, Fundamentals of Power Electronics, ch. 5, with
+ * drops); with them the volt-seconds rise·D = fall·D2 + g and I = ΔI·(D + D2)/2 give the root of a quadratic.
  * Below the shortest on-time pulses keep their size and come at I/(charge of a pulse). All three meet without a jump.
  * Source id: erickson-maksimovic-2001.
  */
 export function solveChoke(s: ChokeSteadyState): void {
   const total = s.rise + s.fall;
-  const duty = s.fall / total;
+  const duty = (s.fall + s.gapVolts) / total;
   const ripple = (s.rise * duty) / (s.inductance * s.frequency);
   s.effectiveFrequency = s.frequency;
   if (!s.blocking || s.current >= 0.5 * ripple) {
@@ -54,18 +67,48 @@ export function solveChoke(s: ChokeSteadyState): void {
     return;
   }
   s.mode = MODE.discontinuous;
-  const asked = Math.sqrt((2 * s.inductance * s.frequency * s.current * s.fall) / (s.rise * total));
+  const charge = (2 * s.inductance * s.frequency * s.current * s.fall) / s.rise;
+  // A pulse loses at most half of its own volt-seconds in a gap.
+  const gap = Math.min(s.gapVolts, 0.5 * s.rise * Math.sqrt(charge / total));
+  const asked = (gap + Math.sqrt(gap * gap + 4 * total * charge)) / (2 * total);
   const least = s.shortestRise * s.frequency;
   const set = asked < least ? Math.min(least, duty) : asked;
   if (set > asked) {
     s.mode = s.current > 0 ? MODE.skipping : MODE.off;
-    s.effectiveFrequency = s.frequency * ((asked * asked) / (set * set));
+    s.effectiveFrequency = (s.frequency * charge) / (set * (set * total - gap));
   }
   const stretch = s.effectiveFrequency / s.frequency;
   s.dutyCycle = set;
   s.riseShare = set * stretch;
-  s.fallShare = (set * stretch * s.rise) / s.fall;
+  s.fallShare = (stretch * (set * s.rise - gap)) / s.fall;
   s.ripple = (s.rise * set) / (s.inductance * s.frequency);
+}
+
+/**
+ * Takes what the gaps between the switches cost in voltage from the ripple that `s` holds: each edge's body diode by its current's sign.
+ * Before a hard edge it conducts through the gap (a current too small to move the node counts in proportion, so that nothing jumps
+ * where it turns round), before a soft one only once the node has arrived.
+ */
+export function settleGaps(s: ChokeSteadyState): void {
+  const half = 0.5 * s.ripple;
+  const rests = pauses(s.mode);
+  const valley = rests ? 0 : s.current - half;
+  const peak = rests ? s.ripple : s.current + half;
+  const first = valley >= 0 ? s.gapFall * hard(s, valley) : -s.gapRise * soft(s, -valley);
+  const second = peak >= 0 ? s.gapFall * soft(s, peak) : -s.gapRise * hard(s, -peak);
+  // Half of what drives the choke at most: so duties stay between 0 and 1 where hardly anything does, and broken limits tell the rest.
+  const most = (0.5 * s.rise * s.fall) / (s.rise + s.fall);
+  s.gapVolts = Math.max(-most, Math.min(most, first + second));
+}
+
+/** Share of a gap in which the body diode conducts before a hard edge, of a current's size in A. */
+function hard(s: ChokeSteadyState, size: number): number {
+  return Math.min(1, size / s.gapCurrent);
+}
+
+/** The same before a soft edge. */
+function soft(s: ChokeSteadyState, size: number): number {
+  return size > s.waitCurrent ? 1 - s.waitCurrent / size : 0;
 }
 
 /** Copies the solution for power from input to output into `state`. */

@@ -1,7 +1,7 @@
 /** The buck stage, interleaved, with a switch or a diode in the low position. */
 import type { Design } from '../design.ts';
 import { addEdgeLosses } from '../edges.ts';
-import { applyForward, applyReverse, ChokeSteadyState, solveChoke } from '../modes.ts';
+import { applyForward, applyReverse, ChokeSteadyState, settleGaps, solveChoke } from '../modes.ts';
 import type { Rail } from '../rail/rail.ts';
 import { addSegment, clearWaveform } from '../waveform/index.ts';
 import { solveBentChoke } from './choke.ts';
@@ -70,11 +70,13 @@ function solveForward(design: Design, state: StageState, current: number): void 
   steady.shortestRise = design.shortestOnTime;
   const drop = design.stage.diode ? design.diodeDrop(state.lowTemperature) : 0;
   forwardVoltages(state, drop, current);
+  gaps(design, design.low.bodyDrop - current * state.lowResistance, design.high.bodyDrop);
   solveBentChoke(design, state, steady);
   // With gaps the drops follow the current that flows while it flows: the geometric mean of load and boundary current,
   // which is half the peak of an ideal discontinuous triangle and equals the load at the boundary itself.
   if (steady.mode !== MODE.continuous && steady.mode !== MODE.forced) {
     forwardVoltages(state, drop, 0.5 * steady.ripple);
+    settleGaps(steady);
     solveChoke(steady);
   }
   applyForward(steady, state);
@@ -84,6 +86,15 @@ function forwardVoltages(state: StageState, drop: number, current: number): void
   steady.rise = state.inputVoltage - state.outputVoltage - current * (state.highResistance + state.pathResistance);
   steady.fall = state.outputVoltage + drop + current * (state.lowResistance + state.pathResistance);
   keepDriving(state);
+}
+
+/** Gaps before both edges: a switch turns off, and the body diode that the current's sign chooses takes over with its own drop, V. */
+function gaps(design: Design, fallDrop: number, riseDrop: number): void {
+  const share = design.gap * design.frequency;
+  steady.gapFall = share * fallDrop;
+  steady.gapRise = share * riseDrop;
+  steady.gapCurrent = design.gapCurrent;
+  steady.waitCurrent = design.gapCurrent;
 }
 
 /** Where drops eat the whole drive no duty serves: a duty of one and the limits it breaks tell, not a negative voltage. */
@@ -99,6 +110,7 @@ function solveReverse(design: Design, state: StageState, current: number): void 
   steady.rise = state.outputVoltage - current * (state.lowResistance + state.pathResistance);
   steady.fall = state.inputVoltage - state.outputVoltage + current * (state.highResistance + state.pathResistance);
   keepDriving(state);
+  gaps(design, design.high.bodyDrop - current * state.highResistance, design.low.bodyDrop);
   solveBentChoke(design, state, steady);
   applyReverse(steady, state);
 }

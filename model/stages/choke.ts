@@ -1,22 +1,24 @@
 /** The inductance that a choke shows at a mean current, with the ripple that it itself allows. */
 import type { Design } from '../design.ts';
 import { inductanceAt } from '../magnetics/index.ts';
-import { type ChokeSteadyState, solveChoke } from '../modes.ts';
+import { type ChokeSteadyState, settleGaps, solveChoke } from '../modes.ts';
 import type { StageState } from './state.ts';
 
 const henries = new Float64Array(1);
 
 /**
- * Solves `steady` for the choke of `design`: first with the inductance at zero bias, then with that at the rms current which
- * the first solution shows. For a bend that goes with I² this is the mean inductance over the ripple; it is close to it
+ * Solves `steady` for the choke of `design`: first with the inductance at zero bias and no gaps, then with the inductance at the rms
+ * current and the gaps' drops at the edges' currents which the first solution shows. For a bend that goes with I² this is the mean inductance over the ripple; it is close to it
  * for any bend while the peak stays below saturation, which is a limit.
  */
 export function solveBentChoke(design: Design, state: StageState, steady: ChokeSteadyState): void {
   const scale = state.inductance / design.inductance;
   steady.inductance = state.inductance;
+  steady.gapVolts = 0;
   solveChoke(steady);
   const square = steady.current * steady.current + (steady.ripple * steady.ripple) / 12;
   inductanceAt(design.inductor, Math.sqrt(square), henries);
   steady.inductance = henries[0] * scale;
+  settleGaps(steady);
   solveChoke(steady);
 }

@@ -49,6 +49,7 @@ export function solveIsolated(form: IsolatedForm, design: Design, state: StageSt
   steady.blocking = design.emulates && !form.doubler;
   steady.shortestRise = design.shortestOnTime;
   voltages(form, transformer, state, phaseCurrent, current);
+  rectifierGaps(form, design, state, current);
   solveBentChoke(design, state, steady);
   applyForward(steady, state);
   state.effectiveInductance = steady.inductance;
@@ -72,6 +73,22 @@ function voltages(form: IsolatedForm, t: Transformer, state: StageState, phaseCu
   steady.fall = state.outputVoltage + path + idle;
   // A secondary below the output cannot drive the choke: a duty of one and a broken limit tell, not a negative voltage.
   if (!(steady.rise > 1e-6 * state.inputVoltage)) steady.rise = 1e-6 * state.inputVoltage;
+}
+
+/**
+ * Body diodes of the rectifiers: in the gaps before and after a pulse and while the current turns round in the leakage. A shifted
+ * bridge waits out one of the gaps within that turn; a centre tap sees half of what one end of its winding drops.
+ */
+function rectifierGaps(form: IsolatedForm, design: Design, state: StageState, current: number): void {
+  const t = design.transformer;
+  const gap = design.gap;
+  const rise = (t.leakage * current) / (t.ratio * form.share * state.inputVoltage);
+  const time = design.phaseShifted ? gap + Math.max(gap, rise) + rise : 2 * gap + rise;
+  const drop = design.low.bodyDrop - current * state.lowResistance;
+  steady.gapFall = 0.5 * time * steady.frequency * (form.centreTap ? 0.5 : 1) * drop;
+  steady.gapRise = 0;
+  steady.gapCurrent = design.gapCurrent;
+  steady.waitCurrent = 0;
 }
 
 /** Moments of every current of one phase, and the waveforms of choke and input. */

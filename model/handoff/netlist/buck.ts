@@ -6,8 +6,6 @@ import type { Instant, Lines } from './lines.ts';
 
 /** When each gate of a phase whose cycle begins at 0 is on, s. */
 interface Gating {
-  /** Share of time that the high interval is lengthened by to make up for the gaps' drops, s. */
-  readonly extra: number;
   readonly high: readonly [from: number, to: number];
   readonly low: readonly [from: number, to: number];
 }
@@ -19,32 +17,11 @@ function buckGating(point: SolvedPoint): Gating {
   const gap = design.diode === undefined ? design.driver.deadTime : 0;
   const { valleyCurrent: a, peakCurrent: b } = state;
   const rests = pauses(state.mode);
-  const extra = makeUp(point, gap);
-  const on = state.highShare * period + extra;
+  const on = state.highShare * period;
   const high: [number, number] = [a < 0 && !rests ? gap : 0, b < 0 ? on - gap : on];
-  if (rests && a < 0) return { extra, high: [gap, on], low: [period - state.lowShare * period, period] };
+  if (rests && a < 0) return { high: [gap, on], low: [period - state.lowShare * period, period] };
   const off = rests ? (state.highShare + state.lowShare) * period : a < 0 ? period : period - gap;
-  return { extra, high, low: [b < 0 ? on : on + gap, off] };
-}
-
-/**
- * On-time that makes up for the drops of the body diodes in the gaps, s: the model's volt-second balance leaves them out and a
- * control loop would add it. Each gap with the low body diode takes (Vb − |i|·R) off the node, each with the high one adds it.
- */
-function makeUp(point: SolvedPoint, gap: number): number {
-  const { design, state } = point;
-  const { valleyCurrent: a, peakCurrent: b } = state;
-  if (gap === 0) return 0;
-  const high = design.high.bodyDrop;
-  const low = design.low.bodyDrop;
-  if (pauses(state.mode)) {
-    const power = Math.abs(state.outputVoltage * state.meanCurrent);
-    const lost = low * Math.max(0, b) * gap * state.frequency;
-    return power > 0 ? (0.5 * (state.highShare / state.frequency) * lost) / power : 0;
-  }
-  const drop = (i: number): number =>
-    i > 0 ? low - i * state.lowResistance : -(high - Math.abs(i) * state.highResistance);
-  return (gap * (drop(a) + drop(b))) / state.inputVoltage;
+  return { high, low: [b < 0 ? on : on + gap, off] };
 }
 
 /** Writes all active phases. */
@@ -53,8 +30,7 @@ export function writeBuck(lines: Lines, point: SolvedPoint): void {
   const period = 1 / state.frequency;
   const gating = buckGating(point);
   lines.parameter('duty', state.highShare, '', 'share of the period that the model gives the high interval');
-  lines.parameter('tmakeup', gating.extra, 's', 'on-time a control loop adds for the drops in the dead times');
-  lines.derived('ton', 'duty*tper+tmakeup', state.highShare * period + gating.extra, 's', 'high interval');
+  lines.derived('ton', 'duty*tper', state.highShare * period, 's', 'high interval');
   if (design.diode === undefined) {
     lines.parameter('tdead', design.driver.deadTime, 's', 'dead time of the drivers at each edge');
   }
@@ -85,7 +61,7 @@ function writePhase(lines: Lines, point: SolvedPoint, gating: Gating, k: number)
   lines.comment(`phase ${k + 1}`);
   const [h0, h1] = gating.high;
   const highFrom = h0 > 0 ? 'tdead' : '0';
-  const highWidth = `ton${h0 > 0 ? '-tdead' : ''}${h1 < state.highShare * period.value + gating.extra ? '-tdead' : ''}`;
+  const highWidth = `ton${h0 > 0 ? '-tdead' : ''}${h1 < state.highShare * period.value ? '-tdead' : ''}`;
   lines.gate(`gh${k}`, at(highFrom, h0), { text: highWidth, value: h1 - h0 }, period);
   lines.meter(`mh${k}`, 'in', `dh${k}`);
   lines.switched(`h${k}`, `dh${k}`, `sw${k}`, `gh${k}`, 'rhigh');
@@ -104,7 +80,7 @@ function writeLowSwitch(lines: Lines, point: SolvedPoint, gating: Gating, k: num
   const shift = (k * period.value) / state.activePhases;
   const [from, to] = gating.low;
   // Written by values, for they follow from the current's sign at each edge; ton and tdead move them where they can.
-  const on = state.highShare * period.value + gating.extra;
+  const on = state.highShare * period.value;
   const start = from > on ? 'ton+tdead' : from === on ? 'ton' : String(from);
   const end = pauses(state.mode) ? String(to) : to < period.value ? 'tper-tdead' : 'tper';
   lines.gate(

@@ -30,10 +30,9 @@ function writeValues(lines: Lines, point: SolvedPoint, times: PulseTimes): void 
     'share of the rectified period that the model gives the rising interval',
   );
   lines.parameter('tcommute', times.commutation, 's', 'on-time whose volt-seconds the leakage takes');
-  lines.parameter('tmakeup', times.extra, 's', 'on-time a control loop adds for the drops in the dead times');
   lines.parameter('tdead', times.gap, 's', 'dead time of the drivers at each edge');
   const share = design.stage.chokeMultiple === 2 ? 'duty*tper/2' : 'duty*tper';
-  lines.derived('ton', `${share}+tcommute+tmakeup`, times.pulse, 's', 'length of a pulse at the primary');
+  lines.derived('ton', `${share}+tcommute`, times.pulse, 's', 'length of a pulse at the primary');
   lines.parameter('lchoke', state.effectiveInductance, 'H', 'choke at its current (bias taken off)');
   lines.parameter('rpath', state.pathResistance, 'ohm', 'choke winding at its temperature and board copper');
   lines.parameter('rhigh', state.highResistance, 'ohm', 'one primary switch position at its temperature, all dice');

@@ -11,8 +11,6 @@ export interface PulseTimes {
   readonly pulse: number;
   /** Part of it whose volt-seconds go into the leakage: it turns the current round at first, then carries its rise. */
   readonly commutation: number;
-  /** Part of it that makes up for the body diodes' drops. */
-  readonly extra: number;
   readonly gap: number;
 }
 
@@ -23,19 +21,15 @@ export function pulseTimes(point: SolvedPoint): PulseTimes {
   const { form } = stage;
   const choke = 1 / state.frequency;
   const period = stage.chokeMultiple * choke;
-  if (form === undefined) return { period, pulse: 0, commutation: 0, extra: 0, gap: 0 };
+  if (form === undefined) return { period, pulse: 0, commutation: 0, gap: 0 };
   const volts = form.share * state.inputVoltage;
   const gap = driver.deadTime;
   // From rest to the peak within a pulse. A shifted bridge must first stop the peak of the last pulse, and wait out the gap.
   const rise = (transformer.leakage * Math.max(0, state.peakCurrent)) / (transformer.ratio * volts);
   const commutation = design.phaseShifted ? Math.max(gap, rise) + rise : rise;
-  // A centre tap sees half of what one end of its winding drops.
-  const share = form.centreTap ? 0.5 : 1;
-  const drop = share * design.low.bodyDrop * ((design.phaseShifted ? 1 : 2) * gap + commutation);
-  const extra = pauses(state.mode) ? 0 : (drop * transformer.ratio) / volts;
   const longest = form.doubleEnded ? 0.5 * period - 2 * gap : 0.5 * period;
-  const pulse = Math.min(longest, state.highShare * choke + commutation + extra);
-  return { period, pulse, commutation, extra, gap };
+  const pulse = Math.min(longest, state.highShare * choke + commutation);
+  return { period, pulse, commutation, gap };
 }
 
 /** Currents at time 0 of a phase whose cycle began `ago` s earlier. */
