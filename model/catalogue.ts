@@ -4,6 +4,7 @@
  * out here, once, instead of being refused a million times in the search.
  */
 import { bad, type Finding, good, type Outcome } from './outcome.ts';
+import { alike, laidOut, layoutOf } from './parts/alike.ts';
 import type { Bulk } from './parts/bulk.ts';
 import type { Ceramic } from './parts/ceramic.ts';
 import type { Part } from './parts/common.ts';
@@ -64,7 +65,8 @@ export interface Catalogue {
 const RATING_SPAN = 6;
 
 /** The options for `rail`, or one finding for each part kind of which none is left. */
-export function createCatalogue(rail: Rail, tables: PartsTables): Outcome<Catalogue> {
+export function createCatalogue(rail: Rail, given: PartsTables): Outcome<Catalogue> {
+  const tables = allAlike(given);
   const switchNeed = rail.input.maximum / rail.derating.switchVoltage;
   const switches = usable(rail, tables.switches).filter((row) => within(row.voltageRating, switchNeed, RATING_SPAN));
   const byResistance = sortBy(switches, (row) => -row.onResistance);
@@ -104,6 +106,29 @@ export function createCatalogue(rail: Rail, tables: PartsTables): Outcome<Catalo
   };
   const findings = missingKinds(rail, catalogue);
   return findings.length > 0 ? bad(findings) : good(catalogue);
+}
+
+/** `tables` with the rows of each kind laid out alike. */
+function allAlike(tables: PartsTables): PartsTables {
+  const layout = switchLayout(tables);
+  return {
+    switches: tables.switches.map((row) => laidOut(row, layout)),
+    diodes: alike(tables.diodes),
+    inductors: alike(tables.inductors),
+    ceramics: alike(tables.ceramics),
+    bulks: alike(tables.bulks),
+    controllers: alike(tables.controllers),
+    cores: alike(tables.cores),
+    materials: alike(tables.materials),
+    conductors: alike(tables.conductors),
+    powerStages: alike(tables.powerStages),
+  };
+}
+
+/** The layout that discrete switches and those inside power stages share. */
+function switchLayout(tables: PartsTables): string {
+  const legs = tables.powerStages.map(legOf);
+  return layoutOf([...tables.switches, ...legs.flatMap(({ high, low }) => [high, low])]);
 }
 
 /** Price of one piece of `part` when `quantity` pieces are bought, in the table's currency. */
@@ -201,7 +226,11 @@ function legsFor(rail: Rail, tables: PartsTables): readonly Leg[] {
   if (!rail.search.architectures.some(takesPowerStages)) return [];
   const need = rail.input.maximum / rail.derating.switchVoltage;
   const rows = usable(rail, tables.powerStages).filter((row) => within(row.voltageRating, need, RATING_SPAN));
-  return sortBy(rows, (row) => -row.lowResistance).map(legOf);
+  const layout = switchLayout(tables);
+  return sortBy(rows, (row) => -row.lowResistance).map((row) => {
+    const leg = legOf(row);
+    return { ...leg, high: laidOut(leg.high, layout), low: laidOut(leg.low, layout) };
+  });
 }
 
 /** Whether an architecture has a transformer. */

@@ -4,6 +4,7 @@
  */
 import { ceramicCapacitance } from './capacitors/index.ts';
 import { type Catalogue, priceAt } from './catalogue.ts';
+import { EdgeFigures, prepareEdges } from './edge-figures.ts';
 import { GENE } from './genes.ts';
 import { boardPath, sideSurface, surfaceCoefficient } from './heat/index.ts';
 import { createInductorAtFrequency, inductorThermalResistance, prepareInductor } from './magnetics/index.ts';
@@ -78,6 +79,9 @@ export class Design {
   /** Whether phases are dropped at light load. */
   sheds = false;
 
+  /** Edge and gate figures of both positions; those of the low one mean nothing under a diode. */
+  readonly highEdges = new EdgeFigures();
+  readonly lowEdges = new EdgeFigures();
   /** Core and winding figures of the inductor at this frequency. */
   readonly inductorAt = createInductorAtFrequency();
   /** Stocked choke to board, wound one to air, K/W. */
@@ -166,6 +170,8 @@ function resolveLeg(design: Design, genes: Float64Array, catalogue: Catalogue): 
   design.highParallel = packaged ? 1 : genes[GENE.highParallel];
   design.low = leg?.low ?? catalogue.lowSwitches[genes[GENE.lowSwitch]];
   design.lowParallel = packaged ? 1 : genes[GENE.lowParallel];
+  prepareEdges(design.highEdges, design.high, design.highParallel, design.driver);
+  prepareEdges(design.lowEdges, design.low, design.lowParallel, design.driver);
 }
 
 /** Charge of a node that is taken at least, C: one without any moves at once. */

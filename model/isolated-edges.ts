@@ -4,100 +4,99 @@
  * input. Rectifiers pay recovery and the charge that rings through the leakage.
  */
 import type { Design } from './design.ts';
-import { addGateLosses, cycleCharge, overlapOff, overlapOn } from './gate-drive.ts';
+import { lookUpBus } from './edge-figures.ts';
 import { SLOT } from './ledger.ts';
 import type { IsolatedForm } from './stages/isolated.ts';
 import type { StageState } from './stages/state.ts';
-import {
-  deadTimeEnergy,
-  hardEdgeEnergy,
-  OUTPUT_CHARGE,
-  OUTPUT_ENERGY,
-  outputAt,
-  recoveryCharge,
-} from './switches/index.ts';
+import { deadTimeEnergy, hardEdgeEnergy, overlapEnergy } from './switches/index.ts';
 
-const output = new Float64Array(2);
+const HIGH_OVERLAP = SLOT['highSwitch.overlap'];
+const HIGH_OUTPUT = SLOT['highSwitch.outputCharge'];
+const HIGH_GATE = SLOT['highSwitch.gate'];
+const LOW_OUTPUT = SLOT['lowSwitch.outputCharge'];
+const LOW_RECOVERY = SLOT['lowSwitch.recovery'];
+const LOW_DEAD_TIME = SLOT['lowSwitch.deadTime'];
+const LOW_GATE = SLOT['lowSwitch.gate'];
+const DRIVE_SUPPLY = SLOT['controller.driveSupply'];
 
 /** Adds the switching losses of all active phases at `state` to `ledger`, W. */
 export function addIsolatedEdges(form: IsolatedForm, design: Design, state: StageState, ledger: Float64Array): void {
-  const perCycle = form.doubleEnded && !form.doubler ? 0.5 : 1;
-  const cycles = state.frequency * perCycle * state.activePhases;
-  addPrimary(form, design, state, ledger, cycles);
-  addRectifiers(form, design, state, ledger, cycles);
-  const high = cycles * state.highDevices * cycleCharge(design.high, design.highParallel, design.driver, 0);
-  const low = cycles * state.lowDevices * cycleCharge(design.low, design.lowParallel, design.driver, 0);
-  addGateLosses(ledger, design.driver, state.inputVoltage, high, low);
+  addPrimary(form, design, state, ledger);
+  if (design.phaseShifted) addShiftedEdges(form, design, state, ledger);
+  else addRestingEdges(form, design, state, ledger);
+  addRectifiers(form, design, state, ledger);
+  addGates(form, design, state, ledger);
 }
 
-function addPrimary(form: IsolatedForm, design: Design, state: StageState, ledger: Float64Array, cycles: number): void {
-  const { high, highParallel, driver } = design;
-  const ratio = design.transformer.ratio;
-  const on = state.valleyCurrent / ratio;
-  const off = state.peakCurrent / ratio + state.magnetizingPeak;
-  const devices = cycles * state.highDevices;
-  ledger[SLOT['highSwitch.overlap']] += devices * overlapOff(high, highParallel, driver, state.inputVoltage, off);
-  if (design.phaseShifted) {
-    addShiftedEdges(design, state, ledger, devices, off);
-    return;
-  }
-  const rest = 0.5 * state.inputVoltage;
-  ledger[SLOT['highSwitch.overlap']] += devices * overlapOn(high, highParallel, driver, rest, on);
-  outputAt(high, rest, output);
-  const charge = highParallel * output[OUTPUT_CHARGE];
-  const energy = highParallel * output[OUTPUT_ENERGY];
+/** Cycles a second of one switch, all active phases. */
+function cycles(form: IsolatedForm, state: StageState): number {
+  const perCycle = form.doubleEnded && !form.doubler ? 0.5 : 1;
+  return state.frequency * perCycle * state.activePhases;
+}
+
+/** Turn-off overlap of the primary switches. */
+function addPrimary(form: IsolatedForm, design: Design, state: StageState, ledger: Float64Array): void {
+  const { highEdges: high, transformer } = design;
+  const current = state.peakCurrent / transformer.ratio + state.magnetizingPeak;
+  const devices = cycles(form, state) * state.highDevices;
+  const time = high.offTime + high.offSlope * current;
+  ledger[HIGH_OVERLAP] += devices * overlapEnergy(state.inputVoltage, current, time);
+}
+
+/** Turn-on from where the node rests between the rails. */
+function addRestingEdges(form: IsolatedForm, design: Design, state: StageState, ledger: Float64Array): void {
+  const { highEdges: high, transformer } = design;
+  const current = state.valleyCurrent / transformer.ratio;
+  const devices = cycles(form, state) * state.highDevices;
+  high.volts = 0.5 * state.inputVoltage;
+  lookUpBus(high);
+  const { charge, energy, volts } = high;
+  ledger[HIGH_OVERLAP] += devices * overlapEnergy(volts, current, high.onTime + high.onSlope * current);
   // A leg's partner is charged with each turn-on; a two-switch stage has clamp diodes there instead, far smaller.
-  const edge = form.doubleEnded ? hardEdgeEnergy(charge, energy, energy, rest) : energy;
-  ledger[SLOT['highSwitch.outputCharge']] += devices * edge;
+  ledger[HIGH_OUTPUT] += devices * (form.doubleEnded ? hardEdgeEnergy(charge, energy, energy, volts) : energy);
 }
 
 /**
  * Edges of a shifted bridge. The leading leg is moved by the choke's current and always arrives; the lagging one has only the
  * leakage's energy, ½·L·I² against Q·V (Sabaté 1990), and pays for the part of the swing that is left. Half the devices each.
  */
-function addShiftedEdges(
-  design: Design,
-  state: StageState,
-  ledger: Float64Array,
-  devices: number,
-  current: number,
-): void {
-  const { high, highParallel, transformer } = design;
-  outputAt(high, state.inputVoltage, output);
-  const charge = highParallel * output[OUTPUT_CHARGE];
-  const energy = highParallel * output[OUTPUT_ENERGY];
+function addShiftedEdges(form: IsolatedForm, design: Design, state: StageState, ledger: Float64Array): void {
+  const { highEdges: high, transformer } = design;
+  const current = state.peakCurrent / transformer.ratio + state.magnetizingPeak;
+  const devices = cycles(form, state) * state.highDevices;
+  high.volts = state.inputVoltage;
+  lookUpBus(high);
+  const { charge, energy, volts } = high;
   const stored = 0.5 * transformer.leakage * current * current;
-  const left = Math.max(0, 1 - stored / (charge * state.inputVoltage));
-  const edge = hardEdgeEnergy(charge, energy, energy, state.inputVoltage);
-  ledger[SLOT['highSwitch.outputCharge']] += 0.5 * devices * left * edge;
+  const left = Math.max(0, 1 - stored / (charge * volts));
+  ledger[HIGH_OUTPUT] += 0.5 * devices * left * hardEdgeEnergy(charge, energy, energy, volts);
 }
 
-function addRectifiers(
-  form: IsolatedForm,
-  design: Design,
-  state: StageState,
-  ledger: Float64Array,
-  cycles: number,
-): void {
-  const { low, lowParallel, driver } = design;
-  const devices = cycles * state.lowDevices;
-  const volts = state.rectifierVoltage;
-  outputAt(low, volts, output);
-  const before = Math.max(0, form.centreTap ? 0.5 * state.valleyCurrent : state.valleyCurrent);
-  const charge = recoveryCharge(
-    low.recoveryCharge,
-    low.recoveryCurrent,
-    low.recoveryHoldsOutput,
-    output[OUTPUT_CHARGE],
-    before / lowParallel,
-  );
-  ledger[SLOT['lowSwitch.recovery']] += devices * volts * lowParallel * charge;
-  // Charging a capacitance from a voltage through an inductance and damping the ringing costs Q·V in all.
-  ledger[SLOT['lowSwitch.outputCharge']] += devices * lowParallel * output[OUTPUT_CHARGE] * volts;
-  const gap = driver.deadTime;
+function addRectifiers(form: IsolatedForm, design: Design, state: StageState, ledger: Float64Array): void {
+  const { lowEdges: low, driver } = design;
+  const devices = cycles(form, state) * state.lowDevices;
+  low.volts = state.rectifierVoltage;
+  lookUpBus(low);
+  const { charge, volts } = low;
   const each = form.centreTap ? 0.5 : 1;
-  ledger[SLOT['lowSwitch.deadTime']] +=
-    devices *
-    (deadTimeEnergy(low.bodyDrop, each * Math.max(0, state.valleyCurrent), gap, 0) +
-      deadTimeEnergy(low.bodyDrop, each * Math.max(0, state.peakCurrent), gap, 0));
+  const before = each * Math.max(0, state.valleyCurrent);
+  const after = each * Math.max(0, state.peakCurrent);
+  ledger[LOW_RECOVERY] += devices * volts * low.recovery * before;
+  // Charging a capacitance from a voltage through an inductance and damping the ringing costs Q·V in all.
+  ledger[LOW_OUTPUT] += devices * charge * volts;
+  const gap = driver.deadTime;
+  ledger[LOW_DEAD_TIME] +=
+    devices * (deadTimeEnergy(low.bodyDrop, before, gap, 0) + deadTimeEnergy(low.bodyDrop, after, gap, 0));
+}
+
+/** Gate losses; a linear drive supply burns the rest of the input in the driver. */
+function addGates(form: IsolatedForm, design: Design, state: StageState, ledger: Float64Array): void {
+  const { highEdges, lowEdges, driver } = design;
+  const rate = cycles(form, state);
+  const high = rate * state.highDevices * highEdges.gateCharge;
+  const low = rate * state.lowDevices * lowEdges.gateCharge;
+  ledger[HIGH_GATE] += high * driver.driveVoltage;
+  ledger[LOW_GATE] += low * driver.driveVoltage;
+  const drop = state.inputVoltage - driver.driveVoltage;
+  if (driver.linearDriveSupply && drop > 0) ledger[DRIVE_SUPPLY] += (high + low) * drop;
 }

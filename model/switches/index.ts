@@ -12,7 +12,8 @@ export {
   OUTPUT_CHARGE,
   OUTPUT_ENERGY,
   outputAt,
+  outputInPlaceAt,
 } from './output-charge.ts';
 export { edgeTime, overlapEnergy, overlapLossMiller, sharedGateResistance } from './overlap.ts';
 export { recoveryCharge, recoveryLoss, recoveryLossTriangle } from './recovery.ts';
-export { partialEdgeEnergyAt, swingFraction, zeroVoltageCurrent } from './zero-voltage.ts';
+export { partialEdgeEnergyAt, partialEdgeInPlaceAt, swingFraction, zeroVoltageCurrent } from './zero-voltage.ts';

@@ -20,18 +20,30 @@ export function chargeExponent(charge: number, energy: number, voltage: number):
 export const OUTPUT_CHARGE = 0;
 export const OUTPUT_ENERGY = 1;
 
+interface OutputRow {
+  readonly outputCharge: number;
+  readonly outputEnergy: number;
+  readonly outputTestVoltage: number;
+}
+
 /**
  * Writes output charge (C) and energy (J) of one die at `voltage` (V ≥ 0) to `into[0]` and `into[1]`, from the row's test
  * point by the law of `chargeExponent`: Q ∝ V^p, E ∝ V^(p + 1). No charge and no energy at or below zero volts.
  * @source kasper-2016, section II
  * @valid up to the rated voltage; a fitted law between the test point and zero
  */
-export function outputAt(
-  row: { readonly outputCharge: number; readonly outputEnergy: number; readonly outputTestVoltage: number },
-  voltage: number,
-  into: Float64Array,
-): void {
-  const ratio = voltage / row.outputTestVoltage;
+export function outputAt(row: OutputRow, voltage: number, into: Float64Array): void {
+  into[0] = voltage;
+  outputInPlaceAt(row, into);
+}
+
+/**
+ * The same for the voltage that stands in `into[0]`: no double crosses the call.
+ * @source kasper-2016, section II
+ * @valid as `outputAt`
+ */
+export function outputInPlaceAt(row: OutputRow, into: Float64Array): void {
+  const ratio = into[0] / row.outputTestVoltage;
   if (!(ratio > 0) || row.outputCharge <= 0) {
     into[OUTPUT_CHARGE] = 0;
     into[OUTPUT_ENERGY] = 0;

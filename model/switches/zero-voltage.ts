@@ -3,7 +3,7 @@
  * the rest of the swing costs. Everything is continuous in the valley current: a search parks on any jump.
  */
 import { pow } from '../../optimizer/maths/index.ts';
-import { OUTPUT_CHARGE, OUTPUT_ENERGY, outputAt } from './output-charge.ts';
+import { OUTPUT_CHARGE, OUTPUT_ENERGY, outputInPlaceAt } from './output-charge.ts';
 
 /**
  * Fraction 0 … 1 of the bus that the node swings by. `valley` A (negative helps), `inductance` H, `nodeCharge` C moved by
@@ -62,6 +62,7 @@ interface OutputRow {
 const full = new Float64Array(2);
 const part = new Float64Array(2);
 const rest = new Float64Array(2);
+const shares = new Float64Array(2);
 
 /**
  * Writes to `into[0]` the energy, J, of an edge that starts with the node already swung by `fraction` (0 … 1) of `busVoltage` (V):
@@ -79,14 +80,28 @@ export function partialEdgeEnergyAt(
   fraction: number,
   into: Float64Array,
 ): void {
-  if (fraction >= 1) {
-    into[0] = 0;
-    return;
-  }
-  outputAt(partner, busVoltage, full);
-  outputAt(partner, fraction * busVoltage, part);
-  outputAt(own, (1 - fraction) * busVoltage, rest);
-  const drawn = busVoltage * (full[OUTPUT_CHARGE] - part[OUTPUT_CHARGE]);
-  const stored = full[OUTPUT_ENERGY] - part[OUTPUT_ENERGY];
-  into[0] = partnerDice * (drawn - stored) + ownDice * rest[OUTPUT_ENERGY];
+  shares[0] = busVoltage;
+  shares[1] = fraction;
+  partialEdgeInPlaceAt(partner, own, shares);
+  into[0] = partnerDice * shares[0] + ownDice * shares[1];
+}
+
+/**
+ * The two shares of that energy for the bus voltage in `into[0]` and the fraction in `into[1]`, J a die: to `into[0]` what one die of
+ * the partner draws and does not store, to `into[1]` what one own die had stored. No double crosses the call.
+ * @source kasper-2016, section II
+ * @valid as `partialEdgeEnergyAt`
+ */
+export function partialEdgeInPlaceAt(partner: OutputRow, own: OutputRow, into: Float64Array): void {
+  const bus = into[0];
+  const fraction = Math.min(1, into[1]);
+  full[0] = bus;
+  part[0] = fraction * bus;
+  rest[0] = (1 - fraction) * bus;
+  outputInPlaceAt(partner, full);
+  outputInPlaceAt(partner, part);
+  outputInPlaceAt(own, rest);
+  const drawn = bus * (full[OUTPUT_CHARGE] - part[OUTPUT_CHARGE]);
+  into[0] = drawn - (full[OUTPUT_ENERGY] - part[OUTPUT_ENERGY]);
+  into[1] = rest[OUTPUT_ENERGY];
 }

@@ -17,6 +17,15 @@ const jump = new Float64Array(CAPACITY);
 const EQUAL = new Float64Array(64).fill(1);
 
 /**
+ * The sum at hand, told to the functions below through a record so that no double crosses a call: the shift between copies and
+ * the window, s, what is added to the sum of the copies, and the number of events.
+ */
+const sum = { shift: 0.5, window: 0.5, offset: 0.5, events: 0 };
+/** Change of slope and of value at each breakpoint of the source. */
+const bends = new Float64Array(CAPACITY);
+const jumps = new Float64Array(CAPACITY);
+
+/**
  * Makes `into` the sum of `copies` copies of `source` shifted by period/copies each, over its own shorter period/copies.
  * `into` needs room for source.count + 1 segments. copies 1 … 32; source.count · copies ≤ 256.
  * @derivation the sum of all shifted copies repeats after one shift, so one window of that length holds it
@@ -24,13 +33,18 @@ const EQUAL = new Float64Array(64).fill(1);
  */
 export function sumShifted(source: Waveform, copies: number, into: Waveform): void {
   const window = source.period / copies;
-  let events = 0;
+  findBreaks(source);
+  sum.shift = window;
+  sum.window = window;
+  sum.offset = 0;
+  sum.events = 0;
   let time = 0;
   for (let i = 0; i < source.count; i++) {
-    events = addEvent(source, i, time - Math.floor(time / window) * window, 1, events);
+    when[sum.events] = time - Math.floor(time / window) * window;
+    insert(i, EQUAL, 0);
     time += source.duration[i];
   }
-  chain(source, copies, window, window, EQUAL, 0, events, into);
+  chain(source, copies, EQUAL, into);
 }
 
 /**
@@ -43,29 +57,47 @@ export function sumShifted(source: Waveform, copies: number, into: Waveform): vo
 export function sumUnequal(source: Waveform, copies: number, scales: Float64Array, into: Waveform): void {
   const window = source.period;
   const shift = window / copies;
-  let events = 0;
-  let time = 0;
-  let offset = 0;
+  findBreaks(source);
+  sum.shift = shift;
+  sum.window = window;
+  sum.offset = 0;
+  sum.events = 0;
   const average = mean(source);
-  for (let j = 0; j < copies; j++) offset += average * (1 - scales[j]);
+  for (let j = 0; j < copies; j++) sum.offset += average * (1 - scales[j]);
+  let time = 0;
   for (let i = 0; i < source.count; i++) {
     for (let j = 0; j < copies; j++) {
       const t = time - j * shift;
-      events = addEvent(source, i, t < 0 ? t + window : t, scales[j], events);
+      when[sum.events] = t < 0 ? t + window : t;
+      insert(i, scales, j);
     }
     time += source.duration[i];
   }
-  chain(source, copies, shift, window, scales, offset, events, into);
+  chain(source, copies, scales, into);
 }
 
-/** Adds breakpoint `i` of the source at time `t` of the window, in order of time; returns the new number of events. */
-function addEvent(w: Waveform, i: number, t: number, scale: number, events: number): number {
-  const before = i === 0 ? w.count - 1 : i - 1;
-  const slope = w.duration[i] > 0 ? (w.end[i] - w.start[i]) / w.duration[i] : 0;
-  const slopeBefore = w.duration[before] > 0 ? (w.end[before] - w.start[before]) / w.duration[before] : 0;
-  // A segment of no length is a jump from the end before it to its own end.
-  const step = (w.duration[i] > 0 ? w.start[i] : w.end[i]) - w.end[before];
-  let place = events;
+/** Works out the change of slope and of value at each breakpoint of the source. */
+function findBreaks(w: Waveform): void {
+  let before = w.count - 1;
+  let slopeBefore = slopeOf(w, before);
+  for (let i = 0; i < w.count; i++) {
+    const slope = slopeOf(w, i);
+    bends[i] = slope - slopeBefore;
+    // A segment of no length is a jump from the end before it to its own end.
+    jumps[i] = (w.duration[i] > 0 ? w.start[i] : w.end[i]) - w.end[before];
+    slopeBefore = slope;
+    before = i;
+  }
+}
+
+function slopeOf(w: Waveform, i: number): number {
+  return w.duration[i] > 0 ? (w.end[i] - w.start[i]) / w.duration[i] : 0;
+}
+
+/** Adds breakpoint `i` of the source, of copy `j`, whose time stands in the next free place, to the events in order of time. */
+function insert(i: number, scales: Float64Array, j: number): void {
+  let place = sum.events;
+  const t = when[place];
   while (place > 0 && when[place - 1] > t) {
     when[place] = when[place - 1];
     bend[place] = bend[place - 1];
@@ -73,22 +105,14 @@ function addEvent(w: Waveform, i: number, t: number, scale: number, events: numb
     place--;
   }
   when[place] = t;
-  bend[place] = scale * (slope - slopeBefore);
-  jump[place] = scale * step;
-  return events + 1;
+  bend[place] = scales[j] * bends[i];
+  jump[place] = scales[j] * jumps[i];
+  sum.events++;
 }
 
 /** Walks the events of one window from its start value on and writes the segments. */
-function chain(
-  source: Waveform,
-  copies: number,
-  shift: number,
-  window: number,
-  scales: Float64Array,
-  offset: number,
-  events: number,
-  into: Waveform,
-): void {
+function chain(source: Waveform, copies: number, scales: Float64Array, into: Waveform): void {
+  const { shift, window, events } = sum;
   const tiny = SAME * window;
   let first = 0;
   while (first < events && when[first] <= tiny) first++;
@@ -96,7 +120,7 @@ function chain(
   // Value and slope are taken in the middle of the first piece, away from every breakpoint, and carried back to 0.
   const probe = 0.5 * next;
   let slope = 0;
-  let value = offset;
+  let value = sum.offset;
   let segment = 0;
   let from = 0;
   for (let j = 0; j < copies; j++) {
