@@ -47,13 +47,13 @@ export async function startSlurm(base: string, nodes: number): Promise<PrivateSl
   return { env, run, stop: () => stopSlurm(base, run) };
 }
 
-/** Waits until `ready`, at most two minutes. */
+/** Waits until `ready`, at most eight minutes. */
 export async function waitFor(ready: () => boolean): Promise<void> {
-  for (let i = 0; i < 1200; i++) {
+  for (let i = 0; i < 4800; i++) {
     if (ready()) return;
     await new Promise((done) => setTimeout(done, 100));
   }
-  throw new Error('the cluster did not get there within two minutes');
+  throw new Error('the cluster did not get there within eight minutes');
 }
 
 function startMunge(env: NodeJS.ProcessEnv, base: string): void {

@@ -12,7 +12,7 @@ import { type PrivateSlurm, startSlurm, waitFor, whyNoSlurm } from './private-sl
 
 const SHEET = new URL('../../model/rails/buoy-sensors.yaml', import.meta.url).pathname;
 const BYTES = ['front.csv', 'front.json', 'near-misses.csv', 'history.csv', 'archive.bin'];
-const SIZE = ['--shards', '4', '--evaluations', '192k', '--seed', 'cluster', '--threads', '1'];
+const SIZE = ['--shards', '4', '--evaluations', '128k', '--seed', 'cluster', '--threads', '1'];
 const why = whyNoSlurm();
 const here = why === '' || lacking('slurm', why);
 
@@ -47,7 +47,7 @@ describe.runIf(here)('on a private Slurm', () => {
     }
     const { stdout } = await chopfront('status', ...[0, 1, 2, 3].map((shard) => join(out, `shard-0000${shard}`)));
     expect(stdout).toContain('4 of 4 done');
-  }, 600_000);
+  }, 1_200_000);
 });
 
 function evaluationsOf(folder: string): number {

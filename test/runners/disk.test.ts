@@ -56,9 +56,10 @@ describe.runIf(small)('on a small file system', () => {
 
   it('read-only in the middle: says so and ends with status 1', async () => {
     const folder = join(point, 'second');
-    const { ended } = startToy({ ...order, folder, evaluations: 12_000 });
+    const { ended } = startToy({ ...order, folder, evaluations: 12_000, source: { work: 80_000 } });
     await until(() => saved(folder));
-    expect(spawnSync('mount', ['-o', 'remount,ro', point]).status).toBe(0);
+    // Refused at the moment of a write.
+    await until(() => spawnSync('mount', ['-o', 'remount,ro', point]).status === 0);
     const { status, stderr } = await ended;
     expect(status).toBe(1);
     expect(stderr).toMatch(

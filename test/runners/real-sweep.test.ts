@@ -81,7 +81,8 @@ describe('a swept folder', () => {
     first.child.kill('SIGKILL');
     await first.ended;
     const second = startChopfront(['sweep', '--out', other, '--resume', '--threads', '1']);
-    await until(() => readFileSync(join(other, 'lock.json'), 'utf8').includes(`"pid":${second.child.pid}`));
+    const owns = (): boolean => readFileSync(join(other, 'lock.json'), 'utf8').includes(`"pid":${second.child.pid}`);
+    await until(() => second.child.exitCode !== null || owns());
     await new Promise((done) => setTimeout(done, 300));
     second.child.kill('SIGINT');
     const stopped = await second.ended;

@@ -11,8 +11,9 @@ import { newFolder, startToy, sweepToy, until } from './processes.ts';
 import type { Trap } from './toy.ts';
 
 const EVALUATIONS = 2400;
-// Slow enough that a sweep can be caught in the middle, the same in every sweep below.
 const source = { work: 15_000 };
+/** The same work at a pace at which a sweep is always caught in the middle, however late this test gets to look. */
+const slow = { work: 1_000_000 };
 const filesOf = (folder: string) => ({
   front: readFileSync(join(folder, 'front.csv'), 'utf8'),
   history: readFileSync(join(folder, 'history.csv'), 'utf8'),
@@ -27,10 +28,14 @@ const saved = (folder: string): boolean => {
   }
 };
 let whole: ReturnType<typeof filesOf>;
+/** How long the whole sweep takes here and now, ms. */
+let took: number;
 
 beforeAll(async () => {
   const folder = newFolder();
+  const begun = performance.now();
   expect(await sweepToy({ folder, evaluations: EVALUATIONS, threads: 2, source })).toMatchObject({ status: 0 });
+  took = performance.now() - begun;
   whole = filesOf(folder);
   expect(whole.front.split('\n').length).toBeGreaterThan(20);
 });
@@ -55,7 +60,7 @@ describe('the same seed', () => {
   ] as const)('gives the same bytes when %s stopped it (status %d) and it was resumed', async (signal, status) => {
     const folder = newFolder();
     const order = { folder, evaluations: EVALUATIONS, threads: 2, source };
-    const { child, ended } = startToy(order);
+    const { child, ended } = startToy({ ...order, source: slow });
     await until(() => saved(folder));
     child.kill(signal);
     expect((await ended).status).toBe(status);
@@ -85,7 +90,7 @@ describe('the same seed', () => {
       const folder = newFolder();
       const order = { folder, evaluations: EVALUATIONS, threads: 2, source, checkpoint: 0.01 };
       const { child, ended } = startToy(order);
-      await new Promise((done) => setTimeout(done, 20 + 700 * Math.random()));
+      await new Promise((done) => setTimeout(done, 20 + took * Math.random()));
       child.kill('SIGKILL');
       await ended;
       expect(await sweepToy({ ...order, resume: true })).toMatchObject({ status: 0 });
@@ -100,7 +105,7 @@ describe('a fault inside a worker', () => {
     async (trap) => {
       const folder = newFolder();
       const once = join(newFolder(), 'gone-off');
-      const order = { folder, evaluations: EVALUATIONS, threads: 2, epochLimit: 3, source: { ...source, trap, once } };
+      const order = { folder, evaluations: EVALUATIONS, threads: 2, epochLimit: 20, source: { ...source, trap, once } };
       expect(await sweepToy(order)).toMatchObject({ status: 0 });
       expect(readFileSync(once, 'utf8')).toBe('');
       expect(filesOf(folder)).toEqual(whole);
@@ -123,8 +128,8 @@ describe('a fault inside a worker', () => {
 describe('a damaged folder', () => {
   async function stoppedRun(): Promise<string> {
     const folder = newFolder();
-    const { child, ended } = startToy({ folder, evaluations: EVALUATIONS, threads: 2, source, checkpoint: 0.05 });
-    await until(() => saved(folder) && checkpointNames(folder).length > 1);
+    const { child, ended } = startToy({ folder, evaluations: EVALUATIONS, threads: 2, source: slow, checkpoint: 0.05 });
+    await until(() => checkpointNames(folder).length > 1);
     child.kill('SIGTERM');
     await ended;
     return folder;
@@ -153,12 +158,14 @@ describe('a damaged folder', () => {
   it('is never swept by two: the second is refused with status 4', async () => {
     const folder = newFolder();
     const order = { folder, evaluations: EVALUATIONS, threads: 1, source };
-    const first = startToy(order);
+    const first = startToy({ ...order, source: slow });
     await until(() => saved(folder));
     const second = await sweepToy({ ...order, resume: true });
     expect(second.status).toBe(4);
     expect(second.stderr).toContain(`in use by another sweep (process ${first.child.pid} on`);
-    expect(await first.ended).toMatchObject({ status: 0 });
+    first.child.kill('SIGINT');
+    expect((await first.ended).status).toBe(130);
+    expect(await sweepToy({ ...order, resume: true })).toMatchObject({ status: 0 });
     expect(filesOf(folder)).toEqual(whole);
   });
 });
