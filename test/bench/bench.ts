@@ -1,7 +1,7 @@
 /**
- * `npm run bench`: how fast the model judges designs, how well the runner uses the machine and how fast the page draws, with machine,
+ * `npm run bench`: how soon the command answers, how fast the model judges designs, how well the runner uses the machine and how fast the page draws, with machine,
  * Node version and commit beside the figures. `-- --json` prints one JSON object and nothing else; `--minutes 30` reads the memory of
- * a half-hour sweep, in the place of one minute; `--only runner` (or `model`, `page`) leaves the rest out.
+ * a half-hour sweep, in the place of one minute; `--only runner` (or `start`, `model`, `page`) leaves the rest out.
  */
 import { spawnSync } from 'node:child_process';
 import { cpus } from 'node:os';
@@ -10,6 +10,7 @@ import { packagePath } from '../../runners/package-path.ts';
 import { type ModelTiming, timeModel } from './model.ts';
 import { type PageFigure, timePage } from './page.ts';
 import { runnerLines, timeRunner } from './runner.ts';
+import { startLines, timeStart } from './start.ts';
 
 const { values } = parseArgs({
   options: {
@@ -20,12 +21,18 @@ const { values } = parseArgs({
 });
 const machine = describeMachine();
 const wanted = (part: string): boolean => values.only === undefined || values.only === part;
+const start = wanted('start') ? timeStart() : [];
 const model = wanted('model') ? await timeModel() : [];
 const runner = wanted('runner') ? await timeRunner({ minutes: Number(values.minutes) }) : undefined;
 const page = wanted('page') ? await timePage() : undefined;
-if (values.json) process.stdout.write(`${JSON.stringify({ machine, model, runner, page })}\n`);
+if (values.json) process.stdout.write(`${JSON.stringify({ machine, start, model, runner, page })}\n`);
 else {
-  const parts = [model.flatMap(modelLines), runner === undefined ? [] : runnerLines(runner), pageLines()];
+  const parts = [
+    startLines(start),
+    model.flatMap(modelLines),
+    runner === undefined ? [] : runnerLines(runner),
+    pageLines(),
+  ];
   process.stdout.write(`${[machineLine(), ...parts.flat()].join('\n')}\n`);
 }
 
