@@ -1,8 +1,6 @@
 /** The work behind `chopfront sweep`: from options and sheet to a plan, and from its end to what a person is told. */
 import { availableParallelism } from 'node:os';
-import { join } from 'node:path';
 import type { RailProblem } from '../../model/index.ts';
-import { shardFolder, shardFromEnvironment } from '../cluster/shard.ts';
 import { THREAD_LIMITS, threadsEngine } from '../engines/threads.ts';
 import { refusal, STATUS } from '../errors.ts';
 import { type Inputs, problemOf, readSheet } from '../inputs.ts';
@@ -10,18 +8,20 @@ import { packagePath } from '../package-path.ts';
 import { chooseReporter } from '../progress/choose.ts';
 import type { Reporter } from '../progress/figures.ts';
 import { tryRestarts } from '../restarts/make.ts';
-import { lookAt, prepareFolder } from '../run-folder/folder.ts';
+import { prepareFolder } from '../run-folder/folder.ts';
 import { publish } from '../run-folder/publish.ts';
-import { type RunRecord, readRecord } from '../run-folder/record.ts';
+import type { RunRecord } from '../run-folder/record.ts';
 import { hashesOf, readSnapshot, tablesOf, writeSnapshot } from '../run-folder/snapshot.ts';
 import { VERSION } from '../version.ts';
 import type { Budget } from './budget.ts';
 import { DEFAULT_BUDGET } from './budget.ts';
 import { describeValues } from './describe.ts';
 import { reportEnd } from './ending.ts';
+import type { RunIdentity } from './moment.ts';
 import type { SweepOptions } from './options.ts';
+import { knownRun, type Place, placeOf } from './place.ts';
 import { createRefresher } from './refresher.ts';
-import { type RunIdentity, type RunPlan, runSweep } from './run.ts';
+import { type RunPlan, runSweep } from './run.ts';
 import { listenForStop, SIGNALS } from './stop.ts';
 import { refuseChanges } from './unchanged.ts';
 
@@ -43,37 +43,6 @@ export async function sweepCommand(sheet: string | undefined, options: SweepOpti
 
 /** Saved every quarter of a minute, less often where that would take more than a two-hundredth of the time. */
 const CHECKPOINTS: RunPlan['checkpoints'] = { seconds: 15, share: 0.005 };
-
-/** Where a sweep goes and which shard it is. */
-interface Place {
-  readonly folder: string;
-  readonly shards: number | undefined;
-  readonly shard: number | undefined;
-  /** Whether a scheduler runs this, so that it starts, goes on or ends at once by itself. */
-  readonly task: boolean;
-  readonly resume: boolean;
-}
-
-function placeOf(options: SweepOptions): Place {
-  const { out, shard, shards } = options;
-  if (shard !== 'auto') {
-    const count = shard?.shards ?? shards;
-    if (shard !== undefined && shards !== undefined && shards !== shard.shards) {
-      throw refusal('shards-differ', { shard: `${shard.shard}/${shard.shards}`, shards });
-    }
-    return { folder: out, shards: count, shard: shard?.shard, task: false, resume: options.resume === true };
-  }
-  const found = shardFromEnvironment(process.env, options.indexFrom);
-  if (found === undefined) throw refusal('no-index');
-  if (shards === undefined) throw refusal('usage', { text: '--shard auto needs --shards', command: 'sweep ' });
-  if (found < 0 || found >= shards) throw refusal('shard-range', { shard: found, shards, last: shards - 1 });
-  return { folder: join(out, shardFolder(found)), shards, shard: found, task: true, resume: true };
-}
-
-function knownRun(where: Place): RunRecord | undefined {
-  if (!where.resume) return undefined;
-  return lookAt(where.folder) === 'run' ? readRecord(where.folder) : undefined;
-}
 
 function inputsFor(where: Place, sheet: string | undefined, known: RunRecord | undefined): Inputs {
   if (sheet !== undefined) return readSheet(sheet);

@@ -11,22 +11,15 @@ import { sweepLeftovers } from '../run-folder/files.ts';
 import type { Found } from '../run-folder/found.ts';
 import { takeLock } from '../run-folder/lock.ts';
 import { type Fault, type RunRecord, writeRecord } from '../run-folder/record.ts';
-import { listSources } from '../run-folder/sources.ts';
 import type { Budget } from './budget.ts';
 import { createMeter } from './meter.ts';
-import { packedIslands, resumeFrom, ringState } from './resume.ts';
-import { createRing, islandsOf, type Ring, sumTallies, tallyOf } from './ring.ts';
-import { createSaver, type Moment, maySaveLater, type Saver } from './saving.ts';
-import { createSearch, planRing, type Search, type SearchSettings, type Survey } from './search.ts';
-import { meanShare } from './shares.ts';
+import { momentOf, type RunIdentity } from './moment.ts';
+import { resumeFrom } from './resume.ts';
+import { createRing, islandsOf, type Ring } from './ring.ts';
+import { createSaver, maySaveLater, type Saver } from './saving.ts';
+import { createSearch, planRing, type Search, type SearchSettings } from './search.ts';
 import type { StopRequest } from './stop.ts';
 import { type CheckpointRule, type Ending, startSweep } from './sweep.ts';
-
-/** What is fixed about a run from its start, as `run.json` says it. */
-export type RunIdentity = Pick<
-  RunRecord,
-  'version' | 'rail' | 'railHash' | 'partsHash' | 'seed' | 'shards' | 'shard' | 'tables'
->;
 
 /** A sweep to run. */
 export interface RunPlan {
@@ -97,7 +90,7 @@ function begin(plan: RunPlan, search: Search): Begun {
   const all = shard === undefined ? Array.from({ length: shards }, (_, i) => i) : [shard];
   const rings = all.map((one) => startRing(plan, search, one));
   const begun = { rings, seconds: 0, saving: 0, started: new Date().toISOString(), number: 0, warnings: [] };
-  writeRecord(plan.folder, momentOf(plan, search, begun, 'running', 0).record);
+  writeRecord(plan.folder, momentOf(search, { ...plan, ...begun }, 'running', 0).record);
   plan.snapshot();
   return begun;
 }
@@ -118,7 +111,7 @@ async function carryOut(plan: RunPlan, search: Search, begun: Begun, saver: Save
   const save = (reason: 'interval' | 'end'): void => {
     const before = performance.now();
     const status = reason === 'interval' ? 'running' : rings.every((ring) => ring.done) ? 'done' : 'stopped';
-    saver.save(momentOf(plan, search, begun, status, seconds()));
+    saver.save(momentOf(search, { ...plan, ...begun }, status, seconds()));
     begun.saving += (performance.now() - before) / 1000;
   };
   const { budget, reporter, describeBest, problem, checkpoints } = plan;
@@ -154,7 +147,7 @@ async function carryOut(plan: RunPlan, search: Search, begun: Begun, saver: Save
 
 async function conclude(plan: RunPlan, search: Search, begun: Begun, ending: Ending, seconds: number): Promise<RunEnd> {
   const islands = begun.rings.flatMap(islandsOf);
-  const { found, record } = momentOf(plan, search, begun, ending, seconds);
+  const { found, record } = momentOf(search, { ...plan, ...begun }, ending, seconds);
   await plan.publish(found, ending);
   return { ending, found, record, best: search.measure(islands).best, atHand: search.atHand(islands) };
 }
@@ -168,67 +161,6 @@ function trySave(plan: RunPlan, save: (reason: 'interval' | 'end') => void, reas
     return;
   }
   if (reason === 'interval') plan.refresh();
-}
-
-function momentOf(plan: RunPlan, search: Search, begun: Begun, status: RunRecord['status'], seconds: number): Moment {
-  const { rings } = begun;
-  const { railHash, partsHash, seed, shards } = plan.identity;
-  const survey = search.survey(rings.flatMap(islandsOf));
-  const { archive, nearMisses, sample } = survey;
-  const sources = rings.map((ring) => {
-    const { shard, epoch, history } = ring;
-    return { seed, shards, shard, epoch, ...tallyOf(ring), history: history.rows, ...search.went(islandsOf(ring)) };
-  });
-  return {
-    rings: rings.map(ringState),
-    islands: packedIslands(rings),
-    found: { railHash, partsHash, sources: listSources(sources), archive, nearMisses, sample },
-    record: recordOf(plan, begun, survey, status, seconds),
-    saving: begun.saving,
-  };
-}
-
-function recordOf(
-  plan: RunPlan,
-  begun: Begun,
-  survey: Survey,
-  status: RunRecord['status'],
-  seconds: number,
-): RunRecord {
-  const { rings, started } = begun;
-  const { evaluations, feasible } = sumTallies(rings);
-  const { archive, nearMisses, trust } = survey;
-  const { frontSize, hypervolume } = survey.measure;
-  return {
-    format: 'chopfront-run',
-    status,
-    ...plan.identity,
-    node: process.version,
-    threads: plan.threads,
-    islands: rings.reduce((sum, ring) => sum + ring.slots.length, 0),
-    budget: plan.budget,
-    evaluations,
-    epochs: rings.reduce((sum, ring) => sum + ring.epoch, 0),
-    seconds,
-    perSecond: seconds > 0 ? evaluations / seconds : 0,
-    feasible,
-    feasibleShare: evaluations > 0 ? feasible / evaluations : 0,
-    frontSize,
-    archiveSize: archive.count,
-    nearMisses: nearMisses.count,
-    hypervolume,
-    share: meanShare(plan.budget, plan.identity.shards, rings, seconds),
-    trust: { ...trust, timeSplit: { ...timeSplitOf(rings), saving: begun.saving } },
-    faults: rings.flatMap((ring) => ring.faults),
-    started,
-    updated: new Date().toISOString(),
-  };
-}
-
-/** Seconds of all threads together, by what they were spent on; saving is done beside them. */
-function timeSplitOf(rings: readonly Ring[]): Record<string, number> {
-  const names = ['model', 'variation', 'ranking', 'archive', 'transfer'] as const;
-  return Object.fromEntries(names.map((name) => [name, rings.reduce((sum, ring) => sum + ring.spent[name], 0)]));
 }
 
 function faultLine(fault: Fault): string {

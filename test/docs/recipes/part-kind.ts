@@ -82,6 +82,11 @@ FU-10,10,6.1,2.7,2.6,60,0.4,0.2
       after: '  const catalogue: Catalogue = {\n',
       text: '    fuses: sortBy(usable(rail, tables.fuses), (row) => priceAt(row, rail.quantity)),\n',
     },
+    {
+      path: 'model/catalogue.ts',
+      after: '    powerStages: alike(tables.powerStages),\n',
+      text: '    fuses: alike(tables.fuses),\n',
+    },
     { path: 'model/genes.ts', before: '] as const;\nexport type GeneName', text: "  'fuse',\n" },
     { path: 'model/genes.ts', after: 'const NAMED_GENES: readonly GeneName[] = [\n', text: "  'fuse',\n" },
     {
