@@ -4,6 +4,7 @@ export default defineConfig({
   test: {
     root: new URL('..', import.meta.url).pathname,
     include: ['test/**/*.test.ts'],
+    globalSetup: ['test/support/temporary.ts'],
     setupFiles: ['test/support/seeded.ts'],
     // One more than the default on two cores, so that one long file does not hold up all others.
     maxWorkers: 2,
