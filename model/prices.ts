@@ -194,7 +194,8 @@ export function isTelling(gain: number): boolean {
 export function howPriced(relaxations: Relaxations | undefined): string {
   if (relaxations === undefined) return 'Told from the near misses of the sweep alone.';
   const { steps, limits, evaluations } = relaxations;
-  const shares = steps.map((step) => `${Number((100 * step).toPrecision(3))} %`).join(', ');
-  const count = limits.length === 1 ? '1 limit was' : `${limits.length} limits were each`;
-  return `After the sweep ${count} relaxed by ${shares} of what it allows, and the search went on from the front for ${evaluations} evaluations each time; what as long a search gains with nothing relaxed does not count.`;
+  const shares = steps.map((step) => Number((100 * step).toPrecision(3)));
+  const by = `${[shares.slice(0, -1).join(', '), ...shares.slice(-1)].filter((part) => part !== '').join(' and ')} %`;
+  const each = limits.length === 1 ? '1 limit was relaxed' : `${limits.length} limits were relaxed, one at a time,`;
+  return `After the sweep ${each} by ${by} of what is allowed, and the search went on from the front for ${evaluations} evaluations each time; what as long a search gains with nothing relaxed does not count.`;
 }

@@ -75,7 +75,7 @@ describe('requirement prices', () => {
     expect(requirementPrices(front, misses)).toHaveLength(1);
     expect(requirementPrices(front, misses, made)).toEqual([]);
     expect(freeLimits(requirementPrices(front, misses), made)).toEqual(['loadStep']);
-    expect(howPriced(made)).toContain('2 limits were each relaxed by 10 %');
+    expect(howPriced(made)).toContain('2 limits were relaxed, one at a time, by 10 % of what is allowed');
     expect(howPriced(made)).toContain('1000 evaluations');
   });
 

@@ -137,8 +137,8 @@ describe('what a limit costs', () => {
 
   test('it says how limits were relaxed, and which gained nothing', () => {
     const words = shownFor([1.5, 1e-6]).selectAll('.hint').text();
-    expect(words).toContain('2 limits were each relaxed by 2.5\u00a0%, 10\u00a0%');
-    expect(words).toContain('3000\u00a0evaluations each time');
+    expect(words).toContain('2 limits were relaxed, one at a time, by 2.5\u00a0and 10\u00a0% of what is allowed');
+    expect(words).toContain('3000 evaluations each time');
     expect(words).toContain('Relaxed without any gain: height.');
   });
 

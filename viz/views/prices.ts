@@ -73,16 +73,18 @@ function priceTable<E extends Element>(
     region(root, 'What each limit costs'),
     'ledger prices',
     'Limits, how far each is relaxed, how the best of each objective changes, and the design that gains most at no more of the others',
-    ['If this limit', 'moved', ...names, 'at no more of the others'],
+    ['If this limit', 'moved', ...names, 'One gains most, the others no worse'],
   );
   const body = table.append('tbody');
-  for (const price of prices) {
+  for (const [i, price] of prices.entries()) {
     const row = body.append('tr');
-    row
-      .append('th')
-      .attr('scope', 'row')
-      .text(capital(spokenLimit(price.limit)));
-    row.append('td').text(relaxationWords(price));
+    if (price.limit !== prices[i - 1]?.limit) {
+      const lines = prices.filter(({ limit }) => limit === price.limit).length;
+      const name = row.append('th').attr('scope', 'row');
+      if (lines > 1) name.attr('rowspan', lines);
+      name.text(capital(spokenLimit(price.limit)));
+    }
+    row.append('td').attr('class', 'moved').text(relaxationWords(price));
     for (const gain of price.gains) gainCell(row, bestGainOf(gain), gain.best, gain.relaxed, gain.unit);
     topCell(row, price);
   }
@@ -111,11 +113,12 @@ function topCell(row: Root<HTMLTableRowElement>, { gains, design }: RequirementP
   opener(cell, design);
 }
 
-/** `20 mV → 21.8 mV (+9.0 %)`, a temperature by kelvin; a limit that allows nothing at all is told by how far it is broken. */
+/** `20 mV → 21.8 mV (+9.0 %)`, a temperature by kelvin, an efficiency by points; a limit that allows nothing by how far it is broken. */
 function relaxationWords({ limit, unit, allowed, relaxedTo }: RequirementPrice): string {
   const one = { name: limit, unit };
   if (allowed === 0) return `by ${unit === '' ? percent(Math.abs(relaxedTo)) : written(one, Math.abs(relaxedTo))}`;
   const share = relaxedTo / allowed - 1;
+  if (limit.startsWith('efficiency')) return `${written(one, allowed)} → ${written(one, relaxedTo)}`;
   const by = unit === 'K' ? showDifference(relaxedTo - allowed, unit) : `${share < 0 ? '' : '+'}${percent(share)}`;
   return `${written(one, allowed)} → ${written(one, relaxedTo)} (${by})`;
 }

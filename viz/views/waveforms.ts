@@ -1,4 +1,4 @@
-/** Currents and ripple over one switching period at one operating point, currents above voltages on the same time axis. */
+/** Currents and ripple over one switching period at one operating point, currents above ripples on the same time axis. */
 import { line, scaleLinear } from 'd3';
 import type { PointReport, Trace } from '../../model/assessment.ts';
 import { spoken, titled } from '../labels.ts';
@@ -7,25 +7,20 @@ import { numbersTable } from '../marks/numbers.ts';
 import { clear, px, type Root } from '../marks/root.ts';
 import { axisUnit, loadWords, percent, show } from '../units.ts';
 
-export const waveformsDefaults = { width: 560, left: 50, right: 14, top: 44, bottom: 26, panel: 104, foot: 18 };
+export const waveformsDefaults = { width: 560, left: 50, right: 14, top: 44, bottom: 26, panel: 88, foot: 18 };
 
 export function renderWaveforms<E extends Element>(root: Root<E>, point: PointReport, o = waveformsDefaults): void {
-  const units = [...new Set(point.traces.map((trace) => trace.unit))];
-  const height = Math.max(1, units.length) * (o.panel + o.top) + o.bottom + o.foot;
+  const groups = panelsOf(point.traces);
+  const height = Math.max(1, groups.length) * (o.panel + o.top) + o.bottom + o.foot;
   const svg = canvasOf(clear(root), { ...o, height }, `Waveforms over one period at ${operatingPoint(point)}`);
   const period = Math.max(...point.traces.map((trace) => trace.period), 1e-12);
   const x = scaleLinear()
     .domain([0, period])
     .range([o.left, o.width - o.right]);
-  units.forEach((unit, row) => {
+  groups.forEach((traces, row) => {
     const top = row * (o.panel + o.top) + o.top;
-    panel(
-      svg,
-      point.traces.filter((trace) => trace.unit === unit),
-      unit,
-      x,
-      { width: o.width, height: top + o.panel, left: o.left, right: o.right, top, bottom: 0 },
-    );
+    const frame = { width: o.width, height: top + o.panel, left: o.left, right: o.right, top, bottom: 0 };
+    panel(svg, traces, traces[0]?.unit ?? '', x, frame);
   });
   bottomAxis(
     svg,
@@ -34,6 +29,13 @@ export function renderWaveforms<E extends Element>(root: Root<E>, point: PointRe
     { title: 'Time', unit: axisUnit('s', period), ticks: 6 },
   );
   numbers(root, point);
+}
+
+/** Currents share one panel; each ripple has its own, for one may be a hundredth of another. */
+function panelsOf(traces: readonly Trace[]): readonly (readonly Trace[])[] {
+  const currents = traces.filter(({ unit }) => unit === 'A');
+  const others = traces.filter(({ unit }) => unit !== 'A').map((trace) => [trace]);
+  return currents.length > 0 ? [currents, ...others] : others;
 }
 
 /** `12.8 V in, 50 % load, continuous`; `24 V in, 50 % load in reverse, reverse`. */
