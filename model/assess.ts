@@ -11,7 +11,7 @@ import { HOT } from './heat-balance.ts';
 import { LOSS_SLOTS } from './ledger.ts';
 import { listParts, PartsList } from './parts-list.ts';
 import type { PlannedPoint } from './plan.ts';
-import type { PointSolver } from './point.ts';
+import type { PointSolver } from './point-solver.ts';
 import type { RailProblem } from './problem.ts';
 import type { Rail } from './rail/rail.ts';
 import { MODES } from './stages/state.ts';

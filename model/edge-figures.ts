@@ -38,7 +38,8 @@ export class EdgeFigures {
   gateSpared = 0.5;
   /** Drop of the body diode, V. */
   bodyDrop = 0.5;
-  /** 1/p of the row's charge law Q ∝ V^p, from its stored energy: see `chargeExponent`. */
+  /** p of the row's charge law Q ∝ V^p, from its stored energy (see `chargeExponent`), and 1/p. */
+  exponent = 0.5;
   inverseExponent = 1.5;
 
   /** Bus voltage that the three below hold for, V: see `lookUpBus`. */
@@ -72,6 +73,7 @@ export function prepareEdges(figures: EdgeFigures, row: Switch, dice: number, dr
   figures.gateCharge = dice * gateChargeAt(whole, row.driveVoltage, driver.driveVoltage);
   figures.gateSpared = dice * gateChargeAt(row.gateDrainCharge, row.driveVoltage, driver.driveVoltage);
   const share = row.outputEnergy / (row.outputCharge * row.outputTestVoltage);
+  figures.exponent = share > 0 ? share / (1 - share) : 1;
   figures.inverseExponent = share > 0 ? (1 - share) / share : 1;
 }
 

@@ -13,8 +13,8 @@ import {
   hardEdgeEnergy,
   loopEnergy,
   overlapEnergy,
-  partialEdgeInPlaceAt,
   swingFraction,
+  swungSharesAt,
   transitionTime,
 } from './switches/index.ts';
 
@@ -38,7 +38,7 @@ const DRIVE_SUPPLY = SLOT['controller.driveSupply'];
  * itself, 0 … 1. `drawn` sums the gate charges a second, A.
  */
 const edge = { current: 0.5, against: 0.5, swing: 0.5, drawn: 0.5 };
-const shares = new Float64Array(2);
+const shares = new Float64Array(3);
 
 /** Adds the switching losses of all active phases at `state` to `ledger`, W. */
 export function addEdgeLosses(design: Design, state: StageState, ledger: Float64Array): void {
@@ -130,13 +130,12 @@ function addSoftEdge(
 
 /** What the switch `own` burns, J, as it turns on after the node has come only part of the way. */
 function restOfSwing(own: EdgeFigures, partner: EdgeFigures, volts: number): number {
-  if (!(edge.swing > 0) || own.row === undefined || partner.row === undefined) {
-    return hardEdgeEnergy(partner.charge, partner.energy, own.energy, volts);
-  }
-  shares[0] = volts;
-  shares[1] = edge.swing;
-  partialEdgeInPlaceAt(partner.row, own.row, shares);
-  return partner.dice * shares[0] + own.dice * shares[1];
+  if (!(edge.swing > 0)) return hardEdgeEnergy(partner.charge, partner.energy, own.energy, volts);
+  shares[0] = edge.swing;
+  shares[1] = partner.exponent;
+  shares[2] = own.exponent;
+  swungSharesAt(shares);
+  return partner.charge * volts * (1 - shares[0]) - partner.energy * (1 - shares[1]) + own.energy * shares[2];
 }
 
 /** A linear drive supply burns the rest of the input in the driver. */

@@ -6,7 +6,7 @@ import { Assembly, assemble } from './assembly.ts';
 import type { Catalogue } from './catalogue.ts';
 import { filterImpedanceLimit } from './control/index.ts';
 import { Design, resolveDesign } from './design.ts';
-import { Flavour, prepareFlavour } from './flavour.ts';
+import { Flavour, prepareFlavour, prepareResistances } from './flavour.ts';
 import { boardConductance, sinkCost, sinkMass, sinkVolume } from './heat/index.ts';
 import { HeatBalance } from './heat-balance.ts';
 import {
@@ -24,9 +24,12 @@ import { limitsOf } from './limits/list.ts';
 import { type LimitPlaces, limitPlaces } from './limits/places.ts';
 import { judgeHeat, judgePoint, judgeRipple } from './limits/point.ts';
 import { type PlannedPoint, type PointPlan, planPoints } from './plan.ts';
-import { PointSolver, settleHeat, settleLosses, solvePoint, solveRipple } from './point.ts';
+import { settleHeat, solvePoint, solveRipple } from './point.ts';
+import { settleLosses } from './point-heat.ts';
+import { PointSolver } from './point-solver.ts';
 import type { Rail } from './rail/rail.ts';
 import type { Stage } from './stages/contract.ts';
+import { StepCase } from './step-response.ts';
 
 /** Sees each solved point: `index` counts usual points first, then worst points. */
 export type PointListener = (solver: PointSolver, planned: PlannedPoint, index: number) => void;
@@ -47,6 +50,8 @@ export class Evaluator {
   /** Heat of the usual points in turn, and of each worst point: those are balanced again once the heat sink is known. */
   readonly usualHeat = new HeatBalance();
   readonly worstHeat: readonly HeatBalance[];
+  /** The load step at the point at hand. */
+  readonly step = new StepCase();
   /** Conductance of the bare board, W/K. */
   readonly bareBoard: number;
   /** W by slot, profile-weighted. */
@@ -101,8 +106,11 @@ function prepare(e: Evaluator, genes: Float64Array): void {
   prepareFlavour(e.usual, design, e.rail);
   prepareFlavour(e.worst, design, e.rail);
   e.adjust?.(e);
+  prepareResistances(e.usual, design);
+  prepareResistances(e.worst, design);
   assemble(e.assembly, design, e.rail.quantity);
   e.book.clear();
+  e.step.forget();
 }
 
 /** Judges the worst points: currents and ripple as each is solved, heat once the sink that they ask for is whole. */
@@ -190,14 +198,14 @@ function addFilter(e: Evaluator): void {
   const missing = e.filterNeed - rail.input.sourceInductance;
   if (missing > 0) {
     design.filterChoke = chooseFilterChoke(e.catalogue.filterChokes, missing, e.filterCurrent);
-    book.judge(places.filterChoke, design.filterChoke === undefined ? 0 : 1, 1, 1, -1);
+    book.judge(places.filterChoke, design.filterChoke === undefined ? 0 : 1, 1, -1);
     assemble(e.assembly, design, rail.quantity);
   }
   const inductance = sourceInductance(design, rail);
   if (!(inductance > 0)) return;
   const peak = peakSourceImpedance(sourceResistance(design, rail), inductance, e.worst.input);
   const allowed = filterImpedanceLimit(rail.input.minimum, rail.input.minimum * e.filterCurrent);
-  book.judge(places.filterDamping, peak, allowed, allowed, -1);
+  book.judge(places.filterDamping, peak, allowed, -1);
 }
 
 /** Sums the profile at nominal input with usual values. */
@@ -227,14 +235,14 @@ function judgeUsual(e: Evaluator, planned: PlannedPoint, inflow: number, index: 
   const { rail, places, book, solver } = e;
   if (planned.load === 0) {
     const allowed = rail.limits.noLoadPower;
-    if (allowed !== undefined) book.judge(places.noLoadPower, solver.loss, allowed, allowed, index);
+    if (allowed !== undefined) book.judge(places.noLoadPower, solver.loss, allowed, index);
     return;
   }
   const limits = rail.limits.efficiency;
   for (let k = 0; k < limits.length; k++) {
     if (limits[k].load !== planned.load) continue;
     const efficiency = 1 - solver.loss / inflow;
-    book.judge(places.efficiency[k], efficiency, limits[k].atLeast, 1 - limits[k].atLeast, index);
+    book.judgeBy(places.efficiency[k], efficiency, limits[k].atLeast, 1 - limits[k].atLeast, index);
   }
 }
 

@@ -14,6 +14,7 @@ import type { Design } from './design.ts';
 import type { Bulk } from './parts/bulk.ts';
 import type { Ceramic } from './parts/ceramic.ts';
 import type { Rail } from './rail/rail.ts';
+import { onResistance, RESISTANCE_REFERENCE } from './switches/index.ts';
 
 /** Hours of service after which ceramic ageing is judged: about ten years. */
 const AGED_HOURS = 1e5;
@@ -26,6 +27,9 @@ export class Flavour {
   inductance = 0.5;
   /** Factor on on-resistances. */
   resistanceScale = 1.5;
+  /** On-resistance of the high position and of a switch in the low one at the reference temperature of rows, tolerance included, Ω. */
+  highResistance = 0.5;
+  lowResistance = 0.5;
   readonly output: Bank = createBank();
   readonly input: Bank = createBank();
   /** Ripple of each phase over that of the phase with the lowest inductance; all 1 in the usual flavour. */
@@ -62,6 +66,17 @@ export function prepareFlavour(flavour: Flavour, design: Design, rail: Rail): vo
     design.inputBulk,
     design.inputBulkCount,
   );
+}
+
+/** Fills in the resistances of `design` under the flavour's factor. */
+export function prepareResistances(flavour: Flavour, design: Design): void {
+  const { high, low } = design;
+  const scale = flavour.resistanceScale;
+  const at = RESISTANCE_REFERENCE;
+  flavour.highResistance =
+    scale * onResistance(high.onResistance, high.resistanceTempco, high.dynamicFactor, at, design.highParallel);
+  flavour.lowResistance =
+    scale * onResistance(low.onResistance, low.resistanceTempco, low.dynamicFactor, at, design.lowParallel);
 }
 
 /**

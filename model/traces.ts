@@ -2,7 +2,7 @@
 import type { Trace } from './assessment.ts';
 import { type Bank, bankTrace } from './capacitors/index.ts';
 import type { Flavour } from './flavour.ts';
-import type { PointSolver } from './point.ts';
+import type { PointSolver } from './point-solver.ts';
 import type { Waveform } from './waveform/index.ts';
 
 /** Times inside a segment at which a ripple voltage is drawn. */

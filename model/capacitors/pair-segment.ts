@@ -9,27 +9,49 @@ const FEWEST_OF_MANY = 4;
 /** Most steps of a segment, and the angle of ringing that one may turn through (of a decay, one time constant). */
 const MOST = 32;
 const TURN = 0.7;
+/** Lengths that differ by less than this share are one. */
+const SAME = 1e-12;
 
 const scratch = new Float64Array(2);
 
 /**
  * Works out what segment `i` keeps: its matrices, forced solution and current.
- * @derivation the network of `pair`: e^(A·h) with A − α·1 = [[−α, −g], [1/L, α]], ringing or, with more damping, two decays
- * @valid a segment that lasts
+ * @derivation the network of `pair`
+ * @valid a segment that lasts; those before it have been prepared
  */
 export function prepareSegment(current: Waveform, i: number): void {
+  const twin = twinOf(current, i);
+  if (twin < 0) prepareSteps(current, i);
+  else copyMatrices(twin, i);
+  force(current, i);
+}
+
+/** An earlier segment of the same length, as copies of one waveform bring again and again; −1 where there is none. */
+function twinOf(current: Waveform, i: number): number {
   const d = current.duration[i];
-  const { alpha, g, l } = pair;
-  const bend = alpha * alpha - g / l;
-  const omega = bend < 0 ? Math.sqrt(-bend) : 0;
+  for (let j = 0; j < i; j++) if (Math.abs(current.duration[j] - d) <= SAME * d) return j;
+  return -1;
+}
+
+function copyMatrices(from: number, to: number): void {
+  counts[to] = counts[from];
+  const a = KEPT * from;
+  const b = KEPT * to;
+  for (let k = STEP; k < FORCED; k++) kept[b + k] = kept[a + k];
+}
+
+/** Matrix of one step, e^(A·h) with A − α·1 = [[−α, −g], [1/L, α]], ringing or, with more damping, two decays; and of all steps. */
+function prepareSteps(current: Waveform, i: number): void {
+  const d = current.duration[i];
+  const { alpha, omega, g, l, rings } = pair;
   let n = current.count > 3 ? FEWEST_OF_MANY : FEWEST;
-  const fastest = Math.max(omega / TURN, -alpha);
+  const fastest = Math.max(rings ? omega / TURN : 0, -alpha);
   while (n < MOST && fastest * d > n) n *= 2;
   counts[i] = n;
   const h = d / n;
   let even = 0;
   let odd = 0;
-  if (bend < 0) {
+  if (rings) {
     scratch[0] = alpha * h;
     expAt(scratch, 0);
     const e = scratch[0];
@@ -38,14 +60,13 @@ export function prepareSegment(current: Waveform, i: number): void {
     odd = (e * scratch[0]) / omega;
     even = e * scratch[1];
   } else {
-    const beta = Math.sqrt(bend);
-    // α + β by its twin, for the sum itself would cancel.
-    scratch[0] = (g / l / (alpha - beta)) * h;
-    scratch[1] = (alpha - beta) * h;
+    // α + ω by its twin, for the sum itself would cancel.
+    scratch[0] = (g / l / (alpha - omega)) * h;
+    scratch[1] = (alpha - omega) * h;
     expAt(scratch, 0);
     expAt(scratch, 1);
     even = 0.5 * (scratch[0] + scratch[1]);
-    odd = beta * h > 1e-9 ? (scratch[0] - scratch[1]) / (2 * beta) : h * scratch[0];
+    odd = omega * h > 1e-9 ? (scratch[0] - scratch[1]) / (2 * omega) : h * scratch[0];
   }
   const at = KEPT * i;
   kept[at + STEP] = even - alpha * odd;
@@ -53,7 +74,6 @@ export function prepareSegment(current: Waveform, i: number): void {
   kept[at + STEP + 2] = odd / l;
   kept[at + STEP + 3] = even + alpha * odd;
   multiplySteps(at, n);
-  force(current, i, d);
 }
 
 /** The matrix of the whole segment: its steps are a power of two, so theirs is squared. */
@@ -77,13 +97,14 @@ function multiplySteps(at: number, steps: number): void {
 }
 
 /** The solution that the state of segment `i` rings about, w0 + w1·t and y0 + y1·t, and the current a + s·t that forces it. */
-function force(current: Waveform, i: number, d: number): void {
-  const { g, r, r1, l, l1, c1, average } = pair;
+function force(current: Waveform, i: number): void {
+  const { perG, bulkShare, r, r1, l, l1, average } = pair;
   const a = current.start[i] - average;
-  const s = (current.end[i] - current.start[i]) / d;
-  const y1 = s / (g * c1);
+  const s = (current.end[i] - current.start[i]) / current.duration[i];
+  // 1/(g·C1) is the bulk's share of all capacitance.
+  const y1 = s * bulkShare;
   const w1 = r * y1 - r1 * s;
-  const y0 = (a / c1 - w1) / g;
+  const y0 = a * bulkShare - w1 * perG;
   const at = KEPT * i;
   kept[at + FORCED] = l * y1 - r1 * a - l1 * s + r * y0;
   kept[at + FORCED + 1] = w1;
@@ -102,7 +123,7 @@ export function crossSegment(current: Waveform, i: number): void {
   const at = KEPT * i;
   const d = current.duration[i];
   const z = pair.w - kept[at + FORCED];
-  const u = pair.y + ((current.start[i] - pair.before) * pair.l1) / pair.l - kept[at + FORCED + 2];
+  const u = pair.y + (current.start[i] - pair.before) * pair.jump - kept[at + FORCED + 2];
   const zEnd = kept[at + WHOLE] * z + kept[at + WHOLE + 1] * u;
   const uEnd = kept[at + WHOLE + 2] * z + kept[at + WHOLE + 3] * u;
   pair.d = d;

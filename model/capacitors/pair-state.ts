@@ -7,7 +7,7 @@ import type { Bank } from './bank.ts';
 
 /** Most segments of a current. */
 const SEGMENTS = 256;
-/** Doubles that one segment keeps, and their places: step matrix, its square-up to the whole segment, forced solution, current. */
+/** Doubles that one segment keeps, and their places: step matrix, the matrix of the whole segment, forced solution, current. */
 export const KEPT = 16;
 export const STEP = 0;
 export const WHOLE = 4;
@@ -24,16 +24,22 @@ export const counts = new Int32Array(SEGMENTS);
  * R = R1 + R2 and L = L1 + L2. In a segment i = a + s·t the state rings about a forced solution w0 + w1·t, y0 + y1·t.
  */
 export const pair = {
-  c1: 0.5,
   c2: 0.5,
   r1: 0.5,
   l1: 0.5,
   r: 0.5,
   l: 0.5,
-  // g = 1/C1 + 1/C2; 1/(C1 + C2); half of the damping α = −R/(2·L).
+  // Share of the bulk's branch in a jump of the current, L1/L; g = 1/C1 + 1/C2, 1/g, 1/(C1 + C2), and C2/(C1 + C2).
+  jump: 0.5,
   g: 0.5,
+  perG: 0.5,
   perTotal: 0.5,
+  bulkShare: 0.5,
+  // Half of the damping α = −R/(2·L); √|α² − g/L|, an angular frequency where the pair rings and a rate where it does not; 1/R.
   alpha: 0.5,
+  omega: 0.5,
+  rings: false,
+  perR: 0.5,
   average: 0.5,
   // The state, and the charge that has flowed.
   w: 0.5,
@@ -59,15 +65,21 @@ export const pair = {
  * @valid a pair
  */
 export function setPair(bank: Bank): void {
-  pair.c1 = bank.c1;
   pair.c2 = bank.c2;
   pair.r1 = bank.r1;
   pair.l1 = bank.l1;
   pair.r = bank.r1 + bank.r2;
   pair.l = bank.l1 + bank.l2;
+  pair.jump = pair.l1 / pair.l;
   pair.g = 1 / bank.c1 + 1 / bank.c2;
+  pair.perG = 1 / pair.g;
   pair.perTotal = 1 / (bank.c1 + bank.c2);
+  pair.bulkShare = bank.c2 * pair.perTotal;
+  pair.perR = 1 / pair.r;
   pair.alpha = (-0.5 * pair.r) / pair.l;
+  const bend = pair.alpha * pair.alpha - pair.g / pair.l;
+  pair.rings = bend < 0;
+  pair.omega = Math.sqrt(Math.abs(bend));
 }
 
 /** Takes the mean of `current` as the level that it is seen from. */

@@ -9,12 +9,12 @@ import { CURRENT, counts, FORCED, KEPT, kept, pair, STEP } from './pair-state.ts
  */
 export function addSquares(i: number): void {
   const at = KEPT * i;
-  const { d, z, u, zEnd, uEnd, g, r, l } = pair;
+  const { d, z, u, zEnd, uEnd, perG, perR, r, l } = pair;
   const y0 = kept[at + FORCED + 2];
   const y1 = kept[at + FORCED + 3];
-  const whole = (z - zEnd) / g;
-  const weighted = (l * (uEnd - u) + r * whole - d * zEnd) / g;
-  const square = ((z * z - zEnd * zEnd) / g + l * (u * u - uEnd * uEnd)) / (2 * r);
+  const whole = (z - zEnd) * perG;
+  const weighted = (l * (uEnd - u) + r * whole - d * zEnd) * perG;
+  const square = 0.5 * perR * ((z * z - zEnd * zEnd) * perG + l * (u * u - uEnd * uEnd));
   const end = y0 + y1 * d;
   pair.square2 += square + 2 * (y0 * whole + y1 * weighted) + (d * (y0 * y0 + y0 * end + end * end)) / 3;
   const p0 = kept[at + CURRENT] - y0;
@@ -33,7 +33,7 @@ export function addSquares(i: number): void {
 export function addExtremes(i: number): void {
   const at = KEPT * i;
   const n = counts[i];
-  const { d, z, u, c2, r, r1, l, l1, perTotal } = pair;
+  const { d, z, u, bulkShare, r, r1, l1, perTotal, jump: share } = pair;
   const a = kept[at + CURRENT];
   const s = kept[at + CURRENT + 1];
   const w0 = kept[at + FORCED];
@@ -45,12 +45,11 @@ export function addExtremes(i: number): void {
   const m10 = kept[at + STEP + 2];
   const m11 = kept[at + STEP + 3];
   const h = d / n;
-  const share = l1 / l;
   // Voltage at time t: p0 + p1·t + p2·t² + cz·z + cu·u.
-  const p0 = (pair.q + c2 * w0) * perTotal + r1 * (a - y0) + l1 * s - share * (w0 + r1 * a + l1 * s - r * y0);
-  const p1 = (a + c2 * w1) * perTotal + r1 * (s - y1) - share * (w1 + r1 * s - r * y1);
+  const p0 = pair.q * perTotal + bulkShare * w0 + r1 * (a - y0) + l1 * s - share * (w0 + r1 * a + l1 * s - r * y0);
+  const p1 = a * perTotal + bulkShare * w1 + r1 * (s - y1) - share * (w1 + r1 * s - r * y1);
   const p2 = 0.5 * s * perTotal;
-  const cz = c2 * perTotal - share;
+  const cz = bulkShare - share;
   const cu = share * r - r1;
   const trace = m00 + m11;
   const det = m00 * m11 - m01 * m10;

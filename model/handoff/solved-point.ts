@@ -7,7 +7,7 @@ import type { Design } from '../design.ts';
 import { Evaluator, judgeDesign, solveActive } from '../evaluate.ts';
 import type { Flavour } from '../flavour.ts';
 import type { PlannedPoint } from '../plan.ts';
-import type { PointSolver } from '../point.ts';
+import type { PointSolver } from '../point-solver.ts';
 import type { RailProblem } from '../problem.ts';
 import type { Rail } from '../rail/rail.ts';
 import type { Stage } from '../stages/contract.ts';

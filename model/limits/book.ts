@@ -23,6 +23,10 @@ export class LimitBook {
   /** Index of the judged point where the slack was smallest; −1 where no point matters. */
   readonly corner: Int32Array;
   private readonly sign: Float64Array;
+  /** The judgement at hand. */
+  private found = 0.5;
+  private bound = 0.5;
+  private scale = 0.5;
   private readonly places: Map<string, number>;
 
   constructor(definitions: readonly LimitDefinition[]) {
@@ -49,15 +53,41 @@ export class LimitBook {
     this.corner.fill(-1);
   }
 
-  /** Notes one judgement: `value` against `allowed`, in the limit's unit; `scale` > 0 turns the miss into a fraction. */
-  judge(place: number, value: number, allowed: number, scale: number, point: number): void {
+  /**
+   * Notes one judgement: `value` against `allowed`, in the limit's unit; a miss counts as a fraction of what is allowed. Doubles are
+   * handed on through fields: calls so small that the engine always inlines them carry them, and nothing is boxed.
+   */
+  judge(place: number, value: number, allowed: number, point: number): void {
+    this.found = value;
+    this.bound = allowed;
+    this.weigh(place, point);
+  }
+
+  /** The same where `scale` > 0 turns the miss into a fraction. */
+  judgeBy(place: number, value: number, allowed: number, scale: number, point: number): void {
+    this.scale = scale;
+    this.judgeByScale(place, value, allowed, point);
+  }
+
+  private judgeByScale(place: number, value: number, allowed: number, point: number): void {
+    this.found = value;
+    this.bound = allowed;
+    this.weighByScale(place, point);
+  }
+
+  private weigh(place: number, point: number): void {
+    this.scale = this.bound;
+    this.weighByScale(place, point);
+  }
+
+  private weighByScale(place: number, point: number): void {
     if (place < 0) return;
-    const slack = (this.sign[place] * (allowed - value)) / scale;
+    const slack = (this.sign[place] * (this.bound - this.found)) / this.scale;
     // A figure that cannot be computed stays: no later corner may hide it.
     if (slack >= this.slack[place] || Number.isNaN(this.slack[place])) return;
     this.slack[place] = slack;
-    this.value[place] = value;
-    this.allowed[place] = allowed;
+    this.value[place] = this.found;
+    this.allowed[place] = this.bound;
     this.corner[place] = point;
   }
 

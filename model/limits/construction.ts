@@ -20,11 +20,11 @@ function judgeVoltages(e: Evaluator): void {
   const { book, places, design, rail } = e;
   const share = rail.derating.switchVoltage;
   const high = design.high.voltageRating * share;
-  book.judge(places.highVoltage, rail.input.maximum, high, high, -1);
+  book.judge(places.highVoltage, rail.input.maximum, high, -1);
   const low = (design.diode === undefined ? design.low : design.diode).voltageRating * share;
   const { form } = design.stage;
   const blocked = design.stage.lowBlocking(rail.input.maximum, design.transformer.ratio);
-  book.judge(places.lowVoltage, form === undefined ? blocked : RINGING * blocked, low, low, -1);
+  book.judge(places.lowVoltage, form === undefined ? blocked : RINGING * blocked, low, -1);
   if (design.powerStage !== undefined) return;
   judgeGate(e, design.high);
   if (design.diode === undefined) judgeGate(e, design.low);
@@ -32,21 +32,21 @@ function judgeVoltages(e: Evaluator): void {
 
 function judgeGate(e: Evaluator, row: Switch): void {
   const drive = e.design.controller.driveVoltage;
-  e.book.judge(e.places.gateVoltage, drive, row.gateRating, row.gateRating, -1);
+  e.book.judge(e.places.gateVoltage, drive, row.gateRating, -1);
   const least = row.driveVoltage * DRIVE_SHARE;
-  e.book.judge(e.places.driveVoltage, drive, least, least, -1);
+  e.book.judge(e.places.driveVoltage, drive, least, -1);
 }
 
 function judgeController(e: Evaluator): void {
   const { book, places, design, rail } = e;
   const { controller } = design;
-  book.judge(places.phases, design.phases, controller.phasesMaximum, controller.phasesMaximum, -1);
+  book.judge(places.phases, design.phases, controller.phasesMaximum, -1);
   const { oscillator } = rail.tolerances;
   const highest = design.frequency * (1 + oscillator);
-  book.judge(places.controllerFrequency, highest, controller.frequencyMaximum, controller.frequencyMaximum, -1);
+  book.judge(places.controllerFrequency, highest, controller.frequencyMaximum, -1);
   const lowest = design.frequency * (1 - oscillator);
-  book.judge(places.controllerLowestFrequency, lowest, controller.frequencyMinimum, controller.frequencyMinimum, -1);
-  book.judge(places.controllerAbilities, controller.stages.includes(design.stage.control) ? 1 : 0, 1, 1, -1);
+  book.judge(places.controllerLowestFrequency, lowest, controller.frequencyMinimum, -1);
+  book.judge(places.controllerAbilities, controller.stages.includes(design.stage.control) ? 1 : 0, 1, -1);
 }
 
 function judgeBands(e: Evaluator): void {
@@ -54,7 +54,7 @@ function judgeBands(e: Evaluator): void {
   const { oscillator } = rail.tolerances;
   for (const band of rail.avoid) {
     const clear = bandClearance(design.frequency, oscillator, band);
-    book.judge(places.avoidedBands, clear * design.frequency, 0, design.frequency, -1);
+    book.judgeBy(places.avoidedBands, clear * design.frequency, 0, design.frequency, -1);
   }
 }
 
@@ -75,11 +75,11 @@ function bandClearance(frequency: number, oscillator: number, band: AvoidedBand)
 function judgeSize(e: Evaluator): void {
   const { book, places, assembly } = e;
   const { limits } = e.rail;
-  if (limits.height !== undefined) book.judge(places.height, assembly.height, limits.height, limits.height, -1);
+  if (limits.height !== undefined) book.judge(places.height, assembly.height, limits.height, -1);
   if (limits.boardArea !== undefined) {
-    book.judge(places.boardArea, assembly.boardArea, limits.boardArea, limits.boardArea, -1);
+    book.judge(places.boardArea, assembly.boardArea, limits.boardArea, -1);
   }
-  if (limits.volume !== undefined) book.judge(places.volume, assembly.volume, limits.volume, limits.volume, -1);
-  if (limits.mass !== undefined) book.judge(places.mass, assembly.mass, limits.mass, limits.mass, -1);
-  if (limits.cost !== undefined) book.judge(places.cost, assembly.cost, limits.cost, limits.cost, -1);
+  if (limits.volume !== undefined) book.judge(places.volume, assembly.volume, limits.volume, -1);
+  if (limits.mass !== undefined) book.judge(places.mass, assembly.mass, limits.mass, -1);
+  if (limits.cost !== undefined) book.judge(places.cost, assembly.cost, limits.cost, -1);
 }

@@ -18,11 +18,11 @@ function judgeChoke(e: Evaluator, index: number): void {
   const { state } = e.solver;
   const { woundChoke: choke, chokeMaterial: material } = design;
   if (material === undefined) return;
-  book.judge(places.chokeWindow, choke.fill, 1, 1, -1);
-  book.judge(places.chokeReach, choke.outOfReach, 0, 1, -1);
+  book.judge(places.chokeWindow, choke.fill, 1, -1);
+  book.judgeBy(places.chokeReach, choke.outOfReach, 0, 1, -1);
   const swing = 0.5 * state.rippleCurrent * choke.fluxPerAmpere;
   const frequency = design.frequency * design.stage.chokeMultiple;
-  book.judge(places.chokeMaterial, materialViolation(material, frequency, swing), 0, 1, index);
+  book.judgeBy(places.chokeMaterial, materialViolation(material, frequency, swing), 0, 1, index);
 }
 
 function judgeTransformer(e: Evaluator, index: number): void {
@@ -31,8 +31,8 @@ function judgeTransformer(e: Evaluator, index: number): void {
   const { transformer, transformerChoice, stage } = design;
   if (transformerChoice === undefined || stage.form === undefined) return;
   const { material } = transformerChoice;
-  book.judge(places.transformerWindow, transformer.fill, 1, 1, -1);
-  book.judge(
+  book.judge(places.transformerWindow, transformer.fill, 1, -1);
+  book.judgeBy(
     places.transformerMaterial,
     materialViolation(material, design.frequency, 0.5 * state.fluxSwing),
     0,
@@ -44,7 +44,7 @@ function judgeTransformer(e: Evaluator, index: number): void {
   const swing = (volts * longest) / (design.frequency * transformer.primaryTurns * transformer.minimumArea);
   const flux = swing + (stage.form.doubleEnded ? 0 : REMANENCE);
   const most = saturationFlux(material.saturation25, material.saturation100, HOT_CORE);
-  book.judge(places.transformerFlux, flux, most, most, -1);
+  book.judge(places.transformerFlux, flux, most, -1);
   const duty = state.dutyCycle + state.lostDuty;
-  book.judge(places.transformerDuty, duty, stage.highestDuty, stage.highestDuty, index);
+  book.judge(places.transformerDuty, duty, stage.highestDuty, index);
 }

@@ -47,10 +47,11 @@ export {
   inductorThermalResistance,
   prepareInductor,
   RIPPLE_HARMONICS,
+  stockedCoreLoss,
   stockedCoreLossAt,
   windingResistance,
 } from './stocked.ts';
-export { triangleLoss } from './triangle-loss.ts';
+export { type LayeredWinding, triangleLoss, triangleLossAt } from './triangle-loss.ts';
 export {
   createWindingAtFrequency,
   prepareWinding,

@@ -41,42 +41,47 @@ export function prepareInductor(
   dowellHarmonics(into.x1, row.layers, RIPPLE_HARMONICS, into.factors);
 }
 
-const scratch = new Float64Array(1);
-
 /**
  * Writes to `into[0]` the core loss, W, of a triangle of `swing` A peak to peak rising for `duty` of the period:
- * k·f^α·ΔI^β·[D^(1 − α) + (1 − D)^(1 − α)]/2^α. `coreScale` = k·f^α from `prepareInductor`. No loss without swing.
- * For a pause in the ripple (rise for d1, fall for d2, d1 + d2 < 1) give `rise` and `fall` as fractions of the period:
- * [d1^(1 − α) + d2^(1 − α)]/2^α.
- * @source igse-2002, triangle with a flat
- * @valid 0 < rise, 0 < fall, rise + fall ≤ 1
+ * k·f^α·ΔI^β·[D^(1 − α) + (1 − D)^(1 − α)]/2^α. `at` from `prepareInductor`. No loss without swing.
+ * @source igse-2002, applied to a triangle
+ * @valid 0 < duty < 1
  */
-export function stockedCoreLossAt(
+export function stockedCoreLoss(
   row: Inductor,
-  coreScale: number,
+  at: InductorAtFrequency,
   swing: number,
-  rise: number,
-  fall: number,
+  duty: number,
   into: Float64Array,
 ): void {
-  if (!(swing > 0)) {
+  into[0] = swing;
+  into[1] = duty;
+  stockedCoreLossAt(row, at, into);
+}
+
+/**
+ * The same for the swing in `into[0]` and the duty in `into[1]`: no double crosses the call.
+ * @source igse-2002, applied to a triangle
+ * @valid as `stockedCoreLoss`
+ */
+export function stockedCoreLossAt(row: Inductor, at: InductorAtFrequency, into: Float64Array): void {
+  const duty = into[1];
+  if (!(into[0] > 0)) {
     into[0] = 0;
     return;
   }
   const less = 1 - row.coreFrequencyExponent;
-  scratch[0] = swing;
-  logAt(scratch, 0);
-  const base = row.coreSwingExponent * scratch[0] - row.coreFrequencyExponent * Math.LN2;
-  scratch[0] = rise;
-  logAt(scratch, 0);
-  scratch[0] = base + less * scratch[0];
-  expAt(scratch, 0);
-  const up = scratch[0];
-  scratch[0] = fall;
-  logAt(scratch, 0);
-  scratch[0] = base + less * scratch[0];
-  expAt(scratch, 0);
-  into[0] = coreScale * (up + scratch[0]);
+  logAt(into, 0);
+  const base = row.coreSwingExponent * into[0] - row.coreFrequencyExponent * Math.LN2;
+  into[0] = duty;
+  into[1] = 1 - duty;
+  logAt(into, 0);
+  logAt(into, 1);
+  into[0] = base + less * into[0];
+  into[1] = base + less * into[1];
+  expAt(into, 0);
+  expAt(into, 1);
+  into[0] = at.coreScale * (into[0] + into[1]);
 }
 
 /**

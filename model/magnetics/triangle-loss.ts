@@ -3,24 +3,39 @@ import { sincosAt } from '../../optimizer/maths/index.ts';
 import { tailBound } from './winding-loss.ts';
 
 const angle = new Float64Array(2);
+/** 1/k². */
+const PER_SQUARE = Float64Array.from({ length: 32 }, (_, k) => 1 / (k * k));
+
+/** A layered winding at one frequency: Dowell's factors at harmonics 1 … n, thickness over skin depth at the first, layers. */
+export interface LayeredWinding {
+  readonly factors: Float64Array;
+  readonly x1: number;
+  readonly layers: number;
+}
 
 /**
  * Writes to `into[0]` the ac loss per Ω of dc resistance, A², of a triangle of `swing` A peak to peak that rises for `duty`
  * (0 < D < 1) of the period; to `into[1]` the bound on the tail within it. Harmonic k of the triangle has the amplitude
  * ΔI·|sin(π·k·D)|/(π²·k²·D·(1 − D)); its ac mean square is ΔI²/12, that of its slope over ω² is ΔI²/(4·π²·D·(1 − D)).
- * `factors` from `dowellHarmonics`, `count` of them, `x1` and `layers` as there.
  * @source dowell-1966; amplitude by the derivation in `harmonics`, checked against it
  * @valid 0 < D < 1; a triangle with a pause (discontinuous operation) takes `harmonics`
  */
-export function triangleLoss(
-  swing: number,
-  duty: number,
-  factors: Float64Array,
-  count: number,
-  x1: number,
-  layers: number,
-  into: Float64Array,
-): void {
+export function triangleLoss(winding: LayeredWinding, swing: number, duty: number, into: Float64Array): void {
+  into[0] = swing;
+  into[1] = duty;
+  triangleLossAt(winding, into);
+}
+
+/**
+ * The same for the swing in `into[0]` and the duty in `into[1]`: no double crosses the call.
+ * @source dowell-1966
+ * @valid as `triangleLoss`
+ */
+export function triangleLossAt(winding: LayeredWinding, into: Float64Array): void {
+  const { factors } = winding;
+  const count = factors.length;
+  const swing = into[0];
+  const duty = into[1];
   const both = duty * (1 - duty);
   angle[0] = Math.PI * duty;
   sincosAt(angle, 0);
@@ -33,7 +48,7 @@ export function triangleLoss(
   let rest = (swing * swing) / 12;
   let slope = (swing * swing) / (4 * Math.PI * Math.PI * both);
   for (let k = 1; k <= count; k++) {
-    const amplitude = (scale * s) / (k * k);
+    const amplitude = scale * s * PER_SQUARE[k];
     const half = 0.5 * amplitude * amplitude;
     loss += half * factors[k - 1];
     rest -= half;
@@ -42,7 +57,7 @@ export function triangleLoss(
     c = c * c1 - s * s1;
     s = next;
   }
-  const bound = tailBound(rest, slope, x1, layers);
+  const bound = tailBound(rest, slope, winding.x1, winding.layers);
   into[0] = loss + bound;
   into[1] = bound;
 }

@@ -16,4 +16,4 @@ export {
 } from './output-charge.ts';
 export { edgeTime, overlapEnergy, overlapLossMiller, sharedGateResistance } from './overlap.ts';
 export { recoveryCharge, recoveryLoss, recoveryLossTriangle } from './recovery.ts';
-export { partialEdgeEnergyAt, partialEdgeInPlaceAt, swingFraction, zeroVoltageCurrent } from './zero-voltage.ts';
+export { partialEdgeEnergyAt, swingFraction, swungSharesAt, zeroVoltageCurrent } from './zero-voltage.ts';

@@ -2,8 +2,8 @@
  * Zero-voltage turn-on: how far a negative valley current swings the switching node before the switch turns on, and what
  * the rest of the swing costs. Everything is continuous in the valley current: a search parks on any jump.
  */
-import { pow } from '../../optimizer/maths/index.ts';
-import { OUTPUT_CHARGE, OUTPUT_ENERGY, outputInPlaceAt } from './output-charge.ts';
+import { pow, powAt } from '../../optimizer/maths/index.ts';
+import { chargeExponent, OUTPUT_CHARGE, OUTPUT_ENERGY, outputAt } from './output-charge.ts';
 
 /**
  * Fraction 0 … 1 of the bus that the node swings by. `valley` A (negative helps), `inductance` H, `nodeCharge` C moved by
@@ -60,9 +60,9 @@ interface OutputRow {
 }
 
 const full = new Float64Array(2);
-const part = new Float64Array(2);
 const rest = new Float64Array(2);
-const shares = new Float64Array(2);
+const shares = new Float64Array(3);
+const power = new Float64Array(2);
 
 /**
  * Writes to `into[0]` the energy, J, of an edge that starts with the node already swung by `fraction` (0 … 1) of `busVoltage` (V):
@@ -80,28 +80,31 @@ export function partialEdgeEnergyAt(
   fraction: number,
   into: Float64Array,
 ): void {
-  shares[0] = busVoltage;
-  shares[1] = fraction;
-  partialEdgeInPlaceAt(partner, own, shares);
-  into[0] = partnerDice * shares[0] + ownDice * shares[1];
+  outputAt(partner, busVoltage, full);
+  outputAt(own, busVoltage, rest);
+  shares[0] = fraction;
+  shares[1] = chargeExponent(partner.outputCharge, partner.outputEnergy, partner.outputTestVoltage);
+  shares[2] = chargeExponent(own.outputCharge, own.outputEnergy, own.outputTestVoltage);
+  swungSharesAt(shares);
+  const drawn = busVoltage * full[OUTPUT_CHARGE] * (1 - shares[0]) - full[OUTPUT_ENERGY] * (1 - shares[1]);
+  into[0] = partnerDice * drawn + ownDice * rest[OUTPUT_ENERGY] * shares[2];
 }
 
 /**
- * The two shares of that energy for the bus voltage in `into[0]` and the fraction in `into[1]`, J a die: to `into[0]` what one die of
- * the partner draws and does not store, to `into[1]` what one own die had stored. No double crosses the call.
+ * For the fraction s in `into[0]`, the partner's exponent p of Q ∝ V^p in `into[1]` and the own one in `into[2]` writes the shares of the whole
+ * bus's figures: the partner's charge that has moved, s^p, and its energy, s^(p + 1), and the own energy that is left, (1 − s)^(p + 1).
+ * No double crosses the call.
  * @source kasper-2016, section II
- * @valid as `partialEdgeEnergyAt`
+ * @valid fraction 0 … 1
  */
-export function partialEdgeInPlaceAt(partner: OutputRow, own: OutputRow, into: Float64Array): void {
-  const bus = into[0];
-  const fraction = Math.min(1, into[1]);
-  full[0] = bus;
-  part[0] = fraction * bus;
-  rest[0] = (1 - fraction) * bus;
-  outputInPlaceAt(partner, full);
-  outputInPlaceAt(partner, part);
-  outputInPlaceAt(own, rest);
-  const drawn = bus * (full[OUTPUT_CHARGE] - part[OUTPUT_CHARGE]);
-  into[0] = drawn - (full[OUTPUT_ENERGY] - part[OUTPUT_ENERGY]);
-  into[1] = rest[OUTPUT_ENERGY];
+export function swungSharesAt(into: Float64Array): void {
+  const fraction = Math.min(1, into[0]);
+  const left = 1 - fraction;
+  powAt(into, 0);
+  into[1] = into[0] * fraction;
+  const exponent = into[2];
+  power[0] = left;
+  power[1] = exponent;
+  powAt(power, 0);
+  into[2] = power[0] * left;
 }

@@ -34,7 +34,7 @@ describe('the book of limits', () => {
       [120, 80, 90],
     ]) {
       const made = book();
-      for (const value of values) made.judge(0, value, 100, 100, 0);
+      for (const value of values) made.judge(0, value, 100, 0);
       expect(missed(made)).toBeCloseTo(0.2, 12);
     }
   });
@@ -45,7 +45,7 @@ describe('the book of limits', () => {
       [50, Number.NaN],
     ]) {
       const made = book();
-      for (const value of values) made.judge(0, value, 100, 100, 0);
+      for (const value of values) made.judge(0, value, 100, 0);
       expect(missed(made)).toBeNaN();
     }
   });

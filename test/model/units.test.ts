@@ -230,6 +230,7 @@ const RECORD_FUNCTIONS = [
     'dowellHarmonics',
     'harmonicLoss',
     'triangleLoss',
+    'stockedCoreLoss',
     'layWinding',
     'parallelThatFit',
   ],

@@ -27,7 +27,7 @@ import {
   roundWireProximity,
   roundWireSkin,
   steinmetz,
-  stockedCoreLossAt,
+  stockedCoreLoss,
   swingAt,
   tailBound,
   trapezoidLossDensity,
@@ -172,7 +172,7 @@ describe('Winding loss over harmonics', () => {
         const general = out[WINDING_AC];
         const factors = new Float64Array(RIPPLE_HARMONICS);
         dowellHarmonics(x1, 2, RIPPLE_HARMONICS, factors);
-        triangleLoss(1, duty, factors, RIPPLE_HARMONICS, x1, 2, out);
+        triangleLoss({ factors, x1, layers: 2 }, 1, duty, out);
         expect(out[0] / general).toBeCloseTo(1, 9);
       }),
     );
@@ -184,7 +184,7 @@ describe('Winding loss over harmonics', () => {
           const truth = full(chain([duty, -0.5, 0.5], [1 - duty, 0.5, -0.5]), x1, m);
           const factors = new Float64Array(RIPPLE_HARMONICS);
           dowellHarmonics(x1, m, RIPPLE_HARMONICS, factors);
-          triangleLoss(1, duty, factors, RIPPLE_HARMONICS, x1, m, out);
+          triangleLoss({ factors, x1, layers: m }, 1, duty, out);
           expect(out[0] / truth).toBeGreaterThan(1 - 1e-6);
           expect(out[0] / truth).toBeLessThan(1.05);
         }
@@ -338,12 +338,12 @@ describe('A stocked inductor', () => {
   it('loses k·f^α·ΔI^β in its core at half duty, more at any other, nothing without ripple', () => {
     const at = createInductorAtFrequency();
     prepareInductor(row, 5e5, 343, at);
-    stockedCoreLossAt(row, at.coreScale, 3, 0.5, 0.5, out);
+    stockedCoreLoss(row, at, 3, 0.5, out);
     expect(out[0] / (1e-9 * 5e5 ** 1.32 * 3 ** 2.15)).toBeCloseTo(1, 10);
     const half = out[0];
-    stockedCoreLossAt(row, at.coreScale, 3, 0.2, 0.8, out);
+    stockedCoreLoss(row, at, 3, 0.2, out);
     expect(out[0]).toBeGreaterThan(half);
-    stockedCoreLossAt(row, at.coreScale, 0, 0.2, 0.8, out);
+    stockedCoreLoss(row, at, 0, 0.2, out);
     expect(out[0]).toBe(0);
   });
   it('heats by its rated rise at its rated current', () => {
