@@ -5,6 +5,9 @@ import { clear, type Root } from '../marks/root.ts';
 import { percent } from '../units.ts';
 import { familyMark, familyName } from './legend.ts';
 
+/** Of the columns; on a narrow screen each stands before its figure. */
+const HEADS: readonly string[] = ['Family', 'judged', 'feasible', 'on the front', 'why'];
+
 export function renderFamilies<E extends Element>(root: Root<E>, notes: readonly FamilyNote[]): void {
   clear(root);
   const table = root
@@ -20,7 +23,7 @@ export function renderFamilies<E extends Element>(root: Root<E>, notes: readonly
     .attr('class', 'unseen')
     .text('Families with the number of designs judged, feasible and on the front, and why');
   const head = table.append('thead').append('tr');
-  for (const word of ['Family', 'judged', 'feasible', 'on the front', 'why'])
+  for (const word of HEADS)
     head
       .append('th')
       .attr('scope', 'col')
@@ -32,9 +35,14 @@ export function renderFamilies<E extends Element>(root: Root<E>, notes: readonly
     const name = row.append('th').attr('scope', 'row');
     familyMark(name, note.family);
     name.append('span').text(familyName(note.family));
-    row.append('td').text(thousands(note.evaluated));
-    row.append('td').text(note.evaluated === 0 ? 'none' : percent(note.feasible / note.evaluated, 0));
-    row.append('td').text(thousands(note.front));
+    const share = note.evaluated === 0 ? 'none' : percent(note.feasible / note.evaluated, 0);
+    const figures = [thousands(note.evaluated), share, thousands(note.front)];
+    for (const [i, figure] of figures.entries()) {
+      row
+        .append('td')
+        .attr('data-word', HEADS[i + 1] ?? '')
+        .text(figure);
+    }
     row.append('td').attr('class', 'why').text(inWords(note.reason));
   }
 }

@@ -14,6 +14,7 @@ export class Lines {
   private readonly parameters: string[] = [];
   private readonly elements: string[] = [];
   private readonly models = new Map<string, string>();
+  private readonly gates: string[] = [];
   private readonly kept: string[] = [];
   private readonly values = new Map<string, number>();
 
@@ -88,7 +89,22 @@ export class Lines {
     const pulse = wraps
       ? `1 0 {${start}+${width.text}-${period.text}} {te} {te} {${period.text}-(${width.text})-te} {${period.text}}`
       : `0 1 {${start}} {te} {te} {${width.text}-te} {${period.text}}`;
+    this.gates.push(node);
     this.elements.push(`V${node} ${node} 0 PULSE(${pulse})`);
+  }
+
+  /**
+   * Ties every node but those of gates to ground by what carries nothing beside the circuit's currents: while all switches of a stage
+   * are off its nodes hang in the air, and a simulator may not find where they stand.
+   */
+  leak(): void {
+    const nodes = new Set<string>();
+    for (const element of this.elements) {
+      for (const node of /^[VRLCDS]\S* (\S+) (\S+)/.exec(element)?.slice(1) ?? []) nodes.add(node);
+    }
+    for (const node of ['0', ...this.gates]) nodes.delete(node);
+    this.parameter('rleak', 1e8, 'ohm', 'leak of each node to ground, so that none hangs in the air');
+    for (const node of nodes) this.elements.push(`Rleak_${node} ${node} 0 {rleak}`);
   }
 
   /** The text: `title` and `head` as comments, then everything written, then `tail`. */
