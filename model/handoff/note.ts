@@ -27,7 +27,19 @@ export interface HandoffContext {
   readonly nearMisses?: readonly Miss[];
   readonly relaxations?: Relaxations;
   readonly hashes?: SpecHashes;
+  /** How a person says names; as they stand in files where absent. */
+  readonly words?: NoteWords;
 }
+
+/** Words for the names that stand in files. */
+export interface NoteWords {
+  /** Of a limit. */
+  limit(name: string): string;
+  /** Of a part's place, an effect, an objective, a value. */
+  name(name: string): string;
+}
+
+const AS_THEY_STAND: NoteWords = { limit: (name) => name, name: (name) => name };
 
 /** Alternatives, losses, limits and prices that are listed. */
 const ALTERNATIVES = 5;
@@ -41,17 +53,18 @@ const TIGHT = 0.1;
 export function designNote(problem: RailProblem, genes: Float64Array, context: HandoffContext = {}): Document {
   const assessment = problem.assess(genes);
   const { rail } = problem;
+  const words = context.words ?? AS_THEY_STAND;
   return {
     title: `Design note: ${rail.name}, ${assessment.id}`,
     subtitle: `${assessment.family}; chopfront ${MODEL_VERSION}${hashText(context)}.`,
     sections: [
       requirement(rail),
-      choice(problem, genes, assessment),
+      choice(problem, genes, assessment, words),
       alternatives(problem, assessment, context),
-      losses(assessment),
-      margins(assessment),
-      ...prices(problem, context),
-      risks(assessment),
+      losses(assessment, words),
+      margins(problem, assessment, words),
+      ...prices(problem, context, words),
+      risks(problem, assessment, words),
       { title: 'Cautions', list: assessment.cautions },
     ],
   };
@@ -91,19 +104,25 @@ function requirement(rail: Rail): Section {
   return { title: 'Requirement', table: { head: ['what', 'asked'], rows } };
 }
 
-function choice(problem: RailProblem, genes: Float64Array, assessment: Assessment): Section {
+function choice(problem: RailProblem, genes: Float64Array, assessment: Assessment, words: NoteWords): Section {
   const units: Readonly<Record<string, string>> = { frequency: 'Hz', inductance: 'H' };
   const rows = [
-    ...assessment.objectives.map(({ name, unit, value }) => [name, formatQuantity(value, unit)]),
+    ...assessment.objectives.map(({ name, unit, value }) => [words.name(name), formatQuantity(value, unit)]),
     ...Object.entries(assessment.design.genes)
       .filter(([name]) => name in units || name === 'phases')
-      .map(([name, value]) => [name, formatQuantity(value, units[name] ?? '')]),
-    ...assessment.parts.map(({ slot, name, count }) => [slot, `${count} × ${name}`]),
+      .map(([name, value]) => [words.name(name), formatQuantity(value, units[name] ?? '')]),
+    ...assessment.parts.map(({ slot, name, count }) => [words.name(slot), `${count} × ${name}`]),
     ...loopRows(problem, genes),
   ];
-  const verdict = assessment.feasible
-    ? 'It keeps every limit of the sheet.'
-    : 'It does NOT keep every limit of the sheet.';
+  const broken = assessment.limits
+    .filter(({ violation }) => violation > 0)
+    .map(({ name, unit, value, allowed }) => {
+      return `${words.limit(name)} (${formatQuantity(value, unit)} where ${formatQuantity(allowed, unit)} is allowed)`;
+    });
+  const verdict =
+    broken.length === 0
+      ? 'It keeps every limit of the sheet.'
+      : `It does NOT keep every limit of the sheet; it breaks: ${broken.join(', ')}.`;
   return { title: 'Choice', paragraphs: [verdict], table: { head: ['what', 'value'], rows } };
 }
 
@@ -115,6 +134,7 @@ function loopRows(problem: RailProblem, genes: Float64Array): string[][] {
 }
 
 function alternatives(problem: RailProblem, assessment: Assessment, context: HandoffContext): Section {
+  const words = context.words ?? AS_THEY_STAND;
   const mine = assessment.objectives.map(({ value }) => value);
   const others = (context.designs ?? []).filter(({ id }) => id !== assessment.id);
   if (others.length === 0) return { title: 'Alternatives', paragraphs: ['No run was at hand to compare with.'] };
@@ -129,7 +149,7 @@ function alternatives(problem: RailProblem, assessment: Assessment, context: Han
     paragraphs: [
       `Of ${others.length} other designs on the front none is better in every objective. The best of each objective, then the nearest, against this design:`,
     ],
-    table: { head: ['design', 'family', ...problem.objectives.map(({ name }) => name)], rows },
+    table: { head: ['design', 'family', ...problem.objectives.map(({ name }) => words.name(name))], rows },
   };
 }
 
@@ -145,7 +165,7 @@ function nearest(problem: RailProblem, mine: readonly number[], others: readonly
   return [...new Set([...best, ...sorted])];
 }
 
-function losses(assessment: Assessment): Section {
+function losses(assessment: Assessment, words: NoteWords): Section {
   const sorted = [...assessment.losses].sort((a, b) => b.watts - a.watts);
   const total = sorted.reduce((sum, { watts }) => sum + watts, 0);
   const shown = sorted.slice(0, LOSSES);
@@ -157,7 +177,7 @@ function losses(assessment: Assessment): Section {
     percent(watts / total),
   ];
   const rows = [
-    ...shown.map(({ part, effect, watts }) => row(part, effect, watts)),
+    ...shown.map(({ part, effect, watts }) => row(words.name(part), words.name(effect), watts)),
     ...(rest > 0 ? [row('all others', '', rest)] : []),
     row('together', '', total),
   ];
@@ -168,22 +188,34 @@ function losses(assessment: Assessment): Section {
   };
 }
 
-function margins(assessment: Assessment): Section {
-  const sorted = [...assessment.limits].sort((a, b) => a.slack - b.slack).slice(0, LIMITS);
+function margins(problem: RailProblem, assessment: Assessment, words: NoteWords): Section {
+  const sorted = worrying(problem, assessment)
+    .sort((a, b) => a.slack - b.slack)
+    .slice(0, LIMITS);
   return {
     title: 'Margins',
     paragraphs: ['The tightest limits, each at its worst corner of line, load, ambient and tolerance.'],
-    table: { head: ['limit', 'has', 'allowed', 'margin', 'corner'], rows: sorted.map(marginRow) },
+    table: {
+      head: ['limit', 'has', 'allowed', 'margin', 'corner'],
+      rows: sorted.map((limit) => marginRow(limit, words)),
+    },
   };
 }
 
-function marginRow({ name, unit, value, allowed, margin, corner }: LimitFigure): string[] {
-  const where =
-    corner === undefined ? '' : `${formatQuantity(corner.inputVoltage, 'V')} in, load ${percent(corner.load)}`;
-  return [name, formatQuantity(value, unit), formatQuantity(allowed, unit), formatDifference(margin, unit), where];
+/** Limits but those that count whole things and are met: they leave no margin, and that is no worry. */
+function worrying(problem: RailProblem, { limits }: Assessment): LimitFigure[] {
+  const whole = new Set(problem.limitDefinitions.flatMap((one) => (one.whole === true ? [one.name] : [])));
+  return limits.filter(({ name, violation }) => violation > 0 || !whole.has(name));
 }
 
-function prices(problem: RailProblem, context: HandoffContext): Section[] {
+function marginRow({ name, unit, value, allowed, margin, corner }: LimitFigure, words: NoteWords): string[] {
+  const where =
+    corner === undefined ? '' : `${formatQuantity(corner.inputVoltage, 'V')} in, load ${percent(corner.load)}`;
+  const figures = [formatQuantity(value, unit), formatQuantity(allowed, unit), formatDifference(margin, unit)];
+  return [words.limit(name), ...figures, where];
+}
+
+function prices(problem: RailProblem, context: HandoffContext, words: NoteWords): Section[] {
   const front: PricedFront = {
     objectives: problem.objectives,
     limits: problem.limitDefinitions,
@@ -192,7 +224,7 @@ function prices(problem: RailProblem, context: HandoffContext): Section[] {
   const { nearMisses = [], relaxations } = context;
   const lines = requirementPrices(front, nearMisses, relaxations).slice(0, PRICES);
   if (lines.length === 0) return [];
-  const objectives = problem.objectives.map(({ name }) => `best ${name}`);
+  const objectives = problem.objectives.map(({ name }) => `best ${words.name(name)}`);
   return [
     {
       title: 'What requirements cost',
@@ -200,30 +232,35 @@ function prices(problem: RailProblem, context: HandoffContext): Section[] {
         'If one limit were relaxed so far: the best of each objective, and the design that would gain most at no more of the others.',
         howPriced(relaxations),
       ],
-      table: { head: ['limit', 'relaxed', ...objectives, 'at no more of the others'], rows: lines.map(priceRow) },
+      table: {
+        head: ['limit', 'relaxed', ...objectives, 'at no more of the others'],
+        rows: lines.map((line) => priceRow(line, words)),
+      },
     },
   ];
 }
 
-function priceRow({ limit, unit, allowed, relaxedTo, design, gains }: RequirementPrice): string[] {
+function priceRow(line: RequirementPrice, words: NoteWords): string[] {
+  const { limit, unit, allowed, relaxedTo, design, gains } = line;
   const bests = gains.map((gain) =>
     isTelling(bestGainOf(gain)) ? `${percent(bestGainOf(gain))} less, ${formatQuantity(gain.relaxed, gain.unit)}` : '',
   );
   const top = gains.reduce((a, b) => (gainOf(b) > gainOf(a) ? b : a));
   const most = isTelling(gainOf(top))
-    ? `${top.objective} ${percent(gainOf(top))} less, ${formatQuantity(top.to, top.unit)} (${design})`
+    ? `${words.name(top.objective)} ${percent(gainOf(top))} less, ${formatQuantity(top.to, top.unit)} (${design})`
     : '';
-  return [limit, `${formatQuantity(allowed, unit)} to ${formatQuantity(relaxedTo, unit)}`, ...bests, most];
+  return [words.limit(limit), `${formatQuantity(allowed, unit)} to ${formatQuantity(relaxedTo, unit)}`, ...bests, most];
 }
 
-function risks(assessment: Assessment): Section {
-  const tight = assessment.limits.filter(({ slack }) => slack < TIGHT).map(({ name }) => name);
+function risks(problem: RailProblem, assessment: Assessment, words: NoteWords): Section {
+  const close = worrying(problem, assessment).filter(({ slack }) => slack < TIGHT);
+  const tight = close.map(({ name }) => words.limit(name));
   const hot = Object.entries(hottest(assessment.points)).sort((a, b) => b[1] - a[1])[0];
   const list = [
     tight.length === 0
       ? 'No limit is closer than 10 % of what is allowed.'
       : `Closer than 10 % of what is allowed: ${tight.join(', ')}.`,
-    ...(hot === undefined ? [] : [`Hottest in the worst case: ${hot[0]}, ${formatQuantity(hot[1], 'K')}.`]),
+    ...(hot === undefined ? [] : [`Hottest in the worst case: ${words.name(hot[0])}, ${formatQuantity(hot[1], 'K')}.`]),
     'Model against hardware, published experience: efficiency within 0.2 to 0.3 points, volume within 20 %, core loss within 16 % at the 95th percentile.',
     'A circuit simulation of stage.cir proves waveforms, conduction and ripple; it cannot prove switching or core loss.',
   ];

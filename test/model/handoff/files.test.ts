@@ -11,6 +11,7 @@ import {
   stageNetlist,
   takeAway,
 } from '../../../model/index.ts';
+import { spokenLimit } from '../../../viz/labels.ts';
 import { takeAwayFiles } from '../../../viz/note/take-away.ts';
 import { type FoundDesign, foundDesigns } from '../../circuit/designs.ts';
 import { handMade, need, plainRail } from '../support.ts';
@@ -94,6 +95,27 @@ describe.each(found)('$name', (design) => {
     for (const caution of problem.assess(genes).cautions) {
       expect(files.get('note.html')?.replaceAll('&#39;', "'")).toContain(caution);
     }
+  });
+
+  it('the note speaks in words, and lists no limit as tight that only counts whole things and is met', () => {
+    const note = takeAwayFiles(problem, genes).find(({ name }) => name === 'note.md')?.text ?? '';
+    const names = problem.limits.filter((name) => /[a-z][A-Z]/.test(name));
+    for (const name of [...names, 'highSwitch', 'outputCeramic', 'outputCharge']) expect(note).not.toContain(name);
+    const [, margins = ''] = note.split('## Margins');
+    expect(margins.split('##')[0]).not.toContain('phases of the controller');
+  });
+});
+
+describe('a design that breaks a limit', () => {
+  const rail = plainRail({ input: 12, output: 3.3, current: 5 });
+  const { problem, genes } = handMade({ frequency: 1e5, high: { onResistance: 1e-3 } }, rail);
+
+  it('has a note that says which, what it has and what is allowed', () => {
+    const broken = problem.assess(genes).limits.filter(({ violation }) => violation > 0);
+    const note = takeAwayFiles(problem, genes).find(({ name }) => name === 'note.md')?.text ?? '';
+    expect(broken.length).toBeGreaterThan(0);
+    expect(note).toContain('It does NOT keep every limit of the sheet; it breaks: ');
+    for (const { name } of broken) expect(note).toContain(`${spokenLimit(name)} (`);
   });
 });
 
