@@ -220,18 +220,18 @@ function sumUsual(e: Evaluator, listener?: PointListener): void {
     const planned = e.plan.usual[i];
     solver.wantsRipple = listener !== undefined;
     solveActive(e, e.usual, planned);
-    const power = solver.outputPower >= 0 ? solver.outputPower + solver.loss : -solver.outputPower;
+    solver.inputPower = solver.outputPower >= 0 ? solver.outputPower + solver.loss : -solver.outputPower;
     e.loss += planned.share * solver.loss;
-    e.inflow += planned.share * power;
+    e.inflow += planned.share * solver.inputPower;
     if (planned.load === 1) e.fullLoss = solver.loss;
     if (planned.share > 0) for (let k = 0; k < weighted.length; k++) weighted[k] += planned.share * solver.ledger[k];
-    judgeUsual(e, planned, power, i);
+    judgeUsual(e, planned, i);
     listener?.(solver, planned, i);
   }
 }
 
 /** Efficiency and no-load limits at a usual point. */
-function judgeUsual(e: Evaluator, planned: PlannedPoint, inflow: number, index: number): void {
+function judgeUsual(e: Evaluator, planned: PlannedPoint, index: number): void {
   const { rail, places, book, solver } = e;
   if (planned.load === 0) {
     const allowed = rail.limits.noLoadPower;
@@ -241,7 +241,7 @@ function judgeUsual(e: Evaluator, planned: PlannedPoint, inflow: number, index: 
   const limits = rail.limits.efficiency;
   for (let k = 0; k < limits.length; k++) {
     if (limits[k].load !== planned.load) continue;
-    const efficiency = 1 - solver.loss / inflow;
+    const efficiency = 1 - solver.loss / solver.inputPower;
     book.judgeBy(places.efficiency[k], efficiency, limits[k].atLeast, 1 - limits[k].atLeast, index);
   }
 }
@@ -249,20 +249,20 @@ function judgeUsual(e: Evaluator, planned: PlannedPoint, inflow: number, index: 
 /** Solves a point with the phase count that the light-load policy asks for: all, or the one with the least loss. */
 export function solveActive(e: Evaluator, flavour: Flavour, planned: PlannedPoint): void {
   const { design, solver } = e;
-  const board = e.bareBoard + e.sink;
+  solver.conductance = e.bareBoard + e.sink;
   let best = design.phases;
   if (design.sheds) {
     const fewest = Math.max(1, Math.ceil(design.phases * Math.abs(planned.load)));
     let least = Number.POSITIVE_INFINITY;
     for (let n = design.phases; n >= fewest; n--) {
-      solvePoint(solver, design, flavour, planned, n, board);
+      solvePoint(solver, design, flavour, planned, n);
       if (!(solver.loss < least)) continue;
       least = solver.loss;
       best = n;
     }
     if (best === fewest) return;
   }
-  solvePoint(solver, design, flavour, planned, best, board);
+  solvePoint(solver, design, flavour, planned, best);
 }
 
 /** Adds the heat sink to volume, mass and cost. */

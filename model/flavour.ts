@@ -32,6 +32,9 @@ export class Flavour {
   lowResistance = 0.5;
   readonly output: Bank = createBank();
   readonly input: Bank = createBank();
+  /** What one piece of each ceramic holds at the output's and the input's bias, F: one rail's designs use the same rows again and again. */
+  readonly outputHeld = new Map<Ceramic, Float64Array>();
+  readonly inputHeld = new Map<Ceramic, Float64Array>();
   /** Ripple of each phase over that of the phase with the lowest inductance; all 1 in the usual flavour. */
   readonly scales = new Float64Array(PHASES).fill(1);
 
@@ -49,6 +52,7 @@ export function prepareFlavour(flavour: Flavour, design: Design, rail: Rail): vo
   bank(
     flavour,
     flavour.output,
+    flavour.outputHeld,
     rail,
     rail.output.nominal,
     design.outputCeramic,
@@ -59,6 +63,7 @@ export function prepareFlavour(flavour: Flavour, design: Design, rail: Rail): vo
   bank(
     flavour,
     flavour.input,
+    flavour.inputHeld,
     rail,
     rail.input.nominal,
     design.inputCeramic,
@@ -91,6 +96,7 @@ function spreadPhases(flavour: Flavour, phases: number, low: number): void {
 function bank(
   flavour: Flavour,
   into: Bank,
+  held: Map<Ceramic, Float64Array>,
   rail: Rail,
   volts: number,
   ceramic: Ceramic,
@@ -98,26 +104,25 @@ function bank(
   bulk: Bulk | undefined,
   bulkCount: number,
 ): void {
-  const biased = ceramicCapacitance(
-    ceramic.capacitance,
-    ceramic.smallSignalFactor,
-    ceramic.halvingVoltage,
-    ceramic.biasExponent,
-    volts,
-  );
-  const factor = flavour.worst
-    ? ceramicWorstFactor(
-        Math.max(rail.tolerances.capacitance, ceramic.tolerance),
-        ceramic.temperatureDrop,
-        ceramic.ageing,
-        AGED_HOURS,
-      )
-    : 1;
-  setGroup1(into, ceramicCount, biased * factor, ceramic.seriesResistance, ceramic.seriesInductance);
+  let capacitance = held.get(ceramic);
+  if (capacitance === undefined) {
+    capacitance = Float64Array.of(heldBy(ceramic, flavour, rail, volts));
+    held.set(ceramic, capacitance);
+  }
+  setGroup1(into, ceramicCount, capacitance[0], ceramic.seriesResistance, ceramic.seriesInductance);
   if (bulk === undefined) {
     setGroup2(into, 0, 0, 0, 0);
     return;
   }
   const drop = flavour.worst ? Math.max(rail.tolerances.capacitance, bulk.tolerance) : 0;
   setGroup2(into, bulkCount, bulk.capacitance * (1 - drop), bulk.seriesResistance, bulk.seriesInductance);
+}
+
+/** Capacitance that one piece of `row` holds at `volts`, F. */
+function heldBy(row: Ceramic, flavour: Flavour, rail: Rail, volts: number): number {
+  const { capacitance, smallSignalFactor, halvingVoltage, biasExponent } = row;
+  const biased = ceramicCapacitance(capacitance, smallSignalFactor, halvingVoltage, biasExponent, volts);
+  if (!flavour.worst) return biased;
+  const tolerance = Math.max(rail.tolerances.capacitance, row.tolerance);
+  return biased * ceramicWorstFactor(tolerance, row.temperatureDrop, row.ageing, AGED_HOURS);
 }

@@ -12,6 +12,9 @@ const EFFICIENCY = 0.9;
 /** Points at which the impedance is looked at, and the span of frequency around the corner that they cover. */
 const POINTS = 33;
 const SPAN = 8;
+/** Those frequencies over the corner, and their inverses. */
+const RATIOS = Float64Array.from({ length: POINTS }, (_, i) => 1 / SPAN + (i / (POINTS - 1)) * (SPAN - 1 / SPAN));
+const PER_RATIO = RATIOS.map((ratio) => 1 / ratio);
 
 /**
  * Inductance, H, that lets `allowed` A peak to peak of a bank ripple of `ripple` V peak to peak at `frequency` Hz into the source:
@@ -49,32 +52,29 @@ export function chooseFilterChoke(
  * @valid inductance above 0
  */
 export function peakSourceImpedance(resistance: number, inductance: number, bank: Bank): number {
-  const corner = 1 / Math.sqrt(inductance * (bank.c1 + bank.c2));
-  let most = 0;
+  const { c1, r1, c2, r2 } = bank;
+  const corner = 1 / Math.sqrt(inductance * (c1 + c2));
+  const reactance = corner * inductance;
+  const first = -1 / (corner * c1);
+  const second = c2 > 0 ? -1 / (corner * c2) : 0;
+  let least = Number.POSITIVE_INFINITY;
   for (let i = 0; i < POINTS; i++) {
-    const omega = corner * (1 / SPAN + (i / (POINTS - 1)) * (SPAN - 1 / SPAN));
-    most = Math.max(most, impedanceSquare(resistance, inductance, bank, omega));
+    // Admittances of the source branch and of both capacitor groups add.
+    const x = RATIOS[i] * reactance;
+    const x1 = PER_RATIO[i] * first;
+    const y = 1 / (resistance * resistance + x * x);
+    const y1 = 1 / (r1 * r1 + x1 * x1);
+    let re = resistance * y + r1 * y1;
+    let im = x * y + x1 * y1;
+    if (c2 > 0) {
+      const x2 = PER_RATIO[i] * second;
+      const y2 = 1 / (r2 * r2 + x2 * x2);
+      re += r2 * y2;
+      im += x2 * y2;
+    }
+    least = Math.min(least, re * re + im * im);
   }
-  return Math.sqrt(most);
-}
-
-/** |Z|² at `omega` (rad/s): admittances of the source branch and of both capacitor groups add. */
-function impedanceSquare(resistance: number, inductance: number, bank: Bank, omega: number): number {
-  const x = omega * inductance;
-  const source = resistance * resistance + x * x;
-  let re = resistance / source;
-  let im = -x / source;
-  const x1 = -1 / (omega * bank.c1);
-  const z1 = bank.r1 * bank.r1 + x1 * x1;
-  re += bank.r1 / z1;
-  im -= x1 / z1;
-  if (bank.c2 > 0) {
-    const x2 = -1 / (omega * bank.c2);
-    const z2 = bank.r2 * bank.r2 + x2 * x2;
-    re += bank.r2 / z2;
-    im -= x2 / z2;
-  }
-  return 1 / (re * re + im * im);
+  return 1 / Math.sqrt(least);
 }
 
 /** Resistance (Ω) and inductance (H) between an ideal source and the input bank of `design`. */

@@ -94,21 +94,18 @@ export function settleGaps(s: ChokeSteadyState): void {
   const rests = pauses(s.mode);
   const valley = rests ? 0 : s.current - half;
   const peak = rests ? s.ripple : s.current + half;
-  const first = valley >= 0 ? s.gapFall * hard(s, valley) : -s.gapRise * soft(s, -valley);
-  const second = peak >= 0 ? s.gapFall * soft(s, peak) : -s.gapRise * hard(s, -peak);
+  // Share of a gap in which the body diode conducts: before a hard edge, before a soft one.
+  const first =
+    valley >= 0
+      ? s.gapFall * Math.min(1, valley / s.gapCurrent)
+      : -s.gapRise * (-valley > s.waitCurrent ? 1 + s.waitCurrent / valley : 0);
+  const second =
+    peak >= 0
+      ? s.gapFall * (peak > s.waitCurrent ? 1 - s.waitCurrent / peak : 0)
+      : -s.gapRise * Math.min(1, -peak / s.gapCurrent);
   // Half of what drives the choke at most: so duties stay between 0 and 1 where hardly anything does, and broken limits tell the rest.
   const most = (0.5 * s.rise * s.fall) / (s.rise + s.fall);
   s.gapVolts = Math.max(-most, Math.min(most, first + second));
-}
-
-/** Share of a gap in which the body diode conducts before a hard edge, of a current's size in A. */
-function hard(s: ChokeSteadyState, size: number): number {
-  return Math.min(1, size / s.gapCurrent);
-}
-
-/** The same before a soft edge. */
-function soft(s: ChokeSteadyState, size: number): number {
-  return size > s.waitCurrent ? 1 - s.waitCurrent / size : 0;
 }
 
 /** Copies the solution for power from input to output into `state`. */

@@ -8,8 +8,8 @@ interface Offer {
   readonly unit: string;
   /** Worst value that still counts, from the sheet alone, in `unit`. */
   reference(rail: Rail): number;
-  /** Value of the design that `e` holds, in `unit`. */
-  value(e: Evaluator): number;
+  /** Writes the value of the design that `e` holds, in `unit`: a double that a call returns would be boxed. */
+  readonly write: ObjectiveWriter;
 }
 
 /** Archive cells over the range of an objective. */
@@ -36,26 +36,52 @@ const OFFERS: Readonly<Record<ObjectiveName, Offer>> = {
   loss: {
     unit: 'W',
     reference: (rail) => LOSS_SHARE * Math.max(meanPower(rail), 0.1 * fullPower(rail)),
-    value: (e) => e.loss,
+    write: (e, into, k) => {
+      into[k] = e.loss;
+    },
   },
-  inefficiency: { unit: '', reference: () => LOSS_SHARE, value: (e) => e.loss / e.inflow },
-  volume: { unit: 'm³', reference: volumeReference, value: (e) => e.assembly.volume },
+  inefficiency: {
+    unit: '',
+    reference: () => LOSS_SHARE,
+    write: (e, into, k) => {
+      into[k] = e.loss / e.inflow;
+    },
+  },
+  volume: {
+    unit: 'm³',
+    reference: volumeReference,
+    write: (e, into, k) => {
+      into[k] = e.assembly.volume;
+    },
+  },
   cost: {
     unit: 'currency',
     reference: (rail) => rail.limits.cost ?? costBase(rail) + COST_PER_WATT * fullPower(rail),
-    value: (e) => e.assembly.cost,
+    write: (e, into, k) => {
+      into[k] = e.assembly.cost;
+    },
   },
   'board-area': {
     unit: 'm²',
     reference: (rail) => rail.limits.boardArea ?? volumeReference(rail) / (rail.limits.height ?? USUAL_HEIGHT),
-    value: (e) => e.assembly.boardArea,
+    write: (e, into, k) => {
+      into[k] = e.assembly.boardArea;
+    },
   },
   mass: {
     unit: 'kg',
     reference: (rail) => rail.limits.mass ?? DENSITY * volumeReference(rail),
-    value: (e) => e.assembly.mass,
+    write: (e, into, k) => {
+      into[k] = e.assembly.mass;
+    },
   },
-  'full-load-loss': { unit: 'W', reference: (rail) => LOSS_SHARE * fullPower(rail), value: (e) => e.fullLoss },
+  'full-load-loss': {
+    unit: 'W',
+    reference: (rail) => LOSS_SHARE * fullPower(rail),
+    write: (e, into, k) => {
+      into[k] = e.fullLoss;
+    },
+  },
 };
 
 /** The objectives of `rail` in the sheet's order. */
@@ -67,9 +93,12 @@ export function objectivesOf(rail: Rail): readonly Objective[] {
   });
 }
 
-/** Readers of the objectives' values, in the sheet's order. */
-export function objectiveReaders(rail: Rail): readonly ((e: Evaluator) => number)[] {
-  return rail.objectives.map((name) => OFFERS[name].value);
+/** Writes an objective's value to `into[place]`. */
+export type ObjectiveWriter = (e: Evaluator, into: Float64Array, place: number) => void;
+
+/** Writers of the objectives' values, in the sheet's order. */
+export function objectiveWriters(rail: Rail): readonly ObjectiveWriter[] {
+  return rail.objectives.map((name) => OFFERS[name].write);
 }
 
 /** W at full load and nominal output. */

@@ -7,7 +7,6 @@ import type { Flavour } from './flavour.ts';
 import { BOARD_MAXIMUM, HOT, HOT_PARTS, solveHeat } from './heat-balance.ts';
 import { SLOT, sumSlots } from './ledger.ts';
 import { COPPER_TEMPCO } from './magnetics/index.ts';
-import type { Bulk } from './parts/bulk.ts';
 import type { PointSolver } from './point-solver.ts';
 import { diodeLeakageLoss, RESISTANCE_REFERENCE } from './switches/index.ts';
 
@@ -37,13 +36,13 @@ const COPPER = SLOT['board.copper'];
 const BOARD_SLOTS = SLOT['outputCeramic.seriesResistance'];
 
 /** Fills in the thermal paths of `design` with the point's active phases, and how its resistances rise with temperature. */
-export function prepareHeat(solver: PointSolver, design: Design, conductance: number): void {
+export function prepareHeat(solver: PointSolver, design: Design): void {
   const { heat, state, rail, tempco } = solver;
   const spare = rail.derating.temperature;
   const phases = state.activePhases;
   const { stage, transformer, high, low, diode } = design;
   heat.ambient = rail.ambient;
-  heat.conductance = conductance;
+  heat.conductance = solver.conductance;
   heat.resistance[HIGH] = high.thermalResistance / (phases * stage.highDevices * design.highParallel);
   heat.allowed[HIGH] = high.maximumJunction - spare;
   tempco[HIGH] = high.resistanceTempco;
@@ -138,25 +137,33 @@ function windings(solver: PointSolver, design: Design): number {
 
 /** What the bulk capacitors' own heating leaves of the board's temperature. */
 function allowBulks(solver: PointSolver, design: Design): void {
-  const { heat, outputRipple, inputRipple } = solver;
+  const { heat } = solver;
   const spare = solver.rail.derating.temperature;
   const { outputBulk, inputBulk } = design;
-  heat.outputBulkRise = bulkRise(outputBulk, design.outputBulkCount, outputRipple.meanSquare2);
-  heat.inputBulkRise = bulkRise(inputBulk, design.inputBulkCount, inputRipple.meanSquare2);
-  let allowed = BOARD_MAXIMUM;
+  findBulkRises(solver, design);
+  heat.boardAllowed = BOARD_MAXIMUM;
   if (outputBulk !== undefined) {
-    allowed = Math.min(allowed, outputBulk.maximumTemperature - spare - heat.outputBulkRise);
+    heat.boardAllowed = Math.min(heat.boardAllowed, outputBulk.maximumTemperature - spare - heat.outputBulkRise);
   }
   if (inputBulk !== undefined) {
-    allowed = Math.min(allowed, inputBulk.maximumTemperature - spare - heat.inputBulkRise);
+    heat.boardAllowed = Math.min(heat.boardAllowed, inputBulk.maximumTemperature - spare - heat.inputBulkRise);
   }
-  heat.boardAllowed = allowed;
 }
 
-/** Rise of a bulk capacitor over the board by its own heating, K: rated rise times the square of current over rating; 0 without one. */
-export function bulkRise(bulk: Bulk | undefined, count: number, square: number): number {
-  if (bulk === undefined) return 0;
-  return (bulk.ratedRise * square) / (count * count * bulk.rippleRating * bulk.rippleRating);
+/** Rises of the bulk capacitors over the board by their own heating: rated rise times the square of current over rating. */
+export function findBulkRises(solver: PointSolver, design: Design): void {
+  const { heat, outputRipple, inputRipple } = solver;
+  const { outputBulk, outputBulkCount, inputBulk, inputBulkCount } = design;
+  heat.outputBulkRise = 0;
+  heat.inputBulkRise = 0;
+  if (outputBulk !== undefined) {
+    const rated = outputBulkCount * outputBulk.rippleRating;
+    heat.outputBulkRise = (outputBulk.ratedRise * outputRipple.meanSquare2) / (rated * rated);
+  }
+  if (inputBulk !== undefined) {
+    const rated = inputBulkCount * inputBulk.rippleRating;
+    heat.inputBulkRise = (inputBulk.ratedRise * inputRipple.meanSquare2) / (rated * rated);
+  }
 }
 
 /** A diode's drop falls with temperature, its leakage doubles: the straight line through the round's temperature. */

@@ -32,6 +32,10 @@ export class PointSolver {
   loss = 0.5;
   /** W, delivered to the load; negative in reverse flow. */
   outputPower = 0.5;
+  /** W, that flows in on the side that feeds: set at usual points. */
+  inputPower = 0.5;
+  /** Board and sink to ambient, W/K. */
+  conductance = 0.5;
 
   constructor(rail: Rail, heat: HeatBalance) {
     this.rail = rail;

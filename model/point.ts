@@ -24,8 +24,8 @@ const FIRST_RISE = 30;
 const LEAST_LOAD = 1e-6;
 
 /**
- * Solves `planned` for `design` under `flavour` with `phases` active phases; `boardConductance` is that of board and sink
- * to ambient, W/K. Results stand in `solver`.
+ * Solves `planned` for `design` under `flavour` with `phases` active phases and the solver's conductance to ambient.
+ * Results stand in `solver`.
  */
 export function solvePoint(
   solver: PointSolver,
@@ -33,10 +33,9 @@ export function solvePoint(
   flavour: Flavour,
   planned: PlannedPoint,
   phases: number,
-  boardConductance: number,
 ): void {
   ask(solver, design, flavour, planned, phases);
-  prepareHeat(solver, design, boardConductance);
+  prepareHeat(solver, design);
   const rounds = solver.warm && design.diode === undefined ? WARM_ROUNDS : COLD_ROUNDS;
   for (let round = 1; round <= rounds; round++) solveRound(solver, design, flavour, round === rounds);
   solver.warm = true;

@@ -6,7 +6,7 @@ import { type Catalogue, createCatalogue, hasTransformer, isFullBridge, usesLowS
 import { Evaluator, judgeDesign } from './evaluate.ts';
 import { createGenes, GENE, type GeneName, NUMERIC_GENES } from './genes.ts';
 import type { LimitDefinition } from './limits/book.ts';
-import { objectiveReaders, objectivesOf } from './objectives.ts';
+import { objectivesOf, objectiveWriters } from './objectives.ts';
 import { bad, type Finding, good, type Outcome } from './outcome.ts';
 import type { PartsTables } from './parts/tables.ts';
 import type { Rail } from './rail/rail.ts';
@@ -101,7 +101,7 @@ class ConverterSpace implements RailProblem {
   readonly families: Families;
   seeds: readonly Float64Array[] = [];
   private readonly evaluator: Evaluator;
-  private readonly readers;
+  private readonly writers;
   private readonly space: RecordSpace;
 
   constructor(rail: Rail, catalogue: Catalogue, stages: readonly Stage[]) {
@@ -112,7 +112,7 @@ class ConverterSpace implements RailProblem {
     this.genes = createGenes(rail, catalogue);
     this.numericGenes = numericGenes(catalogue);
     this.objectives = objectivesOf(rail);
-    this.readers = objectiveReaders(rail);
+    this.writers = objectiveWriters(rail);
     this.evaluator = new Evaluator(rail, catalogue, stages);
     this.limitDefinitions = this.evaluator.book.definitions;
     this.limits = this.limitDefinitions.map((definition) => definition.name);
@@ -125,9 +125,9 @@ class ConverterSpace implements RailProblem {
   }
 
   evaluate(genes: Float64Array, objectives: Float64Array, violations: Float64Array): void {
-    const { evaluator, readers } = this;
+    const { evaluator, writers } = this;
     judgeDesign(evaluator, genes);
-    for (let i = 0; i < readers.length; i++) objectives[i] = readers[i](evaluator);
+    for (let i = 0; i < writers.length; i++) writers[i](evaluator, objectives, i);
     evaluator.book.violations(violations);
   }
 

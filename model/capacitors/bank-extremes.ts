@@ -5,15 +5,16 @@ import { walkState } from './bank-state.ts';
 const scratch = new Float64Array(1);
 
 /**
- * Terminal voltage at `walkState.t`, where e^(−t/τ) is `walkState.et`, V over the reference level.
+ * Writes the terminal voltage at `walkState.t`, where e^(−t/τ) is `walkState.et`, to `walkState.v`, V over the reference level.
  * @derivation the network of `bankRipple`
  * @valid as there
  */
-export function voltageThere(): number {
+export function findVoltage(): void {
   const { t, a, s } = walkState;
   const difference = walkState.base + walkState.drift * t + walkState.k * walkState.et;
   const q = walkState.q + (a + 0.5 * s * t) * t;
-  return q / walkState.total + walkState.share * difference + walkState.parallel * (a + s * t) + walkState.esl * s;
+  walkState.v =
+    q / walkState.total + walkState.share * difference + walkState.parallel * (a + s * t) + walkState.esl * s;
 }
 
 /**
@@ -22,7 +23,8 @@ export function voltageThere(): number {
  * @valid as there
  */
 export function extend(): void {
-  const v = voltageThere();
+  findVoltage();
+  const { v } = walkState;
   if (v > walkState.highest) walkState.highest = v;
   if (v < walkState.lowest) walkState.lowest = v;
 }

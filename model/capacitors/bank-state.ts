@@ -37,9 +37,10 @@ export const walkState = {
   to: 0.5,
   atFrom: 0.5,
   atTo: 0.5,
-  // A time in the segment and its e^(−t/τ).
+  // A time in the segment, its e^(−t/τ), the terminal voltage there.
   t: 0.5,
   et: 0.5,
+  v: 0.5,
   // A group's current p + r·t + f·e^(−t/τ).
   p: 0.5,
   r: 0.5,

@@ -2,7 +2,7 @@
 import { exp } from '../../optimizer/maths/index.ts';
 import type { Waveform } from '../waveform/waveform.ts';
 import type { Bank } from './bank.ts';
-import { voltageThere } from './bank-extremes.ts';
+import { findVoltage } from './bank-extremes.ts';
 import { isPair, pairTrace } from './bank-pair.ts';
 import { walkState } from './bank-state.ts';
 import { beginWalk, enterSegment, walk } from './bank-walk.ts';
@@ -32,7 +32,8 @@ export function bankTrace(bank: Bank, current: Waveform, points: number): BankTr
       walkState.t = (d * p) / (points + 1);
       walkState.et = walkState.tau > 0 ? exp(-walkState.t / walkState.tau) : 0;
       time.push(start + walkState.t);
-      value.push(voltageThere());
+      findVoltage();
+      value.push(walkState.v);
     }
     walk(bank, current, i, false);
     start += d;

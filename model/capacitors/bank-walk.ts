@@ -3,7 +3,6 @@
  * Its functions speak through one record instead of arguments.
  */
 import { expAt } from '../../optimizer/maths/index.ts';
-import { mean } from '../waveform/moments.ts';
 import type { Waveform } from '../waveform/waveform.ts';
 import type { Bank } from './bank.ts';
 import { extend, turns } from './bank-extremes.ts';
@@ -20,7 +19,9 @@ const decay = new Float64Array(256);
  */
 export function beginWalk(bank: Bank, current: Waveform): void {
   prepare(bank);
-  walkState.average = mean(current);
+  let area = 0;
+  for (let i = 0; i < current.count; i++) area += current.duration[i] * (current.start[i] + current.end[i]);
+  walkState.average = (0.5 * area) / current.period;
   findStart(current);
   walkState.q = 0;
   walkState.highest = Number.NEGATIVE_INFINITY;

@@ -75,6 +75,14 @@ export class LimitBook {
     this.weighByScale(place, point);
   }
 
+  /** The same for value, allowed and scale that stand in `asked[0 … 2]`. */
+  judgeAt(place: number, asked: Float64Array, point: number): void {
+    this.found = asked[0];
+    this.bound = asked[1];
+    this.scale = asked[2];
+    this.weighByScale(place, point);
+  }
+
   private weigh(place: number, point: number): void {
     this.scale = this.bound;
     this.weighByScale(place, point);

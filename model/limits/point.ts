@@ -5,7 +5,7 @@ import type { Evaluator } from '../evaluate.ts';
 import { BOARD_MAXIMUM, type HeatBalance, HOT } from '../heat-balance.ts';
 import type { Bulk } from '../parts/bulk.ts';
 import type { PlannedPoint } from '../plan.ts';
-import { bulkRise } from '../point-heat.ts';
+import { findBulkRises } from '../point-heat.ts';
 import { MODE, type StageState } from '../stages/state.ts';
 import { findStepExcursion } from '../step-response.ts';
 import { overshoot } from '../switches/index.ts';
@@ -13,6 +13,13 @@ import { judgeMagnetics } from './magnetics.ts';
 
 /** Largest loop gain of heating that is still accepted; at 1 the temperature has no end. */
 const RUNAWAY_MAXIMUM = 0.9;
+
+/**
+ * Value, allowed and scale of the judgement at hand: in an array, so that no double crosses a call (one that does is boxed, a
+ * hundred times a design).
+ */
+const asked = new Float64Array(3);
+const peak = new Float64Array(1);
 
 /** Notes every limit but those of heat at the worst point that the solver holds; `index` names it in the report. */
 export function judgePoint(e: Evaluator, planned: PlannedPoint, index: number): void {
@@ -27,72 +34,90 @@ export function judgePoint(e: Evaluator, planned: PlannedPoint, index: number): 
 
 /** Notes ripple and capacitor limits of a line between the corners. */
 export function judgeRipple(e: Evaluator): void {
-  const { design, solver } = e;
-  const { heat, outputRipple, inputRipple } = solver;
   judgeRippleAt(e, -1);
   judgeCapacitors(e, -1);
-  heat.outputBulkRise = bulkRise(design.outputBulk, design.outputBulkCount, outputRipple.meanSquare2);
-  heat.inputBulkRise = bulkRise(design.inputBulk, design.inputBulkCount, inputRipple.meanSquare2);
-  judgeBulkHeat(e, heat, -1);
+  findBulkRises(e.solver, e.design);
+  judgeBulkHeat(e, e.solver.heat, -1);
 }
 
 /** Notes the limits of heat at a worst point. */
 export function judgeHeat(e: Evaluator, heat: HeatBalance, index: number): void {
-  const { book, places, rail } = e;
+  const { book, places } = e;
   judgeHot(e, places.highJunction, heat, HOT.high, index);
   judgeHot(e, places.lowJunction, heat, HOT.low, index);
   judgeHot(e, places.inductorTemperature, heat, HOT.inductor, index);
   if (e.design.stage.form !== undefined) judgeHot(e, places.transformerTemperature, heat, HOT.transformer, index);
-  const rise = Math.max(1, BOARD_MAXIMUM - rail.ambient);
-  book.judgeBy(places.boardTemperature, heat.boardTemperature, BOARD_MAXIMUM, rise, index);
-  book.judge(places.thermalRunaway, heat.runaway, RUNAWAY_MAXIMUM, index);
+  asked[0] = heat.boardTemperature;
+  asked[1] = BOARD_MAXIMUM;
+  judgeTemperature(e, places.boardTemperature, index);
+  asked[0] = heat.runaway;
+  asked[1] = RUNAWAY_MAXIMUM;
+  asked[2] = RUNAWAY_MAXIMUM;
+  book.judgeAt(places.thermalRunaway, asked, index);
   judgeBulkHeat(e, heat, index);
 }
 
-/** A temperature is missed by a fraction of the rise that was allowed. */
 function judgeHot(e: Evaluator, place: number, heat: HeatBalance, part: number, index: number): void {
-  const allowed = heat.allowed[part];
-  e.book.judgeBy(place, heat.temperature[part], allowed, Math.max(1, allowed - e.rail.ambient), index);
+  asked[0] = heat.temperature[part];
+  asked[1] = heat.allowed[part];
+  judgeTemperature(e, place, index);
+}
+
+/** The asked temperature is missed by a fraction of the rise that was allowed. */
+function judgeTemperature(e: Evaluator, place: number, index: number): void {
+  asked[2] = Math.max(1, asked[1] - e.rail.ambient);
+  e.book.judgeAt(place, asked, index);
 }
 
 function judgeBulkHeat(e: Evaluator, heat: HeatBalance, index: number): void {
-  const { book, places, rail } = e;
+  const { places, rail } = e;
   const { outputBulk, inputBulk } = e.design;
   const spare = rail.derating.temperature;
   if (outputBulk !== undefined) {
-    const allowed = outputBulk.maximumTemperature - spare;
-    const temperature = heat.boardTemperature + heat.outputBulkRise;
-    book.judgeBy(places.bulkTemperature, temperature, allowed, Math.max(1, allowed - rail.ambient), index);
+    asked[0] = heat.boardTemperature + heat.outputBulkRise;
+    asked[1] = outputBulk.maximumTemperature - spare;
+    judgeTemperature(e, places.bulkTemperature, index);
   }
   if (inputBulk !== undefined) {
-    const allowed = inputBulk.maximumTemperature - spare;
-    const temperature = heat.boardTemperature + heat.inputBulkRise;
-    book.judgeBy(places.bulkTemperature, temperature, allowed, Math.max(1, allowed - rail.ambient), index);
+    asked[0] = heat.boardTemperature + heat.inputBulkRise;
+    asked[1] = inputBulk.maximumTemperature - spare;
+    judgeTemperature(e, places.bulkTemperature, index);
   }
 }
 
-/** Peak of one phase with unequal sharing, A, signless. */
-function phasePeak(state: StageState, design: Design): number {
+/** The asked value is missed by a fraction of what is allowed. */
+function judgeAsked(e: Evaluator, place: number, index: number): void {
+  asked[2] = asked[1];
+  e.book.judgeAt(place, asked, index);
+}
+
+/** Writes the peak of one phase with unequal sharing, A, signless, to `peak[0]`. */
+function findPhasePeak(state: StageState, design: Design): void {
   const sharing = design.phases > 1 ? Math.abs(state.meanCurrent) * design.controller.sharingError : 0;
   const jitter = (state.inputVoltage * design.controller.jitter) / state.effectiveInductance;
-  return Math.max(Math.abs(state.peakCurrent), Math.abs(state.valleyCurrent)) + sharing + jitter;
+  peak[0] = Math.max(Math.abs(state.peakCurrent), Math.abs(state.valleyCurrent)) + sharing + jitter;
 }
 
 function judgeCurrents(e: Evaluator, index: number): void {
-  const { design, book, places } = e;
-  const peak = phasePeak(e.solver.state, design);
-  const limited = peak * design.controller.currentLimitSpread;
-  book.judge(places.saturation, limited, design.inductor.saturationCurrent, index);
-  const { high, low, diode } = design;
-  const { stage } = design;
-  const drawn = stage.form === undefined ? peak : peak / design.transformer.ratio + e.solver.state.magnetizingPeak;
-  book.judge(places.switchCurrent, drawn / design.highParallel, high.currentRating, index);
+  const { design, places } = e;
+  const { state } = e.solver;
+  const { high, low, diode, stage } = design;
+  findPhasePeak(state, design);
+  asked[0] = peak[0] * design.controller.currentLimitSpread;
+  asked[1] = design.inductor.saturationCurrent;
+  judgeAsked(e, places.saturation, index);
+  const drawn = stage.form === undefined ? peak[0] : peak[0] / design.transformer.ratio + state.magnetizingPeak;
+  asked[0] = drawn / design.highParallel;
+  asked[1] = high.currentRating;
+  judgeAsked(e, places.switchCurrent, index);
   if (diode === undefined) {
-    const rectified = (stage.form?.doubler === true ? 2 * peak : peak) / design.lowParallel;
-    book.judge(places.switchCurrent, rectified, low.currentRating, index);
+    asked[0] = (stage.form?.doubler === true ? 2 * peak[0] : peak[0]) / design.lowParallel;
+    asked[1] = low.currentRating;
   } else {
-    book.judge(places.switchCurrent, e.solver.state.lowMean, diode.currentRating, index);
+    asked[0] = state.lowMean;
+    asked[1] = diode.currentRating;
   }
+  judgeAsked(e, places.switchCurrent, index);
 }
 
 /**
@@ -100,69 +125,77 @@ function judgeCurrents(e: Evaluator, index: number): void {
  * edge of length t cannot ring beyond 2·L·I/t, twice its inductive drop: the smaller holds.
  */
 function judgeOvershoot(e: Evaluator, planned: PlannedPoint, index: number): void {
-  const { design, book, places } = e;
+  const { design, places } = e;
   const { state } = e.solver;
   if (design.stage.form !== undefined || !(state.peakCurrent > 0)) return;
   const { high, highParallel, highEdges } = design;
   const capacitance = (highParallel * high.outputCharge) / high.outputTestVoltage;
   const time = highEdges.offTime + highEdges.offSlope * state.peakCurrent;
   const ramp = (2 * LOOP_INDUCTANCE * state.peakCurrent) / time;
-  const rise = Math.min(overshoot(state.peakCurrent, LOOP_INDUCTANCE, capacitance), ramp);
-  book.judge(places.highVoltage, planned.inputVoltage + rise, high.voltageRating, index);
+  asked[0] = planned.inputVoltage + Math.min(overshoot(state.peakCurrent, LOOP_INDUCTANCE, capacitance), ramp);
+  asked[1] = high.voltageRating;
+  judgeAsked(e, places.highVoltage, index);
 }
 
 function judgeTimes(e: Evaluator, index: number): void {
-  const { design, book, places, rail } = e;
+  const { design, places, rail } = e;
   const { controller } = design;
   const period = 1 / (design.frequency * (1 + rail.tolerances.oscillator));
   const { state } = e.solver;
   // While pulses are skipped the controller itself holds the shortest on-time.
   const skipping = state.mode === MODE.skipping || state.mode === MODE.off;
   const on = skipping ? design.shortestOnTime : (state.dutyCycle * period) / design.stage.chokeMultiple;
-  const { shortestOnTime } = design;
-  if (shortestOnTime > 0) book.judge(places.minimumOnTime, on, shortestOnTime, index);
+  if (design.shortestOnTime > 0) {
+    asked[0] = on;
+    asked[1] = design.shortestOnTime;
+    judgeAsked(e, places.minimumOnTime, index);
+  }
   if (controller.minimumOffTime > 0) {
-    const whole = design.stage.form?.doubleEnded === true ? 0.5 * period : period;
-    book.judge(places.minimumOffTime, whole - on, controller.minimumOffTime, index);
+    asked[0] = (design.stage.form?.doubleEnded === true ? 0.5 * period : period) - on;
+    asked[1] = controller.minimumOffTime;
+    judgeAsked(e, places.minimumOffTime, index);
   }
 }
 
 function judgeRippleAt(e: Evaluator, index: number): void {
-  const { book, places, rail, solver } = e;
-  book.judge(places.outputRipple, solver.outputRipple.ripple, rail.output.ripple, index);
+  const { places, rail, solver } = e;
+  asked[0] = solver.outputRipple.ripple;
+  asked[1] = rail.output.ripple;
+  judgeAsked(e, places.outputRipple, index);
   const allowed = rail.input.ripple;
-  if (allowed !== undefined) book.judge(places.inputRipple, solver.inputRipple.ripple, allowed, index);
+  if (allowed === undefined) return;
+  asked[0] = solver.inputRipple.ripple;
+  asked[1] = allowed;
+  judgeAsked(e, places.inputRipple, index);
 }
 
 function judgeCapacitors(e: Evaluator, index: number): void {
-  const { book, places, design, solver } = e;
-  const output = solver.outputRipple;
-  const input = solver.inputRipple;
-  const { outputCeramic, inputCeramic } = design;
-  const out = Math.sqrt(output.meanSquare1) / design.outputCeramicCount;
-  book.judge(places.outputCeramicCurrent, out, outputCeramic.rippleRating, index);
-  const into = Math.sqrt(input.meanSquare1) / design.inputCeramicCount;
-  book.judge(places.inputCeramicCurrent, into, inputCeramic.rippleRating, index);
-  judgeBulk(e, places.outputBulkCurrent, design.outputBulk, design.outputBulkCount, output.meanSquare2, index);
-  judgeBulk(e, places.inputBulkCurrent, design.inputBulk, design.inputBulkCount, input.meanSquare2, index);
+  const { places, design, solver } = e;
+  const { outputRipple, inputRipple } = solver;
+  asked[0] = Math.sqrt(outputRipple.meanSquare1) / design.outputCeramicCount;
+  asked[1] = design.outputCeramic.rippleRating;
+  judgeAsked(e, places.outputCeramicCurrent, index);
+  asked[0] = Math.sqrt(inputRipple.meanSquare1) / design.inputCeramicCount;
+  asked[1] = design.inputCeramic.rippleRating;
+  judgeAsked(e, places.inputCeramicCurrent, index);
+  if (design.outputBulk !== undefined) {
+    asked[0] = Math.sqrt(outputRipple.meanSquare2) / design.outputBulkCount;
+    judgeBulk(e, places.outputBulkCurrent, design.outputBulk, index);
+  }
+  if (design.inputBulk !== undefined) {
+    asked[0] = Math.sqrt(inputRipple.meanSquare2) / design.inputBulkCount;
+    judgeBulk(e, places.inputBulkCurrent, design.inputBulk, index);
+  }
 }
 
-function judgeBulk(
-  e: Evaluator,
-  place: number,
-  bulk: Bulk | undefined,
-  count: number,
-  square: number,
-  index: number,
-): void {
-  if (bulk === undefined) return;
-  const each = square / (count * count);
-  const allowed = bulk.rippleRating * e.rail.derating.rippleCurrent;
-  e.book.judge(place, Math.sqrt(each), allowed, index);
+/** The asked current against the derated rating. */
+function judgeBulk(e: Evaluator, place: number, bulk: Bulk, index: number): void {
+  asked[1] = bulk.rippleRating * e.rail.derating.rippleCurrent;
+  judgeAsked(e, place, index);
 }
 
 function judgeStep(e: Evaluator, planned: PlannedPoint, index: number): void {
-  const { rail, book, places, design, worst, step } = e;
+  const { rail, places, design, worst, step } = e;
   if (rail.step === undefined) return;
   step.inputVoltage = planned.inputVoltage;
   step.outputVoltage = planned.outputVoltage;
@@ -170,5 +203,7 @@ function judgeStep(e: Evaluator, planned: PlannedPoint, index: number): void {
   step.bank = worst.output;
   step.ripple = e.solver.outputRipple.ripple;
   findStepExcursion(design, rail.step, step);
-  book.judge(places.loadStep, step.excursion, rail.step.deviation, index);
+  asked[0] = step.excursion;
+  asked[1] = rail.step.deviation;
+  judgeAsked(e, places.loadStep, index);
 }

@@ -3,7 +3,7 @@ import { log10 } from '../../optimizer/maths/index.ts';
 import type { Bank } from '../capacitors/index.ts';
 import { Evaluator, judgeDesign } from '../evaluate.ts';
 import type { Flavour } from '../flavour.ts';
-import { objectiveReaders } from '../objectives.ts';
+import { objectiveWriters } from '../objectives.ts';
 import type { Ceramic } from '../parts/ceramic.ts';
 import type { RailProblem } from '../problem.ts';
 import type { Rail } from '../rail/rail.ts';
@@ -64,7 +64,7 @@ export function drawSamples(
   const stages = problem.architectures.map(stageOf).filter((stage): stage is Stage => stage !== undefined);
   const built = new Evaluator(problem.rail, problem.catalogue, stages);
   judgeDesign(built, genes);
-  const readers = objectiveReaders(problem.rail);
+  const writers = objectiveWriters(problem.rail);
   for (let sample = from; sample < to; sample++) {
     const row = rows.subarray((sample - from) * layout.width, (sample - from + 1) * layout.width);
     drawCauses(row, start, sample);
@@ -73,7 +73,7 @@ export function drawSamples(
     e.adjust = (evaluator) => adjust(evaluator, problem.rail, row);
     judgeDesign(e, genes);
     row.set(e.book.slack, FIXED + CHOKES);
-    for (const [k, read] of readers.entries()) row[FIXED + CHOKES + layout.limits + k] = read(e);
+    for (const [k, write] of writers.entries()) write(e, row, FIXED + CHOKES + layout.limits + k);
   }
   return rows;
 }

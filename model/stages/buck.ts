@@ -58,14 +58,15 @@ function solveBuck(design: Design, state: StageState): void {
   const current = state.loadCurrent / state.activePhases;
   state.meanCurrent = current;
   steady.frequency = design.frequency;
-  if (current >= 0) solveForward(design, state, current);
-  else solveReverse(design, state, -current);
+  steady.current = Math.abs(current);
+  if (current >= 0) solveForward(design, state);
+  else solveReverse(design, state);
   state.effectiveInductance = steady.inductance;
   writeCurrents(state);
 }
 
-function solveForward(design: Design, state: StageState, current: number): void {
-  steady.current = current;
+function solveForward(design: Design, state: StageState): void {
+  const { current } = steady;
   steady.blocking = design.stage.diode || design.emulates;
   steady.shortestRise = design.shortestOnTime;
   const drop = design.stage.diode ? design.diodeDrop(state.lowTemperature) : 0;
@@ -103,8 +104,8 @@ function keepDriving(state: StageState): void {
   if (!(steady.rise > least)) steady.rise = least;
 }
 
-function solveReverse(design: Design, state: StageState, current: number): void {
-  steady.current = current;
+function solveReverse(design: Design, state: StageState): void {
+  const { current } = steady;
   steady.blocking = design.emulates;
   steady.shortestRise = design.shortestOnTime;
   steady.rise = state.outputVoltage - current * (state.lowResistance + state.pathResistance);

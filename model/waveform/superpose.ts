@@ -3,7 +3,6 @@
  * Every breakpoint of a copy becomes an event with a change of slope and of value; events are sorted and walked once.
  * Cost: count · copies for the start value, plus the sort of the events.
  */
-import { mean } from './moments.ts';
 import type { Waveform } from './waveform.ts';
 
 /** Most events one sum may hold: 8 copies of 32 segments. */
@@ -62,7 +61,9 @@ export function sumUnequal(source: Waveform, copies: number, scales: Float64Arra
   sum.window = window;
   sum.offset = 0;
   sum.events = 0;
-  const average = mean(source);
+  let area = 0;
+  for (let i = 0; i < source.count; i++) area += source.duration[i] * (source.start[i] + source.end[i]);
+  const average = (0.5 * area) / source.period;
   for (let j = 0; j < copies; j++) sum.offset += average * (1 - scales[j]);
   let time = 0;
   for (let i = 0; i < source.count; i++) {

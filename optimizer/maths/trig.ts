@@ -5,6 +5,8 @@
  */
 import { reduceAt, reduced } from './reduce.ts';
 
+/** Above it an angle is reduced first. */
+const QUARTER_PI = 0.7853981633974483;
 const S1 = -0.16666666666666632;
 const S2 = 0.00833333333332249;
 const S3 = -0.0001984126982985795;
@@ -46,6 +48,26 @@ export function cosAt(a: Float64Array, i: number): void {
 
 /** Replaces `a[i]` by its sine and writes its cosine to `a[i + 1]`: one reduction for both. */
 export function sincosAt(a: Float64Array, i: number): void {
+  if (Math.abs(a[i]) <= QUARTER_PI) smallSincosAt(a, i);
+  else largeSincosAt(a, i);
+}
+
+/** The kernels of both without a reduction: the same to the last bit. */
+function smallSincosAt(a: Float64Array, i: number): void {
+  const x = a[i];
+  const z = x * x;
+  const w = z * z;
+  const half = 0.5 * z;
+  const near = 1 - half;
+  const even = z * (C1 + z * (C2 + z * C3)) + w * w * (C4 + z * (C5 + z * C6));
+  a[i + 1] = near + (1 - near - half + z * even);
+  if (x === 0) return;
+  const odd = S2 + z * (S3 + z * S4) + z * w * (S5 + z * S6);
+  const v = z * x;
+  a[i] = x + (z * (v * odd) + v * S1);
+}
+
+function largeSincosAt(a: Float64Array, i: number): void {
   const quadrant = reduceAt(a, i);
   fromQuadrant(a, i + 1, quadrant + 1);
   if (a[i] !== 0) fromQuadrant(a, i, quadrant);
