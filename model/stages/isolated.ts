@@ -57,7 +57,10 @@ export function solveIsolated(form: IsolatedForm, design: Design, state: StageSt
   writeFlux(form, design, transformer, state);
 }
 
-/** Volts across the choke in both intervals, after the drops of switches, windings, rectifiers and choke. */
+/**
+ * Volts across the choke in both intervals, after the drops of switches, windings, rectifiers and choke. While it rises its current
+ * also flows through the leakage, L/n² on its side, which takes its share of the volts: the rise lasts so much longer.
+ */
 function voltages(form: IsolatedForm, t: Transformer, state: StageState, phaseCurrent: number, current: number): void {
   const n = t.ratio;
   const pulse = current / n;
@@ -73,6 +76,9 @@ function voltages(form: IsolatedForm, t: Transformer, state: StageState, phaseCu
   steady.fall = state.outputVoltage + path + idle;
   // A secondary below the output cannot drive the choke: a duty of one and a broken limit tell, not a negative voltage.
   if (!(steady.rise > 1e-6 * state.inputVoltage)) steady.rise = 1e-6 * state.inputVoltage;
+  steady.rise *= state.inductance / (state.inductance + t.leakage / (n * n));
+  // While one choke of a doubler rises, the other falls through a rectifier that carries both.
+  if (form.doubler) steady.fall += idle * Math.min(1, steady.fall / steady.rise);
 }
 
 /**
@@ -161,14 +167,17 @@ function writeWaveforms(form: IsolatedForm, t: Transformer, state: StageState): 
 function writeFlux(form: IsolatedForm, design: Design, t: Transformer, state: StageState): void {
   const on = form.doubleEnded && !form.doubler ? 0.5 * state.dutyCycle : state.dutyCycle;
   const volts = form.share * state.inputVoltage;
-  const voltSeconds = (volts * on) / design.frequency;
+  // The leakage takes its share while the current rises.
+  const voltSeconds = Math.max(0, (volts * on) / design.frequency - (t.leakage * state.rippleCurrent) / t.ratio);
   state.fluxSwing = voltSeconds / (t.primaryTurns * t.area);
   state.fluxRamp = on;
   const swing = voltSeconds / t.magnetizing;
   state.magnetizingPeak = form.doubleEnded ? 0.5 * swing : swing;
-  // Sabaté 1990: a shifted bridge turns its current round through the whole swing, a hard-switched one from rest.
-  const edges = (form.doubleEnded && !form.doubler ? 2 : 1) * (design.phaseShifted ? 2 : 1);
-  state.lostDuty = (edges * t.leakage * design.frequency * Math.max(0, state.peakCurrent)) / (t.ratio * volts);
+  // Sabaté 1990: a shifted bridge turns its current round through the whole swing, a hard-switched one from rest. From the valley on
+  // the current rises with the choke's, which the duty itself allows for.
+  const edges = form.doubleEnded && !form.doubler ? 2 : 1;
+  const turned = Math.max(0, state.valleyCurrent) + (design.phaseShifted ? Math.max(0, state.peakCurrent) : 0);
+  state.lostDuty = (edges * t.leakage * design.frequency * turned) / (t.ratio * volts);
   if (!form.doubleEnded) addMagnetizing(t, state);
   state.rectifierVoltage = rectifierVoltage(form, state.inputVoltage, t.ratio);
 }

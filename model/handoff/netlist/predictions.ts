@@ -50,10 +50,7 @@ export function predictionsOf(point: SolvedPoint): Prediction[] {
   const twoInputs = point.input.c2 > 0;
   const list: Prediction[] = [
     one('mean output voltage', 'V', state.outputVoltage, BANDS.mean, 'mean', 'v(out)'),
-    {
-      ...one('output ripple', 'V', solver.outputRipple.ripple, BANDS.ripple, 'peak-to-peak', 'v(out)'),
-      floor: FLOOR * rail.output.ripple,
-    },
+    one('output ripple', 'V', besideLoad(point), BANDS.ripple, 'peak-to-peak', 'v(out)'),
     {
       ...one('input ripple', 'V', solver.inputRipple.ripple, BANDS.ripple, 'peak-to-peak', 'v(in)'),
       floor: FLOOR * (rail.input.ripple ?? 0),
@@ -79,6 +76,19 @@ export function predictionsOf(point: SolvedPoint): Prediction[] {
     list.push(one('primary rms', 'A', Math.sqrt(state.primaryMeanSquare), BANDS.rms, 'rms', 'i(vmp0)'));
   }
   return list;
+}
+
+/**
+ * Output ripple with the load of the netlist, V. The model's load draws a current and leaves all ripple to the bank; the netlist's
+ * is a resistance, so that its filter is damped, and takes its share of a current divider, the bank as large as ripple over current.
+ */
+function besideLoad({ state, solver }: SolvedPoint): number {
+  const { ripple } = solver.outputRipple;
+  const summed = new Float64Array(4);
+  measure(solver.summed, summed);
+  const swing = summed[PEAK] - summed[VALLEY];
+  const load = Math.abs(state.outputVoltage / state.loadCurrent);
+  return swing > 0 ? ripple / (1 + ripple / (swing * load)) : ripple;
 }
 
 function lowPosition(point: SolvedPoint): { name: string; vectors: string[] } {

@@ -9,7 +9,7 @@ export interface PulseTimes {
   readonly period: number;
   /** Length of a pulse at the primary. */
   readonly pulse: number;
-  /** Part of it whose volt-seconds go into the leakage: it turns the current round at first, then carries its rise. */
+  /** Part of it that turns the current round in the leakage, before the secondary drives anything. */
   readonly commutation: number;
   readonly gap: number;
 }
@@ -24,9 +24,10 @@ export function pulseTimes(point: SolvedPoint): PulseTimes {
   if (form === undefined) return { period, pulse: 0, commutation: 0, gap: 0 };
   const volts = form.share * state.inputVoltage;
   const gap = driver.deadTime;
-  // From rest to the peak within a pulse. A shifted bridge must first stop the peak of the last pulse, and wait out the gap.
-  const rise = (transformer.leakage * Math.max(0, state.peakCurrent)) / (transformer.ratio * volts);
-  const commutation = design.phaseShifted ? Math.max(gap, rise) + rise : rise;
+  // From rest to the valley that a pulse begins with. A shifted bridge must first stop the peak of the last pulse, and wait out the gap.
+  const pace = transformer.leakage / (transformer.ratio * volts);
+  const start = pace * Math.max(0, state.valleyCurrent);
+  const commutation = design.phaseShifted ? Math.max(gap, pace * Math.max(0, state.peakCurrent)) + start : start;
   const longest = form.doubleEnded ? 0.5 * period - 2 * gap : 0.5 * period;
   const pulse = Math.min(longest, state.highShare * choke + commutation);
   return { period, pulse, commutation, gap };
