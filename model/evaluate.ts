@@ -20,6 +20,7 @@ import {
 import { LOSS_SLOTS } from './ledger.ts';
 import { LimitBook } from './limits/book.ts';
 import { judgeConstruction } from './limits/construction.ts';
+import { addWear, judgeLife } from './limits/life.ts';
 import { limitsOf } from './limits/list.ts';
 import { type LimitPlaces, limitPlaces } from './limits/places.ts';
 import { judgeHeat, judgePoint, judgeRipple } from './limits/point.ts';
@@ -54,6 +55,8 @@ export class Evaluator {
   readonly step = new StepCase();
   /** Conductance of the bare board, W/K. */
   readonly bareBoard: number;
+  /** Wear of the output's and the input's wet electrolytics over the profile, 1/s. */
+  readonly wear = new Float64Array(2);
   /** W by slot, profile-weighted. */
   readonly weighted = new Float64Array(LOSS_SLOTS.length);
   /** Conductance of the heat sink of the design at hand, W/K; 0 without one. */
@@ -212,6 +215,7 @@ function addFilter(e: Evaluator): void {
 function sumUsual(e: Evaluator, listener?: PointListener): void {
   const { solver, weighted } = e;
   weighted.fill(0);
+  e.wear.fill(0);
   e.loss = 0;
   e.inflow = 0;
   solver.warm = false;
@@ -226,8 +230,10 @@ function sumUsual(e: Evaluator, listener?: PointListener): void {
     if (planned.load === 1) e.fullLoss = solver.loss;
     if (planned.share > 0) for (let k = 0; k < weighted.length; k++) weighted[k] += planned.share * solver.ledger[k];
     judgeUsual(e, planned, i);
+    addWear(e, planned.share);
     listener?.(solver, planned, i);
   }
+  judgeLife(e);
 }
 
 /** Efficiency and no-load limits at a usual point. */

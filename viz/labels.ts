@@ -130,6 +130,7 @@ export const LIMITS: Readonly<Record<string, string>> = {
   mass: 'mass',
   cost: 'cost',
   noLoadPower: 'input power at no load',
+  bulkLife: 'life of wet electrolytics',
 };
 
 /** Currents and voltages over a period, contributions that are no part, and modes. */

@@ -75,6 +75,7 @@ const OFFERS = [
   most('mass', 'kg', (rail) => rail.limits.mass !== undefined),
   most('cost', 'currency', (rail) => rail.limits.cost !== undefined),
   most('noLoadPower', 'W', (rail) => rail.limits.noLoadPower !== undefined),
+  least('bulkLife', 's', (rail) => rail.limits.life !== undefined),
 ] as const;
 
 /** Name of a limit; a least efficiency carries its load in its name and is none of these. */

@@ -68,7 +68,7 @@ function profileOf(profile: Sheet['load-profile']): readonly LoadPoint[] {
 }
 
 function limitsOf(limits: Sheet['limits']): SheetLimits {
-  const { height, volume, mass, cost } = limits;
+  const { height, volume, mass, cost, life } = limits;
   const boardArea = limits['board-area'];
   const noLoadPower = limits['no-load-power'];
   const minimumOnTime = limits['minimum-on-time'];
@@ -81,6 +81,7 @@ function limitsOf(limits: Sheet['limits']): SheetLimits {
     efficiency: limits.efficiency.map((entry) => ({ load: entry.load, atLeast: entry['at-least'] })),
     ...(noLoadPower === undefined ? {} : { noLoadPower }),
     ...(minimumOnTime === undefined ? {} : { minimumOnTime }),
+    ...(life === undefined ? {} : { life }),
   };
 }
 

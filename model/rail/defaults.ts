@@ -50,6 +50,7 @@ export const DEFAULTS: readonly SheetDefault[] = [
   { key: 'parts.bar', value: [], why: 'none' },
   { key: 'parts.prefer', value: [], why: 'none' },
   { key: 'limits.efficiency', value: [], why: 'none asked' },
+  { key: 'limits.life', value: '20000 h', why: 'more than two years of running before a wet electrolytic dries out' },
   { key: 'avoid', value: [], why: 'none' },
   { key: 'incumbents', value: [], why: 'none' },
   { key: 'advanced.islands', value: '8', why: 'enough for every family of designs' },

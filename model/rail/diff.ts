@@ -32,6 +32,7 @@ const UNITS: Readonly<Record<string, string>> = {
   'limits.efficiency[].atLeast': '%',
   'limits.noLoadPower': 'W',
   'limits.minimumOnTime': 's',
+  'limits.life': 's',
   'avoid[].from': 'Hz',
   'avoid[].to': 'Hz',
   'tolerances.inductance': '%',

@@ -68,6 +68,8 @@ export interface SheetLimits {
   readonly minimumOnTime?: number;
   /** Input power at no load and nominal input, W. */
   readonly noLoadPower?: number;
+  /** Shortest life of wet electrolytic capacitors over the load profile at the sheet's ambient, usual values, s. */
+  readonly life?: number;
 }
 
 /** Worst-case deviations, each a fraction above 0 (0.2 is ±20 %). */

@@ -56,6 +56,7 @@ const limits = keyed({
   efficiency: listOf(keyed({ load, 'at-least': share }), 0, 20, 'loads with the least efficiency there'),
   'no-load-power': upTo('power', 1e5).optional(),
   'minimum-on-time': upTo('time', 1e-3).optional(),
+  life: upTo('time', 3.6e9).optional(),
 });
 
 const search = keyed({

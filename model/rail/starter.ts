@@ -62,6 +62,7 @@ limits:
   efficiency:
     - {load: 100 %, at-least: 90 %}
   # no-load-power: 100 mW
+  # life: 20000 h           # of wet electrolytic capacitors over the load profile
   # minimum-on-time: 50 ns  # shortest on-time to plan with, whatever a controller promises
 
 # Bands that the switching frequency must stay out of; harmonics: 3 keeps the second and third out too.

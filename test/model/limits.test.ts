@@ -93,6 +93,48 @@ describe('on-time and off-time', () => {
   });
 });
 
+describe('life of wet electrolytics', () => {
+  const bulk = {
+    name: 'bulk',
+    technology: 'electrolytic',
+    capacitance: 470e-6,
+    tolerance: 0.2,
+    voltageRating: 10,
+    seriesResistance: 0.1,
+    seriesInductance: 0,
+    rippleRating: 1e6,
+    ratedRise: 5,
+    maximumTemperature: 378.15,
+    ratedLife: 2000 * 3600,
+    length: 1e-3,
+    width: 1e-3,
+    height: 1e-3,
+    mass: 1e-6,
+    prices: [],
+  } as const;
+  const made = (technology: 'electrolytic' | 'polymer') => ({
+    outputBulk: { ...bulk, technology },
+    outputBulkCount: 1,
+  });
+  const limits = { efficiency: [], life: 40_000 * 3600 };
+
+  it('2000 h at 105 °C are 64 000 h at 55 °C: they halve each 10 K (NCP5314 page 20, seen)', () => {
+    // A big board and parts without loss: it stays at the ambient to a few hundredths of a kelvin.
+    const figure = limit('bulkLife', made('electrolytic'), { limits, ambient: 328.15, coolingArea: 100 });
+    expect(figure.value / 3600 / 64_000).toBeCloseTo(1, 2);
+    expect(figure.violation).toBe(0);
+  });
+
+  it('10 K more halve it, and 40 000 h are missed by a fifth', () => {
+    const figure = limit('bulkLife', made('electrolytic'), { limits, ambient: 338.15, coolingArea: 100 });
+    expect(figure.violation).toBeCloseTo(0.2, 2);
+  });
+
+  it('only wet ones dry out: a polymer has no such limit', () => {
+    expect(() => limit('bulkLife', made('polymer'), { limits, ambient: 338.15 })).toThrow();
+  });
+});
+
 describe('currents', () => {
   it('saturation is judged at the current limit and not at the steady peak', () => {
     // Peak of 8 A with 2.18 A of ripple: 9.09 A; a limit that may sit 30 % high passes 11.8 A.

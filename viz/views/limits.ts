@@ -109,6 +109,7 @@ const LEAST = new Set([
   'filterChoke',
   'minimumOnTime',
   'minimumOffTime',
+  'bulkLife',
   'driveVoltage',
   'controllerLowestFrequency',
   'controllerAbilities',

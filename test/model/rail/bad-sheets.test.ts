@@ -123,7 +123,7 @@ describe('one mistake gives one message, with its place', () => {
     [
       'a text where a map belongs',
       `${SOUND}limits: none\n`,
-      'rail.yaml:8:9: limits: found none; allowed: a map with the keys height, volume, board-area, mass, cost, efficiency, no-load-power, minimum-on-time',
+      'rail.yaml:8:9: limits: found none; allowed: a map with the keys height, volume, board-area, mass, cost, efficiency, no-load-power, minimum-on-time, life',
     ],
     ['a key twice', `${SOUND}rail: again\n`, 'rail.yaml:8:1: rail: found the key rail twice; allowed: each key once'],
     [
@@ -188,7 +188,7 @@ describe('many mistakes give all their messages at once, in the order of the tex
       'rail.yaml:35:3: load-profile: found shares that sum to 90 %',
       'rail.yaml:39:13: light-load: found diode-emulate',
       'rail.yaml:42:3: environment.ambeint: found the unknown key ambeint',
-      'rail.yaml:82:13: objectives: found one entry',
+      'rail.yaml:83:13: objectives: found one entry',
     ]);
   });
 
