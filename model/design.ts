@@ -7,7 +7,12 @@ import { type Catalogue, priceAt } from './catalogue.ts';
 import { EdgeFigures, prepareEdges } from './edge-figures.ts';
 import { GENE } from './genes.ts';
 import { boardPath, sideSurface, surfaceCoefficient } from './heat/index.ts';
-import { createInductorAtFrequency, inductorThermalResistance, prepareInductor } from './magnetics/index.ts';
+import {
+  copperResistivity,
+  createInductorAtFrequency,
+  inductorThermalResistance,
+  prepareInductorAt,
+} from './magnetics/index.ts';
 import type { Bulk } from './parts/bulk.ts';
 import type { Ceramic } from './parts/ceramic.ts';
 import type { Controller } from './parts/controller.ts';
@@ -89,6 +94,9 @@ export class Design {
   /** Stocked choke to air by its sides, W/K; its top stands for the board that it covers. */
   inductorFaces = 0.5;
 
+  /** Heat paths of the stocked chokes seen so far: see `stockedHeat`. */
+  readonly stockedHeats = new Map<Inductor, Float64Array>();
+
   constructor(rail: Rail, catalogue: Catalogue, stages: readonly Stage[]) {
     this.stage = stages[0];
     this.inductor = this.woundChoke;
@@ -101,6 +109,7 @@ export class Design {
     this.inputCeramic = catalogue.inputCeramics[0];
     this.outputBulk = catalogue.outputBulks[0];
     this.inputBulk = catalogue.inputBulks[0];
+    this.inductorAt.resistivity = copperResistivity(rail.ambient + WINDING_RISE);
     this.emulates = rail.lightLoad !== 'forced-continuous';
     const core = catalogue.transformerCores[0];
     const material = catalogue.transformerMaterials[0];
@@ -208,7 +217,8 @@ function resolveChoke(design: Design, genes: Float64Array, rail: Rail, catalogue
   }
   design.inductance = design.inductor.inductance;
   const ripple = design.frequency * design.stage.chokeMultiple;
-  prepareInductor(design.inductor, ripple, rail.ambient + WINDING_RISE, design.inductorAt);
+  design.inductorAt.frequency = ripple;
+  prepareInductorAt(design.inductor, design.inductorAt);
 }
 
 /** Rise at which the conductance of a choke's faces is taken, K. */
@@ -216,15 +226,26 @@ const FACE_RISE = 40;
 /** Ambient of the rating of stocked chokes, K. */
 const RATING_AMBIENT = 298.15;
 
-/** Divides the rated conductance of a stocked choke between its faces, in the sheet's air, and its way into the board. */
+/** Fills in how a stocked choke gives off its heat; worked out once a row, for one rail's designs use the same rows again and again. */
 function stockedHeat(design: Design, row: Inductor, rail: Rail): void {
+  let paths = design.stockedHeats.get(row);
+  if (paths === undefined) {
+    paths = heatPathsOf(row, rail);
+    design.stockedHeats.set(row, paths);
+  }
+  design.inductorThermalResistance = paths[0];
+  design.inductorFaces = paths[1];
+}
+
+/** Divides the rated conductance of a stocked choke: its way into the board, K/W, and its faces in the sheet's air, W/K. */
+function heatPathsOf(row: Inductor, rail: Rail): Float64Array {
   const sides = sideSurface(row.length, row.width, row.height);
   const faces = sides + row.length * row.width;
   const size = Math.sqrt(0.2 * faces);
   const rated = inductorThermalResistance(row.ratedCurrent, row.ratedRise, row.dcResistance);
   const still = surfaceCoefficient(row.ratedRise, size, 0, RATING_AMBIENT);
-  design.inductorThermalResistance = boardPath(rated, faces * still);
-  design.inductorFaces = sides * surfaceCoefficient(FACE_RISE, size, rail.airSpeed, rail.ambient);
+  const air = surfaceCoefficient(FACE_RISE, size, rail.airSpeed, rail.ambient);
+  return Float64Array.of(boardPath(rated, faces * still), sides * air);
 }
 
 /** Value of the gene `chokeBuild` from which on chokes are wound. */

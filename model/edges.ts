@@ -32,12 +32,19 @@ const GATE = SLOT['highSwitch.gate'] - HIGH;
 const LOOP = SLOT['highSwitch.loop'] - HIGH;
 const DRIVE_SUPPLY = SLOT['controller.driveSupply'];
 
-/**
- * One edge, told to the functions below through a record so that no double crosses a call: the current that the switch which
- * turns on takes over (A, below 0 it helps the node to swing), what the choke swings about (V), and how far the node has come by
- * itself, 0 … 1. `drawn` sums the gate charges a second, A.
- */
-const edge = { current: 0.5, against: 0.5, swing: 0.5, drawn: 0.5 };
+/** One edge, told to the functions below through a record so that no double crosses a call. */
+class Edge {
+  /** Current that the switch which turns on takes over, A; below 0 it helps the node to swing. */
+  current = 0.5;
+  /** What the choke swings about, V. */
+  against = 0.5;
+  /** How far the node has come by itself, 0 … 1. */
+  swing = 0.5;
+  /** Sum of the gate charges a second, A. */
+  drawn = 0.5;
+}
+
+const edge = new Edge();
 const shares = new Float64Array(3);
 
 /** Adds the switching losses of all active phases at `state` to `ledger`, W. */

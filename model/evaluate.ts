@@ -7,16 +7,9 @@ import type { Catalogue } from './catalogue.ts';
 import { filterImpedanceLimit } from './control/index.ts';
 import { Design, resolveDesign } from './design.ts';
 import { Flavour, prepareFlavour, prepareResistances } from './flavour.ts';
-import { boardConductance, sinkCost, sinkMass, sinkVolume } from './heat/index.ts';
+import { boardConductance, sinkCost, sinkMass, volumetricResistance } from './heat/index.ts';
 import { HeatBalance } from './heat-balance.ts';
-import {
-  chooseFilterChoke,
-  filterCurrent,
-  filterInductance,
-  peakSourceImpedance,
-  sourceInductance,
-  sourceResistance,
-} from './input-filter.ts';
+import { chooseFilterChoke, filterCurrent, filterInductance, findSourcePath, SourcePath } from './input-filter.ts';
 import { LOSS_SLOTS } from './ledger.ts';
 import { LimitBook } from './limits/book.ts';
 import { judgeConstruction } from './limits/construction.ts';
@@ -51,6 +44,10 @@ export class Evaluator {
   /** Heat of the usual points in turn, and of each worst point: those are balanced again once the heat sink is known. */
   readonly usualHeat = new HeatBalance();
   readonly worstHeat: readonly HeatBalance[];
+  /** Volumetric resistance of a sink in the sheet's air, m³·K/W. */
+  readonly sinkVolume: number;
+  /** Source and filter choke. */
+  readonly source = new SourcePath();
   /** The load step at the point at hand. */
   readonly step = new StepCase();
   /** Conductance of the bare board, W/K. */
@@ -87,6 +84,7 @@ export class Evaluator {
     this.solver = new PointSolver(rail, this.usualHeat);
     this.worstHeat = this.plan.worst.map(() => new HeatBalance());
     this.filterCurrent = filterCurrent(rail);
+    this.sinkVolume = volumetricResistance(rail.airSpeed);
     this.bareBoard = boardConductance(rail.coolingArea, rail.airSpeed);
   }
 }
@@ -181,7 +179,9 @@ function judgeBetween(e: Evaluator): void {
     for (let j = 1; j <= copies; j++) {
       const inputVoltage = (dutyAtOne * 2 * copies) / (2 * j - 1);
       if (!(inputVoltage > span.low && inputVoltage < span.high)) continue;
-      solveRipple(e.solver, e.design, e.worst, inputVoltage, span.outputVoltage);
+      e.solver.state.inputVoltage = inputVoltage;
+      e.solver.state.outputVoltage = span.outputVoltage;
+      solveRipple(e.solver, e.design, e.worst);
       judgeRipple(e);
     }
   }
@@ -204,11 +204,10 @@ function addFilter(e: Evaluator): void {
     book.judge(places.filterChoke, design.filterChoke === undefined ? 0 : 1, 1, -1);
     assemble(e.assembly, design, rail.quantity);
   }
-  const inductance = sourceInductance(design, rail);
-  if (!(inductance > 0)) return;
-  const peak = peakSourceImpedance(sourceResistance(design, rail), inductance, e.worst.input);
+  findSourcePath(e.source, design, rail, e.worst.input);
+  if (!(e.source.inductance > 0)) return;
   const allowed = filterImpedanceLimit(rail.input.minimum, rail.input.minimum * e.filterCurrent);
-  book.judge(places.filterDamping, peak, allowed, -1);
+  book.judge(places.filterDamping, e.source.peak, allowed, -1);
 }
 
 /** Sums the profile at nominal input with usual values. */
@@ -274,7 +273,7 @@ export function solveActive(e: Evaluator, flavour: Flavour, planned: PlannedPoin
 /** Adds the heat sink to volume, mass and cost. */
 function addSink(e: Evaluator): void {
   if (!(e.sink > 0)) return;
-  const volume = sinkVolume(1 / e.sink, e.rail.airSpeed);
+  const volume = e.sinkVolume / (1 / e.sink);
   e.assembly.volume += volume;
   // The sink covers the board that the sheet gives to cooling.
   e.assembly.height = Math.max(e.assembly.height, volume / e.rail.coolingArea);

@@ -14,7 +14,6 @@ import type { Design } from './design.ts';
 import type { Bulk } from './parts/bulk.ts';
 import type { Ceramic } from './parts/ceramic.ts';
 import type { Rail } from './rail/rail.ts';
-import { onResistance, RESISTANCE_REFERENCE } from './switches/index.ts';
 
 /** Hours of service after which ceramic ageing is judged: about ten years. */
 const AGED_HOURS = 1e5;
@@ -76,12 +75,9 @@ export function prepareFlavour(flavour: Flavour, design: Design, rail: Rail): vo
 /** Fills in the resistances of `design` under the flavour's factor. */
 export function prepareResistances(flavour: Flavour, design: Design): void {
   const { high, low } = design;
-  const scale = flavour.resistanceScale;
-  const at = RESISTANCE_REFERENCE;
-  flavour.highResistance =
-    scale * onResistance(high.onResistance, high.resistanceTempco, high.dynamicFactor, at, design.highParallel);
-  flavour.lowResistance =
-    scale * onResistance(low.onResistance, low.resistanceTempco, low.dynamicFactor, at, design.lowParallel);
+  // `onResistance` at the temperature that rows state it for.
+  flavour.highResistance = (flavour.resistanceScale * high.onResistance * high.dynamicFactor) / design.highParallel;
+  flavour.lowResistance = (flavour.resistanceScale * low.onResistance * low.dynamicFactor) / design.lowParallel;
 }
 
 /**

@@ -45,13 +45,34 @@ export function chooseFilterChoke(
   return undefined;
 }
 
+/** What stands between an ideal source and the input bank of a design, and how it peaks. Reused. */
+export class SourcePath {
+  /** Ω, H. */
+  resistance = 0.5;
+  inductance = 0.5;
+  /** Largest impedance that it and the bank show the converter, Ω. */
+  peak = 0.5;
+}
+
+/** Fills `path` with source and filter choke of `design`, and with the peak before `bank`; no peak without inductance. */
+export function findSourcePath(path: SourcePath, design: Design, rail: Rail, bank: Bank): void {
+  path.resistance = rail.input.sourceResistance;
+  path.inductance = rail.input.sourceInductance;
+  if (design.filterChoke !== undefined) {
+    path.resistance += design.filterChoke.dcResistance;
+    path.inductance += design.filterChoke.inductance;
+  }
+  if (path.inductance > 0) findPeak(path, bank);
+}
+
 /**
  * Largest impedance, Ω, that source, filter choke and input bank show the converter: |(R + jωL) ‖ bank| over frequencies about the
- * corner. `resistance` Ω and `inductance` H of source and choke together.
+ * corner.
  * @source middlebrook-1976
  * @valid inductance above 0
  */
-export function peakSourceImpedance(resistance: number, inductance: number, bank: Bank): number {
+function findPeak(path: SourcePath, bank: Bank): void {
+  const { resistance, inductance } = path;
   const { c1, r1, c2, r2 } = bank;
   const corner = 1 / Math.sqrt(inductance * (c1 + c2));
   const reactance = corner * inductance;
@@ -74,15 +95,5 @@ export function peakSourceImpedance(resistance: number, inductance: number, bank
     }
     least = Math.min(least, re * re + im * im);
   }
-  return 1 / Math.sqrt(least);
-}
-
-/** Resistance (Ω) and inductance (H) between an ideal source and the input bank of `design`. */
-export function sourceResistance(design: Design, rail: Rail): number {
-  return rail.input.sourceResistance + (design.filterChoke?.dcResistance ?? 0);
-}
-
-/** See `sourceResistance`. */
-export function sourceInductance(design: Design, rail: Rail): number {
-  return rail.input.sourceInductance + (design.filterChoke?.inductance ?? 0);
+  path.peak = 1 / Math.sqrt(least);
 }

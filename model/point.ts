@@ -60,21 +60,14 @@ function solveRound(solver: PointSolver, design: Design, flavour: Flavour, last:
 
 /** Balances `heat` anew at another `conductance` to ambient, W/K, with the losses that it holds. */
 export function settleHeat(heat: HeatBalance, conductance: number): void {
+  if (heat.conductance === conductance) return;
   heat.conductance = conductance;
   solveHeat(heat);
 }
 
-/** Summed ripple and capacitor stress alone, at a line in between: no heat. The last temperatures stay in force. */
-export function solveRipple(
-  solver: PointSolver,
-  design: Design,
-  flavour: Flavour,
-  inputVoltage: number,
-  outputVoltage: number,
-): void {
+/** Summed ripple and capacitor stress alone, at the voltages that the state holds: no heat. The last temperatures stay in force. */
+export function solveRipple(solver: PointSolver, design: Design, flavour: Flavour): void {
   const { state } = solver;
-  state.inputVoltage = inputVoltage;
-  state.outputVoltage = outputVoltage;
   state.loadCurrent = solver.rail.output.current;
   state.activePhases = design.phases;
   design.stage.solve(design, state);

@@ -1,6 +1,6 @@
 /** The output's excursion at the sheet's load step, for a design at one line: the worse of what slew and bandwidth leave. */
 import { type Bank, createBank, createBankRipple, isPair, pairTransient } from './capacitors/index.ts';
-import { crossoverLimit, slewedExcursion } from './control/index.ts';
+import { crossoverLimit, slewedExcursionAt } from './control/index.ts';
 import type { Design } from './design.ts';
 import type { LoadStep } from './rail/rail.ts';
 import { addSegment, clearWaveform, createWaveform } from './waveform/index.ts';
@@ -33,8 +33,20 @@ export class StepCase {
   }
 }
 
-/** A slewed excursion at hand: slew of the phases, A/s, from a delay on, s; what it comes to, V. */
-const slew = { phases: 0.5, delay: 0.5, excursion: 0.5 };
+/** The slewed excursion at hand. */
+class Slew {
+  /** Slew of the phases, A/s, from the delay on, s. */
+  phases = 0.5;
+  delay = 0.5;
+  /** Angular frequency that the bank's impedance is asked at, rad/s, and that impedance, Ω. */
+  omega = 0.5;
+  impedance = 0.5;
+  /** What it comes to, V. */
+  excursion = 0.5;
+}
+
+const slew = new Slew();
+const given = new Float64Array(8);
 const pulse = createWaveform(4);
 const response = createBankRipple();
 
@@ -63,8 +75,9 @@ function findRelease(design: Design, step: LoadStep, at: StepCase): void {
   findSlewed(step, at.bank);
   at.release = slew.excursion;
   at.releasedAt = at.outputVoltage;
-  const crossover = crossoverLimit(ripple, copies, CROSSOVER_SHARE);
-  at.bandwidth = step.current * bankImpedance(at.bank, 2 * Math.PI * crossover);
+  slew.omega = 2 * Math.PI * crossoverLimit(ripple, copies, CROSSOVER_SHARE);
+  findImpedance(at.bank);
+  at.bandwidth = step.current * slew.impedance;
 }
 
 /** Excursion while the phases slew from the delay on: the bank carries what they do not yet bring. */
@@ -75,7 +88,16 @@ function findSlewed(step: LoadStep, bank: Bank): void {
     pairTransient(bank, pulse, response);
     slew.excursion = Math.max(response.highest, 0);
   } else {
-    slew.excursion = slewedExcursion(step.current, step.slew, phases, delay, bank.c1 + bank.c2, bank.r1, bank.l1, 0);
+    given[0] = step.current;
+    given[1] = step.slew;
+    given[2] = phases;
+    given[3] = delay;
+    given[4] = bank.c1 + bank.c2;
+    given[5] = bank.r1;
+    given[6] = bank.l1;
+    given[7] = 0;
+    slewedExcursionAt(given);
+    slew.excursion = given[0];
   }
 }
 
@@ -94,8 +116,9 @@ function deficit(step: LoadStep): void {
   addSegment(pulse, Math.max(atSecond / phaseSlew, 1e-12), atSecond, 0);
 }
 
-/** |Z| of a bank at `omega` (rad/s), Ω. */
-function bankImpedance(bank: Bank, omega: number): number {
+/** Writes |Z| of a bank at the frequency in `slew`. */
+function findImpedance(bank: Bank): void {
+  const { omega } = slew;
   const x1 = omega * bank.l1 - 1 / (omega * bank.c1);
   const z1 = bank.r1 * bank.r1 + x1 * x1;
   let re = bank.r1 / z1;
@@ -106,5 +129,5 @@ function bankImpedance(bank: Bank, omega: number): number {
     re += bank.r2 / z2;
     im -= x2 / z2;
   }
-  return 1 / Math.sqrt(re * re + im * im);
+  slew.impedance = 1 / Math.sqrt(re * re + im * im);
 }

@@ -21,6 +21,7 @@ export {
   jitterCurrent,
   rightHalfPlaneZero,
   slewedExcursion,
+  slewedExcursionAt,
   stepExcursion,
 } from './load-step.ts';
 export { type LoopMargin, loopMargin } from './loop-margin.ts';

@@ -42,6 +42,30 @@ export function slewedExcursion(
   inductance: number,
   offset: number,
 ): number {
+  const given = [step, loadSlew, phaseSlew, delay, capacitance, resistance, inductance, offset];
+  given.forEach((value, i) => {
+    scratch[i] = value;
+  });
+  slewedExcursionAt(scratch);
+  return scratch[0];
+}
+
+const scratch = new Float64Array(8);
+
+/**
+ * Replaces `a[0]` by that excursion, the arguments of `slewedExcursion` standing in `a[0 … 7]`: no double crosses the call.
+ * @derivation as `slewedExcursion`
+ * @valid as `slewedExcursion`
+ */
+export function slewedExcursionAt(a: Float64Array): void {
+  const step = a[0];
+  const loadSlew = a[1];
+  const phaseSlew = a[2];
+  const delay = a[3];
+  const capacitance = a[4];
+  const resistance = a[5];
+  const inductance = a[6];
+  const offset = a[7];
   const ramp = step / loadSlew;
   const first = Math.min(ramp, delay);
   const second = Math.max(ramp, delay);
@@ -66,7 +90,7 @@ export function slewedExcursion(
     current += slope * length;
     worst = Math.max(worst, charge / capacitance + resistance * current + corner);
   }
-  return worst;
+  a[0] = worst;
 }
 
 /**

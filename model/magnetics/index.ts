@@ -38,6 +38,7 @@ export {
   currentOfLinkage,
   fluxLinkage,
   inductanceAt,
+  inductanceInPlaceAt,
   meanInductanceAt,
   swingAt,
 } from './saturation.ts';
@@ -46,6 +47,7 @@ export {
   type InductorAtFrequency,
   inductorThermalResistance,
   prepareInductor,
+  prepareInductorAt,
   RIPPLE_HARMONICS,
   stockedCoreLoss,
   stockedCoreLossAt,

@@ -21,7 +21,17 @@ export interface Bend {
  * @valid up to about twice the saturation current
  */
 export function inductanceAt(bend: Bend, current: number, into: Float64Array): void {
-  power[0] = Math.abs(current) / bend.saturationCurrent;
+  into[0] = current;
+  inductanceInPlaceAt(bend, into);
+}
+
+/**
+ * The same for the current that stands in `into[0]`: no double crosses the call.
+ * @derivation as `inductanceAt`
+ * @valid as `inductanceAt`
+ */
+export function inductanceInPlaceAt(bend: Bend, into: Float64Array): void {
+  power[0] = Math.abs(into[0]) / bend.saturationCurrent;
   power[1] = bend.saturationExponent;
   powAt(power, 0);
   const q = bend.saturationDrop / (1 - bend.saturationDrop);

@@ -1,6 +1,6 @@
 /** A stocked inductor: its losses from the row of a parts table. What depends on the design alone is taken once. */
 
-import { expAt, logAt, pow } from '../../optimizer/maths/index.ts';
+import { expAt, logAt, powAt } from '../../optimizer/maths/index.ts';
 import type { Inductor } from '../parts/inductor.ts';
 import { COPPER_TEMPCO, copperResistivity, skinDepth } from './copper.ts';
 import { dowellHarmonics } from './dowell.ts';
@@ -10,6 +10,9 @@ export const RIPPLE_HARMONICS = 6;
 
 /** Frequency-dependent figures of an inductor at one switching frequency. Filled once a design. */
 export interface InductorAtFrequency {
+  /** Hz of the ripple, and resistivity of the hot conductor, Ω·m. */
+  frequency: number;
+  resistivity: number;
   /** k·f^α, W at 1 A of swing. */
   coreScale: number;
   /** Layer thickness over skin depth at the fundamental. */
@@ -19,9 +22,18 @@ export interface InductorAtFrequency {
   readonly factors: Float64Array;
 }
 
+const power = new Float64Array(2);
+
 /** An empty one. */
 export function createInductorAtFrequency(): InductorAtFrequency {
-  return { coreScale: 0, x1: 0, layers: 1, factors: new Float64Array(RIPPLE_HARMONICS) };
+  return {
+    frequency: 0.5,
+    resistivity: 0.5,
+    coreScale: 0.5,
+    x1: 0.5,
+    layers: 1,
+    factors: new Float64Array(RIPPLE_HARMONICS),
+  };
 }
 
 /**
@@ -35,8 +47,22 @@ export function prepareInductor(
   temperature: number,
   into: InductorAtFrequency,
 ): void {
-  into.coreScale = row.coreCoefficient * pow(frequency, row.coreFrequencyExponent);
-  into.x1 = row.conductorThickness / skinDepth(copperResistivity(temperature), frequency);
+  into.frequency = frequency;
+  into.resistivity = copperResistivity(temperature);
+  prepareInductorAt(row, into);
+}
+
+/**
+ * The same for the frequency and resistivity that stand in `into`: no double crosses the call.
+ * @source dowell-1966
+ * @valid as `prepareInductor`
+ */
+export function prepareInductorAt(row: Inductor, into: InductorAtFrequency): void {
+  power[0] = into.frequency;
+  power[1] = row.coreFrequencyExponent;
+  powAt(power, 0);
+  into.coreScale = row.coreCoefficient * power[0];
+  into.x1 = row.conductorThickness / skinDepth(into.resistivity, into.frequency);
   into.layers = row.layers;
   dowellHarmonics(into.x1, row.layers, RIPPLE_HARMONICS, into.factors);
 }

@@ -10,6 +10,16 @@ import { MODE, pauses, type StageState } from './state.ts';
 
 const steady = new ChokeSteadyState();
 
+/** What makes the drops: in a record, so that no double crosses a call. */
+class Flow {
+  /** A. */
+  current = 0.5;
+  /** Drop of the diode itself, V. */
+  drop = 0.5;
+}
+
+const flow = new Flow();
+
 /** What both rectifiers share. */
 const BUCK = {
   control: 'buck',
@@ -69,31 +79,36 @@ function solveForward(design: Design, state: StageState): void {
   const { current } = steady;
   steady.blocking = design.stage.diode || design.emulates;
   steady.shortestRise = design.shortestOnTime;
-  const drop = design.stage.diode ? design.diodeDrop(state.lowTemperature) : 0;
-  forwardVoltages(state, drop, current);
-  gaps(design, design.low.bodyDrop - current * state.lowResistance, design.high.bodyDrop);
+  flow.current = current;
+  flow.drop = 0;
+  if (design.stage.diode) flow.drop = design.diodeDrop(state.lowTemperature);
+  forwardVoltages(state);
+  gaps(design);
+  steady.gapFall *= design.low.bodyDrop - current * state.lowResistance;
+  steady.gapRise *= design.high.bodyDrop;
   solveBentChoke(design, state, steady);
   // With gaps the drops follow the current that flows while it flows: the geometric mean of load and boundary current,
   // which is half the peak of an ideal discontinuous triangle and equals the load at the boundary itself.
   if (steady.mode !== MODE.continuous && steady.mode !== MODE.forced) {
-    forwardVoltages(state, drop, 0.5 * steady.ripple);
+    flow.current = 0.5 * steady.ripple;
+    forwardVoltages(state);
     settleGaps(steady);
     solveChoke(steady);
   }
   applyForward(steady, state);
 }
 
-function forwardVoltages(state: StageState, drop: number, current: number): void {
+function forwardVoltages(state: StageState): void {
+  const { current, drop } = flow;
   steady.rise = state.inputVoltage - state.outputVoltage - current * (state.highResistance + state.pathResistance);
   steady.fall = state.outputVoltage + drop + current * (state.lowResistance + state.pathResistance);
   keepDriving(state);
 }
 
-/** Gaps before both edges: a switch turns off, and the body diode that the current's sign chooses takes over with its own drop, V. */
-function gaps(design: Design, fallDrop: number, riseDrop: number): void {
-  const share = design.gap * design.frequency;
-  steady.gapFall = share * fallDrop;
-  steady.gapRise = share * riseDrop;
+/** Gaps before both edges, V for each volt that the body diode which the current's sign chooses drops more than its switch. */
+function gaps(design: Design): void {
+  steady.gapFall = design.gap * design.frequency;
+  steady.gapRise = steady.gapFall;
   steady.gapCurrent = design.gapCurrent;
   steady.waitCurrent = design.gapCurrent;
 }
@@ -111,7 +126,9 @@ function solveReverse(design: Design, state: StageState): void {
   steady.rise = state.outputVoltage - current * (state.lowResistance + state.pathResistance);
   steady.fall = state.inputVoltage - state.outputVoltage + current * (state.highResistance + state.pathResistance);
   keepDriving(state);
-  gaps(design, design.high.bodyDrop - current * state.highResistance, design.low.bodyDrop);
+  gaps(design);
+  steady.gapFall *= design.high.bodyDrop - current * state.highResistance;
+  steady.gapRise *= design.low.bodyDrop;
   solveBentChoke(design, state, steady);
   applyReverse(steady, state);
 }

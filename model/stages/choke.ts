@@ -1,6 +1,6 @@
 /** The inductance that a choke shows at a mean current, with the ripple that it itself allows. */
 import type { Design } from '../design.ts';
-import { inductanceAt } from '../magnetics/index.ts';
+import { inductanceInPlaceAt } from '../magnetics/index.ts';
 import { type ChokeSteadyState, settleGaps, solveChoke } from '../modes.ts';
 import type { StageState } from './state.ts';
 
@@ -17,7 +17,8 @@ export function solveBentChoke(design: Design, state: StageState, steady: ChokeS
   steady.gapVolts = 0;
   solveChoke(steady);
   const square = steady.current * steady.current + (steady.ripple * steady.ripple) / 12;
-  inductanceAt(design.inductor, Math.sqrt(square), henries);
+  henries[0] = Math.sqrt(square);
+  inductanceInPlaceAt(design.inductor, henries);
   steady.inductance = henries[0] * scale;
   settleGaps(steady);
   solveChoke(steady);

@@ -15,11 +15,17 @@ const bend = new Float64Array(CAPACITY);
 const jump = new Float64Array(CAPACITY);
 const EQUAL = new Float64Array(64).fill(1);
 
-/**
- * The sum at hand, told to the functions below through a record so that no double crosses a call: the shift between copies and
- * the window, s, what is added to the sum of the copies, and the number of events.
- */
-const sum = { shift: 0.5, window: 0.5, offset: 0.5, events: 0 };
+/** The sum at hand, told to the functions below through a record so that no double crosses a call. */
+class Sum {
+  /** Shift between copies and the window, s. */
+  shift = 0.5;
+  window = 0.5;
+  /** What is added to the sum of the copies. */
+  offset = 0.5;
+  events = 0;
+}
+
+const sum = new Sum();
 /** Change of slope and of value at each breakpoint of the source. */
 const bends = new Float64Array(CAPACITY);
 const jumps = new Float64Array(CAPACITY);
