@@ -17,7 +17,7 @@ export function packIsland(island: Island): Uint8Array {
   return packValue(island);
 }
 
-/** The island in these bytes. Throws an Error that says what is wrong with damaged or foreign bytes. */
+/** The island in these bytes, which it goes on to read: they must not change. Throws an Error that says what is wrong with damaged or foreign bytes. */
 export function unpackIsland(bytes: Uint8Array): Island {
   return unpackValue(bytes) as Island;
 }
@@ -110,16 +110,24 @@ function writeNumbers(view: DataView, at: number, array: Numbers): void {
   }
 }
 
+/** A view of the bytes where they may be read in place, which costs no room; else a copy. */
 function readNumbers(view: DataView, at: number, kind: Kind, length: number): Numbers {
-  const array =
-    kind === 'f' ? new Float64Array(length) : kind === 'i' ? new Int32Array(length) : new Uint32Array(length);
+  const size = kind === 'f' ? 8 : 4;
+  if (at + length * size > view.byteLength) throw new Error('packed island names more than it holds');
+  const start = view.byteOffset + at;
+  if (LITTLE && start % size === 0) return numbersIn(view.buffer, start, kind, length);
+  const array = numbersIn(new ArrayBuffer(length * size), 0, kind, length);
   if (LITTLE) {
-    const from = new Uint8Array(view.buffer, view.byteOffset + at, array.byteLength);
-    new Uint8Array(array.buffer).set(from);
+    new Uint8Array(array.buffer).set(new Uint8Array(view.buffer, start, array.byteLength));
     return array;
   }
   for (let i = 0; i < length; i++) {
     array[i] = kind === 'f' ? view.getFloat64(at + 8 * i, true) : view.getUint32(at + 4 * i, true);
   }
   return array;
+}
+
+function numbersIn(buffer: ArrayBufferLike, start: number, kind: Kind, length: number): Numbers {
+  if (kind === 'f') return new Float64Array(buffer, start, length);
+  return kind === 'i' ? new Int32Array(buffer, start, length) : new Uint32Array(buffer, start, length);
 }

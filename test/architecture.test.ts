@@ -18,7 +18,7 @@ const files = trackedTexts(/\.ts$/).map(parseFile);
 const FACES = ['optimizer/index.ts', 'model/index.ts'];
 /** Files that are started, or loaded by their name, and not imported. */
 const STARTED =
-  /^(runners\/(chopfront|demo|build|refresh|engines\/(worker|rail-problem))|viz\/live|test\/(.*(\.test|\.config|\.d)|runners\/toy))\.ts$/;
+  /^(runners\/(chopfront|demo|build|refresh|engines\/(worker|rail-problem))|viz\/live|test\/(.*(\.test|\.config|\.d)|runners\/toy|support\/(temporary|seeded)))\.ts$/;
 
 const manifest: Record<'dependencies' | 'devDependencies' | 'peerDependencies', Record<string, string>> = JSON.parse(
   readText('package.json'),
