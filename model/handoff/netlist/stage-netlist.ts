@@ -42,6 +42,7 @@ export function stageNetlist(problem: RailProblem, id: string, point: SolvedPoin
   if (design.stage.form === undefined) writeBuck(lines, point);
   else writeIsolated(lines, point);
   writeOutput(lines, point);
+  if (design.stage.form !== undefined) lines.leak();
   const predictions = predictionsOf(point);
   const losses = lossTerms(point);
   for (const { vectors } of [...predictions, ...losses]) for (const vector of vectors) lines.keep(vector);
@@ -95,9 +96,10 @@ function bankResistance({ output }: SolvedPoint): number {
   return output.c2 > output.c1 ? output.r2 : output.r1;
 }
 
+/** `fine` asks for what a buck bears; its diodes need a little conductance while they block, for the simulator to find where their nodes stand. */
 function tail(predictions: readonly Prediction[], conduction: number, fine: boolean): string[] {
   const lines = [
-    `.options method=${fine ? 'gear' : 'trap'} reltol=1e-4 abstol=${fine ? '1e-6' : '1e-5'} vntol=${fine ? '1e-6' : '1e-4'}`,
+    `.options method=${fine ? 'gear' : 'trap'} reltol=1e-4 abstol=${fine ? '1e-6' : '1e-5'} vntol=${fine ? '1e-6 gmin=1e-9' : '1e-4'}`,
     '.tran {tmax} {tstop} {tfrom} {tmax} uic',
     '* what the model predicts, and the measurement beside it',
   ];
