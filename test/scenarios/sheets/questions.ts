@@ -16,18 +16,24 @@ export function touches(found: Sweep, member: Member, from: number, to: number):
   return frequency * (1 + oscillator) > from && frequency * (1 - oscillator) < to;
 }
 
-/** The turns ratio that a transformer stage settles on when it has the sheet to itself, within a third of what the row names. */
+/** The turns ratio that a transformer stage settles on when it has the sheet to itself, within a quarter of what the row names. */
 export function turnsNear(name: string, architecture: Architecture, expected: number, evaluations: number): Statement {
   const alone = searching(shippedRail(name), { architectures: [architecture], phases: { minimum: 1, maximum: 1 } });
-  const found = sweep(spaceOf(alone), evaluations);
+  const found = sweep(spaceOf(alone), 2 * evaluations);
   const ratios = found.members.map((member) => {
     const { primaryTurns, secondaryTurns } = found.problem.record(member.genes).genes;
     return primaryTurns / secondaryTurns;
   });
   const middle = median(ratios);
   const ours = `${middle.toFixed(1)} (${Math.min(...ratios).toFixed(1)} to ${Math.max(...ratios).toFixed(1)})`;
-  const holds = Math.abs(middle - expected) <= expected / 3;
-  return stated(name, `${architecture}: turns ratio near ${expected}`, ours, holds, 'ratio of the sheet');
+  const holds = Math.abs(middle - expected) <= expected / 4;
+  return stated(
+    name,
+    `${architecture}: turns ratio within a quarter of ${expected}`,
+    ours,
+    holds,
+    'ratio of the sheet',
+  );
 }
 
 /**
