@@ -1,8 +1,9 @@
 /**
  * The child that the model's bench runs, in a process or thread of its own: draws the designs of one stated reference
- * evaluation and judges them round and round. Bundled before it runs, so that it may be bundled with counted functions too.
+ * evaluation and judges them round and round. It runs as built, and once bundled with counted functions.
  */
 import { readFileSync } from 'node:fs';
+import { type HeapProfiler, Session } from 'node:inspector';
 import { join } from 'node:path';
 import { isMainThread, parentPort, workerData } from 'node:worker_threads';
 import { BUILT_IN_TABLES } from '../../model/parts/built-in.ts';
@@ -27,6 +28,8 @@ export interface Task {
 const DESIGNS = 256;
 /** Length of a timed run after as long a warm-up, ms. */
 const RUN = 1000;
+/** Bytes between two samples of the heap, on average. */
+const SAMPLED = 1024;
 
 interface Reference {
   readonly sheet: string;
@@ -119,14 +122,33 @@ function count(judge: (n: number) => void): Record<string, number> {
   return Object.fromEntries(Object.entries(calls).flatMap(([name, n]) => (n > 0 ? [[name, n / DESIGNS]] : [])));
 }
 
-/** Bytes that each evaluation leaves behind, over 10⁵, in a young space so large that nothing is collected meanwhile. */
+/**
+ * Bytes that each evaluation leaves behind, over 10⁵, by the engine's sampling of all that is allocated, what was collected meanwhile
+ * included: the size of the heap before and after would miss that.
+ */
 function garbage(judge: (n: number) => void): { bytes: number } {
   const evaluations = 1e5;
-  judge(20_000);
-  (globalThis as { gc?: () => void }).gc?.();
-  const before = process.memoryUsage().heapUsed;
+  judge(60_000);
+  const session = new Session();
+  session.connect();
+  session.post('HeapProfiler.startSampling', {
+    samplingInterval: SAMPLED,
+    includeObjectsCollectedByMajorGC: true,
+    includeObjectsCollectedByMinorGC: true,
+  } as HeapProfiler.StartSamplingParameterType);
   judge(evaluations);
-  return { bytes: (process.memoryUsage().heapUsed - before) / evaluations };
+  let bytes = 0;
+  session.post('HeapProfiler.stopSampling', (error, { profile }) => {
+    if (error !== null) throw error;
+    bytes = sampled(profile.head);
+  });
+  session.disconnect();
+  return { bytes: bytes / evaluations };
+}
+
+/** Bytes of a node of the profile and all under it. */
+function sampled(node: HeapProfiler.SamplingHeapProfileNode): number {
+  return node.children.reduce((sum, child) => sum + sampled(child), node.selfSize);
 }
 
 /** Nanoseconds of one bare call of each elementary function that the model uses, arguments as they come up. */
