@@ -1,15 +1,27 @@
 /** Making children: whole first populations, and batches by operators drawn by their shares. */
 import { OPERATORS } from './island.ts';
+import {
+  champion,
+  createNearness,
+  guest,
+  measureRange,
+  type Nearness,
+  neighbours,
+  partner,
+  tournament,
+} from './parents.ts';
 import { hashRow, remember } from './seen.ts';
-import { TRIES } from './settings.ts';
+import { ARCHIVE_PARENTS, TRIES } from './settings.ts';
 import {
   contain,
   crossover,
   differential,
   drawOperator,
+  graft,
   LINE,
   mutate,
   type Operator,
+  proportion,
   refineMember,
   type Space,
   stepAround,
@@ -17,9 +29,6 @@ import {
   toGenes,
 } from './variation/index.ts';
 import type { World } from './world.ts';
-
-/** Nearest members that count as neighbours. */
-const NEAREST = 8;
 
 /** Chance of a gene to be drawn anew when a stalled island restarts around the archive. */
 const SCATTER = 0.3;
@@ -32,17 +41,18 @@ const CHAMPIONS = 0.3;
 
 /** Places in `OPERATORS` (island.ts) of those that need more than parents drawn at random. */
 const NEIGHBOURS = OPERATORS.indexOf('neighbours');
+const GRAFT = OPERATORS.indexOf('graft');
 const REFINEMENT = OPERATORS.indexOf('refinement');
 
-/** What makes the child, in the order of `OPERATORS`, for all but refinement. */
-const MAKERS: readonly Operator[] = [crossover, differential, differential];
+/** What makes the child, in the order of `OPERATORS`; refinement is handled apart. */
+const MAKERS: readonly Operator[] = [crossover, differential, differential, differential, graft, proportion];
+/** Chance that mutation follows, in the order of `OPERATORS`: moves of one kind by themselves are not blurred. */
+const MUTATED: readonly number[] = [1, 1, 1, 0, 0.5, 0];
 
 /** Scratch of breeding. */
 export interface Nursery {
   readonly parents: Int32Array;
-  readonly nearest: Int32Array;
-  readonly distance: Float64Array;
-  readonly range: Float64Array;
+  readonly near: Nearness;
   readonly gene: Float64Array;
   /** A child's genes before it was snapped. */
   readonly drawn: Float64Array;
@@ -55,9 +65,7 @@ export function createNursery(world: World): Nursery {
   const gene = new Float64Array(world.n);
   return {
     parents: new Int32Array(3),
-    nearest: new Int32Array(NEAREST),
-    distance: new Float64Array(NEAREST),
-    range: new Float64Array(world.m),
+    near: createNearness(world.m),
     gene,
     drawn: new Float64Array(world.n),
     words: new Uint32Array(gene.buffer),
@@ -114,12 +122,12 @@ export function scatter(world: World, nursery: Nursery, size: number): number {
 /** Writes up to `size` children behind the population and returns their number. */
 export function breed(world: World, nursery: Nursery, size: number): number {
   const start = world.watch === undefined ? 0 : world.watch.now();
-  measureRange(world, nursery);
+  measureRange(world, nursery.near);
   let made = 0;
   for (let k = 0; k < size; k++) {
     for (let attempt = 0; attempt < TRIES; attempt++) {
       const row = world.count + made;
-      makeChild(world, nursery, row, attempt);
+      makeChild(world, nursery, made, attempt);
       if (finish(world, nursery, row, world.trial ? world.family[nursery.parents[0]] : -1)) {
         measureStride(world, nursery.parents[0], row);
         made++;
@@ -133,24 +141,28 @@ export function breed(world: World, nursery: Nursery, size: number): number {
 }
 
 /** One child in coordinates; the mutation rate grows with every failed attempt. */
-function makeChild(world: World, nursery: Nursery, row: number, attempt: number): void {
+function makeChild(world: World, nursery: Nursery, made: number, attempt: number): void {
   const { space, coordinates, random, n } = world;
+  const row = world.count + made;
   const operator = drawOperator(world.shares, random.uniform());
   const { parents } = nursery;
-  parents[0] = tournament(world);
+  const ripe = !world.trial && 2 * world.island.epoch >= world.island.plan.epochs;
+  parents[0] = ripe && random.uniform() < ARCHIVE_PARENTS ? guest(world, made) : tournament(world);
   if (operator === REFINEMENT) {
     const end = !world.trial && random.uniform() < CHAMPIONS;
     if (end) parents[0] = champion(world, parents[0]);
     if (end && random.uniform() < 0.5) stepAround(space, coordinates, parents[0], coordinates, row * n, random);
     else refineMember(space, coordinates, world.stride, parents[0], coordinates, row * n, random);
   } else {
-    if (operator === NEIGHBOURS) neighbours(world, nursery);
+    if (operator === NEIGHBOURS || operator === GRAFT) neighbours(world, nursery.near, parents);
     else {
       parents[1] = partner(world, parents[0]);
       parents[2] = partner(world, parents[0]);
     }
     MAKERS[operator](space, coordinates, parents, coordinates, row * n, random);
-    mutate(space, coordinates, row * n, Math.min(1, (1 + attempt) / n), random);
+    if (random.uniform() < MUTATED[operator]) {
+      mutate(space, coordinates, row * n, Math.min(1, (1 + attempt) / Math.max(1, space.live.length)), random);
+    }
   }
   contain(space, coordinates, parents[0], coordinates, row * n, random);
   world.maker[row] = operator;
@@ -209,77 +221,6 @@ function ownSeeds(world: World): Float64Array[] {
 
 function familyFor(world: World, k: number): number {
   return world.trial ? world.island.families[k % world.island.families.length] : -1;
-}
-
-/** The better by rank of two members drawn at random; while families are tried, of one family drawn at random. */
-function tournament(world: World): number {
-  const a = world.random.whole(world.count);
-  const b = world.random.whole(world.count);
-  if (world.trial && world.family[a] !== world.family[b]) return a;
-  return world.rank[b] < world.rank[a] ? b : a;
-}
-
-/** The champion of an objective drawn at random, or `otherwise` while there is none. */
-function champion(world: World, otherwise: number): number {
-  const row = world.capacity + world.random.whole(world.m);
-  return world.objectives[row * world.m] < Number.POSITIVE_INFINITY ? row : otherwise;
-}
-
-/** Another member, of the same family while families are tried (if a few draws find one). */
-function partner(world: World, first: number): number {
-  let other = first;
-  for (let draw = 0; draw < 8; draw++) {
-    other = world.random.whole(world.count);
-    if (other !== first && (!world.trial || world.family[other] === world.family[first])) break;
-  }
-  return other;
-}
-
-/** Range of each objective over the population, for distances. */
-function measureRange(world: World, nursery: Nursery): void {
-  const { m, count, objectives } = world;
-  for (let c = 0; c < m; c++) {
-    let low = Number.POSITIVE_INFINITY;
-    let high = Number.NEGATIVE_INFINITY;
-    for (let row = 0; row < count; row++) {
-      const value = objectives[row * m + c];
-      if (value < low) low = value;
-      if (value > high) high = value;
-    }
-    nursery.range[c] = high - low > 0 && high - low < Number.POSITIVE_INFINITY ? 1 / (high - low) : 0;
-  }
-}
-
-/** Sets the second and third parent to two of the nearest members of the first, by normalised objectives. */
-function neighbours(world: World, nursery: Nursery): void {
-  const { m, count, objectives, random } = world;
-  const { parents, nearest, distance, range } = nursery;
-  const first = parents[0];
-  let held = 0;
-  for (let row = 0; row < count; row++) {
-    if (row === first) continue;
-    let d = 0;
-    for (let c = 0; c < m; c++) {
-      const gap = (objectives[row * m + c] - objectives[first * m + c]) * range[c];
-      d += gap * gap;
-    }
-    if (held === NEAREST && !(d < distance[held - 1])) continue;
-    let k = held < NEAREST ? held++ : held - 1;
-    for (; k > 0 && distance[k - 1] > d; k--) {
-      distance[k] = distance[k - 1];
-      nearest[k] = nearest[k - 1];
-    }
-    distance[k] = d;
-    nearest[k] = row;
-  }
-  if (held === 0) {
-    parents[1] = first;
-    parents[2] = first;
-    return;
-  }
-  const b = random.whole(held);
-  parents[1] = nearest[b];
-  parents[2] = held > 1 ? nearest[(b + 1 + random.whole(held - 1)) % held] : first;
 }
 
 /** The place in the range of a gene that lies at the part u of it, 0 (inclusive) … 1 (exclusive). */

@@ -64,10 +64,10 @@ export interface Island {
 }
 
 /** Names of the operators whose shares an island adapts. */
-export const OPERATORS = ['crossover', 'differential', 'neighbours', 'refinement'] as const;
+export const OPERATORS = ['crossover', 'differential', 'neighbours', 'refinement', 'graft', 'proportion'] as const;
 
 /** Most that each operator's share may be: refinement polishes, and must not crowd out those that explore. */
-export const CEILINGS: readonly number[] = [1, 1, 1, 0.12];
+export const CEILINGS: readonly number[] = [1, 1, 1, 0.12, 1, 1];
 
 /** The islands of a ring before anything was evaluated. */
 export function startIslands(problem: Problem, plan: Plan): Island[] {

@@ -36,3 +36,12 @@ export const WHOLE_SAMPLE = 50_000;
 export const NEAR_MISS_SHARE = 0.25;
 /** How far beyond the worst member of a front its hypervolume reference lies, as a part of the front's range. */
 export const REFERENCE_MARGIN = 0.2;
+/**
+ * Part of the children whose first parent is drawn from the whole archive in the place of the population, in the second half of the planned epochs: before
+ * that the archive holds much that selection has left behind.
+ */
+export const ARCHIVE_PARENTS = 0.25;
+/** Part of the population kept for the best designs that miss limits by a little. */
+export const BOLD_SHARE = 0.1;
+/** Total normalised violation (below 1 a limit) under which a design counts as missing them by a little. */
+export const BOLD_MISS = 0.2;

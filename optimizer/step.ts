@@ -1,7 +1,7 @@
 /** One epoch of one island, as a pure function: same island, same immigrants, same result to the bit, on any engine. */
 import type { Designs } from './archive/index.ts';
 import { breed, createNursery, type Nursery, scatter, settle } from './breed.ts';
-import { CEILINGS, type Island } from './island.ts';
+import type { Island } from './island.ts';
 import { type Bench, createBench, judge } from './judge.ts';
 import type { Problem } from './problem.ts';
 import { NO_DESIGNS } from './ring.ts';
@@ -53,7 +53,7 @@ function batch(world: World, tools: Tools, size: number): number {
   world.tried.fill(0);
   world.earned.fill(0);
   judge(world, tools.bench, from, from + made);
-  learn(world.shares, world.quality, world.tried, world.earned, CEILINGS);
+  learn(world.shares, world.quality, world.tried, world.earned, world.ceilings);
   survive(world, tools.survival, from + made);
   noteStall(world, before !== world.entries, size);
   return made;

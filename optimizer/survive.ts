@@ -2,8 +2,10 @@
  * Survival: constraint domination (Deb et al. 2002) in front, hypervolume contribution (Beume, Naujoks, Emmerich 2007) inside the last front
  * that fits, with an ε-relaxed start (Takahama, Sakai 2006) while nothing feasible is known.
  */
+import { type Bold, createBold, keepBold } from './bold.ts';
 import { weighViolations } from './judge.ts';
-import { REFERENCE_MARGIN, RELAXED_GENERATIONS, RELAXED_SHARE } from './settings.ts';
+import { referenceOf } from './reference.ts';
+import { RELAXED_GENERATIONS, RELAXED_SHARE } from './settings.ts';
 import type { World } from './world.ts';
 
 /** Scratch of survival. */
@@ -15,6 +17,7 @@ export interface Survival {
   readonly front: Int32Array;
   readonly kept: Uint8Array;
   readonly reference: Float64Array;
+  readonly bold: Bold;
 }
 
 /** Scratch for a world. */
@@ -27,6 +30,7 @@ export function createSurvival(world: World): Survival {
     front: new Int32Array(world.capacity),
     kept: new Uint8Array(world.capacity),
     reference: new Float64Array(world.m),
+    bold: createBold(world),
   };
 }
 
@@ -55,21 +59,22 @@ function surviveByFamily(world: World, scratch: Survival, all: number, epsilon: 
   }
 }
 
-/** Marks in `kept` the best `keep` of the rows named in `scratch.rows`, and writes their ranks. */
-function choose(world: World, scratch: Survival, size: number, keep: number, epsilon: number): void {
+/** Marks in `kept` the best `keep` of the first `all` rows named in `scratch.rows`, a few bold ones among them, and writes their ranks. */
+function choose(world: World, scratch: Survival, all: number, keep: number, epsilon: number): void {
   const { m } = world;
+  const size = keepBold(world, scratch.bold, scratch.rows, all, keep, scratch.kept);
   const { rows, objectives, total, ranks, front } = scratch;
   for (let i = 0; i < size; i++) {
     total[i] = world.total[rows[i]];
     for (let c = 0; c < m; c++) objectives[i * m + c] = world.objectives[rows[i] * m + c];
   }
   const fronts = world.ranker.rank(objectives, total, epsilon, size, ranks);
-  let left = keep;
+  let left = keep - (all - size);
   for (let f = 0; f < fronts && left > 0; f++) {
     let count = 0;
     for (let i = 0; i < size; i++) if (ranks[i] === f) front[count++] = i;
     if (count > left && total[front[0]] <= epsilon) {
-      referenceOf(scratch, count, m);
+      referenceOf(objectives, front, count, m, scratch.reference);
       world.truncation.truncate(objectives, front, count, left, scratch.reference);
     }
     const taken = Math.min(count, left);
@@ -78,22 +83,6 @@ function choose(world: World, scratch: Survival, size: number, keep: number, eps
       world.rank[rows[front[k]]] = f;
     }
     left -= taken;
-  }
-}
-
-/** A point beyond the front's worst values by a part of its range, so that its ends count. */
-function referenceOf(scratch: Survival, count: number, m: number): void {
-  const { objectives, front, reference } = scratch;
-  for (let c = 0; c < m; c++) {
-    let low = Number.POSITIVE_INFINITY;
-    let high = Number.NEGATIVE_INFINITY;
-    for (let k = 0; k < count; k++) {
-      const value = objectives[front[k] * m + c];
-      if (value < low) low = value;
-      if (value > high) high = value;
-    }
-    const range = high - low;
-    reference[c] = high + (range > 0 ? REFERENCE_MARGIN * range : 1e-9 * Math.abs(high) + 1e-300);
   }
 }
 

@@ -14,12 +14,12 @@ import {
   unpackArchive,
 } from './archive/index.ts';
 import { createTruncation, type Truncation } from './hypervolume/index.ts';
-import type { Island } from './island.ts';
+import { CEILINGS, type Island, OPERATORS } from './island.ts';
 import type { Problem } from './problem.ts';
 import { type Random, restoreRandom } from './random.ts';
 import { type ConstrainedRanker, createConstrainedRanker } from './ranking/index.ts';
 import { BATCH_SHARE, ISLAND_SAMPLE, NEAR_MISS_SHARE, NICHE } from './settings.ts';
-import { createSpace, type Space, toCoordinates } from './variation/index.ts';
+import { createSpace, isQuantity, type Space, toCoordinates } from './variation/index.ts';
 
 /** Where an epoch's time went, in the unit of the caller's clock. */
 export interface TimeSplit {
@@ -37,7 +37,8 @@ export interface Watch {
 
 /**
  * An open island. Rows 0 … count − 1 are the population, the rows behind them children; rows capacity … capacity + m − 1 of coordinates,
- * strides and objectives are the champions: the best feasible design known in each objective (objectives Infinity while there is none).
+ * strides and objectives are the champions: the best feasible design known in each objective (objectives Infinity while there is none). Rows
+ * capacity + m and behind are guests: first parents drawn from the archive, one for each child of a batch.
  */
 export interface World {
   readonly problem: Problem;
@@ -75,6 +76,8 @@ export interface World {
   readonly ranker: ConstrainedRanker;
   readonly truncation: Truncation;
   readonly shares: Float64Array;
+  /** Most that each share may be in this space. */
+  readonly ceilings: readonly number[];
   readonly quality: Float64Array;
   readonly tried: Float64Array;
   readonly earned: Float64Array;
@@ -136,25 +139,27 @@ export function openWorld(problem: Problem, island: Island, guests: number, watc
   const keep = trial ? Math.max(island.plan.population, NICHE * island.families.length) : island.plan.population;
   const batch = Math.max(1, Math.round(keep * BATCH_SHARE));
   const capacity = Math.max(keep, island.population.count) + Math.max(guests, keep);
+  const rows = capacity + m + batch;
+  const space = createSpace(problem.genes);
   const near = createNearMisses(nearMissGrid(problem));
   insertAllNearMisses(near, island.nearMisses);
   const world: World = {
     problem,
     island,
     watch,
-    space: createSpace(problem.genes),
+    space,
     n,
     m,
     limits,
     capacity,
     keep,
     batch,
-    genes: new Float64Array(capacity * n),
-    coordinates: new Float64Array((capacity + m) * n),
-    stride: new Float64Array((capacity + m) * n),
-    objectives: new Float64Array((capacity + m) * m).fill(Number.POSITIVE_INFINITY),
+    genes: new Float64Array(rows * n),
+    coordinates: new Float64Array(rows * n),
+    stride: new Float64Array(rows * n),
+    objectives: new Float64Array(rows * m).fill(Number.POSITIVE_INFINITY),
     violations: new Float64Array(capacity * limits),
-    total: new Float64Array(capacity + m),
+    total: new Float64Array(rows),
     rank: new Int32Array(capacity),
     family: new Int32Array(capacity),
     parent: new Int32Array(capacity).fill(-1),
@@ -167,6 +172,7 @@ export function openWorld(problem: Problem, island: Island, guests: number, watc
     ranker: createConstrainedRanker(capacity, m),
     truncation: createTruncation(capacity, m),
     shares: island.shares.slice(),
+    ceilings: ceilingsFor(space),
     quality: island.quality.slice(),
     tried: new Float64Array(island.shares.length),
     earned: new Float64Array(island.shares.length),
@@ -190,6 +196,12 @@ export function openWorld(problem: Problem, island: Island, guests: number, watc
   world.coordinates.set(island.coordinates);
   for (let c = 0; c < m; c++) findChampion(world, c);
   return world;
+}
+
+/** Moves in proportion need a quantity to be in proportion with. */
+function ceilingsFor(space: Space): readonly number[] {
+  const some = space.live.some((g) => isQuantity(space, g));
+  return OPERATORS.map((name, k) => (name === 'proportion' && !some ? 0 : CEILINGS[k]));
 }
 
 /** The island's sample of feasible designs, ready for more. */

@@ -32,11 +32,19 @@ export interface Archive {
   /** All members in canonical order: by objectives, then by genes, lexicographically. */
   pack(): Designs;
   /**
+   * Copies the member that the draws of `whole` (a number below its argument) come upon to row `row` of the arrays; false when a few draws find
+   * none. Every member in a cell is as likely as any other.
+   */
+  draw(whole: (count: number) => number, genes: Float64Array, objectives: Float64Array, row: number): boolean;
+  /**
    * Upper corners of the held cells, row-major: what the archive guarantees. Their hypervolume never falls as designs are shown (that of the members
    * can, by less than a cell's worth, when a cell changes its member).
    */
   corners(): Float64Array;
 }
+
+/** Slots looked at for a member drawn at random: some are empty. */
+const DRAWS = 12;
 
 /** An empty archive on `grid`. */
 export function createArchive(grid: ArchiveGrid): Archive {
@@ -119,6 +127,18 @@ class EpsilonArchive implements Archive {
 
   size(): number {
     return this.memberSlots().length;
+  }
+
+  draw(whole: (count: number) => number, genes: Float64Array, objectives: Float64Array, row: number): boolean {
+    const { genes: g, objectives: m } = this.grid;
+    for (let attempt = 0; attempt < DRAWS && this.used > m; attempt++) {
+      const slot = m + whole(this.used - m);
+      if (!this.tree.has(slot)) continue;
+      for (let k = 0; k < g; k++) genes[row * g + k] = this.genes[slot * g + k];
+      for (let c = 0; c < m; c++) objectives[row * m + c] = this.objectives[slot * m + c];
+      return true;
+    }
+    return false;
   }
 
   pack(): Designs {

@@ -1,6 +1,6 @@
 /**
  * Local refinement of a member: along the line that led to it, further (the pattern move of Hooke, Jeeves 1961, "Direct search"), or, where no such line is
- * known, one gene by a small step. Meant for the member's own direction of compromise, which the archive then judges.
+ * known, one gene or two by small steps. Meant for the member's own direction of compromise, which the archive then judges.
  */
 import { exp } from '../maths/index.ts';
 import type { Random } from '../random.ts';
@@ -9,10 +9,14 @@ import { CHOICE, LINE, type Space } from './space.ts';
 /** Smallest and largest exponent of ten of a step along a line, as parts of its range. */
 const FINEST = -4;
 const COARSEST = -1;
+/** Chance that the gene beside the stepped one is stepped too: genes of one component stand beside each other. */
+const PAIR = 0.5;
+/** Chance that a step over whole numbers grows by one more. */
+const LONGER = 0.5;
 
 /**
  * Writes to `child[at …]` the member at `pool[member · n …]` moved on along `stride[member · n …]` by 0.5 … 2 of its length, each gene a little more or
- * less so that curved edges can be followed, or with one gene
+ * less so that curved edges can be followed, or with one gene or two neighbouring ones
  * stepped when the stride is all zero or one time in two.
  */
 export function refineMember(
@@ -24,14 +28,26 @@ export function refineMember(
   at: number,
   random: Random,
 ): void {
-  const { n, kind } = space;
+  const { n, live } = space;
   const from = member * n;
   for (let g = 0; g < n; g++) child[at + g] = pool[from + g];
   if (random.uniform() < 0.5 && follow(space, stride, from, child, at, random)) return;
-  const g = random.whole(n);
+  if (live.length === 0) return;
+  const k = random.whole(live.length);
+  nudge(space, live[k], child, at, random);
+  if (random.uniform() < PAIR) nudge(space, live[k + 1 === live.length ? 0 : k + 1], child, at, random);
+}
+
+/** Steps gene g of the child by a little; a choice lands anywhere. */
+function nudge(space: Space, g: number, child: Float64Array, at: number, random: Random): void {
+  const { kind, low, span } = space;
   if (kind[g] === LINE) child[at + g] += lineStep(random);
-  else if (kind[g] === CHOICE) child[at + g] = space.low[g] + random.whole(space.span[g] + 1);
-  else child[at + g] += random.uniform() < 0.5 ? -1 : 1;
+  else if (kind[g] === CHOICE) child[at + g] = low[g] + random.whole(span[g] + 1);
+  else {
+    let step = 1;
+    while (step < span[g] && random.uniform() < LONGER) step++;
+    child[at + g] += random.uniform() < 0.5 ? -step : step;
+  }
 }
 
 /**

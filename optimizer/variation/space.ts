@@ -24,18 +24,40 @@ export interface Space {
   readonly high: Float64Array;
   /** high − low, or ln(high/low) for a logarithmic line. */
   readonly span: Float64Array;
+  /** Places of the genes that can vary at all. */
+  readonly live: Int32Array;
+  /** 1 where a gene counts named options. */
+  readonly named: Uint8Array;
 }
 
 /** Flattens the genes. */
 export function createSpace(genes: readonly Gene[]): Space {
+  const span = Float64Array.from(genes, ({ kind, low, high }) => (kind === 'log' ? log(high / low) : high - low));
   return {
     n: genes.length,
     kind: Uint8Array.from(genes, (gene) => (gene.kind === 'whole' ? WHOLE : gene.kind === 'choice' ? CHOICE : LINE)),
     logarithmic: Uint8Array.from(genes, (gene) => (gene.kind === 'log' ? 1 : 0)),
     low: Float64Array.from(genes, (gene) => gene.low),
     high: Float64Array.from(genes, (gene) => gene.high),
-    span: Float64Array.from(genes, (gene) => (gene.kind === 'log' ? log(gene.high / gene.low) : gene.high - gene.low)),
+    span,
+    live: Int32Array.from(genes.map((_, g) => g).filter((g) => span[g] > 0)),
+    named: Uint8Array.from(genes, (gene) => (gene.options === undefined ? 0 : 1)),
   };
+}
+
+/** Whether gene g is a quantity on a logarithmic line. */
+export function isQuantity(space: Space, g: number): boolean {
+  return space.kind[g] === LINE && space.logarithmic[g] === 1;
+}
+
+/** Whether gene g counts things. */
+export function isCount(space: Space, g: number): boolean {
+  return space.kind[g] === WHOLE && space.named[g] === 0;
+}
+
+/** Whether gene g names one row of a list. */
+export function isRow(space: Space, g: number): boolean {
+  return space.kind[g] !== LINE && space.named[g] === 1;
 }
 
 /** Writes the coordinates of the design at `genes[from …]` to `coordinates[to …]`. */
