@@ -30,11 +30,11 @@ const SECTIONS: readonly (readonly [string, string, string])[] = [
 const DETAILS: readonly (readonly [string, string])[] = [
   ['effects', 'Every watt, by part and effect'],
   ['limits', 'How close to each limit'],
+  ['parts', 'Parts'],
   ['efficiency', 'Efficiency over load'],
   ['waveforms', 'One switching period'],
   ['temperatures', 'How warm it gets'],
   ['makeup', 'What takes room and money'],
-  ['parts', 'Parts'],
   ['proof', 'Predicted and simulated'],
 ];
 
