@@ -12,6 +12,7 @@ import {
   createInductorAtFrequency,
   inductorThermalResistance,
   prepareInductorAt,
+  skinDepth,
 } from './magnetics/index.ts';
 import type { Bulk } from './parts/bulk.ts';
 import type { Ceramic } from './parts/ceramic.ts';
@@ -109,7 +110,7 @@ export class Design {
     this.inputCeramic = catalogue.inputCeramics[0];
     this.outputBulk = catalogue.outputBulks[0];
     this.inputBulk = catalogue.inputBulks[0];
-    this.inductorAt.resistivity = copperResistivity(rail.ambient + WINDING_RISE);
+    this.inductorAt.depth = skinDepth(copperResistivity(rail.ambient + WINDING_RISE), 1);
     this.emulates = rail.lightLoad !== 'forced-continuous';
     const core = catalogue.transformerCores[0];
     const material = catalogue.transformerMaterials[0];
@@ -196,7 +197,7 @@ function resolveGap(design: Design): void {
 function resolveChoke(design: Design, genes: Float64Array, rail: Rail, catalogue: Catalogue): void {
   if (genes[GENE.chokeBuild] < woundIndex(catalogue)) {
     const series = catalogue.inductorSeries[genes[GENE.inductorSeries]];
-    design.inductor = series.rows[nearestRow(series, genes[GENE.inductance])];
+    design.inductor = series.rows[nearestRow(series, genes)];
     design.chokeMaterial = undefined;
     stockedHeat(design, design.inductor, rail);
   } else {

@@ -219,7 +219,7 @@ function recordSpace(problem: RailProblem): RecordSpace {
     active,
     inductorName: (genes) => {
       const series = catalogue.inductorSeries[genes[GENE.inductorSeries]];
-      return series.rows[nearestRow(series, genes[GENE.inductance])].name;
+      return series.rows[nearestRow(series, genes)].name;
     },
     inductorPlace: (name) => {
       for (const series of catalogue.inductorSeries) {

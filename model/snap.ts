@@ -22,14 +22,15 @@ export function snapGenes(
     genes[GENE.inductance] = clampGene(significant(genes[GENE.inductance] * 1e9) / 1e9, list[GENE.inductance]);
   } else {
     const series = catalogue.inductorSeries[genes[GENE.inductorSeries]];
-    genes[GENE.inductance] = series.rows[nearestRow(series, genes[GENE.inductance])].inductance;
+    genes[GENE.inductance] = series.rows[nearestRow(series, genes)].inductance;
   }
   rest(genes, list, architectures[genes[GENE.architecture]]);
 }
 
-/** Index of the row of `series` whose inductance is nearest to `inductance` on a logarithmic scale. */
-export function nearestRow(series: InductorSeries, inductance: number): number {
+/** Index of the row of `series` whose inductance is nearest to that of `genes` on a logarithmic scale. */
+export function nearestRow(series: InductorSeries, genes: Float64Array): number {
   const { rows } = series;
+  const inductance = genes[GENE.inductance];
   let index = 0;
   while (index + 1 < rows.length && inductance * inductance > rows[index].inductance * rows[index + 1].inductance)
     index++;

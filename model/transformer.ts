@@ -10,10 +10,11 @@ import {
   createWinding,
   dowellHarmonics,
   harmonicLoss,
-  igseConstant,
   inductanceFactor,
+  knownConstants,
   layWinding,
   leakageInductance,
+  type MaterialConstants,
   magnetizingInductance,
   parallelThatFit,
   skinDepth,
@@ -94,6 +95,8 @@ export class Transformer implements Part {
   /** Part to air, K/W. */
   surfaceResistance = 0.5;
   maximumTemperature = HIGHEST;
+  /** Core-loss constants of the materials seen so far. */
+  readonly constants = new Map<Material, MaterialConstants>();
   primaryParallel = 1;
   secondaryParallel = 1;
   readonly primary: Winding = createWinding();
@@ -127,7 +130,7 @@ export function windTransformer(
   inductances(t, choice);
   acFactors(t, choice, frequency, duty, ambient + RISE);
   const { material, core } = choice;
-  const ki = igseConstant(material.lossCoefficient, material.frequencyExponent, material.fluxExponent);
+  const { ki } = knownConstants(t.constants, material);
   t.coreScale = ki * pow(frequency, material.frequencyExponent) * core.coreVolume;
   t.frequencyExponent = material.frequencyExponent;
   t.fluxExponent = material.fluxExponent;

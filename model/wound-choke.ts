@@ -10,8 +10,9 @@ import {
   createWinding,
   gapFor,
   gapKeepOut,
-  igseConstant,
+  knownConstants,
   layWinding,
+  type MaterialConstants,
   parallelThatFit,
   windowFill,
   wireResistance,
@@ -63,6 +64,8 @@ export class WoundChoke implements Inductor {
   ratedCurrent = 0.5;
   ratedRise = RISE;
   maximumTemperature = HIGHEST;
+  /** Core-loss constants of the materials seen so far. */
+  readonly constants = new Map<Material, MaterialConstants>();
   /** m; 0 for a powder core, whose gap is in the material. */
   gap = 0.5;
   /** Share of the window's height that is used; above 1 the winding does not fit. */
@@ -121,7 +124,7 @@ function coreOf(choke: WoundChoke, core: Core, material: Material, turns: number
   choke.saturationCurrent = material.saturation100 / choke.fluxPerAmpere;
   choke.saturationDrop = material.kind === 'powder' ? 0.5 : 0.2;
   choke.saturationExponent = material.kind === 'powder' ? 2 : 8;
-  const ki = igseConstant(material.lossCoefficient, material.frequencyExponent, material.fluxExponent);
+  const { ki } = knownConstants(choke.constants, material);
   const swing = pow(inductance / (turns * core.area), material.fluxExponent);
   choke.coreCoefficient = ki * core.coreVolume * pow(2, material.frequencyExponent) * swing;
   choke.coreFrequencyExponent = material.frequencyExponent;

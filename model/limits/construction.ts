@@ -50,26 +50,24 @@ function judgeController(e: Evaluator): void {
 }
 
 function judgeBands(e: Evaluator): void {
-  const { book, places, design, rail } = e;
-  const { oscillator } = rail.tolerances;
-  for (const band of rail.avoid) {
-    const clear = bandClearance(design.frequency, oscillator, band);
-    book.judgeBy(places.avoidedBands, clear * design.frequency, 0, design.frequency, -1);
-  }
+  const { avoid } = e.rail;
+  for (let i = 0; i < avoid.length; i++) judgeBand(e, avoid[i]);
 }
 
 /**
- * Smallest distance of the frequency (and its harmonics, as the band asks) to the band as a fraction of the frequency;
- * below 0 inside. `oscillator` is the tolerance of the frequency, a fraction.
+ * Judges the smallest distance of the frequency (and its harmonics, as the band asks) to a band, as a fraction of the frequency; below 0
+ * inside. The oscillator's tolerance counts.
  */
-function bandClearance(frequency: number, oscillator: number, band: AvoidedBand): number {
+function judgeBand(e: Evaluator, band: AvoidedBand): void {
+  const { frequency } = e.design;
+  const { oscillator } = e.rail.tolerances;
   let least = Number.MAX_VALUE;
   for (let k = 1; k <= band.harmonics; k++) {
     const below = band.from / (k * frequency) - (1 + oscillator);
     const above = 1 - oscillator - band.to / (k * frequency);
     least = Math.min(least, Math.max(below, above));
   }
-  return least;
+  e.book.judgeBy(e.places.avoidedBands, least * frequency, 0, frequency, -1);
 }
 
 function judgeSize(e: Evaluator): void {

@@ -70,5 +70,5 @@ export {
   WINDING_BOUND,
 } from './winding-loss.ts';
 export { gaugeDiameter, litzLoss, roundArea } from './wire.ts';
-export { type MaterialConstants, materialConstants, woundCoreLossAt } from './wound-core.ts';
+export { knownConstants, type MaterialConstants, materialConstants, woundCoreLossAt } from './wound-core.ts';
 export { copperMass, coreTemperatureFactor, hotSpotRise, materialViolation, woundCost } from './wound-part.ts';

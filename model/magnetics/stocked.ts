@@ -10,9 +10,9 @@ export const RIPPLE_HARMONICS = 6;
 
 /** Frequency-dependent figures of an inductor at one switching frequency. Filled once a design. */
 export interface InductorAtFrequency {
-  /** Hz of the ripple, and resistivity of the hot conductor, Ω·m. */
+  /** Hz of the ripple, and skin depth of the hot conductor at 1 Hz, m·√Hz: it falls as 1/√f. */
   frequency: number;
-  resistivity: number;
+  depth: number;
   /** k·f^α, W at 1 A of swing. */
   coreScale: number;
   /** Layer thickness over skin depth at the fundamental. */
@@ -28,7 +28,7 @@ const power = new Float64Array(2);
 export function createInductorAtFrequency(): InductorAtFrequency {
   return {
     frequency: 0.5,
-    resistivity: 0.5,
+    depth: 0.5,
     coreScale: 0.5,
     x1: 0.5,
     layers: 1,
@@ -48,12 +48,12 @@ export function prepareInductor(
   into: InductorAtFrequency,
 ): void {
   into.frequency = frequency;
-  into.resistivity = copperResistivity(temperature);
+  into.depth = skinDepth(copperResistivity(temperature), 1);
   prepareInductorAt(row, into);
 }
 
 /**
- * The same for the frequency and resistivity that stand in `into`: no double crosses the call.
+ * The same for the frequency and depth that stand in `into`: no double crosses the call.
  * @source dowell-1966
  * @valid as `prepareInductor`
  */
@@ -62,7 +62,7 @@ export function prepareInductorAt(row: Inductor, into: InductorAtFrequency): voi
   power[1] = row.coreFrequencyExponent;
   powAt(power, 0);
   into.coreScale = row.coreCoefficient * power[0];
-  into.x1 = row.conductorThickness / skinDepth(into.resistivity, into.frequency);
+  into.x1 = (row.conductorThickness * Math.sqrt(into.frequency)) / into.depth;
   into.layers = row.layers;
   dowellHarmonics(into.x1, row.layers, RIPPLE_HARMONICS, into.factors);
 }

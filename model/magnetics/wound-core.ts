@@ -24,6 +24,20 @@ export function materialConstants(material: Material): MaterialConstants {
 }
 
 /**
+ * The same from `known`, and worked out only where it is not known yet: a search asks for few materials many times.
+ * @source igse-2002
+ * @valid as `igseConstant`
+ */
+export function knownConstants(known: Map<Material, MaterialConstants>, material: Material): MaterialConstants {
+  let constants = known.get(material);
+  if (constants === undefined) {
+    constants = materialConstants(material);
+    known.set(material, constants);
+  }
+  return constants;
+}
+
+/**
  * Writes to `into[0]` the core loss, W: density under `flux` (T over s, `swing` T peak to peak) × volume × temperature factor.
  * `temperature` K of the core.
  * @source igse-2002

@@ -235,7 +235,7 @@ const RECORD_FUNCTIONS = [
     'parallelThatFit',
   ],
   ...['prepareInductor', 'fluxLinkage', 'currentOfLinkage', 'coreTemperatureFactor', 'materialViolation'],
-  ...['prepareWinding', 'materialConstants'],
+  ...['prepareWinding', 'materialConstants', 'knownConstants'],
   ...['effectiveParameters', 'toroidParameters', 'plantResponse', 'compensatorResponse', 'compensatorParts'],
   ...['amplifierResponse', 'designCompensator', 'loopMargin'],
 ];
