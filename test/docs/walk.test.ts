@@ -8,6 +8,7 @@ import { mkdirSync, mkdtempSync, readFileSync, rmSync, symlinkSync, writeFileSyn
 import { tmpdir } from 'node:os';
 import { delimiter, join } from 'node:path';
 import { afterAll, describe, expect, test } from 'vitest';
+import { parse } from 'yaml';
 import { balancedOf } from '../../runners/run-folder/representatives.ts';
 import { ROOT, readText } from '../support/project.ts';
 import { type Block, blocksOf, exchangesOf } from './markdown.ts';
@@ -41,6 +42,55 @@ describe('the walk of README.md', () => {
     });
     if (WRITING) write(block, really);
     else expect(really.join('\n')).toBe(block.text);
+  });
+});
+
+/** Commands that need more than an empty folder: where each is run, and what stands there. */
+const ELSEWHERE: Readonly<Record<string, readonly [file: string, ...words: string[]]>> = {
+  'npm ci && npm run demo': ['.ci/run', 'npm ci ', 'npm run --silent demo'],
+  'npm ci && npm test': ['.ci/run', 'npm ci ', 'npm test'],
+  'npm ci && npm pack && npm install --global ./chopfront-0.1.0.tgz': [
+    'test/package/package.test.ts',
+    "'npm', ['pack'",
+    "'install', '--global'",
+  ],
+  'chopfront sweep rail.yaml --out runs/big --on slurm --shards 16 --time 2h --partition batch --time-limit 03:00:00': [
+    'test/cluster/slurm.test.ts',
+    "'--on', 'slurm', '--partition'",
+  ],
+  'chopfront status runs/big': ['test/cluster/slurm.test.ts', "chopfront('status'"],
+};
+
+describe('the other commands of README.md', () => {
+  const blocks = blocksOf(readme);
+
+  test('are each run by a test or by the checks of a clean clone', () => {
+    const shown = blocks.filter(({ language }) => language === 'sh').flatMap(({ text }) => text.split('\n'));
+    expect(shown.map((line) => line.replace(/\s+# .*/, ''))).toEqual(Object.keys(ELSEWHERE));
+    for (const [command, [file, ...words]] of Object.entries(ELSEWHERE)) {
+      for (const word of words) expect(readText(file), command).toContain(word);
+    }
+  });
+
+  test('the manifest for Kubernetes asks for as many shards as pods, and its command sweeps the shard of its pod', () => {
+    const manifest = parse(blocks.find(({ text }) => text.includes('kind: Job'))?.text ?? '');
+    const { completions, completionMode, template } = manifest.spec;
+    const [{ command, volumeMounts }] = template.spec.containers;
+    expect([completionMode, String(completions)]).toEqual(['Indexed', command[command.indexOf('--shards') + 1]]);
+    expect(volumeMounts[0]).toEqual({ name: template.spec.volumes[0].name, mountPath: '/runs' });
+    mkdirSync(join(folder, 'pod'));
+    writeFileSync(join(folder, 'pod', 'rail.yaml'), readText('model/rails/buoy-sensors.yaml'));
+    // The volume is a folder here, and a pod's share of the work an epoch.
+    const [program, ...args]: string[] = command.map((word: string) =>
+      word.replace('/runs', join(folder, 'pod')).replace('4M', '128k'),
+    );
+    const pod = spawnSync(join(folder, 'bin', program ?? ''), args, {
+      env: { ...process.env, JOB_COMPLETION_INDEX: '3' },
+      encoding: 'utf8',
+    });
+    expect(pod.status, pod.stderr).toBe(0);
+    const record = JSON.parse(readFileSync(join(folder, 'pod', 'big', 'shard-00003', 'run.json'), 'utf8'));
+    expect(record).toMatchObject({ status: 'done', shard: 3, shards: 16 });
   });
 });
 

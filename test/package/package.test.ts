@@ -18,6 +18,7 @@ interface Packed {
   readonly files: readonly { readonly path: string; readonly size: number }[];
 }
 
+const QUIETLY = ['--prefer-offline', '--no-audit', '--no-fund', '--fetch-retries=1'];
 const packed = pack();
 const paths = packed.files.map(({ path }) => path);
 const installed = install();
@@ -63,6 +64,24 @@ describe('what is packed', () => {
   test('stays below 1 MB to fetch and 3.5 MB on disk', () => {
     expect(packed.size).toBeLessThan(1_000_000);
     expect(packed.unpackedSize).toBeLessThan(3_500_000);
+  });
+});
+
+describe.runIf(installed)('installed for the whole machine, below a folder of its own', () => {
+  test('the command answers from anywhere', () => {
+    const prefix = join(folder, 'machine');
+    const { status, stderr } = spawnSync(
+      'npm',
+      ['install', '--global', '--prefix', prefix, ...QUIETLY, join(folder, packed.filename)],
+      { cwd: folder, encoding: 'utf8' },
+    );
+    expect(status, stderr).toBe(0);
+    const elsewhere = mkdtempSync(join(tmpdir(), 'chopfront-elsewhere-'));
+    const at = { cwd: elsewhere, encoding: 'utf8' } as const;
+    const command = join(prefix, 'bin', 'chopfront');
+    expect(spawnSync(command, ['draft', 'rail.yaml'], at).status).toBe(0);
+    expect(spawnSync(command, ['check', 'rail.yaml'], at).stdout).toContain('my-rail');
+    rmSync(elsewhere, { recursive: true });
   });
 });
 
@@ -150,11 +169,11 @@ function pack(): Packed {
 function install(): boolean {
   mkdirSync(join(folder, 'node_modules'));
   writeFileSync(join(folder, 'package.json'), '{ "name": "empty", "private": true, "type": "module" }\n');
-  const { status, stderr } = spawnSync(
-    'npm',
-    ['install', '--prefer-offline', '--no-audit', '--no-fund', '--fetch-retries=1', join(folder, packed.filename)],
-    { cwd: folder, encoding: 'utf8', timeout: 180_000 },
-  );
+  const { status, stderr } = spawnSync('npm', ['install', ...QUIETLY, join(folder, packed.filename)], {
+    cwd: folder,
+    encoding: 'utf8',
+    timeout: 180_000,
+  });
   const there = existsSync(join(folder, 'node_modules', '.bin', 'chopfront'));
   if (status === 0 && there) return true;
   const reason = stderr.split('\n').find((line) => /code|network|ENOTFOUND/.test(line)) ?? `npm ended with ${status}`;

@@ -13,7 +13,7 @@ export const LIMIT: Recipe = {
       path: 'model/limits/construction.ts',
       before: '  if (limits.height !== undefined)',
       text: `  if (limits.placements !== undefined) {
-    book.judge(places.placements, assembly.placements, limits.placements, limits.placements, -1);
+    book.judge(places.placements, assembly.placements, limits.placements, -1);
   }
 `,
     },

@@ -11,7 +11,9 @@ export const OBJECTIVE: Recipe = {
       text: `  tallness: {
     unit: 'm',
     reference: (rail) => rail.limits.height ?? 0.1,
-    value: (e) => e.assembly.height,
+    write: (e, into, k) => {
+      into[k] = e.assembly.height;
+    },
   },
 `,
     },
