@@ -96,7 +96,7 @@ describe('the same seed', () => {
       expect(await sweepToy({ ...order, resume: true })).toMatchObject({ status: 0 });
       expect(filesOf(folder)).toEqual(whole);
     }
-  });
+  }, 900_000);
 });
 
 describe('a fault inside a worker', () => {
