@@ -26,7 +26,8 @@ export interface IsolatedForm {
 }
 
 const steady = new ChokeSteadyState();
-const decay = new Float64Array(1);
+/** Of the current that dies between pulses: mean square over that of its start, mean over its start. */
+const decay = new Float64Array(2);
 
 /** Why no transformer stage can serve `rail`; undefined where one can. */
 export function isolatedRefusal(rail: Rail): string | undefined {
@@ -105,13 +106,17 @@ function writeCurrents(form: IsolatedForm, t: Transformer, state: StageState, ch
   // Share of the switching period in which the primary carries a pulse.
   const driven = form.doubler ? 2 * h : h;
   // Mean square of what goes on in the primary of a shifted bridge between pulses, on the secondary side, over that time.
-  const left = shifted ? dying(form, t, state) * b * b : 0;
+  decay.fill(0);
+  if (shifted) findDecay(form, t, state);
+  const left = decay[0] * b * b;
   const between = form.doubler ? 1 - 2 * h : l;
   state.primaryMeanSquare = (driven * square + between * left) / n2;
   state.highMeanSquare = form.doubleEnded ? 0.5 * state.primaryMeanSquare : state.primaryMeanSquare;
   if (form.doubler) {
     state.secondaryMeanSquare = driven * square + between * left;
-    state.lowMeanSquare = 4 * h * square + between * (square + left);
+    // It leaves one rectifier and adds to the other, whose choke carries less: the chokes stay half a period of fall apart.
+    const apart = (0.5 * (b - a)) / Math.max(0.5, l);
+    state.lowMeanSquare = 4 * h * square + between * Math.max(0, square + left - decay[1] * b * apart);
   } else if (form.centreTap) {
     state.secondaryMeanSquare = 0.5 * h * square + 0.25 * l * (square + left);
     state.lowMeanSquare = state.secondaryMeanSquare;
@@ -130,20 +135,24 @@ function writeCurrents(form: IsolatedForm, t: Transformer, state: StageState, ch
 }
 
 /**
- * Mean square over the time between pulses, as a share of the square it begins with, of the current that circulates in the shorted
- * primary of a shifted bridge: it dies as e^(−t·R/L) in the leakage, so (1 − e^(−2x))/(2x) with x the time in those constants.
+ * Mean square and mean over the time between pulses, as shares of what they begin with, of the current that circulates in the shorted
+ * primary of a shifted bridge: it dies as e^(−t·R/L) in the leakage, so (1 − e^(−2x))/(2x) and (1 − e^(−x))/x with x the time in those
+ * constants.
  */
-function dying(form: IsolatedForm, t: Transformer, state: StageState): number {
+function findDecay(form: IsolatedForm, t: Transformer, state: StageState): void {
   const period = state.frequency > 0 ? 1 / state.frequency : 1;
   const time = form.doubler ? 0.5 * (1 - 2 * state.highShare) * period : state.lowShare * period;
   const secondary = state.secondaryResistance + (form.doubler ? 2 : 1) * state.lowResistance;
   const primary = form.inSeries * state.highResistance + state.primaryResistance;
   const resistance = primary + t.ratio * t.ratio * secondary;
   const x = (time * resistance) / t.leakage;
-  if (!(x > 1e-6)) return 1;
-  decay[0] = -2 * x;
-  expAt(decay, 0);
-  return (1 - decay[0]) / (2 * x);
+  decay.fill(1);
+  if (!(x > 1e-6)) return;
+  decay[1] = -x;
+  expAt(decay, 1);
+  const rest = decay[1];
+  decay[0] = (1 - rest * rest) / (2 * x);
+  decay[1] = (1 - rest) / x;
 }
 
 function writeWaveforms(form: IsolatedForm, t: Transformer, state: StageState): void {

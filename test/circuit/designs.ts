@@ -1,5 +1,6 @@
 /**
- * Twenty front designs over all architectures: what searches of the shipped rails with 5,000 evaluations and one seed left, kept as records
+ * Twenty front designs over all architectures, some interleaved: what searches of the shipped rails with 5,000 to 8,000 evaluations and
+ * one seed left, some held to two phases, kept as records
  * (designs.json), so that a change of the model changes figures and not which designs are looked at.
  */
 import { readFileSync } from 'node:fs';
