@@ -4,7 +4,10 @@ import { percent, rounded } from '../progress/figures.ts';
 import type { RunRecord } from '../run-folder/record.ts';
 import { showDuration } from '../terminal/duration.ts';
 import { table } from '../terminal/table.ts';
-import { plain } from '../terminal/text.ts';
+import { shortPath } from '../terminal/text.ts';
+
+/** Columns for a run's path. */
+const WIDEST_PATH = 48;
 
 /** A line a run, and a line for all of them where there are several. */
 export function statusLines(rows: readonly RunStanding[]): string[] {
@@ -22,7 +25,7 @@ export function statusLines(rows: readonly RunStanding[]): string[] {
     right('lost'),
   ];
   const cells = rows.map(({ folder, record, state }) => [
-    plain(folder),
+    shortPath(folder, WIDEST_PATH),
     state,
     percent(record.share, 0),
     rounded(record.evaluations),

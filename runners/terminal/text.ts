@@ -19,6 +19,12 @@ export function short(text: string, width: number): string {
   return points.length <= width ? points.join('') : `${points.slice(0, width - 1).join('')}…`;
 }
 
+/** A path made plain and cut to `width` code points at its front: its end tells it from others. */
+export function shortPath(path: string, width: number): string {
+  const points = [...plain(path)];
+  return points.length <= width ? points.join('') : `…${points.slice(1 - width).join('')}`;
+}
+
 /** Columns that `text` takes: code points, which is right for what we print (`µ`, `Ω`, `²`). */
 export function widthOf(text: string): number {
   return [...text].length;

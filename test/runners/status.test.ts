@@ -62,6 +62,13 @@ describe('the status of shards', () => {
     expect(remarkLines(standings)).toEqual(['shards 2, 3 of 4 have not begun']);
   });
 
+  it('keeps the end of a long path, which tells one shard from another', () => {
+    const [run] = standingsOf([sweepOf({})]).runs;
+    if (run === undefined) throw new Error('no run');
+    const folder = `/${'far/'.repeat(30)}shard-00001`;
+    expect(statusLines([{ ...run, folder }])[1]).toMatch(/^ +…[far/]+\/shard-00001 +done /);
+  });
+
   it('calls one broken off that says it runs and that no process holds, with how to go on', () => {
     const parent = sweepOf({ status: 'running', share: 0.5 });
     const folder = join(parent, 'shard-00001');
