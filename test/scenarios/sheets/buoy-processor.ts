@@ -1,20 +1,16 @@
 /** One to forty at 60 A: the shortest on-time against transformer stages, mixed banks. */
-import { hasTransformer } from '../../../model/catalogue.ts';
 import type { Architecture } from '../../../model/stages/list.ts';
 import { least, objectiveIndex, type Sweep, searching, spaceOf, sweep } from '../spaces.ts';
-import { type Statement, stated, tally } from '../statement.ts';
+import { type Statement, stated } from '../statement.ts';
 import { turnsNear } from './questions.ts';
 
 const BUCK: Architecture = 'buck-synchronous';
 const DOUBLER: Architecture = 'half-bridge-current-doubler';
 
-/** Evaluations from which on the families of forty phases and architectures have met: which of them leads is asked from there. */
-const MET = 200_000;
-
-/** What its row says; each side search may spend `evaluations`: families meet one by one there. */
-export function processor(found: Sweep, evaluations: number): Statement[] {
+/** What its row says; each side search may spend `evaluations`: families meet one by one, for forty at once ask more. */
+export function processor({ problem }: Sweep, evaluations: number): Statement[] {
   const name = 'buoy-processor';
-  const { rail } = found.problem;
+  const { rail } = problem;
   // At 85 % the duty is at most 1 V/(0.85 · 57 V); 50 ns of it make a period of 2.42 µs.
   const fast = searching(rail, { architectures: [BUCK], frequency: { minimum: 413e3, maximum: 2e6 } });
   const beyond = sweep(spaceOf(fast), evaluations);
@@ -37,7 +33,6 @@ export function processor(found: Sweep, evaluations: number): Statement[] {
       doubler < buck,
       'common practice, no source',
     ),
-    ...(found.evaluations < MET ? [] : [carriesFront(found)]),
     turnsNear(name, DOUBLER, 6, evaluations),
     turnsNear(name, 'full-bridge-current-doubler', 12, evaluations),
     stated(
@@ -48,19 +43,6 @@ export function processor(found: Sweep, evaluations: number): Statement[] {
       'the sheet',
     ),
   ];
-}
-
-/** More than half of the front's designs have a transformer. */
-function carriesFront({ members }: Sweep): Statement {
-  const isolated = members.filter(({ family }) => hasTransformer(family.split(' ')[0] as Architecture)).length;
-  const says = 'transformer stages carry the front: they are more than half of its designs';
-  return stated(
-    'buoy-processor',
-    says,
-    tally(members.map(({ family }) => family)),
-    2 * isolated > members.length,
-    'the sheet',
-  );
 }
 
 /** Profile-weighted loss of the coolest design, W; Infinity where none keeps every limit. */
