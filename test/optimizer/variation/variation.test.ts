@@ -9,8 +9,10 @@ import {
   crossover,
   differential,
   drawOperator,
+  graft,
   learn,
   mutate,
+  proportion,
   refineMember,
   toCoordinates,
   toGenes,
@@ -34,7 +36,7 @@ const stream = (seed: number) => restoreRandom(seedRandom(seed, 0, 0));
 describe('every operator', () => {
   it('gives, contained, a child inside its ranges, whole where it must be', () => {
     fc.assert(
-      fc.property(genes, fc.nat(), fc.constantFrom(0, 1, 2), (list, seed, kind) => {
+      fc.property(genes, fc.nat(), fc.constantFrom(0, 1, 2, 3, 4), (list, seed, kind) => {
         const space = createSpace(list);
         const { n } = space;
         const random = stream(seed);
@@ -47,7 +49,10 @@ describe('every operator', () => {
         }
         const parents = Int32Array.of(0, 1, 2);
         if (kind === 2) refineMember(space, pool, pool, 0, pool, 3 * n, random);
-        else (kind === 0 ? crossover : differential)(space, pool, parents, pool, 3 * n, random);
+        else {
+          const operator = [crossover, differential, differential, graft, proportion][kind];
+          operator(space, pool, parents, pool, 3 * n, random);
+        }
         mutate(space, pool, 3 * n, 0.5, random);
         contain(space, pool, 0, pool, 3 * n, random);
         const child = new Float64Array(n);
@@ -120,6 +125,54 @@ describe('spread', () => {
     const changed = 100_000 - counts[2];
     expect(changed / 10_000).toBeCloseTo(1, 1);
     for (const option of [0, 1, 3, 4]) expect(counts[option] / changed).toBeCloseTo(0.25, 1);
+  });
+});
+
+describe('coupled moves', () => {
+  const space = createSpace([
+    { name: 'frequency', unit: 'Hz', kind: 'log', low: 1e4, high: 1e6 },
+    { name: 'inductance', unit: 'H', kind: 'log', low: 1e-7, high: 1e-4 },
+    { name: 'fixed', unit: '', kind: 'whole', low: 3, high: 3 },
+    { name: 'count', unit: '', kind: 'whole', low: 1, high: 20 },
+    { name: 'part', unit: '', kind: 'whole', low: 0, high: 9, options: Array.from({ length: 10 }, (_, k) => `p${k}`) },
+  ]);
+  const pool = Float64Array.of(0.2, 0.4, 3, 10, 2, 0.7, 0.9, 3, 15, 8, 0, 0, 0, 0, 0);
+  const at = 10;
+
+  it('of grafting: every gene comes from one of the parents, those of the second in one run of genes that can vary', () => {
+    const random = stream(4);
+    let some = 0;
+    for (let k = 0; k < 2000; k++) {
+      graft(space, pool, Int32Array.of(0, 1, 1), pool, at, random);
+      const fromSecond = [0, 1, 3, 4].map((g) => pool[at + g] === pool[5 + g]);
+      fromSecond.forEach((second, i) => {
+        if (!second) expect(pool[at + [0, 1, 3, 4][i]]).toBe(pool[[0, 1, 3, 4][i]]);
+      });
+      // Round the circle of live genes, second-parent genes begin at most once.
+      const starts = fromSecond.filter((second, i) => second && !fromSecond[(i + 3) % 4]).length;
+      expect(starts).toBeLessThanOrEqual(1);
+      if (starts === 1) some++;
+    }
+    expect(some).toBeGreaterThan(1000);
+  });
+
+  it('of proportion: quantities that move do so by one common factor, up or down', () => {
+    const random = stream(5);
+    let together = 0;
+    let opposite = 0;
+    for (let k = 0; k < 2000; k++) {
+      proportion(space, pool, Int32Array.of(0, 1, 1), pool, at, random);
+      const first = (pool[at] - pool[0]) * space.span[0];
+      const second = (pool[at + 1] - pool[1]) * space.span[1];
+      expect(pool[at + 2]).toBe(3);
+      if (first === 0 || second === 0) continue;
+      together++;
+      if (first * second < 0) opposite++;
+      expect(Math.abs(first)).toBeCloseTo(Math.abs(second), 10);
+      expect(Math.abs(first)).toBeLessThan(0.68);
+    }
+    expect(together / 2000).toBeCloseTo(0.25, 1);
+    expect(opposite / together).toBeCloseTo(0.5, 1);
   });
 });
 
