@@ -78,7 +78,7 @@ function pageLines(): string[] {
   if (page === undefined) return [];
   if (page.figures.length === 0) return ['', `page: not timed, ${page.note}`];
   const line = ({ name, value, unit, target }: PageFigure): string =>
-    `  ${name.padEnd(36)}${Number(value.toPrecision(4))} ${unit} (${target})`;
+    `  ${name.padEnd(40)}${Number(value.toPrecision(4))} ${unit} (${target})`;
   return [
     '',
     'page, headless with software drawing',

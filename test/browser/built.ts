@@ -2,14 +2,15 @@
 import { mkdtempSync, readFileSync, rmSync, writeFileSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
-import { fileURLToPath, pathToFileURL } from 'node:url';
+import { pathToFileURL } from 'node:url';
 import { build } from 'esbuild';
+import { packagePath } from '../../runners/package-path.ts';
 import type { PageAssets, PageData } from '../../viz/data.ts';
 import { buildPage } from '../../viz/page.ts';
 import { staticPage } from '../../viz/static-page.ts';
 import { fixtureAssessor } from '../viz/fixture.ts';
 
-const ROOT = fileURLToPath(new URL('../..', import.meta.url));
+const ROOT = packagePath();
 
 /** One script for the browser, as the build makes it. */
 export async function bundle(entry: string): Promise<string> {

@@ -12,10 +12,9 @@ import {
   readTable,
 } from '../../model/index.ts';
 import { type Designs, hypervolumeOf, search } from '../../optimizer/index.ts';
+import { packagePath } from '../../runners/package-path.ts';
 import type { NearMiss, PageData } from '../../viz/data.ts';
 import { RAIL } from '../viz/fixture.ts';
-
-const TABLES = new URL('../../model/tables/', import.meta.url);
 
 /** The page's data of a sweep of the demo rail. */
 export function sweptData(evaluations = 20_000, keep = 300): PageData {
@@ -61,7 +60,7 @@ export function sweptData(evaluations = 20_000, keep = 300): PageData {
 function builtInTables(): PartsTables {
   const read = BUILT_IN_TABLES.map(({ kind, file }) => ({
     kind,
-    rows: given(readTable(kind, readFileSync(new URL(file, TABLES), 'utf8'), file)),
+    rows: given(readTable(kind, readFileSync(packagePath('model', 'tables', file), 'utf8'), file)),
   }));
   return given(joinTables(read as Parameters<typeof joinTables>[0]));
 }
