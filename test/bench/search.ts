@@ -1,12 +1,14 @@
 /**
  * `npm run bench:search`: the search's quality on published problems and the times of its kernels and of whole runs, as two tables, or with `--json` as rows. `--seeds
- * N` takes fewer seeds than 11, `--short` leaves out the plain versions that take seconds. A full run is kept in test/bench/results/.
+ * N` takes fewer seeds than 11, `--short` leaves out the plain versions that take seconds, `--random N`
+ * draws until N random designs of the demo's rail are feasible (200,000 take an hour). A full run is kept in test/bench/results/.
  */
 import { execFileSync } from 'node:child_process';
 import { mkdirSync, writeFileSync } from 'node:fs';
 import { cpus } from 'node:os';
 import { join } from 'node:path';
 import { parseArgs } from 'node:util';
+import { measureConverter } from './converter.ts';
 import { type Row, timeKernels } from './kernels.ts';
 import { measureQuality, type QualityRow } from './quality.ts';
 import { overheadAt200, timeRuns } from './runs.ts';
@@ -16,6 +18,7 @@ const { values } = parseArgs({
     json: { type: 'boolean', default: false },
     short: { type: 'boolean', default: false },
     seeds: { type: 'string', default: '11' },
+    random: { type: 'string', default: '1000' },
   },
 });
 const seeds = Number(values.seeds);
@@ -30,6 +33,7 @@ const record = {
   quality,
   times,
   overheadMicroseconds: overheadAt200(),
+  converter: measureConverter(Number(values.random)),
 };
 process.stdout.write(values.json ? json(quality, times) : tables());
 if (seeds >= 11 && !values.short) keep();
@@ -74,7 +78,14 @@ function tables(): string {
     ]),
   );
   const last = `outside the model, population 200, three objectives: ${record.overheadMicroseconds.toFixed(1)} µs an evaluation\n`;
-  return `${head}${first}\n${second}\n${last}`;
+  return `${head}${first}\n${second}\n${last}${converterLines()}`;
+}
+
+function converterLines(): string {
+  const { searched, drawn, random, outsideModel } = record.converter;
+  const line = ({ feasible, hypervolume }: { feasible: number; hypervolume: number }): string =>
+    `  ${feasible} random feasible designs hold ${hypervolume.toFixed(4)}; the search ${((100 * searched) / hypervolume - 100).toFixed(1)} % more\n`;
+  return `demo's rail: ${searched.toFixed(4)} after 200,000 evaluations; ${drawn} random designs drawn\n${random.map(line).join('')}  outside the model, population 200: ${(100 * outsideModel).toFixed(1)} % of the time (at most 20 %)\n`;
 }
 
 function digits(value: number): string {

@@ -1,5 +1,6 @@
 /** The shipped rails and parts tables, read from disk as a person's would be. */
 import { readFileSync } from 'node:fs';
+import { pathToFileURL } from 'node:url';
 import { BUILT_IN_TABLES } from '../../model/parts/built-in.ts';
 import { joinTables } from '../../model/parts/join.ts';
 import { readTable } from '../../model/parts/read-table.ts';
@@ -8,9 +9,11 @@ import { createRailProblem, type RailProblem } from '../../model/problem.ts';
 import type { Rail } from '../../model/rail/rail.ts';
 import { readRail } from '../../model/rail/read.ts';
 import { SHIPPED_RAILS } from '../../model/rail/shipped.ts';
+import { packagePath } from '../../runners/package-path.ts';
 import { need } from './support.ts';
 
-const MODEL = new URL('../../model/', import.meta.url);
+/** The files themselves: the build has no copy of them. */
+const MODEL = pathToFileURL(`${packagePath('model')}/`);
 
 /** Names of the shipped rails. */
 export const RAIL_NAMES = SHIPPED_RAILS;
