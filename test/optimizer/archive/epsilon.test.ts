@@ -202,3 +202,23 @@ describe('ε-grid archive', () => {
     expect(packArchive(archive)).toEqual(designsOf([{ genes: [7, 8], objectives: [1, 2] }]));
   });
 });
+
+describe('a member drawn at random', () => {
+  it('is a member, each about as often, and there is none in an empty archive', () => {
+    const grid = gridOf(2, 1);
+    const random = generator(3);
+    const whole = (count: number): number => Math.floor(random() * count);
+    const genes = new Float64Array(4);
+    const objectives = new Float64Array(4);
+    expect(createArchive(grid).draw(whole, genes, objectives, 1)).toBe(false);
+    const list = [0, 1, 2, 3, 4].map((k) => ({ genes: [k, 10 + k], objectives: [k + 0.5, 4.5 - k] }));
+    const archive = filled(grid, list);
+    const counts = [0, 0, 0, 0, 0];
+    for (let k = 0; k < 5000; k++) {
+      expect(archive.draw(whole, genes, objectives, 1)).toBe(true);
+      expect([genes[3], objectives[2], objectives[3]]).toEqual([10 + genes[2], genes[2] + 0.5, 4.5 - genes[2]]);
+      counts[genes[2]]++;
+    }
+    for (const count of counts) expect(count / 5000).toBeCloseTo(0.2, 1);
+  });
+});
