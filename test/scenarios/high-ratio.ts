@@ -62,7 +62,7 @@ export function handSweep(architectures: readonly Architecture[], shortest: numb
 /** One step-down ratio at 48 V and 60 W. */
 export interface RatioGain {
   readonly ratio: number;
-  /** Hypervolume of plain bucks alone, of transformer stages alone, of both fronts together. */
+  /** Hypervolume of plain bucks alone, of transformer stages alone, of both fronts together, all above the bucks' reference point. */
   readonly buck: number;
   readonly transformer: number;
   readonly both: number;
@@ -74,9 +74,10 @@ export interface RatioGain {
 export function ratioGain(ratio: number, evaluations: number): RatioGain {
   const bucks = sweep(spaceOf(ratioSheet(ratio, ['buck-synchronous'])), evaluations);
   const others = sweep(spaceOf(ratioSheet(ratio, TRANSFORMER_FAMILIES)), evaluations);
-  const both = hypervolumeOf(bucks.problem, union(bucks.front, others.front));
-  const gain = both / bucks.hypervolume - 1;
-  return { ratio, buck: bucks.hypervolume, transformer: others.hypervolume, both, gain };
+  const measured = (front: Designs): number => hypervolumeOf(bucks.problem, front);
+  const [buck, transformer] = [measured(bucks.front), measured(others.front)];
+  const both = measured(union(bucks.front, others.front));
+  return { ratio, buck, transformer, both, gain: both / buck - 1 };
 }
 
 /** 48 V to 48 V/`ratio`, always 60 W, so that the objectives' references are the same at every ratio. */
