@@ -1,6 +1,6 @@
 /**
- * Every constant that steers the search, in one place. They hold for all problems alike: the rules below read the budget, the number of
- * genes and the number of families, nothing else.
+ * The constants that steer the search, in one place; the chances of a single kind of move stand at the head of its own file. They hold for all
+ * problems alike: the rules read the budget, the number of genes and the number of families, nothing else.
  */
 
 /** Designs an island breeds from. */
