@@ -187,6 +187,11 @@ function resolveLeg(design: Design, genes: Float64Array, catalogue: Catalogue): 
 /** Charge of a node that is taken at least, C: one without any moves at once. */
 const LEAST_CHARGE = 1e-15;
 
+/**
+ * Gap of a leg and the current that moves its node within it.
+ * @derivation charge over time: the current that moves the node within the gap
+ * @valid charge at the rows' test voltage
+ */
 function resolveGap(design: Design): void {
   design.gap = design.diode === undefined ? design.driver.deadTime : 0;
   const own = design.lowParallel * design.low.outputCharge;
@@ -238,7 +243,11 @@ function stockedHeat(design: Design, row: Inductor, rail: Rail): void {
   design.inductorFaces = paths[1];
 }
 
-/** Divides the rated conductance of a stocked choke: its way into the board, K/W, and its faces in the sheet's air, W/K. */
+/**
+ * Divides the rated conductance of a stocked choke: its way into the board, K/W, and its faces in the sheet's air, W/K.
+ * @source churchill-1977 and radiation for the faces; the rest of the rated conductance is the way into the board
+ * @valid rated in still air on a board
+ */
 function heatPathsOf(row: Inductor, rail: Rail): Float64Array {
   const sides = sideSurface(row.length, row.width, row.height);
   const faces = sides + row.length * row.width;
@@ -283,6 +292,8 @@ const DIVIDER_RIPPLE = 0.05;
 /**
  * The divider of a half bridge from pieces of the input ceramic: each half carries half of the primary current, keeps its
  * midpoint within the usual ripple, and every piece within its rated current.
+ * @derivation charge of half a period of half the primary current over the allowed ripple
+ * @valid ripple small beside the half input
  */
 function sizeDivider(design: Design, rail: Rail, ratio: number): void {
   const { form } = design.stage;

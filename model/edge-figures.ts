@@ -53,7 +53,11 @@ export class EdgeFigures {
   known = 0;
 }
 
-/** Fills `figures` for `dice` of `row` in parallel under `driver`. */
+/**
+ * Fills `figures` for `dice` of `row` in parallel under `driver`.
+ * @source ren-2006: edge time from charge over gate current, lengthened by common-source inductance
+ * @valid drive above the plateau
+ */
 export function prepareEdges(figures: EdgeFigures, row: Switch, dice: number, driver: Driver): void {
   figures.row = row;
   figures.dice = dice;
@@ -89,7 +93,11 @@ export function lookUpBus(figures: EdgeFigures): void {
   figures.recovery = kept[at + lines.recovery];
 }
 
-/** Works out a bus voltage that is not kept; returns its place. The last place is overwritten when all are taken. */
+/**
+ * Works out a bus voltage that is not kept; returns its place. The last place is overwritten when all are taken.
+ * @source jedec-coss; charge law through the row's charge and energy
+ * @valid bus voltage > 0
+ */
 function workOutBus(figures: EdgeFigures): number {
   const { row, dice, kept, volts } = figures;
   if (figures.known < LINES) figures.known++;
@@ -110,7 +118,11 @@ function workOutBus(figures: EdgeFigures): number {
   return at;
 }
 
-/** Recovery charge of a rectifier diode over its commutated current, C/A. */
+/**
+ * Recovery charge of a rectifier diode over its commutated current, C/A.
+ * @derivation charge control: stored charge is in proportion to the current
+ * @valid within a few times the test current
+ */
 export function diodeRecovery(diode: Diode): number {
   return recoveryCharge(diode.recoveryCharge, diode.recoveryCurrent, false, 0, 1);
 }

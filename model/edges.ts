@@ -47,7 +47,11 @@ class Edge {
 const edge = new Edge();
 const shares = new Float64Array(3);
 
-/** Adds the switching losses of all active phases at `state` to `ledger`, W. */
+/**
+ * Adds the switching losses of all active phases at `state` to `ledger`, W.
+ * @source rohm-aek59; each term names its own
+ * @valid both edges of a leg settle within the cycle
+ */
 export function addEdgeLosses(design: Design, state: StageState, ledger: Float64Array): void {
   const { highEdges, lowEdges } = design;
   edge.drawn = 0;
@@ -69,7 +73,11 @@ export function addEdgeLosses(design: Design, state: StageState, ledger: Float64
   addDriveSupply(design, state, ledger);
 }
 
-/** The edge at which `own` turns on and `partner` has turned off: hard while the current flows against it. */
+/**
+ * The edge at which `own` turns on and `partner` has turned off: hard while the current flows against it.
+ * @derivation the sign of the current at the instant decides which edge is hard; gate charge Q·f·V
+ * @valid edges short beside both intervals
+ */
 function addEdge(
   design: Design,
   state: StageState,
@@ -86,12 +94,22 @@ function addEdge(
   edge.drawn += charge;
 }
 
-/** Cycles a second of all active phases. */
+/**
+ * Cycles a second of all active phases.
+ * @derivation every active phase switches once a period
+ * @valid effective frequency ≥ 0
+ */
 function cycles(state: StageState): number {
   return state.frequency * state.activePhases;
 }
 
-/** The body diode of the partner carries the current through the whole gap, then recovers while the voltage is still there. */
+/**
+ * The body diode of the partner carries the current through the whole gap, then recovers while the voltage is still there.
+ * @source ren-2006 (overlap)
+ * @source kasper-2016 (output charge)
+ * @source rohm-aek59 (dead time)
+ * @valid current > 0 against the edge
+ */
 function addHardEdge(
   design: Design,
   state: StageState,
@@ -111,7 +129,11 @@ function addHardEdge(
   ledger[partnerAt + DEAD_TIME] += rate * deadTimeEnergy(partner.bodyDrop, current, design.driver.deadTime, 0);
 }
 
-/** The current moves the node towards the switch that turns on; its body diode waits for the node to arrive. */
+/**
+ * The current moves the node towards the switch that turns on; its body diode waits for the node to arrive.
+ * @source kasper-2016: swing by the choke's current
+ * @valid current ≥ 0 with the edge
+ */
 function addSoftEdge(
   design: Design,
   state: StageState,
@@ -135,7 +157,11 @@ function addSoftEdge(
   if (edge.swing < 1) ledger[ownAt + OUTPUT] += rate * restOfSwing(own, partner, volts);
 }
 
-/** What the switch `own` burns, J, as it turns on after the node has come only part of the way. */
+/**
+ * What the switch `own` burns, J, as it turns on after the node has come only part of the way.
+ * @source kasper-2016: charge law Q ∝ V^p between where the swing ends and the rail
+ * @valid swing 0 … 1
+ */
 function restOfSwing(own: EdgeFigures, partner: EdgeFigures, volts: number): number {
   if (!(edge.swing > 0)) return hardEdgeEnergy(partner.charge, partner.energy, own.energy, volts);
   shares[0] = edge.swing;
@@ -145,7 +171,11 @@ function restOfSwing(own: EdgeFigures, partner: EdgeFigures, volts: number): num
   return partner.charge * volts * (1 - shares[0]) - partner.energy * (1 - shares[1]) + own.energy * shares[2];
 }
 
-/** A linear drive supply burns the rest of the input in the driver. */
+/**
+ * A linear drive supply burns the rest of the input in the driver.
+ * @derivation a linear regulator carries the same charge from the whole input: Q·f·(Vi − Vdrive)
+ * @valid input above the drive voltage
+ */
 function addDriveSupply(design: Design, state: StageState, ledger: Float64Array): void {
   const { driver } = design;
   if (!driver.linearDriveSupply) return;
@@ -153,6 +183,11 @@ function addDriveSupply(design: Design, state: StageState, ledger: Float64Array)
   if (drop > 0) ledger[DRIVE_SUPPLY] += edge.drawn * drop;
 }
 
+/**
+ * Both edges of a leg with a diode in the low position: the diode commutates by itself.
+ * @source rohm-aek59; junction charge of the diode Q·V less its stored energy
+ * @valid current never below zero
+ */
 function addDiodeEdges(design: Design, state: StageState, ledger: Float64Array): void {
   const { diode, highEdges: high, driver } = design;
   if (diode === undefined) return;

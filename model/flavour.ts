@@ -72,7 +72,11 @@ export function prepareFlavour(flavour: Flavour, design: Design, rail: Rail): vo
   );
 }
 
-/** Fills in the resistances of `design` under the flavour's factor. */
+/**
+ * Fills in the resistances of `design` under the flavour's factor.
+ * @derivation dice alike in parallel divide a resistance
+ * @valid dice share current alike
+ */
 export function prepareResistances(flavour: Flavour, design: Design): void {
   const { high, low } = design;
   // `onResistance` at the temperature that rows state it for.
@@ -83,6 +87,8 @@ export function prepareResistances(flavour: Flavour, design: Design): void {
 /**
  * Half the phases at the low end of the inductance's tolerance and half at the high end, side by side: the arrangement that
  * leaves the lowest frequency uncancelled.
+ * @derivation extremes of a tolerance band, half the phases at each
+ * @valid inductances within the tolerance
  */
 function spreadPhases(flavour: Flavour, phases: number, low: number): void {
   const high = (1 - low) / (1 + low);
@@ -114,7 +120,11 @@ function bank(
   setGroup2(into, bulkCount, bulk.capacitance * (1 - drop), bulk.seriesResistance, bulk.seriesInductance);
 }
 
-/** Capacitance that one piece of `row` holds at `volts`, F. */
+/**
+ * Capacitance that one piece of `row` holds at `volts`, F.
+ * @source derating-curves-2025: bias; tolerance, temperature and ageing on top
+ * @valid bias up to the rated voltage
+ */
 function heldBy(row: Ceramic, flavour: Flavour, rail: Rail, volts: number): number {
   const { capacitance, smallSignalFactor, halvingVoltage, biasExponent } = row;
   const biased = ceramicCapacitance(capacitance, smallSignalFactor, halvingVoltage, biasExponent, volts);

@@ -53,7 +53,11 @@ export class HeatBalance {
   sinkNeeded = 0.5;
 }
 
-/** Solves `h` in place. */
+/**
+ * Solves `h` in place.
+ * @derivation parts on one board: linear equations in their temperatures, solved by elimination
+ * @valid loop gain below 1; beyond it a limit tells
+ */
 export function solveHeat(h: HeatBalance): void {
   let constant = h.boardConstant;
   let slope = h.boardSlope;
@@ -106,6 +110,11 @@ function left(gain: number): number {
   return gain < 1 - LEAST ? 1 - gain : LEAST;
 }
 
+/**
+ * Conductance that a heat sink must add, W/K.
+ * @derivation conductance that holds the hottest part at its limit, less what the board has
+ * @valid ambient below the board's allowance
+ */
 function sinkFor(h: HeatBalance, constant: number, slope: number, boardAllowed: number): number {
   if (h.boardTemperature <= boardAllowed) return 0;
   const target = boardAllowed - SINK_RESERVE;

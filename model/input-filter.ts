@@ -27,7 +27,11 @@ export function filterInductance(ripple: number, frequency: number, allowed: num
   return ripple / (2 * Math.PI * frequency * allowed);
 }
 
-/** Input current that a filter choke of `rail` carries at full load and lowest input, A. */
+/**
+ * Input current that a filter choke of `rail` carries at full load and lowest input, A.
+ * @derivation power balance at the lowest input with a stated efficiency
+ * @valid efficiency near 0.9
+ */
 export function filterCurrent(rail: Rail): number {
   return (rail.output.maximum * rail.output.current) / (EFFICIENCY * rail.input.minimum);
 }
@@ -54,7 +58,11 @@ export class SourcePath {
   peak = 0.5;
 }
 
-/** Fills `path` with source and filter choke of `design`, and with the peak before `bank`; no peak without inductance. */
+/**
+ * Fills `path` with source and filter choke of `design`, and with the peak before `bank`; no peak without inductance.
+ * @derivation resistances and inductances in series add
+ * @valid choke not saturated
+ */
 export function findSourcePath(path: SourcePath, design: Design, rail: Rail, bank: Bank): void {
   path.resistance = rail.input.sourceResistance;
   path.inductance = rail.input.sourceInductance;

@@ -19,7 +19,11 @@ const LOW_DEAD_TIME = SLOT['lowSwitch.deadTime'];
 const LOW_GATE = SLOT['lowSwitch.gate'];
 const DRIVE_SUPPLY = SLOT['controller.driveSupply'];
 
-/** Adds the switching losses of all active phases at `state` to `ledger`, W. */
+/**
+ * Adds the switching losses of all active phases at `state` to `ledger`, W.
+ * @source rohm-aek59; each term names its own
+ * @valid as `Stage.addEdgeLosses`
+ */
 export function addIsolatedEdges(form: IsolatedForm, design: Design, state: StageState, ledger: Float64Array): void {
   addPrimary(form, design, state, ledger);
   if (design.phaseShifted) addShiftedEdges(form, design, state, ledger);
@@ -28,13 +32,21 @@ export function addIsolatedEdges(form: IsolatedForm, design: Design, state: Stag
   addGates(form, design, state, ledger);
 }
 
-/** Cycles a second of one switch, all active phases. */
+/**
+ * Cycles a second of one switch, all active phases.
+ * @derivation a choke behind a rectified wave sees two pulses for one cycle of each switch
+ * @valid effective frequency ≥ 0
+ */
 function cycles(form: IsolatedForm, state: StageState): number {
   const perCycle = form.doubleEnded && !form.doubler ? 0.5 : 1;
   return state.frequency * perCycle * state.activePhases;
 }
 
-/** Turn-off overlap of the primary switches. */
+/**
+ * Turn-off overlap of the primary switches.
+ * @source rohm-aek59: ½·V·I·t·f at peak plus magnetizing current
+ * @valid hard turn-off
+ */
 function addPrimary(form: IsolatedForm, design: Design, state: StageState, ledger: Float64Array): void {
   const { highEdges: high, transformer } = design;
   const current = state.peakCurrent / transformer.ratio + state.magnetizingPeak;
@@ -43,7 +55,11 @@ function addPrimary(form: IsolatedForm, design: Design, state: StageState, ledge
   ledger[HIGH_OVERLAP] += devices * overlapEnergy(state.inputVoltage, current, time);
 }
 
-/** Turn-on from where the node rests between the rails. */
+/**
+ * Turn-on from where the node rests between the rails.
+ * @source kasper-2016: charge of a partner at half the input
+ * @valid node at half the input before the edge
+ */
 function addRestingEdges(form: IsolatedForm, design: Design, state: StageState, ledger: Float64Array): void {
   const { highEdges: high, transformer } = design;
   const current = state.valleyCurrent / transformer.ratio;
@@ -59,6 +75,8 @@ function addRestingEdges(form: IsolatedForm, design: Design, state: StageState, 
 /**
  * Edges of a shifted bridge. The leading leg is moved by the choke's current and always arrives; the lagging one has only the
  * leakage's energy, ½·L·I² against Q·V (Sabaté 1990), and pays for the part of the swing that is left. Half the devices each.
+ * @source sabate-1990: ½·Llk·I² against the charge of the leg
+ * @valid dead time of a quarter of the leakage's ringing
  */
 function addShiftedEdges(form: IsolatedForm, design: Design, state: StageState, ledger: Float64Array): void {
   const { highEdges: high, transformer } = design;
@@ -72,6 +90,11 @@ function addShiftedEdges(form: IsolatedForm, design: Design, state: StageState, 
   ledger[HIGH_OUTPUT] += 0.5 * devices * left * hardEdgeEnergy(charge, energy, energy, volts);
 }
 
+/**
+ * Recovery, charge and dead-time loss of the rectifiers.
+ * @derivation charging C through L from V and damping the rest costs Q·V; recovery Qrr·V; body diode in the gaps
+ * @valid ringing damped within the pulse
+ */
 function addRectifiers(form: IsolatedForm, design: Design, state: StageState, ledger: Float64Array): void {
   const { lowEdges: low, driver } = design;
   const devices = cycles(form, state) * state.lowDevices;
@@ -89,7 +112,11 @@ function addRectifiers(form: IsolatedForm, design: Design, state: StageState, le
     devices * (deadTimeEnergy(low.bodyDrop, before, gap, 0) + deadTimeEnergy(low.bodyDrop, after, gap, 0));
 }
 
-/** Gate losses; a linear drive supply burns the rest of the input in the driver. */
+/**
+ * Gate losses; a linear drive supply burns the rest of the input in the driver.
+ * @source rohm-aek59: Q·V·f
+ * @valid whole gate charge each cycle
+ */
 function addGates(form: IsolatedForm, design: Design, state: StageState, ledger: Float64Array): void {
   const { highEdges, lowEdges, driver } = design;
   const rate = cycles(form, state);

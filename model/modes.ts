@@ -48,10 +48,11 @@ export class ChokeSteadyState {
 
 /**
  * Solves `s`. Continuous: D = (fall + g)/(rise + fall), g what the gaps take, ΔI = rise·D/(L·f). Discontinuous where blocking and
- * I < ΔI/2: D² = 2·L·f·I·fall/(rise·(rise + fall)) without gaps (Erickson & Maksimović, Fundamentals of Power Electronics, ch. 5, with
- * drops); with them the volt-seconds rise·D = fall·D2 + g and I = ΔI·(D + D2)/2 give the root of a quadratic.
+ * I < ΔI/2: D² = 2·L·f·I·fall/(rise·(rise + fall)) without gaps; with them the volt-seconds rise·D = fall·D2 + g and
+ * I = ΔI·(D + D2)/2 give the root of a quadratic.
  * Below the shortest on-time pulses keep their size and come at I/(charge of a pulse). All three meet without a jump.
- * Source id: erickson-maksimovic-2001.
+ * @source erickson-maksimovic-2001, chapter 5, with drops
+ * @valid rise, fall, inductance and frequency above 0; current ≥ 0
  */
 export function solveChoke(s: ChokeSteadyState): void {
   const total = s.rise + s.fall;
@@ -88,6 +89,8 @@ export function solveChoke(s: ChokeSteadyState): void {
  * Takes what the gaps between the switches cost in voltage from the ripple that `s` holds: each edge's body diode by its current's sign.
  * Before a hard edge it conducts through the gap (a current too small to move the node counts in proportion, so that nothing jumps
  * where it turns round), before a soft one only once the node has arrived.
+ * @derivation each edge's body diode conducts in the gap until the node has moved: its drop over the switch times that share
+ * @valid gap short beside the period
  */
 export function settleGaps(s: ChokeSteadyState): void {
   const half = 0.5 * s.ripple;
@@ -108,7 +111,11 @@ export function settleGaps(s: ChokeSteadyState): void {
   s.gapVolts = Math.max(-most, Math.min(most, first + second));
 }
 
-/** Copies the solution for power from input to output into `state`. */
+/**
+ * Copies the solution for power from input to output into `state`.
+ * @derivation a triangle's ends lie half its swing from the mean; from rest it rises by the whole swing
+ * @valid straight segments
+ */
 export function applyForward(s: ChokeSteadyState, state: StageState): void {
   state.mode = s.mode;
   state.highShare = s.riseShare;
@@ -119,7 +126,11 @@ export function applyForward(s: ChokeSteadyState, state: StageState): void {
   shared(s, state);
 }
 
-/** Copies the solution for power from output to input: the low switch drives, the high switch returns. */
+/**
+ * Copies the solution for power from output to input: the low switch drives, the high switch returns.
+ * @derivation as forward, mirrored in sign and in the intervals' order
+ * @valid straight segments
+ */
 export function applyReverse(s: ChokeSteadyState, state: StageState): void {
   state.mode = s.mode === MODE.continuous || s.mode === MODE.forced ? MODE.reverse : s.mode;
   state.highShare = s.fallShare;

@@ -12,7 +12,11 @@ const INPUT_CERAMIC = SLOT['inputCeramic.seriesResistance'];
 const INPUT_BULK = SLOT['inputBulk.seriesResistance'];
 const DIVIDER = SLOT['dividerCeramic.seriesResistance'];
 
-/** Solves both banks under the solved stage's currents; voltages only where `voltages` are wanted. */
+/**
+ * Solves both banks under the solved stage's currents; voltages only where `voltages` are wanted.
+ * @derivation Kirchhoff: a bank carries the sum of the shifted copies less its mean
+ * @valid source impedance large beside the bank's, or see `resonate`
+ */
 export function solveBanks(solver: PointSolver, flavour: Flavour, voltages: boolean): void {
   const { state } = solver;
   const copies = state.activePhases * state.chokes;
@@ -32,6 +36,8 @@ export function solveBanks(solver: PointSolver, flavour: Flavour, voltages: bool
 /**
  * Source inductance and input bank form a resonance; the bank's current and voltage rise by 1/|1 − x² + j·x/Q| at the ripple's
  * frequency, x = corner over ripple frequency, the whole ripple taken as its fundamental.
+ * @derivation second-order divider of the bank with the source's R and L
+ * @valid ripple frequency above the corner
  */
 function resonate(solver: PointSolver, flavour: Flavour): void {
   const { sourceInductance, sourceResistance } = solver.rail.input;
@@ -48,7 +54,11 @@ function resonate(solver: PointSolver, flavour: Flavour): void {
   ripple.meanSquare2 *= gain * gain;
 }
 
-/** Adds the losses in the banks' resistances, W. */
+/**
+ * Adds the losses in the banks' resistances, W.
+ * @derivation I²·R of each group's rms current
+ * @valid resistance constant over the ripple's harmonics
+ */
 export function addBanks(solver: PointSolver, design: Design, flavour: Flavour): void {
   const { state, ledger, outputRipple, inputRipple } = solver;
   // Both halves of a divider carry half of the primary current.

@@ -35,7 +35,11 @@ const COPPER = SLOT['board.copper'];
 /** From here to the end the ledger's slots heat the board alone. */
 const BOARD_SLOTS = SLOT['outputCeramic.seriesResistance'];
 
-/** Fills in the thermal paths of `design` with the point's active phases, and how its resistances rise with temperature. */
+/**
+ * Fills in the thermal paths of `design` with the point's active phases, and how its resistances rise with temperature.
+ * @derivation pieces alike in parallel divide a thermal resistance
+ * @valid pieces share heat alike
+ */
 export function prepareHeat(solver: PointSolver, design: Design): void {
   const { heat, state, rail, tempco } = solver;
   const spare = rail.derating.temperature;
@@ -65,7 +69,11 @@ export function prepareHeat(solver: PointSolver, design: Design): void {
   tempco[TRANSFORMER] = WINDING_TEMPCO;
 }
 
-/** Resistances of one phase at the temperatures of the round. */
+/**
+ * Resistances of one phase at the temperatures of the round.
+ * @source iec-60028 (copper); on-resistance linear in temperature
+ * @valid the temperatures of the round, up to 523 K
+ */
 export function takeResistances(solver: PointSolver, design: Design, flavour: Flavour): void {
   const { state } = solver;
   const { diode, inductor, transformer } = design;
@@ -83,7 +91,11 @@ export function takeResistances(solver: PointSolver, design: Design, flavour: Fl
   state.secondaryResistance = transformer.secondaryResistance * transformer.secondaryFactor * hot;
 }
 
-/** Splits losses into constants and slopes with temperature, solves the balance, and takes over the temperatures. */
+/**
+ * Splits losses into constants and slopes with temperature, solves the balance, and takes over the temperatures.
+ * @derivation resistive loss is a straight line in its own temperature
+ * @valid currents fixed for the round
+ */
 export function balanceHeat(solver: PointSolver, design: Design, flavour: Flavour): void {
   const { state, heat, ledger, resistive, tempco } = solver;
   const phases = state.activePhases;
@@ -125,7 +137,11 @@ function addSlots(ledger: Float64Array, from: number, to: number, into: Float64A
   into[place] = sum;
 }
 
-/** Winding loss of all transformers at the reference temperature, ac included, W; a centre tap has two secondary windings. */
+/**
+ * Winding loss of all transformers at the reference temperature, ac included, W; a centre tap has two secondary windings.
+ * @derivation I²·R·(ac factor) of primary and secondaries
+ * @valid ac factor of the usual duty
+ */
 function windings(solver: PointSolver, design: Design): number {
   const { state } = solver;
   const t = design.transformer;
@@ -135,7 +151,11 @@ function windings(solver: PointSolver, design: Design): number {
   return state.activePhases * (primary + secondary);
 }
 
-/** What the bulk capacitors' own heating leaves of the board's temperature. */
+/**
+ * What the bulk capacitors' own heating leaves of the board's temperature.
+ * @derivation a capacitor sits on the board: its rise takes from the board's allowance
+ * @valid as `findBulkRises`
+ */
 function allowBulks(solver: PointSolver, design: Design): void {
   const { heat } = solver;
   const spare = solver.rail.derating.temperature;
@@ -150,7 +170,11 @@ function allowBulks(solver: PointSolver, design: Design): void {
   }
 }
 
-/** Rises of the bulk capacitors over the board by their own heating: rated rise times the square of current over rating. */
+/**
+ * Rises of the bulk capacitors over the board by their own heating: rated rise times the square of current over rating.
+ * @derivation heating goes with the square of current over rating
+ * @valid ripple spectrum near that of the rating
+ */
 export function findBulkRises(solver: PointSolver, design: Design): void {
   const { heat, outputRipple, inputRipple } = solver;
   const { outputBulk, outputBulkCount, inputBulk, inputBulkCount } = design;
@@ -166,7 +190,11 @@ export function findBulkRises(solver: PointSolver, design: Design): void {
   }
 }
 
-/** A diode's drop falls with temperature, its leakage doubles: the straight line through the round's temperature. */
+/**
+ * A diode's drop falls with temperature, its leakage doubles: the straight line through the round's temperature.
+ * @derivation tangent of V0(T)·I + R·I² + leakage(T) in T
+ * @valid near the round's temperature
+ */
 function diodeHeat(solver: PointSolver, design: Design): void {
   const { state, heat, ledger } = solver;
   const { diode } = design;
@@ -182,7 +210,11 @@ function diodeHeat(solver: PointSolver, design: Design): void {
   heat.constant[LOW] = forward + leakage - slope * t;
 }
 
-/** Writes the losses that follow from the settled temperatures, and the sum of all. */
+/**
+ * Writes the losses that follow from the settled temperatures, and the sum of all.
+ * @source iec-60028 (copper); on-resistance linear in temperature
+ * @valid as `balanceHeat`
+ */
 export function settleLosses(solver: PointSolver, design: Design): void {
   const { heat, ledger, resistive, tempco } = solver;
   const { temperature } = heat;

@@ -28,6 +28,9 @@ export function addOtherLosses(solver: PointSolver, design: Design): void {
 /**
  * Ac winding loss, at the reference temperature of rows, and core loss. A ripple with a pause is taken as its own triangle for the
  * share of time that it lasts: the same as the whole triangle where the pause closes.
+ * @source dowell-1966 (winding)
+ * @source igse-2002 (core)
+ * @valid ripple a triangle; the rows' own ranges
  */
 function addChokes(solver: PointSolver, design: Design): void {
   const { state } = solver;
@@ -49,6 +52,8 @@ function addChokes(solver: PointSolver, design: Design): void {
 /**
  * Share of the set frequency's core loss that a ripple with a pause has: each slope burns k·(ΔI/t)^α·t, so squeezing the
  * triangle into a share s of the period at the set frequency leaves s^(1 − α), and skipped pulses thin it out.
+ * @source igse-2002: each slope adds |dB/dt|^α·ΔB^(β−α)·t
+ * @valid no relaxation loss in the pause
  */
 function pulseShare(solver: PointSolver, design: Design): number {
   const { state } = solver;
@@ -60,7 +65,11 @@ function pulseShare(solver: PointSolver, design: Design): number {
   return skipped * scratch[0];
 }
 
-/** Core loss of the transformers: a trapezoid of flux, two ramps a period; pulses that are skipped lose nothing. */
+/**
+ * Core loss of the transformers: a trapezoid of flux, two ramps a period; pulses that are skipped lose nothing.
+ * @source igse-2002: 2·ki·f^α·ΔB^β·d^(1−α), d the share of one ramp
+ * @valid no relaxation loss on the flats
+ */
 function addTransformerCore(solver: PointSolver, design: Design): void {
   const { state } = solver;
   const { transformer, transformerChoice, frequency, stage } = design;
@@ -76,6 +85,11 @@ function addTransformerCore(solver: PointSolver, design: Design): void {
   solver.ledger[TRANSFORMER_CORE] += state.activePhases * transformer.coreScale * 2 * scratch[0] * skipped * factor;
 }
 
+/**
+ * What controller and power stages draw for themselves.
+ * @derivation supply voltage times quiescent current
+ * @valid auxiliary supply of stated efficiency where the controller has no linear one
+ */
 function addController(solver: PointSolver, design: Design): void {
   const { state, ledger } = solver;
   const { controller, powerStage } = design;
@@ -87,7 +101,11 @@ function addController(solver: PointSolver, design: Design): void {
   ledger[CONTROLLER] += supply * (controller.quiescentCurrent + stages);
 }
 
-/** Loss of the input filter's choke: dc alone, for its ripple is what the filter leaves. */
+/**
+ * Loss of the input filter's choke: dc alone, for its ripple is what the filter leaves.
+ * @derivation I²·R of the mean input current
+ * @valid ripple current in the filter small
+ */
 function addFilterChoke(solver: PointSolver, design: Design): void {
   const { state, ledger } = solver;
   if (design.filterChoke === undefined) return;

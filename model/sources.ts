@@ -23,6 +23,12 @@ export const SOURCES = {
     year: 2018,
     place: 'ASTM B258',
   },
+  'balogh-dn63': {
+    author: 'L. Balogh',
+    title: 'The current-doubler rectifier: an alternative rectification technique for push-pull and bridge converters',
+    year: 1994,
+    place: 'Unitrode design note DN-63',
+  },
   'burkart-kolar-2013': {
     author: 'R. Burkart, J. W. Kolar',
     title: 'Component cost models for multi-objective optimizations of switched-mode power converters',
@@ -212,6 +218,12 @@ export const SOURCES = {
     title: 'Calculation of power loss (synchronous)',
     year: 2016,
     place: 'note AEK59-D1-0065-2',
+  },
+  'sabate-1990': {
+    author: 'J. A. Sabaté, V. Vlatković, R. B. Ridley, F. C. Lee, B. H. Cho',
+    title: 'Design considerations for high-voltage high-power full-bridge zero-voltage-switched PWM converter',
+    year: 1990,
+    place: 'IEEE APEC, pp. 275-284',
   },
   slus660h: {
     author: 'Texas Instruments',

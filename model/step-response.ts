@@ -50,7 +50,12 @@ const given = new Float64Array(8);
 const pulse = createWaveform(4);
 const response = createBankRipple();
 
-/** Writes the excursion of `design` at `step` to `at`. */
+/**
+ * Writes the excursion of `design` at `step` to `at`.
+ * @source slus660h, equation 22 (application)
+ * @source qiu-2004 bounds the loop
+ * @valid ideal control: the longest duty at once
+ */
 export function findStepExcursion(design: Design, step: LoadStep, at: StepCase): void {
   if (at.releasedAt !== at.outputVoltage) findRelease(design, step, at);
   const { stage } = design;
@@ -65,7 +70,11 @@ export function findStepExcursion(design: Design, step: LoadStep, at: StepCase):
   at.excursion = Math.max(slew.excursion, at.release, at.bandwidth) + 0.5 * at.ripple;
 }
 
-/** Excursions that no input voltage changes: at release, and by the bandwidth. Leaves the delay in `slew`. */
+/**
+ * Excursions that no input voltage changes: at release, and by the bandwidth. Leaves the delay in `slew`.
+ * @source slus660h, equation 22 (release); bandwidth form ΔI·|Z| at the crossover
+ * @valid as `findStepExcursion`
+ */
 function findRelease(design: Design, step: LoadStep, at: StepCase): void {
   const { stage } = design;
   const copies = design.phases * stage.chokes;
@@ -80,7 +89,11 @@ function findRelease(design: Design, step: LoadStep, at: StepCase): void {
   at.bandwidth = step.current * slew.impedance;
 }
 
-/** Excursion while the phases slew from the delay on: the bank carries what they do not yet bring. */
+/**
+ * Excursion while the phases slew from the delay on: the bank carries what they do not yet bring.
+ * @derivation piecewise-linear capacitor current, integrated exactly
+ * @valid slews > 0
+ */
 function findSlewed(step: LoadStep, bank: Bank): void {
   const { phases, delay } = slew;
   if (isPair(bank)) {
@@ -101,7 +114,11 @@ function findSlewed(step: LoadStep, bank: Bank): void {
   }
 }
 
-/** The current that the bank must carry, until the phases have caught up: rising with the load, falling with the phases. */
+/**
+ * The current that the bank must carry, until the phases have caught up: rising with the load, falling with the phases.
+ * @derivation load's ramp less the phases' ramp, until they meet
+ * @valid slews > 0
+ */
 function deficit(step: LoadStep): void {
   const { phases: phaseSlew, delay } = slew;
   const ramp = step.current / step.slew;
@@ -116,7 +133,11 @@ function deficit(step: LoadStep): void {
   addSegment(pulse, Math.max(atSecond / phaseSlew, 1e-12), atSecond, 0);
 }
 
-/** Writes |Z| of a bank at the frequency in `slew`. */
+/**
+ * Writes |Z| of a bank at the frequency in `slew`.
+ * @derivation admittances of two R–L–C branches add
+ * @valid c1 > 0
+ */
 function findImpedance(bank: Bank): void {
   const { omega } = slew;
   const x1 = omega * bank.l1 - 1 / (omega * bank.c1);

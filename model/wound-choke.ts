@@ -79,7 +79,11 @@ export class WoundChoke implements Inductor {
   surfaceResistance = 0.5;
 }
 
-/** Rewrites `choke` for `turns` of `conductor` on `core` of `material` at `inductance` (H), in air of `airSpeed` (m/s) at `ambient` (K). */
+/**
+ * Rewrites `choke` for `turns` of `conductor` on `core` of `material` at `inductance` (H), in air of `airSpeed` (m/s) at `ambient` (K).
+ * @derivation joins the figures below: each names its source
+ * @valid turns ≥ 1; inductance within the core's reach, else `outOfReach` tells
+ */
 export function windChoke(
   choke: WoundChoke,
   core: Core,
@@ -97,6 +101,11 @@ export function windChoke(
   boxOf(choke, core, material, conductor, turns, airSpeed, ambient);
 }
 
+/**
+ * Gap for the inductance, and by what fraction it cannot be had.
+ * @source mclyman-2004: gap with fringing
+ * @valid gap up to a quarter of the window's breadth
+ */
 function gapOf(choke: WoundChoke, core: Core, material: Material, turns: number, inductance: number): void {
   const bare = (4e-7 * Math.PI * turns * turns * core.area * material.permeability) / core.pathLength;
   if (material.kind === 'powder') {
@@ -109,6 +118,11 @@ function gapOf(choke: WoundChoke, core: Core, material: Material, turns: number,
   choke.outOfReach = choke.gap > most ? choke.gap / most - 1 : bare < inductance ? inductance / bare - 1 : 0;
 }
 
+/**
+ * Layers, fill and dc resistance of the winding.
+ * @source dowell-1966: layers from the choke's inside out
+ * @valid layers fill the breadth
+ */
 function layChoke(choke: WoundChoke, core: Core, conductor: Conductor, turns: number): void {
   const height = Math.max(0.1e-3, core.windowHeight - INSULATION - gapKeepOut(choke.gap));
   choke.parallel = parallelThatFit(conductor, turns, core.windowBreadth, height, MOST_PARALLEL);
@@ -119,6 +133,11 @@ function layChoke(choke: WoundChoke, core: Core, conductor: Conductor, turns: nu
   choke.layers = winding.dowellLayers;
 }
 
+/**
+ * Saturation current and the core loss law in terms of ripple current.
+ * @source igse-2002: ki·(2f)^α·ΔB^β·Ve at half duty; saturation from L·I/(N·Ae)
+ * @valid the material's own range, else a limit tells
+ */
 function coreOf(choke: WoundChoke, core: Core, material: Material, turns: number, inductance: number): void {
   choke.fluxPerAmpere = inductance / (turns * core.minimumArea);
   choke.saturationCurrent = material.saturation100 / choke.fluxPerAmpere;
@@ -131,6 +150,12 @@ function coreOf(choke: WoundChoke, core: Core, material: Material, turns: number
   choke.coreSwingExponent = material.fluxExponent;
 }
 
+/**
+ * Size, mass, price and heat path.
+ * @source burkart-kolar-2013: cost of a wound part
+ * @source churchill-1977 and radiation: surface
+ * @valid rise near 40 K
+ */
 function boxOf(
   choke: WoundChoke,
   core: Core,

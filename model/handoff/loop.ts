@@ -30,7 +30,12 @@ export interface Loop {
   readonly phaseMargin: number;
 }
 
-/** The loop at `point`, for a modulator ramp of 1 V; the crossover is that which the load-step figure counts on. */
+/**
+ * The loop at `point`, for a modulator ramp of 1 V; the crossover is that which the load-step figure counts on.
+ * @source venable-1983: type-III compensator
+ * @source qiu-2004: crossover
+ * @valid voltage mode, continuous operation
+ */
 export function loopAt(point: SolvedPoint): Loop {
   const { design } = point;
   const { stage } = design;
@@ -44,6 +49,11 @@ export function loopAt(point: SolvedPoint): Loop {
   return loop;
 }
 
+/**
+ * The loop closed at `wanted` Hz.
+ * @source venable-1983
+ * @valid crossover below half the edges' rate
+ */
 function closeAt(point: SolvedPoint, wanted: number): Loop {
   const plant = plantAt(point, wanted);
   const compensator = designCompensator(plant, wanted, MARGIN);
@@ -51,7 +61,11 @@ function closeAt(point: SolvedPoint, wanted: number): Loop {
   return { plant, compensator, parts: compensatorParts(compensator, INPUT_RESISTOR), crossover, phaseMargin };
 }
 
-/** Plant of the averaged stage; the bank is what its impedance at `frequency` Hz says. */
+/**
+ * Plant of the averaged stage; the bank is what its impedance at `frequency` Hz says.
+ * @source erickson-maksimovic-2001, chapter 8: averaged buck, phases in parallel
+ * @valid below half the edges' rate
+ */
 function plantAt(point: SolvedPoint, frequency: number): LoopPlant {
   const { design, state, output } = point;
   const { stage } = design;
@@ -69,14 +83,22 @@ function plantAt(point: SolvedPoint, frequency: number): LoopPlant {
   };
 }
 
-/** Voltage behind the chokes at a duty of one, V: what the ideal duty says of it. */
+/**
+ * Voltage behind the chokes at a duty of one, V: what the ideal duty says of it.
+ * @derivation Vo over the ideal duty
+ * @valid no drops
+ */
 export function sourceBehind({ design, state }: SolvedPoint): number {
   return (
     state.outputVoltage / design.stage.idealDuty(state.inputVoltage, state.outputVoltage, design.transformer.ratio)
   );
 }
 
-/** Capacitance and series resistance that have the bank's impedance at `omega` rad/s, series inductance left out. */
+/**
+ * Capacitance and series resistance that have the bank's impedance at `omega` rad/s, series inductance left out.
+ * @derivation series C and R of the same admittance at one frequency
+ * @valid series inductance left out
+ */
 function equivalent(bank: Bank, omega: number): { capacitance: number; resistance: number } {
   const x1 = -1 / (omega * bank.c1);
   if (!(bank.c2 > 0)) return { capacitance: bank.c1, resistance: bank.r1 };

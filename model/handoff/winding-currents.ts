@@ -35,7 +35,12 @@ export function chokeCurrent({ state }: SolvedPoint): WindingCurrent {
   return figures('winding', state.choke);
 }
 
-/** Currents of primary and secondary: pulses that ramp with the choke, magnetizing current left out. */
+/**
+ * Currents of primary and secondary: pulses that ramp with the choke, magnetizing current left out.
+ * @source erickson-maksimovic-2001, chapter 6
+ * @source balogh-dn63 for the doubler
+ * @valid straight segments, magnetizing current left out
+ */
 export function transformerCurrents(point: SolvedPoint): WindingCurrent[] {
   const { design, state } = point;
   const { form } = design.stage;
@@ -59,6 +64,11 @@ export function transformerCurrents(point: SolvedPoint): WindingCurrent[] {
   return [figures('primary', primary), figures('each secondary half', half)];
 }
 
+/**
+ * Pulses that ramp with the choke, times `scale`.
+ * @derivation the choke's rising segment, one sign or both
+ * @valid straight segments
+ */
 function pulseWave({ design, state }: SolvedPoint, scale: number, both: boolean): Waveform {
   const w = createWaveform(4);
   const period = design.stage.chokeMultiple / state.frequency;

@@ -16,6 +16,11 @@ export function judgeConstruction(e: Evaluator): void {
   judgeSize(e);
 }
 
+/**
+ * Blocking voltages against derated ratings.
+ * @source hart-2011, chapter 7: a switch of these stages blocks the input; ringing by common practice
+ * @valid no resonance beyond the stated ringing
+ */
 function judgeVoltages(e: Evaluator): void {
   const { book, places, design, rail } = e;
   const share = rail.derating.switchVoltage;
@@ -57,6 +62,8 @@ function judgeBands(e: Evaluator): void {
 /**
  * Judges the smallest distance of the frequency (and its harmonics, as the band asks) to a band, as a fraction of the frequency; below 0
  * inside. The oscillator's tolerance counts.
+ * @derivation k·f·(1 ± tolerance) outside the band
+ * @valid k whole, up to the band's harmonics
  */
 function judgeBand(e: Evaluator, band: AvoidedBand): void {
   const { frequency } = e.design;

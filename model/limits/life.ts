@@ -3,7 +3,11 @@ import { electrolyticLife } from '../capacitors/index.ts';
 import type { Evaluator } from '../evaluate.ts';
 import type { Bulk } from '../parts/bulk.ts';
 
-/** Adds the wear of the solved usual point, weighted by its share of the time (Miner: rates of wear add), 1/s. */
+/**
+ * Adds the wear of the solved usual point, weighted by its share of the time (Miner: rates of wear add), 1/s.
+ * @source ncp5314, page 20: life halves each 10 K; rates of wear add (Miner)
+ * @valid wet electrolytics
+ */
 export function addWear(e: Evaluator, share: number): void {
   if (!(share > 0) || e.places.bulkLife < 0) return;
   const { heat } = e.solver;
@@ -24,6 +28,11 @@ function isWet(bulk: Bulk | undefined): bulk is Bulk {
   return bulk !== undefined && bulk.technology === 'electrolytic';
 }
 
+/**
+ * Wear of one piece at `temperature` K, 1/s.
+ * @source ncp5314, page 20
+ * @valid wet electrolytics
+ */
 function wear(bulk: Bulk, temperature: number): number {
   return 1 / electrolyticLife(bulk.ratedLife, bulk.maximumTemperature, temperature);
 }

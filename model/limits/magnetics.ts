@@ -13,6 +13,11 @@ export function judgeMagnetics(e: Evaluator, index: number): void {
   if (e.design.stage.form !== undefined) judgeTransformer(e, index);
 }
 
+/**
+ * Window, reach and material range of a wound choke.
+ * @derivation flux swing ½·ΔI·L/(N·Amin)
+ * @valid the material's range: beyond it is a violation
+ */
 function judgeChoke(e: Evaluator, index: number): void {
   const { book, places, design } = e;
   const { state } = e.solver;
@@ -25,6 +30,11 @@ function judgeChoke(e: Evaluator, index: number): void {
   book.judgeBy(places.chokeMaterial, materialViolation(material, frequency, swing), 0, 1, index);
 }
 
+/**
+ * Window, material range, flux and duty of a transformer.
+ * @source ltc1698, page 16: Vi,max·Dmax/(f·Np·Ae) in a transient, remanence on top where the core is driven one way
+ * @valid linear core up to its saturation
+ */
 function judgeTransformer(e: Evaluator, index: number): void {
   const { book, places, design, rail } = e;
   const { state } = e.solver;

@@ -91,13 +91,22 @@ function judgeAsked(e: Evaluator, place: number, index: number): void {
   e.book.judgeAt(place, asked, index);
 }
 
-/** Writes the peak of one phase with unequal sharing, A, signless, to `peak[0]`. */
+/**
+ * Writes the peak of one phase with unequal sharing, A, signless, to `peak[0]`.
+ * @source qiu-2004 (phases alike by design only); jitter Vi·δt/L
+ * @valid sharing error of the controller's row
+ */
 function findPhasePeak(state: StageState, design: Design): void {
   const sharing = design.phases > 1 ? Math.abs(state.meanCurrent) * design.controller.sharingError : 0;
   const jitter = (state.inputVoltage * design.controller.jitter) / state.effectiveInductance;
   peak[0] = Math.max(Math.abs(state.peakCurrent), Math.abs(state.valleyCurrent)) + sharing + jitter;
 }
 
+/**
+ * Saturation at the current limit, and the current ratings.
+ * @derivation current limit's spread over the peak; dice alike share
+ * @valid dice share current alike
+ */
 function judgeCurrents(e: Evaluator, index: number): void {
   const { design, places } = e;
   const { state } = e.solver;
@@ -123,6 +132,8 @@ function judgeCurrents(e: Evaluator, index: number): void {
 /**
  * The high switch's voltage with the ringing of its loop against the whole rating. A step of current I rings to I·√(L/C); an
  * edge of length t cannot ring beyond 2·L·I/t, twice its inductive drop: the smaller holds.
+ * @derivation step response of L and C, bounded by twice the inductive drop of the edge
+ * @valid loop inductance of a tight layout
  */
 function judgeOvershoot(e: Evaluator, planned: PlannedPoint, index: number): void {
   const { design, places } = e;
@@ -137,6 +148,11 @@ function judgeOvershoot(e: Evaluator, planned: PlannedPoint, index: number): voi
   judgeAsked(e, places.highVoltage, index);
 }
 
+/**
+ * On-time and off-time at the fast end of the oscillator.
+ * @source ltc3728, page 28: Vo/(Vi·f) against the controller's shortest
+ * @valid the oscillator's fast end
+ */
 function judgeTimes(e: Evaluator, index: number): void {
   const { design, places, rail } = e;
   const { controller } = design;
@@ -169,6 +185,11 @@ function judgeRippleAt(e: Evaluator, index: number): void {
   judgeAsked(e, places.inputRipple, index);
 }
 
+/**
+ * Ripple current of each piece against its rating.
+ * @derivation pieces alike share the group's rms current
+ * @valid pieces alike
+ */
 function judgeCapacitors(e: Evaluator, index: number): void {
   const { places, design, solver } = e;
   const { outputRipple, inputRipple } = solver;

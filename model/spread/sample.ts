@@ -78,6 +78,11 @@ export function drawSamples(
   return rows;
 }
 
+/**
+ * Draws what varies in one sample.
+ * @derivation three deviations are the stated tolerance, cut there; line, ambient and age even
+ * @valid tolerances symmetrical
+ */
 function drawCauses(row: Float64Array, seed: number, sample: number): void {
   for (let c = 0; c < FIXED + CHOKES; c++) {
     const even = c === 0 || c === 1 || c === 9;
@@ -89,7 +94,11 @@ function clipped(value: number): number {
   return Math.max(-1, Math.min(1, value));
 }
 
-/** The sheet at the sample's line and ambient; what was drawn is no longer a tolerance. */
+/**
+ * The sheet at the sample's line and ambient; what was drawn is no longer a tolerance.
+ * @derivation even between the line's ends; ambient even within its season
+ * @valid ambient span of a room
+ */
 function sampleRail(rail: Rail, row: Float64Array): Rail {
   const { minimum, maximum } = rail.input;
   const volts = minimum + row[0] * (maximum - minimum);
@@ -101,6 +110,11 @@ function sampleRail(rail: Rail, row: Float64Array): Rail {
   };
 }
 
+/**
+ * Puts a sample's drawn deviations into frequency, resistances, inductances and banks.
+ * @derivation tolerances drawn once each for the sample
+ * @valid as `drawCauses`
+ */
 function adjust(e: Evaluator, rail: Rail, row: Float64Array): void {
   const { design } = e;
   const { tolerances } = rail;
@@ -127,6 +141,11 @@ function copyBank(from: Flavour, to: Flavour): void {
   Object.assign(to.input, from.input);
 }
 
+/**
+ * Multiplies a bank's capacitances by what a sample drew.
+ * @derivation product of the drawn deviations; ageing by the decade of hours
+ * @valid deviations within the tolerances
+ */
 function vary(
   bank: Bank,
   rail: Rail,

@@ -139,6 +139,11 @@ function variance(
   return { figure, shares: told };
 }
 
+/**
+ * Squared correlation.
+ * @derivation squared correlation of two samples: the share of variance that a straight line explains
+ * @valid two values or more
+ */
 function correlation(x: Float64Array, y: Float64Array): number {
   const n = x.length;
   const mx = x.reduce((a, b) => a + b, 0) / n;

@@ -28,8 +28,8 @@ const BUCK = {
   chokes: 1,
   chokeMultiple: 1,
   highestDuty: 1,
-  idealDuty: (inputVoltage: number, outputVoltage: number): number => outputVoltage / inputVoltage,
-  lowBlocking: (inputVoltage: number): number => inputVoltage,
+  idealDuty: buckDuty,
+  lowBlocking: buckBlocking,
   solve: solveBuck,
   addEdgeLosses,
 } as const;
@@ -58,12 +58,36 @@ export const buckDiode: Stage<'buck-diode'> = {
   },
 };
 
+/**
+ * Ideal duty of a buck: Vo = D·Vi. `inputVoltage` V, `outputVoltage` V.
+ * @source slva057, section 2.1
+ * @valid continuous operation, no drops, 0 < Vo ≤ Vi
+ * @example buckDuty(12, 3.3) = 0.275
+ */
+export function buckDuty(inputVoltage: number, outputVoltage: number): number {
+  return outputVoltage / inputVoltage;
+}
+
+/**
+ * Volts that the low device of a buck blocks: the whole input, for the node stands there while the high switch conducts. V.
+ * @derivation Kirchhoff, no drop in the high switch
+ * @valid no ringing: a limit adds that
+ * @example buckBlocking(48) = 48
+ */
+export function buckBlocking(inputVoltage: number): number {
+  return inputVoltage;
+}
+
 function stepsDown(rail: Rail): string | undefined {
   if (rail.output.maximum < rail.input.minimum) return undefined;
   return `the highest output, ${rail.output.maximum} V, is not below the lowest input, ${rail.input.minimum} V`;
 }
 
-/** Solves one operating point of a buck; see `Stage.solve`. */
+/**
+ * Solves one operating point of a buck; see `Stage.solve`.
+ * @source slva057, sections 2.1 and 2.2, with drops; in reverse the same choke run as a boost from the output
+ * @valid steady state; straight segments
+ */
 function solveBuck(design: Design, state: StageState): void {
   const current = state.loadCurrent / state.activePhases;
   state.meanCurrent = current;
@@ -75,6 +99,11 @@ function solveBuck(design: Design, state: StageState): void {
   writeCurrents(state);
 }
 
+/**
+ * Duty, ripple and mode while power runs from input to output.
+ * @source slva057, section 2.1: Vo = D·(Vi − drops) − (1 − D)·drops
+ * @valid load current ≥ 0; drops small beside the voltages
+ */
 function solveForward(design: Design, state: StageState): void {
   const { current } = steady;
   steady.blocking = design.stage.diode || design.emulates;
@@ -98,6 +127,11 @@ function solveForward(design: Design, state: StageState): void {
   applyForward(steady, state);
 }
 
+/**
+ * Volts across the choke in both intervals.
+ * @source slva057, section 2.1: Vi − Vds − Io·RL − Vo and Vo + Vd + Io·RL
+ * @valid drops taken at one current for the whole interval
+ */
 function forwardVoltages(state: StageState): void {
   const { current, drop } = flow;
   steady.rise = state.inputVoltage - state.outputVoltage - current * (state.highResistance + state.pathResistance);
@@ -105,7 +139,11 @@ function forwardVoltages(state: StageState): void {
   keepDriving(state);
 }
 
-/** Gaps before both edges, V for each volt that the body diode which the current's sign chooses drops more than its switch. */
+/**
+ * Gaps before both edges, V for each volt that the body diode which the current's sign chooses drops more than its switch.
+ * @derivation a body diode takes its drop over the switch for the share gap·f of the period
+ * @valid gap short beside both intervals
+ */
 function gaps(design: Design): void {
   steady.gapFall = design.gap * design.frequency;
   steady.gapRise = steady.gapFall;
@@ -119,6 +157,11 @@ function keepDriving(state: StageState): void {
   if (!(steady.rise > least)) steady.rise = least;
 }
 
+/**
+ * Duty, ripple and mode while power runs from output to input.
+ * @source slva057, section 2.1, with source and output exchanged: the output drives, the input takes
+ * @valid load current < 0; a switch in the low position
+ */
 function solveReverse(design: Design, state: StageState): void {
   const { current } = steady;
   steady.blocking = design.emulates;
@@ -133,7 +176,11 @@ function solveReverse(design: Design, state: StageState): void {
   applyReverse(steady, state);
 }
 
-/** Writes the choke's and the input's waveform of one phase and the moments that losses need. */
+/**
+ * Writes the choke's and the input's waveform of one phase and the moments that losses need.
+ * @source slus660h, pages 44 and 45: √D·(Io² + ΔI²/12) and its twin, as moments of straight segments
+ * @valid straight segments
+ */
 function writeCurrents(state: StageState): void {
   state.highDevices = 1;
   state.lowDevices = 1;

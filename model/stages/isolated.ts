@@ -37,7 +37,11 @@ export function isolatedRefusal(rail: Rail): string | undefined {
   return undefined;
 }
 
-/** Solves one operating point of a transformer stage of `form`; see `Stage.solve`. */
+/**
+ * Solves one operating point of a transformer stage of `form`; see `Stage.solve`.
+ * @source hart-2011, chapter 7: the rectified wave drives a buck's choke
+ * @valid steady state; leakage time short beside the pulse
+ */
 export function solveIsolated(form: IsolatedForm, design: Design, state: StageState): void {
   const { transformer } = design;
   const chokes = form.doubler ? 2 : 1;
@@ -61,6 +65,8 @@ export function solveIsolated(form: IsolatedForm, design: Design, state: StageSt
 /**
  * Volts across the choke in both intervals, after the drops of switches, windings, rectifiers and choke. While it rises its current
  * also flows through the leakage, L/n² on its side, which takes its share of the volts: the rise lasts so much longer.
+ * @source rashid-2014, section 13.2: Vo = (Vi − drops)/n − Vd; leakage as a divider of volts
+ * @valid drops taken at the mean current; L ≫ Llk/n²
  */
 function voltages(form: IsolatedForm, t: Transformer, state: StageState, phaseCurrent: number, current: number): void {
   const n = t.ratio;
@@ -85,6 +91,8 @@ function voltages(form: IsolatedForm, t: Transformer, state: StageState, phaseCu
 /**
  * Body diodes of the rectifiers: in the gaps before and after a pulse and while the current turns round in the leakage. A shifted
  * bridge waits out one of the gaps within that turn; a centre tap sees half of what one end of its winding drops.
+ * @derivation the body diode's drop over the switch times the share of the period that the gaps and Llk·I/(n·V) take
+ * @valid gaps short beside the pulses
  */
 function rectifierGaps(form: IsolatedForm, design: Design, state: StageState, current: number): void {
   const t = design.transformer;
@@ -98,7 +106,12 @@ function rectifierGaps(form: IsolatedForm, design: Design, state: StageState, cu
   steady.waitCurrent = 0;
 }
 
-/** Moments of every current of one phase, and the waveforms of choke and input. */
+/**
+ * Moments of every current of one phase, and the waveforms of choke and input.
+ * @source erickson-maksimovic-2001, chapter 6, winding currents
+ * @source balogh-dn63, both rectifiers of a doubler
+ * @valid straight segments; freewheeling current shared alike by a centre tap's halves
+ */
 function writeCurrents(form: IsolatedForm, t: Transformer, state: StageState, chokes: number, shifted: boolean): void {
   const { valleyCurrent: a, peakCurrent: b, highShare: h, lowShare: l } = state;
   const square = (a * a + a * b + b * b) / 3;
@@ -138,6 +151,8 @@ function writeCurrents(form: IsolatedForm, t: Transformer, state: StageState, ch
  * Mean square and mean over the time between pulses, as shares of what they begin with, of the current that circulates in the shorted
  * primary of a shifted bridge: it dies as e^(−t·R/L) in the leakage, so (1 − e^(−2x))/(2x) and (1 − e^(−x))/x with x the time in those
  * constants.
+ * @derivation first-order decay of a current in L and R, integrated
+ * @valid R·t/L ≥ 0; resistances constant over the pulse
  */
 function findDecay(form: IsolatedForm, t: Transformer, state: StageState): void {
   const period = state.frequency > 0 ? 1 / state.frequency : 1;
@@ -155,6 +170,11 @@ function findDecay(form: IsolatedForm, t: Transformer, state: StageState): void 
   decay[1] = (1 - rest) / x;
 }
 
+/**
+ * The choke's waveform and what one phase draws from the input.
+ * @derivation the choke's triangle, and its rising part times share/n at the input
+ * @valid straight segments
+ */
 function writeWaveforms(form: IsolatedForm, t: Transformer, state: StageState): void {
   const { valleyCurrent: a, peakCurrent: b, highShare: h, lowShare: l } = state;
   const period = state.frequency > 0 ? 1 / state.frequency : 1;
@@ -172,7 +192,12 @@ function writeWaveforms(form: IsolatedForm, t: Transformer, state: StageState): 
   addSegment(state.draw, repeat - pulse, 0, 0);
 }
 
-/** Flux, magnetizing current, duty lost to leakage, rectifier stress. */
+/**
+ * Flux, magnetizing current, duty lost to leakage, rectifier stress.
+ * @source ltc1698, page 16: V·ton/(Np·Ae)
+ * @source sabate-1990: duty lost to leakage
+ * @valid flux below saturation; magnetizing current small beside the load's
+ */
 function writeFlux(form: IsolatedForm, design: Design, t: Transformer, state: StageState): void {
   const on = form.doubleEnded && !form.doubler ? 0.5 * state.dutyCycle : state.dutyCycle;
   const volts = form.share * state.inputVoltage;
@@ -191,7 +216,11 @@ function writeFlux(form: IsolatedForm, design: Design, t: Transformer, state: St
   state.rectifierVoltage = rectifierVoltage(form, state.inputVoltage, t.ratio);
 }
 
-/** The magnetizing current of a single-ended stage rises with each pulse: ∫(i + m)² − ∫i² over it, m from 0 to its peak. */
+/**
+ * The magnetizing current of a single-ended stage rises with each pulse: ∫(i + m)² − ∫i² over it, m from 0 to its peak.
+ * @derivation ∫(i + m·t/ton)² − ∫i² over the pulse, i at its mean
+ * @valid ripple small beside the mean, or the pulse's mean taken
+ */
 function addMagnetizing(t: Transformer, state: StageState): void {
   const m = state.magnetizingPeak;
   const middle = (0.5 * (state.valleyCurrent + state.peakCurrent)) / t.ratio;
@@ -200,13 +229,21 @@ function addMagnetizing(t: Transformer, state: StageState): void {
   state.highMeanSquare += more;
 }
 
-/** Volts that one rectifier blocks, without ringing. `inputVoltage` V, `ratio` Np/Ns. */
+/**
+ * Volts that one rectifier blocks, without ringing. `inputVoltage` V, `ratio` Np/Ns.
+ * @source hart-2011, chapter 7: a centre tap sees both halves of the winding
+ * @valid no ringing: a limit adds that
+ */
 export function rectifierVoltage(form: IsolatedForm, inputVoltage: number, ratio: number): number {
   const secondary = (form.share * inputVoltage) / ratio;
   return form.centreTap ? 2 * secondary : secondary;
 }
 
-/** Ideal duty of the choke's rising interval. */
+/**
+ * Ideal duty of the choke's rising interval.
+ * @source hart-2011, chapter 7: Vo = δ·share·Vi/n, half of it behind a doubler
+ * @valid no drops
+ */
 export function isolatedDuty(form: IsolatedForm, inputVoltage: number, outputVoltage: number, ratio: number): number {
   return (outputVoltage * ratio) / (form.share * inputVoltage);
 }

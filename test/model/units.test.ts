@@ -6,7 +6,10 @@ import { describe, expect, it } from 'vitest';
 import * as capacitors from '../../model/capacitors/index.ts';
 import * as control from '../../model/control/index.ts';
 import * as heat from '../../model/heat/index.ts';
+import { filterInductance } from '../../model/input-filter.ts';
 import * as magnetics from '../../model/magnetics/index.ts';
+import { buckBlocking, buckDuty } from '../../model/stages/buck.ts';
+import { isolatedDuty, rectifierVoltage } from '../../model/stages/isolated.ts';
 import * as switches from '../../model/switches/index.ts';
 
 /** Exponents of m, kg, s, A, K. */
@@ -82,7 +85,15 @@ const m = magnetics;
 const k = control;
 const h = heat;
 
+/** A half bridge with a centre tap: its numbers have no unit. */
+const HALF = { share: 0.5, inSeries: 1, doubleEnded: true, doubler: false, centreTap: true };
+
 const ROWS: readonly Row[] = [
+  row('buckDuty', buckDuty, '12 V, 3.3 V', '1'),
+  row('buckBlocking', buckBlocking, '12 V', 'V'),
+  row('isolatedDuty', (a, b, n) => isolatedDuty(HALF, a, b, n), '400 V, 12 V, 15', '1'),
+  row('rectifierVoltage', (a, n) => rectifierVoltage(HALF, a, n), '400 V, 15', 'V'),
+  row('filterInductance', filterInductance, '0.1 V, 5e5 Hz, 0.01 A', 'H'),
   row('onResistance', s.onResistance, '0.01 Ω, 0.005 1/K, 1.2, 350 K, 2', 'Ω', 'kelvin'),
   row('conductionLoss', s.conductionLoss, '350 A², 0.002 Ω', 'W'),
   row('edgeTime', s.edgeTime, '2e-9 C, 3e-9 C, 2 V, 2 Ω, 1e-10 H, 20 A', 's'),

@@ -4,7 +4,7 @@ import { meanSquare } from '../../model/waveform/moments.ts';
 import { addSegment, createWaveform, type Waveform } from '../../model/waveform/waveform.ts';
 
 /** Steady state of a choke that sees `rise` V while the source drives it and `fall` V while it gives back. */
-export function choke(
+function choke(
   rise: number,
   fall: number,
   current: number,

@@ -81,6 +81,8 @@ export function predictionsOf(point: SolvedPoint): Prediction[] {
 /**
  * Output ripple with the load of the netlist, V. The model's load draws a current and leaves all ripple to the bank; the netlist's
  * is a resistance, so that its filter is damped, and takes its share of a current divider, the bank as large as ripple over current.
+ * @derivation current divider of load resistance and bank
+ * @valid bank's impedance taken as ripple over swing
  */
 function besideLoad({ state, solver }: SolvedPoint): number {
   const { ripple } = solver.outputRipple;
@@ -101,7 +103,11 @@ function one(name: string, unit: string, value: number, band: number, reading: R
   return { name, unit, value, band, reading, vectors: [vector] };
 }
 
-/** Conduction loss that a circuit of ideal switches can show, W: the model's figure. */
+/**
+ * Conduction loss that a circuit of ideal switches can show, W: the model's figure.
+ * @derivation sum of the I²·R slots
+ * @valid ideal switches
+ */
 export function conductionOf(point: SolvedPoint): number {
   const effects = new Set(['conduction', 'winding', 'copper', 'seriesResistance']);
   return LOSS_SLOTS.reduce((sum, [, effect], i) => sum + (effects.has(effect) ? point.solver.ledger[i] : 0), 0);

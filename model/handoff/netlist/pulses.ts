@@ -14,7 +14,11 @@ export interface PulseTimes {
   readonly gap: number;
 }
 
-/** The pulses of `point`, a transformer stage. */
+/**
+ * The pulses of `point`, a transformer stage.
+ * @source sabate-1990: the current turns round at V/Llk before the secondary drives
+ * @valid commutation short beside the pulse
+ */
 export function pulseTimes(point: SolvedPoint): PulseTimes {
   const { design, state } = point;
   const { stage, transformer, driver } = design;
@@ -45,7 +49,11 @@ export interface StartCurrents {
   readonly winding: number;
 }
 
-/** Currents of `point` at `ago` s into the cycle. */
+/**
+ * Currents of `point` at `ago` s into the cycle.
+ * @derivation the model's straight segments at one instant, carried through the turns ratio
+ * @valid steady state
+ */
 export function startCurrents(point: SolvedPoint, times: PulseTimes, ago: number): StartCurrents {
   const { design, state } = point;
   const { form } = design.stage;
@@ -70,6 +78,11 @@ export function startCurrents(point: SolvedPoint, times: PulseTimes, ago: number
   return { primary, magnetizing, first, second, winding: n * (primary - magnetizing) };
 }
 
+/**
+ * Magnetizing current at `ago` s into the cycle, A.
+ * @derivation linear in the volt-seconds: up over the pulse, flat between, or down by the clamp diodes
+ * @valid linear core
+ */
 function magnetizingAt(point: SolvedPoint, times: PulseTimes, ago: number): number {
   const peak = point.state.magnetizingPeak;
   const { pulse, period } = times;

@@ -75,7 +75,11 @@ function writeTimes(lines: Lines, point: SolvedPoint, period: number, periods: n
   lines.derived('tfrom', 'tstop-tper', (periods - 1) * period, 's', 'start of what is measured');
 }
 
-/** Periods until the output filter has forgotten its start. */
+/**
+ * Periods until the output filter has forgotten its start.
+ * @derivation real part of the output filter's poles
+ * @valid second-order filter
+ */
 function settling(point: SolvedPoint, period: number): number {
   const { state, output, rail } = point;
   const load = Math.abs(state.outputVoltage / state.loadCurrent);

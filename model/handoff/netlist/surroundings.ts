@@ -8,7 +8,11 @@ import type { Lines } from './lines.ts';
 const LEAST_OHMS = 1e-6;
 const LEAST_HENRIES = 1e-9;
 
-/** Mean current drawn from the input by all phases, A. */
+/**
+ * Mean current drawn from the input by all phases, A.
+ * @derivation phases draw alike
+ * @valid steady state
+ */
 export function meanDraw(point: SolvedPoint): number {
   return point.state.activePhases * point.state.highMean;
 }
@@ -64,7 +68,11 @@ export function writeOutput(lines: Lines, point: SolvedPoint): void {
   lines.keep('v(out)');
 }
 
-/** Ripple voltage at time 0 about the mean, V. */
+/**
+ * Ripple voltage at time 0 about the mean, V.
+ * @derivation value at time 0 less the mean, by trapezoids of the trace
+ * @valid trace of straight pieces
+ */
 function firstRipple(bank: Bank, current: Waveform): number {
   const { time, value } = bankTrace(bank, current, 12);
   let area = 0;
