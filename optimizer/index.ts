@@ -40,7 +40,8 @@
  *     startIslands(problem: Problem, plan: Plan): Island[]
  *     immigrantsFor(islands: readonly Island[], i: number): Designs
  *     step(problem: Problem, island: Island, immigrants?: Designs, watch?: Watch): Island
- *     packIsland(island: Island): Uint8Array        unpackIsland(bytes: Uint8Array): Island      (throws on damage)
+ *     createStepper(problem): (island, immigrants, watch?) => Island                 // `step` in one memory: pack the island before the next step
+ *     packIsland(island, room?): Uint8Array         unpackIsland(bytes: Uint8Array): Island      (throws on damage)
  *     packDesigns(designs: Designs): Uint8Array     unpackDesigns(bytes: Uint8Array): Designs
  *     mergeArchives(problem, parts: readonly (Island | Designs)[]): Designs
  *     mergeNearMisses(problem, parts: readonly (Island | Designs)[], front: Designs): NearMissDesigns
@@ -64,5 +65,5 @@ export { type Families, type Gene, type GeneKind, type Objective, ONE_FAMILY, ty
 export { type Restart, type Restarted, relaxedProblem, restart } from './relaxed.ts';
 export { immigrantsFor, joinDesigns, NO_DESIGNS } from './ring.ts';
 export { type SearchOptions, type SearchResult, search } from './search.ts';
-export { step } from './step.ts';
+export { createStepper, type Stepper, step } from './step.ts';
 export type { TimeSplit, Watch } from './world.ts';

@@ -12,9 +12,12 @@ const MAGIC = 0x504f4843;
 type Numbers = Float64Array | Int32Array | Uint32Array;
 type Kind = 'f' | 'i' | 'u';
 
-/** Packs an island; `unpackIsland` gives back an equal one, to the bit. */
-export function packIsland(island: Island): Uint8Array {
-  return packValue(island);
+/** Gives a buffer of at least so many bytes; what is in it does not matter. */
+export type Room = (bytes: number) => ArrayBufferLike;
+
+/** Packs an island, at the beginning of the buffer that `room` gives, by default a new one; `unpackIsland` gives back an equal one, to the bit. */
+export function packIsland(island: Island, room: Room = newRoom): Uint8Array {
+  return packValue(island, room);
 }
 
 /** The island in these bytes, which it goes on to read: they must not change. Throws an Error that says what is wrong with damaged or foreign bytes. */
@@ -24,7 +27,11 @@ export function unpackIsland(bytes: Uint8Array): Island {
 
 /** Packs a set of designs, such as immigrants. */
 export function packDesigns(designs: Designs): Uint8Array {
-  return packValue(designs);
+  return packValue(designs, newRoom);
+}
+
+function newRoom(bytes: number): ArrayBuffer {
+  return new ArrayBuffer(bytes);
 }
 
 /** The designs in these bytes; errors as `unpackIsland`. */
@@ -32,7 +39,7 @@ export function unpackDesigns(bytes: Uint8Array): Designs {
   return unpackValue(bytes) as Designs;
 }
 
-function packValue(value: unknown): Uint8Array {
+function packValue(value: unknown, room: Room): Uint8Array {
   const arrays: Numbers[] = [];
   const head = new TextEncoder().encode(
     JSON.stringify(value, (_, part) => {
@@ -42,17 +49,21 @@ function packValue(value: unknown): Uint8Array {
     }),
   );
   const start = align(16 + head.length);
-  const bytes = new Uint8Array(arrays.reduce((sum, array) => sum + align(array.byteLength), start));
+  const size = arrays.reduce((sum, array) => sum + align(array.byteLength), start);
+  const bytes = new Uint8Array(room(size), 0, size);
   const view = new DataView(bytes.buffer);
   view.setUint32(0, MAGIC, true);
   view.setUint32(4, PACK_VERSION, true);
   view.setUint32(8, head.length, true);
   view.setUint32(12, bytes.length, true);
   bytes.set(head, 16);
+  bytes.fill(0, 16 + head.length, start);
   let at = start;
   for (const array of arrays) {
     writeNumbers(view, at, array);
-    at += align(array.byteLength);
+    const end = at + align(array.byteLength);
+    bytes.fill(0, at + array.byteLength, end);
+    at = end;
   }
   return bytes;
 }
@@ -68,7 +79,8 @@ function unpackValue(bytes: Uint8Array): unknown {
   const length = view.getUint32(8, true);
   let at = align(16 + length);
   // The reviver visits parts in the order in which they were written.
-  return JSON.parse(new TextDecoder().decode(bytes.subarray(16, 16 + length)), (_, part) => {
+  // Sliced: a decoder need not take bytes that threads share.
+  return JSON.parse(new TextDecoder().decode(bytes.slice(16, 16 + length)), (_, part) => {
     const kind = arrayKind(part);
     if (kind === undefined) return part;
     const array = readNumbers(view, at, kind, part[kind]);

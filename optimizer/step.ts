@@ -8,16 +8,35 @@ import { NO_DESIGNS } from './ring.ts';
 import { STALLED_GENERATIONS } from './settings.ts';
 import { createSurvival, type Survival, survive } from './survive.ts';
 import { learn } from './variation/index.ts';
-import { addRows, closeWorld, openWorld, type Watch, type World } from './world.ts';
+import { addRows, closeWorld, createMemory, openWorld, type Watch, type World } from './world.ts';
 
 /**
  * The island after one more epoch of `epochGenerations × population` evaluations (fewer only when no unseen design can be made). `island` is not
  * changed. `watch` measures where the time went and never influences the result.
  */
 export function step(problem: Problem, island: Island, immigrants: Designs = NO_DESIGNS, watch?: Watch): Island {
-  const world = openWorld(problem, island, immigrants.count, watch);
-  const tools = { nursery: createNursery(world), bench: createBench(world), survival: createSurvival(world) };
-  const { plan } = island;
+  return createStepper(problem)(island, immigrants, watch);
+}
+
+/** `step` for one problem. */
+export type Stepper = (island: Island, immigrants: Designs, watch?: Watch) => Island;
+
+/**
+ * A `step` that works in the same memory every time. The island it gives back is in part a view of that memory, so pack it before the next step. What it does
+ * does not depend on what it did before.
+ */
+export function createStepper(problem: Problem): Stepper {
+  const memory = createMemory(problem);
+  let tools: Tools | undefined;
+  return (island, immigrants, watch) => {
+    const world = openWorld(memory, island, immigrants.count, watch);
+    if (tools?.capacity !== world.capacity) tools = createTools(world);
+    return advance(world, tools, immigrants);
+  };
+}
+
+function advance(world: World, tools: Tools, immigrants: Designs): Island {
+  const { plan } = world.island;
   const target = world.counters.evaluations + plan.epochGenerations * plan.population;
   addRows(world, immigrants);
   if (world.count > 0) survive(world, tools.survival, world.count);
@@ -31,9 +50,20 @@ export function step(problem: Problem, island: Island, immigrants: Designs = NO_
 }
 
 interface Tools {
+  /** Of the world they were made for. */
+  readonly capacity: number;
   readonly nursery: Nursery;
   readonly bench: Bench;
   readonly survival: Survival;
+}
+
+function createTools(world: World): Tools {
+  return {
+    capacity: world.capacity,
+    nursery: createNursery(world),
+    bench: createBench(world),
+    survival: createSurvival(world),
+  };
 }
 
 /** A first population, or one around the archive in the place of one that stalled. */

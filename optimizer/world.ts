@@ -1,17 +1,18 @@
-/** The island opened for work: its data in rows with room for children, its archives live, its scratch allocated once an epoch. */
+/** The island opened for work: its data in rows with room for children, its archives live, all in memory that one epoch after the other uses. */
 import {
   type Archive,
   type ArchiveGrid,
+  createArchive,
   createNearMisses,
   createSampler,
   type Designs,
+  insertAll,
   insertAllNearMisses,
   type NearMisses,
   type NearMissGrid,
   packArchive,
   packNearMisses,
   type Sampler,
-  unpackArchive,
 } from './archive/index.ts';
 import { createTruncation, type Truncation } from './hypervolume/index.ts';
 import { CEILINGS, type Island, OPERATORS } from './island.ts';
@@ -130,8 +131,55 @@ export function nearMissGrid(problem: Problem): NearMissGrid {
   };
 }
 
-/** Opens an island with room for `guests` more rows. */
-export function openWorld(problem: Problem, island: Island, guests: number, watch: Watch | undefined): World {
+/**
+ * What worlds of one problem are opened in, one after the other. An epoch needs megabytes; taken anew each time they would keep the collector
+ * busy, which throws away compiled code with them.
+ */
+export interface Memory {
+  readonly problem: Problem;
+  readonly space: Space;
+  readonly archive: Archive;
+  readonly near: NearMisses;
+  readonly sample: Sampler;
+  /** Remembered from the last world, and used again where the next is of the same size. */
+  rows: Rows | undefined;
+  seen: Uint32Array;
+}
+
+type Rows = Pick<
+  World,
+  | 'capacity'
+  | 'batch'
+  | 'genes'
+  | 'coordinates'
+  | 'stride'
+  | 'objectives'
+  | 'violations'
+  | 'total'
+  | 'rank'
+  | 'family'
+  | 'parent'
+  | 'maker'
+  | 'ranker'
+  | 'truncation'
+>;
+
+/** Memory for worlds of that problem. */
+export function createMemory(problem: Problem): Memory {
+  return {
+    problem,
+    space: createSpace(problem.genes),
+    archive: createArchive(archiveGrid(problem)),
+    near: createNearMisses(nearMissGrid(problem)),
+    sample: createSampler(problem.genes.length, problem.objectives.length, ISLAND_SAMPLE),
+    rows: undefined,
+    seen: new Uint32Array(0),
+  };
+}
+
+/** Opens an island with room for `guests` more rows. The world that was opened in the memory before is lost. */
+export function openWorld(memory: Memory, island: Island, guests: number, watch: Watch | undefined): World {
+  const { problem, space, archive, near, sample } = memory;
   const n = problem.genes.length;
   const m = problem.objectives.length;
   const limits = problem.limits.length;
@@ -139,10 +187,12 @@ export function openWorld(problem: Problem, island: Island, guests: number, watc
   const keep = trial ? Math.max(island.plan.population, NICHE * island.families.length) : island.plan.population;
   const batch = Math.max(1, Math.round(keep * BATCH_SHARE));
   const capacity = Math.max(keep, island.population.count) + Math.max(guests, keep);
-  const rows = capacity + m + batch;
-  const space = createSpace(problem.genes);
-  const near = createNearMisses(nearMissGrid(problem));
+  archive.clear();
+  insertAll(archive, island.archive);
+  near.clear();
   insertAllNearMisses(near, island.nearMisses);
+  sample.clear();
+  sample.addAll(island.sample);
   const world: World = {
     problem,
     island,
@@ -151,26 +201,13 @@ export function openWorld(problem: Problem, island: Island, guests: number, watc
     n,
     m,
     limits,
-    capacity,
     keep,
-    batch,
-    genes: new Float64Array(rows * n),
-    coordinates: new Float64Array(rows * n),
-    stride: new Float64Array(rows * n),
-    objectives: new Float64Array(rows * m).fill(Number.POSITIVE_INFINITY),
-    violations: new Float64Array(capacity * limits),
-    total: new Float64Array(rows),
-    rank: new Int32Array(capacity),
-    family: new Int32Array(capacity),
-    parent: new Int32Array(capacity).fill(-1),
-    maker: new Int32Array(capacity).fill(-1),
-    archive: unpackArchive(archiveGrid(problem), island.archive),
+    ...emptyRows(memory, capacity, batch),
+    archive,
     near,
-    sample: sampleOf(problem, island),
-    seen: island.seen.slice(),
+    sample,
+    seen: copySeen(memory, island.seen),
     random: restoreRandom(island.random),
-    ranker: createConstrainedRanker(capacity, m),
-    truncation: createTruncation(capacity, m),
     shares: island.shares.slice(),
     ceilings: ceilingsFor(space),
     quality: island.quality.slice(),
@@ -198,17 +235,53 @@ export function openWorld(problem: Problem, island: Island, guests: number, watc
   return world;
 }
 
+/** Rows as if new: none of what another world left in them can be told from a first use. */
+function emptyRows(memory: Memory, capacity: number, batch: number): Rows {
+  const { rows } = memory;
+  if (rows?.capacity !== capacity || rows.batch !== batch) {
+    memory.rows = newRows(memory.problem, capacity, batch);
+    return memory.rows;
+  }
+  const { genes, coordinates, stride, violations, total, rank, family } = rows;
+  for (const array of [genes, coordinates, stride, violations, total, rank, family]) array.fill(0);
+  rows.objectives.fill(Number.POSITIVE_INFINITY);
+  rows.parent.fill(-1);
+  rows.maker.fill(-1);
+  return rows;
+}
+
+function newRows(problem: Problem, capacity: number, batch: number): Rows {
+  const n = problem.genes.length;
+  const m = problem.objectives.length;
+  const rows = capacity + m + batch;
+  return {
+    capacity,
+    batch,
+    genes: new Float64Array(rows * n),
+    coordinates: new Float64Array(rows * n),
+    stride: new Float64Array(rows * n),
+    objectives: new Float64Array(rows * m).fill(Number.POSITIVE_INFINITY),
+    violations: new Float64Array(capacity * problem.limits.length),
+    total: new Float64Array(rows),
+    rank: new Int32Array(capacity),
+    family: new Int32Array(capacity),
+    parent: new Int32Array(capacity).fill(-1),
+    maker: new Int32Array(capacity).fill(-1),
+    ranker: createConstrainedRanker(capacity, m),
+    truncation: createTruncation(capacity, m),
+  };
+}
+
+function copySeen(memory: Memory, seen: Uint32Array): Uint32Array {
+  if (memory.seen.length !== seen.length) memory.seen = new Uint32Array(seen.length);
+  memory.seen.set(seen);
+  return memory.seen;
+}
+
 /** Moves in proportion need a quantity to be in proportion with. */
 function ceilingsFor(space: Space): readonly number[] {
   const some = space.live.some((g) => isQuantity(space, g));
   return OPERATORS.map((name, k) => (name === 'proportion' && !some ? 0 : CEILINGS[k]));
-}
-
-/** The island's sample of feasible designs, ready for more. */
-function sampleOf(problem: Problem, island: Island): Sampler {
-  const sampler = createSampler(problem.genes.length, problem.objectives.length, ISLAND_SAMPLE);
-  sampler.addAll(island.sample);
-  return sampler;
 }
 
 /** Sets the champion of objective c from the archive that was brought along. */
@@ -244,7 +317,7 @@ export function addRows(world: World, designs: Designs): void {
   world.count += designs.count;
 }
 
-/** Closes the world into the island's next state. */
+/** Closes the world into the island's next state, which is in part a view of the world's memory: good until another world is opened there. */
 export function closeWorld(world: World): Island {
   const { n, m, limits, count, island } = world;
   return {
@@ -253,16 +326,16 @@ export function closeWorld(world: World): Island {
     epoch: island.epoch + 1,
     random: world.random.state(),
     families: island.families,
-    coordinates: world.coordinates.slice(0, count * n),
+    coordinates: world.coordinates.subarray(0, count * n),
     population: {
       count,
-      genes: world.genes.slice(0, count * n),
-      objectives: world.objectives.slice(0, count * m),
-      violations: world.violations.slice(0, count * limits),
+      genes: world.genes.subarray(0, count * n),
+      objectives: world.objectives.subarray(0, count * m),
+      violations: world.violations.subarray(0, count * limits),
     },
     archive: packArchive(world.archive),
     nearMisses: packNearMisses(world.near),
-    sample: world.sample.pack(),
+    sample: world.sample.view(),
     seen: world.seen,
     shares: world.shares,
     quality: world.quality,

@@ -58,6 +58,16 @@ export class CellTree {
     this.leafOf = larger;
   }
 
+  /** Removes every slot, and is then as good as new. */
+  clear(): void {
+    this.nodes = 0;
+    this.newNode(-1);
+    this.leafOf.fill(-1);
+    this.builtWith = 0;
+    this.removals = 0;
+    this.recent = -1;
+  }
+
   has(slot: number): boolean {
     return this.leafOf[slot] >= 0;
   }

@@ -24,6 +24,11 @@ export class DirectionSlots {
     this.violations = new Float64Array(slots * widths.violations);
   }
 
+  /** Empties every slot. */
+  clear(): void {
+    this.filled.fill(0);
+  }
+
   /** Takes the row into the slot if it comes before what is there: by merit, then objectives, violations and genes. 1 when it did. */
   offer(slot: number, genes: Float64Array, objectives: Float64Array, violations: Float64Array, row: number): number {
     const merit = this.merit[0];

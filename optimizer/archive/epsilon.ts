@@ -24,6 +24,8 @@ export interface Archive {
   readonly grid: ArchiveGrid;
   /** Number of members. */
   size(): number;
+  /** Forgets all, and is then as good as new. */
+  clear(): void;
   /**
    * Shows row `row` of the arrays to the archive. Returns 1 when its members changed, 0 when not: infeasible, not finite, in a dominated cell, or no
    * better than its cell's member. Copies what it keeps. A microsecond or so with thousands of members.
@@ -127,6 +129,13 @@ class EpsilonArchive implements Archive {
 
   size(): number {
     return this.memberSlots().length;
+  }
+
+  clear(): void {
+    this.tree.clear();
+    this.free.length = 0;
+    this.used = this.grid.objectives;
+    this.started = false;
   }
 
   draw(whole: (count: number) => number, genes: Float64Array, objectives: Float64Array, row: number): boolean {

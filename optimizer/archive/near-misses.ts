@@ -23,6 +23,8 @@ export interface NearMisses {
    * `share`, not finite, or no better than what is held. Copies what it keeps.
    */
   insert(genes: Float64Array, objectives: Float64Array, violations: Float64Array, row: number): number;
+  /** Forgets all. */
+  clear(): void;
   /** All near misses held, each design once, in canonical order: by limit, then objectives, violations and genes. */
   pack(): NearMissDesigns;
 }
@@ -54,6 +56,7 @@ export function createNearMisses(grid: NearMissGrid): NearMisses {
       }
       return changed;
     },
+    clear: () => slots.clear(),
     pack: () => slots.pack(perLimit),
   };
 }

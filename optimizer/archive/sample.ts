@@ -22,7 +22,11 @@ export interface Sampler {
   offer(genes: Float64Array, objectives: Float64Array, family: Int32Array, row: number): void;
   /** Shows all designs of another sample. */
   addAll(sample: DesignSample): void;
+  /** Forgets all. */
+  clear(): void;
   pack(): DesignSample;
+  /** As `pack`, but in the sampler's own arrays: until something is offered, added or forgotten. */
+  view(): DesignSample;
 }
 
 /** A sample without designs. */
@@ -51,6 +55,8 @@ class BottomSampler implements Sampler {
   private keys: Float64Array;
   private objectives: Float64Array;
   private family: Int32Array;
+  /** Where the next sorting writes to; the arrays it read from take its place. */
+  private spare: { keys: Float64Array; objectives: Float64Array; family: Int32Array } | undefined;
   private readonly gene: Float64Array;
   private readonly words: Uint32Array;
   private readonly hash = new Uint32Array(2);
@@ -80,7 +86,9 @@ class BottomSampler implements Sampler {
     if (mark[0] <= mark[1]) this.take(objectives, family, row);
   }
 
-  addAll({ count, keys, objectives, family }: DesignSample): void {
+  addAll(sample: DesignSample): void {
+    if (this.used === 0 && this.begin(sample)) return;
+    const { count, keys, objectives, family } = sample;
     const { mark } = this;
     for (let row = 0; row < count; row++) {
       mark[0] = keys[row];
@@ -88,15 +96,39 @@ class BottomSampler implements Sampler {
     }
   }
 
+  clear(): void {
+    this.held = 0;
+    this.used = 0;
+    this.mark[1] = Number.POSITIVE_INFINITY;
+  }
+
   pack(): DesignSample {
+    const { count, keys, objectives, family } = this.view();
+    return { count, keys: keys.slice(), objectives: objectives.slice(), family: family.slice() };
+  }
+
+  view(): DesignSample {
     this.settle();
     const { held, m } = this;
     return {
       count: held,
-      keys: this.keys.slice(0, held),
-      objectives: this.objectives.slice(0, held * m),
-      family: this.family.slice(0, held),
+      keys: this.keys.subarray(0, held),
+      objectives: this.objectives.subarray(0, held * m),
+      family: this.family.subarray(0, held),
     };
+  }
+
+  /** Begins with a sample that is sorted as those of this bound are, without sorting it again; false where it is not. */
+  private begin({ count, keys, objectives, family }: DesignSample): boolean {
+    if (count > this.bound) return false;
+    for (let row = 1; row < count; row++) if (!(keys[row - 1] < keys[row])) return false;
+    this.keys.set(keys.subarray(0, count));
+    for (let k = 0; k < count * this.m; k++) this.objectives[k] = objectives[k] + 0;
+    this.family.set(family.subarray(0, count));
+    this.held = count;
+    this.used = count;
+    if (count === this.bound) this.mark[1] = keys[count - 1];
+    return true;
   }
 
   private take(objectives: Float64Array, family: Int32Array, row: number): void {
@@ -114,18 +146,24 @@ class BottomSampler implements Sampler {
     if (used === held) return;
     const order = (a: number, b: number): number => compare(keys, objectives, family, m, a, b);
     const fresh = Int32Array.from({ length: used - held }, (_, k) => held + k).sort(order);
-    this.keys = new Float64Array(keys.length);
-    this.objectives = new Float64Array(objectives.length);
-    this.family = new Int32Array(family.length);
+    const into = this.spare ?? {
+      keys: new Float64Array(keys.length),
+      objectives: new Float64Array(objectives.length),
+      family: new Int32Array(family.length),
+    };
     let kept = 0;
     for (let old = 0, k = 0; kept < bound && (old < held || k < fresh.length); ) {
       const fromOld = k === fresh.length || (old < held && order(old, fresh[k]) <= 0);
       const row = fromOld ? old++ : fresh[k++];
-      if (kept > 0 && this.keys[kept - 1] === keys[row]) continue;
-      this.keys[kept] = keys[row];
-      for (let c = 0; c < m; c++) this.objectives[kept * m + c] = objectives[row * m + c];
-      this.family[kept++] = family[row];
+      if (kept > 0 && into.keys[kept - 1] === keys[row]) continue;
+      into.keys[kept] = keys[row];
+      for (let c = 0; c < m; c++) into.objectives[kept * m + c] = objectives[row * m + c];
+      into.family[kept++] = family[row];
     }
+    this.spare = { keys, objectives, family };
+    this.keys = into.keys;
+    this.objectives = into.objectives;
+    this.family = into.family;
     this.held = kept;
     this.used = kept;
     if (kept === bound) this.mark[1] = this.keys[kept - 1];

@@ -7,7 +7,8 @@
  * 3. The worker answers with an `EpochResult`. An epoch is a pure function of its task, so a task may run twice, anywhere.
  *
  * Failures are data: an exception, a dead worker, a task that took too long all come back as `{ ok: false }`, because class and
- * stack of an error do not survive the way between threads. The note is shared memory in which the worker writes each design
+ * stack of an error do not survive the way between threads. Islands lie in shared memory, so nothing is copied on the way; the sweep hands out the
+ * rooms of islands that nobody reads any more, and a task that failed keeps its room. The note is shared memory in which the worker writes each design
  * before it evaluates it; when the worker dies, the design that killed it is read from there.
  */
 import type { TimeSplit } from '../../optimizer/index.ts';
@@ -30,6 +31,8 @@ export interface EpochTask {
   readonly island: Uint8Array;
   /** The islands it takes immigrants from, packed, as they were when the epoch before ended. */
   readonly neighbours: readonly Uint8Array[];
+  /** Where to pack the result if there is room for it; else the worker makes a room. Nobody else may read or write it meanwhile. */
+  readonly room?: SharedArrayBuffer;
   /** Where to note each design before it is evaluated; see `createNote`. */
   readonly note: SharedArrayBuffer;
 }
@@ -53,6 +56,14 @@ export interface Engine {
   run(task: EpochTask): Promise<EpochResult>;
   /** Gives up on everything that runs and frees the threads. */
   close(): Promise<void>;
+}
+
+/** Islands grow slowly, by what their archives hold: so much room more than one needs. */
+const SPARE = 1.25;
+
+/** Shared memory for a packed island of `bytes` bytes and those a little larger. */
+export function createRoom(bytes: number): SharedArrayBuffer {
+  return new SharedArrayBuffer(Math.ceil(SPARE * bytes));
 }
 
 /** A note for designs of `genes` genes: a flag (1 while a design is being evaluated), then the genes. */

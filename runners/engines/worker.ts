@@ -9,10 +9,9 @@ const birth: WorkerBirth = workerData;
 const { createProblem }: { createProblem: CreateProblem } = await import(birth.module);
 const runEpoch = epochRunner(createProblem(birth.source));
 
-function epoch(task: EpochTask): EpochResult | InstanceType<typeof workerpool.Transfer> {
+function epoch(task: EpochTask): EpochResult {
   try {
-    const result = runEpoch(task);
-    return result.ok ? new workerpool.Transfer(result, [result.island.buffer]) : result;
+    return runEpoch(task);
   } catch (error) {
     return { ok: false, reason: reasonOf(error) };
   }

@@ -32,6 +32,8 @@ export interface Ring {
   readonly spent: EpochTimes;
   /** Whether its budget is used up. */
   done: boolean;
+  /** Shared memory of islands that nobody needs any more. */
+  readonly rooms: SharedArrayBuffer[];
 }
 
 /** One island's place in the ring. */
@@ -73,7 +75,17 @@ export function createRing(parts: RingParts): Ring {
     failed: faults.some((fault) => fault.island === i),
     tries: 0,
   }));
-  return { shard, slots, epoch, epochEvaluations, history, faults: [...faults], spent: { ...spent }, done: false };
+  return {
+    shard,
+    slots,
+    epoch,
+    epochEvaluations,
+    history,
+    faults: [...faults],
+    spent: { ...spent },
+    done: false,
+    rooms: [],
+  };
 }
 
 /** Indices of islands whose next epoch can run now, those that are furthest behind first. */
@@ -161,7 +173,11 @@ function advance(ring: Ring): boolean {
   if (slowest <= ring.epoch) return false;
   ring.epoch = slowest;
   for (const slot of living) {
-    for (const epoch of slot.states.keys()) if (epoch < slowest) slot.states.delete(epoch);
+    for (const [epoch, state] of slot.states) {
+      if (epoch >= slowest) continue;
+      slot.states.delete(epoch);
+      if (state.bytes.buffer instanceof SharedArrayBuffer) ring.rooms.push(state.bytes.buffer);
+    }
   }
   return true;
 }

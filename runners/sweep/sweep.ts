@@ -141,6 +141,7 @@ async function runEpoch(
   const result = await setup.engine.run({
     island: stateAt(ring, island, slot.epoch).bytes,
     neighbours: setup.neighbours(island, ring.slots.length).map((n) => stateAt(ring, n, slot.epoch).bytes),
+    room: ring.rooms.pop(),
     note,
   });
   if (ring.done || (state.stopped && !result.ok)) {

@@ -5,6 +5,7 @@ import { describe, expect, it } from 'vitest';
 import {
   agreementOf,
   createPlan,
+  createStepper,
   type Designs,
   type Island,
   immigrantsFor,
@@ -64,6 +65,19 @@ describe.each([zdt1(6).problem, osyczkaKundu().problem, rooms()])('an epoch on $
     expect(bytes([step(problem, unpackIsland(stored), carried)])).toBe(bytes([step(problem, islands[1], immigrants)]));
   });
 
+  it('is the same in memory that other epochs have used, of other islands and other sizes', () => {
+    const [first, second, third] = ring(problem, 10, 1);
+    const immigrants = immigrantsFor([first, second, third], 0);
+    const { plan } = first;
+    const [wide] = startIslands(problem, { ...plan, population: 2 * plan.population, seed: 11 });
+    const stepper = createStepper(problem);
+    const alone = bytes([step(problem, first, immigrants)]);
+    for (const before of [first, second, wide, third, wide]) {
+      stepper(before, NO_DESIGNS);
+      expect(bytes([stepper(first, immigrants)])).toBe(alone);
+    }
+  });
+
   it('is not influenced by the clock that watches it', () => {
     const [island] = ring(problem, 5);
     let tick = 0;
@@ -121,6 +135,15 @@ describe('packed islands', () => {
     const foreign = packed.slice();
     foreign[4] = 99;
     expect(() => unpackIsland(foreign)).toThrow('packed by layout version 99, this one reads 2');
+  });
+
+  it('are the same in any room, whatever was in it and however large it is', () => {
+    const room = new SharedArrayBuffer(packed.length + 100);
+    new Uint8Array(room).fill(255);
+    const again = packIsland(unpackIsland(packed), () => room);
+    expect(again.buffer).toBe(room);
+    expect(text(again)).toBe(text(packed));
+    expect(text(packIsland(unpackIsland(again)))).toBe(text(packed));
   });
 
   it('may lie anywhere in a buffer', () => {

@@ -50,6 +50,19 @@ describe('a sample', () => {
     );
   });
 
+  it('is as new once it has forgotten all', () => {
+    fc.assert(
+      fc.property(designs, designs, (a, b) => {
+        const sampler = createSampler(2, 2, BOUND);
+        sampler.addAll(sampleOf(a));
+        sampler.clear();
+        sampler.addAll(sampleOf(b));
+        expect(sampler.view()).toEqual(sampleOf(b));
+        expect(sampler.pack()).toEqual(sampleOf(b));
+      }),
+    );
+  });
+
   it('holds every distinct design while there is room, and never more than its bound', () => {
     fc.assert(
       fc.property(designs, (rows) => {
