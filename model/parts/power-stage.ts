@@ -65,7 +65,11 @@ const PLATEAU = 2;
 /** Share of the gate charge that moves the drain (common practice, no source): the driver's resistance is set by it. */
 const DRAIN_SHARE = 0.3;
 
-/** The leg of `stage`: edge times become the resistance through which this driver moves the drain in that time. */
+/**
+ * The leg of `stage`: edge times become the resistance through which this driver moves the drain in that time.
+ * @derivation t = Q·R/(Vdrive − Vplateau) turned round; two halves side by side of twice the package's thermal resistance
+ * @valid edge times given for the package's own driver
+ */
 export function legOf(stage: PowerStage): Leg {
   const charge = DRAIN_SHARE * stage.highGateCharge;
   const source = (stage.turnOnTime * (stage.driveVoltage - PLATEAU)) / charge;

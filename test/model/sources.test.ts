@@ -10,8 +10,9 @@ const MODEL = join(import.meta.dirname, '../../model');
 const FORMULAS = ['waveform', 'switches', 'magnetics', 'capacitors', 'control', 'heat'];
 /** Folders where formulas stand inside what a stage or a limit does: every function is held to it, exported or not. */
 const INSIDE = ['stages', 'limits', 'spread'];
-/** Files of the hand-off with figures of their own. */
-const HANDOFF = [
+/** Files of other folders with figures of their own. */
+const OTHERS = [
+  'parts/power-stage.ts',
   'handoff/loop.ts',
   'handoff/winding-currents.ts',
   'handoff/netlist/pulses.ts',
@@ -89,7 +90,7 @@ function filesIn(folder: string): string[] {
 /** Files of which every function is held to the registry. */
 function wholeFiles(): string[] {
   const beside = filesIn('').filter((name) => !NO_FORMULAS.includes(name.slice(0, -'.ts'.length)));
-  return [...beside, ...INSIDE.flatMap(filesIn), ...HANDOFF];
+  return [...beside, ...INSIDE.flatMap(filesIn), ...OTHERS];
 }
 
 /** Functions of `file` with the comment above each: all of them, or only those it exports. */

@@ -11,49 +11,7 @@ import * as magnetics from '../../model/magnetics/index.ts';
 import { buckBlocking, buckDuty } from '../../model/stages/buck.ts';
 import { isolatedDuty, rectifierVoltage } from '../../model/stages/isolated.ts';
 import * as switches from '../../model/switches/index.ts';
-
-/** Exponents of m, kg, s, A, K. */
-type Dimension = readonly [number, number, number, number, number];
-
-const UNITS: Readonly<Record<string, Dimension>> = {
-  '1': [0, 0, 0, 0, 0],
-  m: [1, 0, 0, 0, 0],
-  'm²': [2, 0, 0, 0, 0],
-  'm³': [3, 0, 0, 0, 0],
-  kg: [0, 1, 0, 0, 0],
-  s: [0, 0, 1, 0, 0],
-  Hz: [0, 0, -1, 0, 0],
-  A: [0, 0, 0, 1, 0],
-  'A²': [0, 0, 0, 2, 0],
-  'A/s': [0, 0, -1, 1, 0],
-  '(A/s)²': [0, 0, -2, 2, 0],
-  'A/m': [-1, 0, 0, 1, 0],
-  K: [0, 0, 0, 0, 1],
-  '1/K': [0, 0, 0, 0, -1],
-  V: [2, 1, -3, -1, 0],
-  'V/K': [2, 1, -3, -1, -1],
-  Ω: [2, 1, -3, -2, 0],
-  'Ω/m': [1, 1, -3, -2, 0],
-  Ω·m: [3, 1, -3, -2, 0],
-  H: [2, 1, -2, -2, 0],
-  F: [-2, -1, 4, 2, 0],
-  C: [0, 0, 1, 1, 0],
-  J: [2, 1, -2, 0, 0],
-  W: [2, 1, -3, 0, 0],
-  'W/m': [1, 1, -3, 0, 0],
-  T: [0, 1, -2, -1, 0],
-  'W/K': [2, 1, -3, 0, -1],
-  'K/W': [-2, -1, 3, 0, 1],
-  'W/(K·m³)': [-1, 1, -3, 0, -1],
-};
-
-/** Base factors: all free; µ0 unchanged (kg = s²·A²/m); kelvin unchanged, for formulas that hold 25 °C or 10 K. */
-const FREE = [1.7, 0.6, 2.3, 1.9, 0.7];
-const FACTORS = {
-  free: FREE,
-  permeability: [1.7, (2.3 * 1.9) ** 2 / 1.7, 2.3, 1.9, 0.7],
-  kelvin: [1.7, 0.6, 2.3, 1.9, 1],
-} as const;
+import { type Base, FACTORS, factorOf } from './dimensions.ts';
 
 interface Row {
   readonly of: string;
@@ -62,7 +20,7 @@ interface Row {
   readonly inputs: readonly (readonly [string, number])[];
   readonly output: string;
   /** What a constant inside the formula keeps from being rescaled. */
-  readonly keeps?: keyof typeof FACTORS;
+  readonly keeps?: Base;
 }
 
 function row(
@@ -206,12 +164,6 @@ const EXEMPT: Readonly<Record<string, string>> = {
   sinkCost: 'price',
 };
 
-function factorOf(unit: string, base: readonly number[]): number {
-  const dimension = UNITS[unit];
-  if (dimension === undefined) throw new Error(`unit ${unit} is not in the table`);
-  return dimension.reduce((product, exponent, i) => product * base[i] ** exponent, 1);
-}
-
 describe('A formula scales as its unit says', () => {
   it.each(ROWS.map((item) => [item.of, item] as const))('%s', (_, item) => {
     const base = FACTORS[item.keeps ?? 'free'];
@@ -223,8 +175,8 @@ describe('A formula scales as its unit says', () => {
 
   it('and the test notices a wrong unit', () => {
     const wrong = row('current times resistance as watts', (i, r) => i * r, '3 A, 2 Ω', 'W');
-    const scaled = wrong.run(...wrong.inputs.map(([unit, value]) => value * factorOf(unit, FREE)));
-    expect(Math.abs(scaled / (6 * factorOf('W', FREE)) - 1)).toBeGreaterThan(0.1);
+    const scaled = wrong.run(...wrong.inputs.map(([unit, value]) => value * factorOf(unit, FACTORS.free)));
+    expect(Math.abs(scaled / (6 * factorOf('W', FACTORS.free)) - 1)).toBeGreaterThan(0.1);
   });
 });
 
