@@ -3,12 +3,10 @@ import { expAt, sincosAt } from '../../optimizer/maths/index.ts';
 import type { Waveform } from '../waveform/waveform.ts';
 import { CURRENT, counts, FORCED, KEPT, kept, pair, STEP, WHOLE } from './pair-state.ts';
 
-/** Fewest steps of a segment where there are two of them, and where there are more and so each is short. */
-const FEWEST = 8;
-const FEWEST_OF_MANY = 4;
-/** Most steps of a segment, and the angle of ringing that one may turn through (of a decay, one time constant). */
-const MOST = 32;
-const TURN = 0.7;
+/** The angle of ringing that one step may turn through, its time constants of decay, and the most steps of a segment. */
+const TURN = 1;
+const DECAY = 1.2;
+const MOST = 67_108_864;
 /** Lengths that differ by less than this share are one. */
 const SAME = 1e-12;
 
@@ -44,8 +42,8 @@ function copyMatrices(from: number, to: number): void {
 function prepareSteps(current: Waveform, i: number): void {
   const d = current.duration[i];
   const { alpha, omega, g, l, rings } = pair;
-  let n = current.count > 3 ? FEWEST_OF_MANY : FEWEST;
-  const fastest = Math.max(rings ? omega / TURN : 0, -alpha);
+  let n = pair.fewest;
+  const fastest = rings ? Math.max(omega / TURN, -alpha / DECAY) : (omega - alpha) / DECAY;
   while (n < MOST && fastest * d > n) n *= 2;
   counts[i] = n;
   const h = d / n;

@@ -40,6 +40,8 @@ export const pair = {
   omega: 0.5,
   rings: false,
   perR: 0.5,
+  // Fewest steps of a segment, a power of two.
+  fewest: 1,
   average: 0.5,
   // The state, and the charge that has flowed.
   w: 0.5,
@@ -76,6 +78,7 @@ export function setPair(bank: Bank): void {
   pair.perTotal = 1 / (bank.c1 + bank.c2);
   pair.bulkShare = bank.c2 * pair.perTotal;
   pair.perR = 1 / pair.r;
+  pair.fewest = 1;
   pair.alpha = (-0.5 * pair.r) / pair.l;
   const bend = pair.alpha * pair.alpha - pair.g / pair.l;
   pair.rings = bend < 0;
