@@ -3,6 +3,7 @@ import { cpSync, existsSync, mkdirSync, readFileSync, writeFileSync } from 'node
 import { join } from 'node:path';
 import { beforeAll, describe, expect, it } from 'vitest';
 import type { FrontFile } from '../../model/index.ts';
+import { OPERATORS } from '../../optimizer/index.ts';
 import { checkpointNames } from '../../runners/run-folder/checkpoint.ts';
 import { chopfront, newFolder, startChopfront, until } from './processes.ts';
 
@@ -37,6 +38,50 @@ describe('a swept folder', () => {
     expect(record.railHash).toMatch(/^[0-9a-f]{64}$/);
     expect(record.partsHash).toMatch(/^[0-9a-f]{64}$/);
     expect(record.evaluations).toBe(16_000);
+  });
+
+  it('has a trust record: agreement, shares, duplicates, restarts and where the time went', () => {
+    const record = JSON.parse(readFileSync(join(run, 'run.json'), 'utf8'));
+    const { trust } = record;
+    expect(record.feasibleShare).toBeCloseTo(record.feasible / record.evaluations, 12);
+    expect(trust.agreement).toHaveLength(record.islands);
+    const shares = Object.values<number>(trust.operatorShares);
+    expect(Object.keys(trust.operatorShares)).toEqual([...OPERATORS]);
+    expect(shares.reduce((sum, share) => sum + share, 0)).toBeCloseTo(1, 9);
+    expect(Math.min(...shares)).toBeGreaterThan(0);
+    // Snapping meets the same design again and again; none of these is judged twice.
+    expect(trust.duplicates).toBeGreaterThan(0);
+    expect([trust.restarts, trust.notComputable].every(Number.isInteger)).toBe(true);
+    const { model, variation, ranking, archive, transfer, saving } = trust.timeSplit;
+    for (const seconds of [model, variation, ranking, archive, transfer]) expect(seconds).toBeGreaterThan(0);
+    // The record stands in what is saved: it tells of the saves before it, and of none where the run was over first.
+    expect(saving).toBeGreaterThanOrEqual(0);
+    // Two threads at work for the length of the run at most, and the model has most of it.
+    expect(model + variation + ranking + archive + transfer).toBeLessThan(2 * record.seconds);
+    expect(model).toBeGreaterThan(ranking);
+  });
+
+  it('has a history of hypervolume by evaluations that never falls and ends where the record stands', () => {
+    const record = JSON.parse(readFileSync(join(run, 'run.json'), 'utf8'));
+    const [head = '', ...lines] = readFileSync(join(run, 'history.csv'), 'utf8').trimEnd().split('\n');
+    const names = head.split(',');
+    const rows = lines.map((line) => line.split(','));
+    const column = (name: string): number[] => rows.map((row) => Number(row[names.indexOf(name)]));
+    const [evaluations, hypervolume] = [column('evaluations'), column('hypervolume')];
+    expect(rows.length).toBeGreaterThan(1);
+    for (let i = 1; i < rows.length; i++) {
+      expect(evaluations[i]).toBeGreaterThan(evaluations[i - 1] ?? 0);
+      expect(hypervolume[i]).toBeGreaterThanOrEqual(hypervolume[i - 1] ?? 0);
+    }
+    expect([evaluations.at(-1), hypervolume.at(-1)]).toEqual([record.evaluations, record.hypervolume]);
+    expect(column('feasible').at(-1)).toBeCloseTo(record.feasibleShare, 12);
+    expect(column('front').at(-1)).toBe(record.frontSize);
+    // An island's agreement is its own hypervolume over that of all.
+    for (const [i, agreement] of record.trust.agreement.entries()) {
+      expect(column(`island ${i}`).at(-1)).toBeCloseTo(agreement * record.hypervolume, 12);
+      expect(agreement).toBeGreaterThan(0);
+      expect(agreement).toBeLessThanOrEqual(1);
+    }
   });
 
   it('has a front whose rows keep every limit, do not dominate each other and have unique ids', () => {
