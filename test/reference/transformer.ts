@@ -4,6 +4,9 @@ import { fluxSwing } from '../../model/magnetics/flux.ts';
 import { leakageInductance } from '../../model/magnetics/leakage.ts';
 import type { Architecture } from '../../model/stages/list.ts';
 import type { StageState } from '../../model/stages/state.ts';
+import { mean, meanSquare, peak } from '../../model/waveform/moments.ts';
+import { sumShifted } from '../../model/waveform/superpose.ts';
+import { createWaveform } from '../../model/waveform/waveform.ts';
 import { type CaseGroup, type Common, make } from './case.ts';
 import { type Example, solvedExample, swing, together } from './ideal-stage.ts';
 
@@ -205,6 +208,71 @@ const leaks = [
   ),
 ];
 
+const WAVE: Common = {
+  source: 'slus660h',
+  place: 'equation 57 with the chokes of all phases, at the duty of one',
+  unit: '1',
+  mark: 'computed',
+  tolerance: 1e-5,
+};
+/** Ripple of all chokes together over that of one: N phases at the rectified wave's duty, or 2N chokes of doublers at one switch's. */
+const shares: readonly (readonly [Architecture, number, number, number])[] = [
+  ['two-switch-forward', 2, 0.3, 0.571429],
+  ['two-switch-forward', 3, 0.4, 0.222222],
+  ['half-bridge-centre-tap', 2, 0.4, 0.333333],
+  ['half-bridge-centre-tap', 3, 0.9, 0.777778],
+  ['full-bridge-centre-tap', 2, 0.9, 0.888889],
+  ['full-bridge-centre-tap', 4, 0.3, 0.190476],
+  ['half-bridge-current-doubler', 1, 0.3, 0.571429],
+  ['half-bridge-current-doubler', 2, 0.3, 0.190476],
+  ['full-bridge-current-doubler', 2, 0.4, 0.25],
+  ['full-bridge-current-doubler', 3, 0.15, 0.117647],
+];
+/** A stage of `phases` at the duty of one choke, on 48 V at the primary, turns 4. */
+function phasesAt(architecture: Architecture, phases: number, duty: number, over: Partial<Example> = {}): StageState {
+  const output = (duty * 48) / 4;
+  return windingAt(architecture, { phases, output, current: 20 * phases, inductance: 1e-5, ...over });
+}
+const interleaved = shares.flatMap(([architecture, phases, duty, share]) => [
+  make(WAVE, `${architecture} ×${phases}, D ${duty}: summed ripple over one choke's`, share, () => {
+    const state = phasesAt(architecture, phases, duty);
+    return swing(together(state)) / state.rippleCurrent;
+  }),
+  make(
+    { ...WAVE, unit: 'Hz', place: 'section 6.2: summed ripple at N·f, at 2N·f behind a rectified wave' },
+    `${architecture} ×${phases}: frequency of the summed ripple at 200 kHz`,
+    (architecture === 'two-switch-forward' ? 1 : 2) * phases * 200e3,
+    () => 1 / together(phasesAt(architecture, phases, duty)).period,
+  ),
+]);
+
+const DRAWN: Common = {
+  source: 'isl6366',
+  place: 'page 38, equations 49 to 51, with the pulses of all primaries',
+  unit: '1',
+  mark: 'computed',
+  tolerance: 1e-5,
+};
+/** Input capacitor's rms over the sum of the pulses' heights, without ripple: N trains of pulses, at T or behind T/2. */
+const inputs = (
+  [
+    ['two-switch-forward', 2, 0.3, 0.244949],
+    ['two-switch-forward', 3, 0.4, 0.133333],
+    ['half-bridge-centre-tap', 2, 0.4, 0.2],
+    ['full-bridge-centre-tap', 3, 0.3, 0.1],
+    // A doubler's primary is driven twice in a period of its choke.
+    ['full-bridge-current-doubler', 2, 0.2, 0.2],
+    ['half-bridge-current-doubler', 3, 0.15, 0.1],
+  ] as const
+).map(([architecture, phases, duty, share]) =>
+  make(DRAWN, `${architecture} ×${phases}, D ${duty}: input capacitor`, share, () => {
+    const state = phasesAt(architecture, phases, duty, { inductance: 1 });
+    const sum = createWaveform(64);
+    sumShifted(state.draw, state.drawCopies, sum);
+    return Math.sqrt(meanSquare(sum) - mean(sum) ** 2) / (phases * peak(state.draw));
+  }),
+);
+
 const LEAK: Common = {
   source: 'snelling-1988',
   place: 'chapter 11, by hand',
@@ -254,6 +322,7 @@ export const TRANSFORMER: readonly CaseGroup[] = [
   { title: 'Bridges: L and C', cases: bridges },
   { title: 'Transformer: winding currents', cases: windings },
   { title: 'Transformer: current doubler', cases: doublers },
+  { title: 'Transformer: interleaved stages', cases: [...interleaved, ...inputs] },
   { title: 'Transformer: rectifier stress and duty lost to leakage', cases: [...stresses, ...leaks] },
   { title: 'Transformer: leakage and flux', cases: [...leakage, ...flux] },
 ];
