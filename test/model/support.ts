@@ -27,7 +27,7 @@ export function need<T>(outcome: Outcome<T>): T {
 const box = { length: 1e-3, width: 1e-3, height: 1e-3, mass: 1e-6, prices: [{ from: 1, price: 0.1 }] };
 
 /** A switch without any loss: what a test does not set costs nothing. */
-function idealSwitch(over: Partial<Switch> = {}): Switch {
+export function idealSwitch(over: Partial<Switch> = {}): Switch {
   return {
     ...box,
     name: 'switch',

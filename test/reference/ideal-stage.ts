@@ -1,5 +1,6 @@
 /** One operating point of an architecture's own stage without any loss, as published examples state it: the model's path, not a copy of it. */
 import { Design } from '../../model/design.ts';
+import { EdgeFigures } from '../../model/edge-figures.ts';
 import type { Inductor } from '../../model/parts/inductor.ts';
 import { type Architecture, stageOf } from '../../model/stages/list.ts';
 import { StageState } from '../../model/stages/state.ts';
@@ -45,6 +46,11 @@ const STRAIGHT: Pick<Inductor, 'saturationCurrent' | 'saturationDrop' | 'saturat
 
 /** The solved stage of `example`. */
 export function solvedExample(example: Example): StageState {
+  return solvedDesign(example).state;
+}
+
+/** The same with the design behind it: parts that a test does not set are not there. */
+export function solvedDesign(example: Example): { readonly design: Design; readonly state: StageState } {
   const stage = stageOf(example.architecture);
   if (stage === undefined) throw new Error(`no stage ${example.architecture}`);
   const inductance = example.inductance ?? NO_RIPPLE;
@@ -69,6 +75,8 @@ export function solvedExample(example: Example): StageState {
     phaseShifted: example.shifted ?? false,
     emulates: false,
     transformer,
+    highEdges: new EdgeFigures(),
+    lowEdges: new EdgeFigures(),
   });
   const state = Object.assign(new StageState(), {
     inputVoltage: example.input,
@@ -83,7 +91,7 @@ export function solvedExample(example: Example): StageState {
     secondaryResistance: 0,
   });
   stage.solve(design, state);
-  return state;
+  return { design, state };
 }
 
 /** The current that all chokes of a solved stage bring together. */

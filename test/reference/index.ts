@@ -13,6 +13,7 @@ import { SWITCHES } from './switches.ts';
 import { TABLES } from './tables.ts';
 import { TRANSFORMER } from './transformer.ts';
 import { WINDINGS } from './windings.ts';
+import { WOUND_PARTS } from './wound-parts.ts';
 
 export { checkCase } from './case.ts';
 
@@ -23,6 +24,7 @@ export const CASES: readonly CaseGroup[] = [
   ...TRANSFORMER,
   ...CORE_LOSS,
   ...WINDINGS,
+  ...WOUND_PARTS,
   ...CORES,
   ...CAPACITORS,
   ...CONTROL,
