@@ -71,17 +71,32 @@ export function chooseSubset(front: Designs, count: number, reference?: Float64A
 
 /** Hypervolume of a front as a part of the box between the problem's ideal and reference values, 0 … 1. */
 export function hypervolumeOf(problem: Problem, front: Designs): number {
+  return createMeasure(problem)(front);
+}
+
+/** `hypervolumeOf` for one problem, with memory of its own: for many fronts, one after the other. */
+export function createMeasure(problem: Problem): (front: Designs) => number {
   const { objectives } = problem;
   const m = objectives.length;
-  const scaled = new Float64Array(front.count * m);
-  for (let row = 0; row < front.count; row++) {
-    for (let c = 0; c < m; c++) {
-      const { ideal, reference } = objectives[c];
-      scaled[row * m + c] = Math.max(0, (front.objectives[row * m + c] - ideal) / (reference - ideal));
+  const corner = new Float64Array(m).fill(1);
+  let hypervolume = createHypervolume(1, m);
+  let scaled = new Float64Array(m);
+  let rows = new Int32Array(1);
+  return (front) => {
+    if (front.count > hypervolume.capacity) {
+      const capacity = 2 * front.count;
+      hypervolume = createHypervolume(capacity, m);
+      scaled = new Float64Array(capacity * m);
+      rows = Int32Array.from({ length: capacity }, (_, row) => row);
     }
-  }
-  const rows = Int32Array.from({ length: front.count }, (_, row) => row);
-  return createHypervolume(Math.max(1, front.count), m).volume(scaled, rows, front.count, new Float64Array(m).fill(1));
+    for (let row = 0; row < front.count; row++) {
+      for (let c = 0; c < m; c++) {
+        const { ideal, reference } = objectives[c];
+        scaled[row * m + c] = Math.max(0, (front.objectives[row * m + c] - ideal) / (reference - ideal));
+      }
+    }
+    return hypervolume.volume(scaled, rows, front.count, corner);
+  };
 }
 
 function beyond(front: Designs, m: number): Float64Array {

@@ -49,6 +49,7 @@
  *     restart(problem, seeds, { limit, share, evaluations, seed }): Restarted        // what one limit, relaxed by a little, stands in the way of
  *     chooseSubset(front: Designs, count: number, reference?: Float64Array): Designs
  *     hypervolumeOf(problem, front: Designs): number                                 // 0 … 1
+ *     createMeasure(problem): (front: Designs) => number                             // the same, for many fronts
  *     mergeRecords(islands): FamilyRecord                                            // family by family, over all islands
  *     agreementOf(problem, islands, front: Designs): number[]                        // island by island, 0 … 1
  *
@@ -56,7 +57,15 @@
  * `OPERATORS`) tell how it goes. `watch` = { now, spent: { variation, model, ranking, archive } } adds up where the time went.
  */
 export { type DesignSample, type Designs, type NearMissDesigns, NO_SAMPLE } from './archive/index.ts';
-export { agreementOf, chooseSubset, hypervolumeOf, mergeArchives, mergeNearMisses, mergeRecords } from './front.ts';
+export {
+  agreementOf,
+  chooseSubset,
+  createMeasure,
+  hypervolumeOf,
+  mergeArchives,
+  mergeNearMisses,
+  mergeRecords,
+} from './front.ts';
 export { type Counters, type FamilyRecord, type Island, OPERATORS, startIslands } from './island.ts';
 export { createMerger, type Findings, type Merger } from './merger.ts';
 export { PACK_VERSION, packDesigns, packIsland, unpackDesigns, unpackIsland } from './pack.ts';

@@ -90,10 +90,13 @@ class BottomSampler implements Sampler {
     if (this.used === 0 && this.begin(sample)) return;
     const { count, keys, objectives, family } = sample;
     const { mark } = this;
+    // Newcomers that are in order need no sorting, and those of a sample are, if they stand by themselves.
+    this.settle();
     for (let row = 0; row < count; row++) {
       mark[0] = keys[row];
       if (mark[0] <= mark[1]) this.take(objectives, family, row);
     }
+    this.settle();
   }
 
   clear(): void {
@@ -145,7 +148,13 @@ class BottomSampler implements Sampler {
     const { m, held, used, bound, keys, objectives, family } = this;
     if (used === held) return;
     const order = (a: number, b: number): number => compare(keys, objectives, family, m, a, b);
-    const fresh = Int32Array.from({ length: used - held }, (_, k) => held + k).sort(order);
+    const fresh = new Int32Array(used - held);
+    let sorted = true;
+    for (let k = 0; k < fresh.length; k++) {
+      fresh[k] = held + k;
+      if (k > 0 && order(fresh[k - 1], fresh[k]) > 0) sorted = false;
+    }
+    if (!sorted) fresh.sort(order);
     const into = this.spare ?? {
       keys: new Float64Array(keys.length),
       objectives: new Float64Array(objectives.length),

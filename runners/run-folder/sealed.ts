@@ -18,8 +18,10 @@ export function seal(kind: string, { header, parts }: Sealed): Uint8Array {
   const text = Buffer.from(JSON.stringify({ header, sizes: parts.map((part) => part.byteLength) }));
   const length = Buffer.alloc(4);
   length.writeUInt32LE(text.length);
-  const body = Buffer.concat([magicOf(kind), length, text, ...parts]);
-  return Buffer.concat([body, createHash('sha256').update(body).digest()]);
+  const file = Buffer.concat([magicOf(kind), length, text, ...parts, Buffer.alloc(SUM)]);
+  const body = file.subarray(0, file.length - SUM);
+  createHash('sha256').update(body).digest().copy(file, body.length);
+  return file;
 }
 
 /** What those bytes hold; the parts are copies. Throws an `Error` that says what is wrong with them. */

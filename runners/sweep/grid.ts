@@ -4,9 +4,13 @@ import type { Problem } from '../../optimizer/problem.ts';
 import type { Measure } from './measure.ts';
 
 /** Size, hypervolume (normalised to the box from ideal to reference) and best values of a set of feasible designs. */
-export function measureDesigns(problem: Problem, designs: Designs): Measure {
+export function measureDesigns(
+  problem: Problem,
+  designs: Designs,
+  volumeOf = (front: Designs): number => hypervolumeOf(problem, front),
+): Measure {
   const { objectives } = problem;
-  const hypervolume = designs.count === 0 ? 0 : hypervolumeOf(problem, designs);
+  const hypervolume = designs.count === 0 ? 0 : volumeOf(designs);
   const best = designs.count === 0 ? [] : objectives.map((_, c) => smallest(designs, objectives.length, c));
   return { frontSize: designs.count, hypervolume, best };
 }

@@ -1,10 +1,10 @@
 /** The optimizer as a sweep uses it: islands as bytes in, counts, measures and findings out. */
 import {
+  createMeasure,
   createMerger,
   createPlan,
   type DesignSample,
   type Designs,
-  hypervolumeOf,
   type Island,
   joinDesigns,
   mergeArchives,
@@ -62,22 +62,30 @@ export interface Survey {
 
 /** The search of a problem. */
 export function createSearch(problem: Problem): Search {
-  const open = (islands: readonly IslandState[]): Island[] => islands.map((state) => unpackIsland(state.bytes));
+  const openBytes = openedOnce();
+  const open = (islands: readonly IslandState[]): Island[] => islands.map((state) => openBytes(state.bytes));
+  const volumeOf = createMeasure(problem);
+  const apart = (islands: readonly Island[]): number[] => islands.map(({ archive }) => frontVolume(volumeOf, archive));
+  const measure = measuredOnce((islands) => measureDesigns(problem, mergeArchives(problem, open(islands)), volumeOf));
   return {
-    start: (plan) => startIslands(problem, plan).map((island) => stateOf(packIsland(island))),
+    start: (plan) =>
+      startIslands(problem, plan).map((island) => {
+        const bytes = packIsland(island);
+        return { bytes, ...tallyOf(island) };
+      }),
     neighbours: ringNeighbours,
-    tally,
-    measure: (islands) => measureDesigns(problem, mergeArchives(problem, open(islands))),
+    tally: (bytes) => tallyOf(openBytes(bytes)),
+    measure,
     survey: (islands) => {
       const opened = open(islands);
       const merger = createMerger(problem);
       for (const island of opened) merger.add(island);
       const archive = merger.archive();
-      const measure = measureDesigns(problem, archive);
-      const trust = trustOf(problem, opened, measure.hypervolume);
-      return { archive, nearMisses: merger.nearMisses(), sample: merger.sample(), measure, trust };
+      const measured = measureDesigns(problem, archive, volumeOf);
+      const trust = trustOf(opened, apart(opened), measured.hypervolume);
+      return { archive, nearMisses: merger.nearMisses(), sample: merger.sample(), measure: measured, trust };
     },
-    apart: (islands) => open(islands).map((island) => volumeOf(problem, island)),
+    apart: (islands) => apart(open(islands)),
     went: (islands) => {
       const opened = open(islands);
       return { families: familiesOf(problem, opened), went: wentOf(opened) };
@@ -96,12 +104,28 @@ export function planRing(
   return createPlan(problem, { ...ring, islands, population, epochGenerations });
 }
 
-function stateOf(bytes: Uint8Array): IslandState {
-  return { bytes, ...tally(bytes) };
+/** Opens packed islands, each once for as long as its bytes are held. */
+function openedOnce(): (bytes: Uint8Array) => Island {
+  const opened = new WeakMap<Uint8Array, Island>();
+  return (bytes) => {
+    const island = opened.get(bytes) ?? unpackIsland(bytes);
+    opened.set(bytes, island);
+    return island;
+  };
 }
 
-function tally(bytes: Uint8Array): Tally {
-  const { evaluations, feasible } = unpackIsland(bytes).counters;
+/** Measures islands; the same ones again, as progress and history ask for, only once. */
+function measuredOnce(measure: (islands: readonly IslandState[]) => Measure): Search['measure'] {
+  let last: { readonly islands: readonly IslandState[]; readonly measure: Measure } | undefined;
+  return (islands) => {
+    const same = last?.islands.length === islands.length && islands.every((state, i) => state === last?.islands[i]);
+    if (last === undefined || !same) last = { islands: [...islands], measure: measure(islands) };
+    return last.measure;
+  };
+}
+
+function tallyOf(island: Island): Tally {
+  const { evaluations, feasible } = island.counters;
   return { evaluations, feasible };
 }
 
@@ -120,8 +144,8 @@ function familiesOf(problem: Problem, islands: readonly Island[]): NonNullable<S
   }));
 }
 
-function volumeOf(problem: Problem, island: Island): number {
-  return island.archive.count === 0 ? 0 : hypervolumeOf(problem, island.archive);
+function frontVolume(volumeOf: (front: Designs) => number, front: Designs): number {
+  return front.count === 0 ? 0 : volumeOf(front);
 }
 
 function wentOf(islands: readonly Island[]): RingWent {
@@ -136,8 +160,8 @@ function wentOf(islands: readonly Island[]): RingWent {
   };
 }
 
-function trustOf(problem: Problem, islands: readonly Island[], whole: number): Survey['trust'] {
+function trustOf(islands: readonly Island[], volumes: readonly number[], whole: number): Survey['trust'] {
   const { islands: _, ...went } = wentOf(islands);
-  const agreement = islands.map((island) => (whole > 0 ? Math.min(1, volumeOf(problem, island) / whole) : 0));
+  const agreement = volumes.map((volume) => (whole > 0 ? Math.min(1, volume / whole) : 0));
   return { agreement, ...went };
 }
