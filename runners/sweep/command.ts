@@ -41,8 +41,11 @@ export async function sweepCommand(sheet: string | undefined, options: SweepOpti
   return sweepInputs(where, inputs, known, options, reporter);
 }
 
-/** Saved every quarter of a minute, less often where that would take more than a two-hundredth of the time. */
-const CHECKPOINTS: RunPlan['checkpoints'] = { seconds: 15, share: 0.005 };
+/**
+ * Saved after a quarter of a minute, and then so often that checkpoints, with the files that are made from each in another process, take less than a
+ * hundredth of the time: with two cores about once a minute.
+ */
+const CHECKPOINTS: RunPlan['checkpoints'] = { seconds: 15, share: 0.008 };
 
 function inputsFor(where: Place, sheet: string | undefined, known: RunRecord | undefined): Inputs {
   if (sheet !== undefined) return readSheet(sheet);
@@ -111,6 +114,7 @@ function planOf(
     describeBest: (values) => describeValues(problem.objectives, values),
     snapshot: () => writeSnapshot(folder, inputs.texts),
     refresh: () => refresher.begin(),
+    refreshCost: () => refresher.cost() / availableParallelism(),
     publish: async (found, ending) => {
       await refresher.settled();
       // A shard's limits are priced once, when the shards are merged.

@@ -41,6 +41,8 @@ export interface RunPlan {
   snapshot(): void;
   /** Told that a checkpoint was written, to refresh what people look at in another process. */
   refresh(): void;
+  /** Seconds of the whole machine that the last refresh took; 0 while unknown. */
+  refreshCost(): number;
   /** Writes the final files, once refreshing has ended. */
   publish(found: Found, ending: Ending): Promise<void>;
 }
@@ -125,6 +127,7 @@ async function carryOut(plan: RunPlan, search: Search, begun: Begun, saver: Save
       budget,
       shards,
       checkpoints,
+      besides: () => plan.refreshCost(),
       neighbours,
       tally,
       measure,

@@ -43,6 +43,8 @@ export interface SweepSetup {
   /** Called when a checkpoint is due and at the end; throws where it cannot save. */
   save(reason: 'interval' | 'end'): void;
   readonly checkpoints: CheckpointRule;
+  /** Seconds of the whole machine that went, beside the sweep, into the files of the last checkpoint; 0 while unknown. */
+  besides(): number;
   /** Told of every fault as it happens. */
   onFault(fault: Fault): void;
   /** Resolves when the sweep shall stop. */
@@ -55,7 +57,7 @@ export interface SweepSetup {
 export interface CheckpointRule {
   /** Seconds from one checkpoint to the next, at least. */
   readonly seconds: number;
-  /** Largest share of the time that checkpoints may take, above 0 … 1. */
+  /** Largest share of the time that checkpoints and the files made from them may take, above 0 … 1. */
   readonly share: number;
 }
 
@@ -82,7 +84,7 @@ export function startSweep(setup: SweepSetup): Sweep {
 
 async function run(setup: SweepSetup, seconds: () => number): Promise<Ending> {
   const running = new Set<Promise<void>>();
-  const state = { stopped: false, nextSave: seconds() + setup.checkpoints.seconds, failure: undefined as unknown };
+  const state: State = { stopped: false, saved: seconds(), saving: 0, failure: undefined };
   const stop = setup.stop.then(() => {
     state.stopped = true;
   });
@@ -90,7 +92,8 @@ async function run(setup: SweepSetup, seconds: () => number): Promise<Ending> {
   while (!state.stopped && state.failure === undefined && setup.rings.some((ring) => !ring.done)) {
     dispatch(setup, running, state, seconds);
     await Promise.race([stop, ...running]);
-    if (!state.stopped && state.failure === undefined && seconds() >= state.nextSave) saveTimed(setup, state, seconds);
+    if (!state.stopped && state.failure === undefined && seconds() >= nextSave(setup, state))
+      saveTimed(setup, state, seconds);
   }
   if (state.failure !== undefined) throw state.failure;
   if (state.stopped) await Promise.race([Promise.all(running), pause(setup.graceSeconds)]);
@@ -100,15 +103,22 @@ async function run(setup: SweepSetup, seconds: () => number): Promise<Ending> {
 
 interface State {
   stopped: boolean;
-  nextSave: number;
+  /** When it was last saved, and how long that took, s. */
+  saved: number;
+  saving: number;
   failure: unknown;
+}
+
+// Asked again and again: what the last checkpoint cost beside the sweep becomes known a while after it.
+function nextSave({ checkpoints, besides }: SweepSetup, { saved, saving }: State): number {
+  return saved + Math.max(checkpoints.seconds, (saving + besides()) / checkpoints.share);
 }
 
 function saveTimed(setup: SweepSetup, state: State, seconds: () => number): void {
   const before = seconds();
   setup.save('interval');
-  const cost = seconds() - before;
-  state.nextSave = seconds() + Math.max(setup.checkpoints.seconds, cost / setup.checkpoints.share);
+  state.saved = seconds();
+  state.saving = state.saved - before;
 }
 
 function dispatch(setup: SweepSetup, running: Set<Promise<void>>, state: State, seconds: () => number): void {

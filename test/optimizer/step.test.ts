@@ -4,9 +4,11 @@
 import { describe, expect, it } from 'vitest';
 import {
   agreementOf,
+  createMeasure,
   createPlan,
   createStepper,
   type Designs,
+  hypervolumeOf,
   type Island,
   immigrantsFor,
   mergeArchives,
@@ -101,6 +103,13 @@ describe.each([zdt1(6).problem, osyczkaKundu().problem, rooms()])('an epoch on $
     expect(packDesigns(mergeArchives(problem, islands.toReversed()))).toEqual(front);
     const two: Designs = mergeArchives(problem, islands.slice(1));
     expect(packDesigns(mergeArchives(problem, [two, islands[0]]))).toEqual(front);
+  });
+
+  it('measures fronts one after the other as it measures each by itself', () => {
+    const measure = createMeasure(problem);
+    const islands = [...ring(problem, 12, 1), ...ring(problem, 13)];
+    const fronts = [...islands.map((island) => island.archive), mergeArchives(problem, islands)];
+    for (const front of [...fronts, ...fronts.toReversed()]) expect(measure(front)).toBe(hypervolumeOf(problem, front));
   });
 
   it('never loses what an archive covers', () => {

@@ -68,6 +68,7 @@ async function sweepToy({ folder, source = {}, threads, ...rest }: ToyOrder): Pr
     describeBest: (values) => values.map(String),
     snapshot: () => writeFileSync(join(folder, 'rail.yaml'), 'toy\n'),
     refresh: () => {},
+    refreshCost: () => 0,
     publish: async (found) => publish(folder, found),
   });
   stop.dispose();
