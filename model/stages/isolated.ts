@@ -218,13 +218,13 @@ function writeFlux(form: IsolatedForm, design: Design, t: Transformer, state: St
 
 /**
  * The magnetizing current of a single-ended stage rises with each pulse: ∫(i + m)² − ∫i² over it, m from 0 to its peak.
- * @derivation ∫(i + m·t/ton)² − ∫i² over the pulse, i at its mean
- * @valid ripple small beside the mean, or the pulse's mean taken
+ * @derivation ∫(i + m·t/ton)² − ∫i² over the pulse, i rising from valley to peak
+ * @valid straight segments; the reset's current flows through the clamp diodes
  */
 function addMagnetizing(t: Transformer, state: StageState): void {
   const m = state.magnetizingPeak;
-  const middle = (0.5 * (state.valleyCurrent + state.peakCurrent)) / t.ratio;
-  const more = (m * middle + (m * m) / 3) * state.highShare;
+  const late = (state.valleyCurrent + 2 * state.peakCurrent) / (3 * t.ratio);
+  const more = (m * late + (m * m) / 3) * state.highShare;
   state.primaryMeanSquare += more;
   state.highMeanSquare += more;
 }
