@@ -2,10 +2,11 @@
 import type { Designs, NearMissDesigns } from './archive/index.ts';
 import { chooseSubset, hypervolumeOf, mergeArchives, mergeNearMisses } from './front.ts';
 import { type Island, startIslands } from './island.ts';
+import { packIsland, unpackIsland } from './pack.ts';
 import { createPlan, type PlanOptions } from './plan.ts';
 import type { Problem } from './problem.ts';
 import { immigrantsFor } from './ring.ts';
-import { step } from './step.ts';
+import { createStepper } from './step.ts';
 
 /** What to search with. */
 export interface SearchOptions extends PlanOptions {
@@ -31,10 +32,11 @@ export interface SearchResult {
 /** Searches a problem in the calling thread. */
 export function search(problem: Problem, options: SearchOptions = {}): SearchResult {
   const plan = createPlan(problem, { ...options, evaluations: options.evaluations ?? 25_000 });
+  const step = createStepper(problem);
   let islands = startIslands(problem, plan);
   for (let epoch = 0; epoch < plan.epochs; epoch++) {
     const before = islands;
-    islands = before.map((island, i) => step(problem, island, immigrantsFor(before, i)));
+    islands = before.map((island, i) => unpackIsland(packIsland(step(island, immigrantsFor(before, i)))));
   }
   const all = mergeArchives(problem, islands);
   return {
