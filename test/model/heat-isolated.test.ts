@@ -75,6 +75,16 @@ describe.each(COUNTS)('%s', (architecture, switches, rectifiers, windings) => {
     }
   });
 
+  it('the two halves of a divider share the primary current, and no other stage has one', () => {
+    for (const point of solved) {
+      const { design, state } = point;
+      const [primary] = transformerCurrents(point);
+      const half = 0.5 * (primary?.rms ?? Number.NaN);
+      const each = architecture.startsWith('half') ? 2 * half * half * design.dividerResistance : 0;
+      expect(wattsOf(point, 'dividerCeramic')).toBeCloseTo(state.activePhases * each, 9);
+    }
+  });
+
   it('windings lose I²·R of the currents in their order sheet', () => {
     for (const point of solved) {
       const { design, state } = point;
