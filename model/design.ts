@@ -25,7 +25,7 @@ import type { Switch } from './parts/switch.ts';
 import type { Rail } from './rail/rail.ts';
 import { nearestRow } from './snap.ts';
 import type { Stage } from './stages/contract.ts';
-import { Transformer, type TransformerChoice, type WindingForm, windTransformer } from './transformer.ts';
+import { Transformer, type TransformerChoice, type WindingForm, windingDepth, windTransformer } from './transformer.ts';
 import { WoundChoke, windChoke } from './wound-choke.ts';
 
 /** Rise over ambient at which the skin depth of the windings is taken, K. */
@@ -124,6 +124,9 @@ export class Design {
         primaryTurns: 1,
         secondaryTurns: 1,
         form: 'forward',
+        frequency: 0.5,
+        duty: 0.5,
+        depth: windingDepth(rail),
       };
     }
   }
@@ -207,16 +210,10 @@ function resolveChoke(design: Design, genes: Float64Array, rail: Rail, catalogue
     stockedHeat(design, design.inductor, rail);
   } else {
     design.chokeMaterial = catalogue.materials[genes[GENE.chokeMaterial]];
-    windChoke(
-      design.woundChoke,
-      catalogue.chokeCores[genes[GENE.chokeCore]],
-      design.chokeMaterial,
-      catalogue.conductors[genes[GENE.chokeConductor]],
-      genes[GENE.chokeTurns],
-      genes[GENE.inductance],
-      rail.airSpeed,
-      rail.ambient,
-    );
+    design.woundChoke.turns = genes[GENE.chokeTurns];
+    design.woundChoke.inductance = genes[GENE.inductance];
+    const core = catalogue.chokeCores[genes[GENE.chokeCore]];
+    windChoke(design.woundChoke, core, design.chokeMaterial, catalogue.conductors[genes[GENE.chokeConductor]], rail);
     design.inductor = design.woundChoke;
     design.inductorThermalResistance = design.woundChoke.surfaceResistance;
     design.inductorFaces = 0;
@@ -281,9 +278,11 @@ function resolveTransformer(
   choice.form = form;
   design.clampDiode = design.stage.form?.doubleEnded === false ? catalogue.clampDiodes[0] : undefined;
   const ratio = choice.primaryTurns / choice.secondaryTurns;
-  const duty = design.stage.idealDuty(rail.input.nominal, rail.output.nominal, ratio) / design.stage.chokeMultiple;
-  sizeDivider(design, rail, ratio);
-  windTransformer(design.transformer, choice, design.frequency, duty, rail.airSpeed, rail.ambient);
+  choice.frequency = design.frequency;
+  choice.duty = design.stage.idealDuty(rail.input.nominal, rail.output.nominal, ratio) / design.stage.chokeMultiple;
+  design.transformer.ratio = ratio;
+  sizeDivider(design, rail);
+  windTransformer(design.transformer, choice, rail);
 }
 
 /** Ripple of a half bridge's divider as a share of the half input that it holds (common practice, no source). */
@@ -295,8 +294,9 @@ const DIVIDER_RIPPLE = 0.05;
  * @derivation charge of half a period of half the primary current over the allowed ripple
  * @valid ripple small beside the half input
  */
-function sizeDivider(design: Design, rail: Rail, ratio: number): void {
+function sizeDivider(design: Design, rail: Rail): void {
   const { form } = design.stage;
+  const { ratio } = design.transformer;
   design.dividerCount = 0;
   if (form === undefined || form.share === 1) return;
   const { inputCeramic: row } = design;

@@ -206,8 +206,9 @@ function addFilter(e: Evaluator): void {
   }
   findSourcePath(e.source, design, rail, e.worst.input);
   if (!(e.source.inductance > 0)) return;
-  const allowed = filterImpedanceLimit(rail.input.minimum, rail.input.minimum * e.filterCurrent);
-  book.judge(places.filterDamping, e.source.peak, allowed, -1);
+  book.found = e.source.peak;
+  book.bound = filterImpedanceLimit(rail.input.minimum, rail.input.minimum * e.filterCurrent);
+  book.weigh(places.filterDamping, -1);
 }
 
 /** Sums the profile at nominal input with usual values. */
@@ -229,7 +230,7 @@ function sumUsual(e: Evaluator, listener?: PointListener): void {
     if (planned.load === 1) e.fullLoss = solver.loss;
     if (planned.share > 0) for (let k = 0; k < weighted.length; k++) weighted[k] += planned.share * solver.ledger[k];
     judgeUsual(e, planned, i);
-    addWear(e, planned.share);
+    addWear(e, planned);
     listener?.(solver, planned, i);
   }
   judgeLife(e);
@@ -240,14 +241,20 @@ function judgeUsual(e: Evaluator, planned: PlannedPoint, index: number): void {
   const { rail, places, book, solver } = e;
   if (planned.load === 0) {
     const allowed = rail.limits.noLoadPower;
-    if (allowed !== undefined) book.judge(places.noLoadPower, solver.loss, allowed, index);
+    if (allowed === undefined) return;
+    book.found = solver.loss;
+    book.bound = allowed;
+    book.weigh(places.noLoadPower, index);
     return;
   }
   const limits = rail.limits.efficiency;
   for (let k = 0; k < limits.length; k++) {
     if (limits[k].load !== planned.load) continue;
     const efficiency = 1 - solver.loss / solver.inputPower;
-    book.judgeBy(places.efficiency[k], efficiency, limits[k].atLeast, 1 - limits[k].atLeast, index);
+    book.found = efficiency;
+    book.bound = limits[k].atLeast;
+    book.scale = 1 - limits[k].atLeast;
+    book.weighByScale(places.efficiency[k], index);
   }
 }
 

@@ -2,27 +2,27 @@
  * A transformer wound to order: secondary between two halves of the primary, ungapped. What does not depend on the operating
  * point is worked out once a design; the fields are rewritten, nothing is allocated.
  */
-import { pow } from '../optimizer/maths/index.ts';
-import { surfacePower } from './heat/index.ts';
+import { powAt } from '../optimizer/maths/index.ts';
 import {
   copperMass,
   copperResistivity,
+  createHarmonicLoss,
   createWinding,
-  dowellHarmonics,
-  harmonicLoss,
+  createWoundBill,
+  dowellHarmonicsAt,
+  harmonicLossAt,
   inductanceFactor,
   knownConstants,
-  layWinding,
+  layWindingAt,
   leakageInductance,
   type MaterialConstants,
   magnetizingInductance,
-  parallelThatFit,
+  parallelThatFitAt,
   skinDepth,
   WINDING_AC,
   type Winding,
   windowFill,
-  wireResistance,
-  woundCost,
+  woundCostAt,
 } from './magnetics/index.ts';
 import type { Part, PriceBreak } from './parts/common.ts';
 import type { Conductor } from './parts/conductor.ts';
@@ -33,17 +33,20 @@ import {
   clearWaveform,
   createWaveform,
   harmonics,
-  mean,
-  meanSquare,
-  slopeMeanSquare,
+  MEAN,
+  MEAN_SQUARE,
+  measure,
+  measureSlope,
   type Waveform,
 } from './waveform/index.ts';
+import { type Air, knownSurface } from './wound-choke.ts';
 
 /** Insulation between winding sections, m, and how many gaps of it a sandwich has. */
 const INSULATION = 0.2e-3;
 const GAPS = 2;
 /** Mating faces of an ungapped core, m (common practice, no source). */
 const RESIDUAL_GAP = 10e-6;
+/** Rise over ambient at which the windings' skin depth is taken, K. */
 const RISE = 40;
 const HIGHEST = 403.15;
 const MOST_PARALLEL = 60;
@@ -59,9 +62,24 @@ const MARGIN = 0.25;
 export type WindingForm = 'forward' | 'centre-tap' | 'current-doubler';
 
 const pulses = createWaveform(12);
+/** Share of the period that one pulse takes: in a record, so that no double crosses a call. */
+const shape = { on: 0.5 };
 const coefficients = new Float64Array(2 * HARMONICS);
 const factors = new Float64Array(HARMONICS);
 const loss = new Float64Array(2);
+const power = new Float64Array(2);
+/** Mean, mean square, peak and valley of the winding current, and mean square of its slope. */
+const moments = new Float64Array(4);
+const slope = new Float64Array(1);
+const current = createHarmonicLoss();
+current.frequency = 1;
+const bill = createWoundBill();
+bill.windingFixed = WINDING_FIXED;
+bill.labourPrice = LABOUR_PER_MASS;
+bill.labourFixed = LABOUR_FIXED;
+bill.margin = MARGIN;
+/** Resistivity of copper at the temperature that resistances are told at, Ω·m. */
+const COPPER = copperResistivity(298.15);
 
 /** One transformer; all phases have the same. */
 export class Transformer implements Part {
@@ -97,6 +115,8 @@ export class Transformer implements Part {
   maximumTemperature = HIGHEST;
   /** Core-loss constants of the materials seen so far. */
   readonly constants = new Map<Material, MaterialConstants>();
+  /** Part to air of the cores seen so far, K/W: all in the same air. */
+  readonly surfaces = new Map<Core, Float64Array>();
   primaryParallel = 1;
   secondaryParallel = 1;
   readonly primary: Winding = createWinding();
@@ -112,36 +132,47 @@ export interface TransformerChoice {
   primaryTurns: number;
   secondaryTurns: number;
   form: WindingForm;
+  /** Hz. */
+  frequency: number;
+  /** Usual duty of one switch. */
+  duty: number;
+  /** Skin depth of the windings at 1 Hz, m·√Hz: see `windingDepth`. */
+  readonly depth: number;
 }
 
 /**
- * Rewrites `t` for a choice at `frequency` (Hz), usual duty of one switch `duty`, in air of `airSpeed` (m/s) at `ambient` (K).
+ * Skin depth of a transformer's windings in `air` at 1 Hz, m·√Hz: it falls with the root of the frequency.
+ * @source hurley-2000, section II
+ * @valid windings 40 K above the air
+ */
+export function windingDepth(air: Air): number {
+  return skinDepth(copperResistivity(air.ambient + RISE), 1);
+}
+
+/**
+ * Rewrites `t` for a choice in `air`.
  * @source igse-2002 (core loss at 1 T)
  * @source holman-2010 (surface); the parts below name theirs
  * @valid ungapped; sine range of the material's fit
  */
-export function windTransformer(
-  t: Transformer,
-  choice: TransformerChoice,
-  frequency: number,
-  duty: number,
-  airSpeed: number,
-  ambient: number,
-): void {
+export function windTransformer(t: Transformer, choice: TransformerChoice, air: Air): void {
   t.primaryTurns = choice.primaryTurns;
   t.secondaryTurns = choice.secondaryTurns;
   t.ratio = choice.primaryTurns / choice.secondaryTurns;
   layBoth(t, choice);
   inductances(t, choice);
-  acFactors(t, choice, frequency, duty, ambient + RISE);
+  acFactors(t, choice);
   const { material, core } = choice;
   const { ki } = knownConstants(t.constants, material);
-  t.coreScale = ki * pow(frequency, material.frequencyExponent) * core.coreVolume;
+  power[0] = choice.frequency;
+  power[1] = material.frequencyExponent;
+  powAt(power, 0);
+  t.coreScale = ki * power[0] * core.coreVolume;
   t.frequencyExponent = material.frequencyExponent;
   t.fluxExponent = material.fluxExponent;
   t.area = core.area;
   t.minimumArea = core.minimumArea;
-  t.surfaceResistance = RISE / surfacePower(RISE, core.surface, Math.sqrt(core.surface / 6), airSpeed, ambient);
+  t.surfaceResistance = knownSurface(t.surfaces, core, air)[0];
   box(t, choice);
 }
 
@@ -154,28 +185,33 @@ function layBoth(t: Transformer, choice: TransformerChoice): void {
   const { core } = choice;
   const room = Math.max(0.1e-3, (core.windowHeight - GAPS * INSULATION) / 2);
   const windings = choice.form === 'centre-tap' ? 2 : 1;
-  t.primaryParallel = parallelThatFit(choice.primary, choice.primaryTurns, core.windowBreadth, room, MOST_PARALLEL);
-  t.secondaryParallel = parallelThatFit(
-    choice.secondary,
-    choice.secondaryTurns,
-    core.windowBreadth,
-    room / windings,
-    MOST_PARALLEL,
-  );
-  layWinding(choice.primary, choice.primaryTurns, t.primaryParallel, core.windowBreadth, 2, t.primary);
+  const { primary, secondary } = t;
+  primary.turns = choice.primaryTurns;
+  primary.breadth = core.windowBreadth;
+  primary.room = room;
+  primary.sections = 2;
+  layOne(choice.primary, primary);
+  t.primaryParallel = primary.parallel;
+  secondary.turns = choice.secondaryTurns;
+  secondary.breadth = core.windowBreadth;
+  secondary.room = room / windings;
   // Between two halves of the primary the field in the secondary is zero in its middle; a centre tap's idle half spoils that.
-  layWinding(
-    choice.secondary,
-    choice.secondaryTurns,
-    t.secondaryParallel,
-    core.windowBreadth,
-    3 - windings,
-    t.secondary,
-  );
+  secondary.sections = 3 - windings;
+  layOne(choice.secondary, secondary);
+  t.secondaryParallel = secondary.parallel;
   t.fill = windowFill(t.primary.build + windings * t.secondary.build, GAPS * INSULATION, core.windowHeight);
-  const resistivity = copperResistivity(298.15);
-  t.primaryResistance = wireResistance(resistivity, choice.primaryTurns * core.turnLength, t.primary.copperArea);
-  t.secondaryResistance = wireResistance(resistivity, choice.secondaryTurns * core.turnLength, t.secondary.copperArea);
+  t.primaryResistance = (COPPER * choice.primaryTurns * core.turnLength) / primary.copperArea;
+  t.secondaryResistance = (COPPER * choice.secondaryTurns * core.turnLength) / secondary.copperArea;
+}
+
+/**
+ * Lays as many conductors in parallel as fit in the winding's room.
+ * @derivation whole conductors in a rectangle
+ * @valid as `layWinding`
+ */
+function layOne(conductor: Conductor, winding: Winding): void {
+  parallelThatFitAt(conductor, winding, MOST_PARALLEL);
+  layWindingAt(conductor, winding);
 }
 
 /**
@@ -196,36 +232,47 @@ function inductances(t: Transformer, choice: TransformerChoice): void {
  * @source dowell-1966
  * @valid duty of one switch 0.05 … 0.45
  */
-function acFactors(
-  t: Transformer,
-  choice: TransformerChoice,
-  frequency: number,
-  duty: number,
-  temperature: number,
-): void {
-  const depth = skinDepth(copperResistivity(temperature), frequency);
-  const on = Math.min(0.45, Math.max(0.05, duty));
-  primaryPulses(pulses, choice.form, on);
-  t.primaryFactor = factorOf(pulses, t.primary, depth);
-  secondaryPulses(pulses, choice.form, on);
-  t.secondaryFactor = factorOf(pulses, t.secondary, depth);
+function acFactors(t: Transformer, choice: TransformerChoice): void {
+  const perDepth = Math.sqrt(choice.frequency) / choice.depth;
+  shape.on = Math.min(0.45, Math.max(0.05, choice.duty));
+  primaryPulses(pulses, choice.form);
+  takeSpectrum(pulses);
+  current.x1 = t.primary.dowellThickness * perDepth;
+  findFactor(t.primary);
+  t.primaryFactor = loss[0];
+  if (choice.form === 'centre-tap') {
+    halfPulses(pulses);
+    takeSpectrum(pulses);
+  }
+  current.x1 = t.secondary.dowellThickness * perDepth;
+  findFactor(t.secondary);
+  t.secondaryFactor = loss[0];
 }
 
 /**
- * Loss of the current `w` (period 1 s) over dc resistance times its mean square.
+ * Harmonics and moments of the winding current `w` (period 1 s).
+ * @source hurley-2000 bounds what lies beyond the harmonics by the slope
+ * @valid current edges of a hundredth of a period
+ */
+function takeSpectrum(w: Waveform): void {
+  harmonics(w, HARMONICS, coefficients);
+  measure(w, moments);
+  measureSlope(w, slope);
+  current.acMeanSquare = moments[MEAN_SQUARE] - moments[MEAN] * moments[MEAN];
+  current.slopeMeanSquare = slope[0];
+}
+
+/**
+ * Writes to `loss[0]` the loss of the current at hand in `winding` over dc resistance times its mean square.
  * @source dowell-1966, per harmonic
  * @source hurley-2000 bounds the rest
  * @valid current edges of a hundredth of a period
  */
-function factorOf(w: Waveform, winding: Winding, depth: number): number {
-  const x1 = winding.dowellThickness / depth;
-  const average = mean(w);
-  const square = meanSquare(w);
-  dowellHarmonics(x1, winding.dowellLayers, HARMONICS, factors);
-  harmonics(w, HARMONICS, coefficients);
-  const slope = slopeMeanSquare(w);
-  harmonicLoss(coefficients, factors, HARMONICS, square - average * average, slope, 1, x1, winding.dowellLayers, loss);
-  return (average * average + loss[WINDING_AC]) / square;
+function findFactor(winding: Winding): void {
+  current.layers = winding.dowellLayers;
+  dowellHarmonicsAt(current, HARMONICS, factors);
+  harmonicLossAt(current, coefficients, factors, HARMONICS, loss);
+  loss[0] = (moments[MEAN] * moments[MEAN] + loss[WINDING_AC]) / moments[MEAN_SQUARE];
 }
 
 /**
@@ -233,7 +280,8 @@ function factorOf(w: Waveform, winding: Winding, depth: number): number {
  * @source erickson-maksimovic-2001, chapter 6
  * @valid ripple left out
  */
-function primaryPulses(w: Waveform, form: WindingForm, on: number): void {
+function primaryPulses(w: Waveform, form: WindingForm): void {
+  const { on } = shape;
   clearWaveform(w);
   if (form === 'forward') {
     pulse(w, on, 1);
@@ -247,15 +295,12 @@ function primaryPulses(w: Waveform, form: WindingForm, on: number): void {
 }
 
 /**
- * Secondary: as the primary in a doubler; in a centre tap each half carries its pulse and half of what freewheels.
+ * One half of a centre-tapped secondary: its pulse and half of what freewheels. Any other secondary carries what the primary does.
  * @source erickson-maksimovic-2001, chapter 6; freewheeling current shared alike by both halves
  * @valid ripple left out
  */
-function secondaryPulses(w: Waveform, form: WindingForm, on: number): void {
-  if (form !== 'centre-tap') {
-    primaryPulses(w, form, on);
-    return;
-  }
+function halfPulses(w: Waveform): void {
+  const { on } = shape;
   clearWaveform(w);
   addSegment(w, EDGE, 0.5, 1);
   addSegment(w, on - EDGE, 1, 1);
@@ -294,15 +339,10 @@ function box(t: Transformer, choice: TransformerChoice): void {
   const coreMass = core.coreVolume * material.density;
   t.mass = coreMass + primary + secondary;
   const copper = primary + secondary;
-  const price = (primary * choice.primary.pricePerMass + secondary * choice.secondary.pricePerMass) / copper;
-  t.price.price = woundCost(
-    coreMass,
-    material.pricePerMass,
-    copper,
-    price,
-    WINDING_FIXED,
-    LABOUR_PER_MASS,
-    LABOUR_FIXED,
-    MARGIN,
-  );
+  bill.windingMass = copper;
+  bill.windingPrice = (primary * choice.primary.pricePerMass + secondary * choice.secondary.pricePerMass) / copper;
+  bill.coreMass = coreMass;
+  bill.corePrice = material.pricePerMass;
+  woundCostAt(bill);
+  t.price.price = bill.cost;
 }

@@ -2,21 +2,24 @@
  * A choke wound to order on a core of the tables, told as a row of the inductor table: the physics of stocked inductors then
  * serves both. Gap, resistance, saturation and core loss follow from core, material, turns, conductor and inductance.
  */
-import { pow } from '../optimizer/maths/index.ts';
+import { powAt } from '../optimizer/maths/index.ts';
 import { surfacePower } from './heat/index.ts';
 import {
+  BARE,
   copperMass,
   copperResistivity,
   createWinding,
-  gapFor,
+  createWoundBill,
+  gapAt,
   gapKeepOut,
+  HEIGHT,
   knownConstants,
-  layWinding,
+  layWindingAt,
   type MaterialConstants,
-  parallelThatFit,
+  parallelThatFitAt,
+  ROOT_AREA,
   windowFill,
-  wireResistance,
-  woundCost,
+  woundCostAt,
 } from './magnetics/index.ts';
 import type { PriceBreak } from './parts/common.ts';
 import type { Conductor } from './parts/conductor.ts';
@@ -39,6 +42,23 @@ const LABOUR_FIXED = 2;
 const MARGIN = 0.25;
 
 const winding = createWinding();
+const bill = createWoundBill();
+bill.windingFixed = WINDING_FIXED;
+bill.labourPrice = LABOUR_PER_MASS;
+bill.labourFixed = LABOUR_FIXED;
+bill.margin = MARGIN;
+const given = new Float64Array(3);
+const power = new Float64Array(2);
+/** Resistivity of copper at the temperature that rows state resistances for, Ω·m. */
+const COPPER = copperResistivity(298.15);
+
+/** The air around a design. */
+export interface Air {
+  /** m/s. */
+  readonly airSpeed: number;
+  /** K. */
+  readonly ambient: number;
+}
 
 /** A wound choke as an inductor row, rewritten for each design. */
 export class WoundChoke implements Inductor {
@@ -66,6 +86,10 @@ export class WoundChoke implements Inductor {
   maximumTemperature = HIGHEST;
   /** Core-loss constants of the materials seen so far. */
   readonly constants = new Map<Material, MaterialConstants>();
+  /** Part to air of the cores seen so far, K/W: all in the same air. */
+  readonly surfaces = new Map<Core, Float64Array>();
+  /** As asked for; the inductance stands above. */
+  turns = 1;
   /** m; 0 for a powder core, whose gap is in the material. */
   gap = 0.5;
   /** Share of the window's height that is used; above 1 the winding does not fit. */
@@ -80,25 +104,15 @@ export class WoundChoke implements Inductor {
 }
 
 /**
- * Rewrites `choke` for `turns` of `conductor` on `core` of `material` at `inductance` (H), in air of `airSpeed` (m/s) at `ambient` (K).
+ * Rewrites `choke` for the turns and the inductance that stand in it, of `conductor` on `core` of `material` in `air`.
  * @derivation joins the figures below: each names its source
  * @valid turns ≥ 1; inductance within the core's reach, else `outOfReach` tells
  */
-export function windChoke(
-  choke: WoundChoke,
-  core: Core,
-  material: Material,
-  conductor: Conductor,
-  turns: number,
-  inductance: number,
-  airSpeed: number,
-  ambient: number,
-): void {
-  choke.inductance = inductance;
-  gapOf(choke, core, material, turns, inductance);
-  layChoke(choke, core, conductor, turns);
-  coreOf(choke, core, material, turns, inductance);
-  boxOf(choke, core, material, conductor, turns, airSpeed, ambient);
+export function windChoke(choke: WoundChoke, core: Core, material: Material, conductor: Conductor, air: Air): void {
+  gapOf(choke, core, material);
+  layChoke(choke, core, conductor);
+  coreOf(choke, core, material);
+  boxOf(choke, core, material, conductor, air);
 }
 
 /**
@@ -106,7 +120,8 @@ export function windChoke(
  * @source mclyman-2004: gap with fringing
  * @valid gap up to a quarter of the window's breadth
  */
-function gapOf(choke: WoundChoke, core: Core, material: Material, turns: number, inductance: number): void {
+function gapOf(choke: WoundChoke, core: Core, material: Material): void {
+  const { turns, inductance } = choke;
   const bare = (4e-7 * Math.PI * turns * turns * core.area * material.permeability) / core.pathLength;
   if (material.kind === 'powder') {
     choke.gap = 0;
@@ -114,7 +129,11 @@ function gapOf(choke: WoundChoke, core: Core, material: Material, turns: number,
     return;
   }
   const most = 0.25 * core.windowBreadth;
-  choke.gap = gapFor(inductance, turns, core.area, core.pathLength, material.permeability, core.windowBreadth);
+  given[BARE] = (4e-7 * Math.PI * turns * turns * core.area) / inductance - core.pathLength / material.permeability;
+  given[ROOT_AREA] = Math.sqrt(core.area);
+  given[HEIGHT] = core.windowBreadth;
+  gapAt(given);
+  choke.gap = given[0];
   choke.outOfReach = choke.gap > most ? choke.gap / most - 1 : bare < inductance ? inductance / bare - 1 : 0;
 }
 
@@ -123,12 +142,15 @@ function gapOf(choke: WoundChoke, core: Core, material: Material, turns: number,
  * @source dowell-1966: layers from the choke's inside out
  * @valid layers fill the breadth
  */
-function layChoke(choke: WoundChoke, core: Core, conductor: Conductor, turns: number): void {
-  const height = Math.max(0.1e-3, core.windowHeight - INSULATION - gapKeepOut(choke.gap));
-  choke.parallel = parallelThatFit(conductor, turns, core.windowBreadth, height, MOST_PARALLEL);
-  layWinding(conductor, turns, choke.parallel, core.windowBreadth, 1, winding);
-  choke.fill = windowFill(winding.build, core.windowHeight - height, core.windowHeight);
-  choke.dcResistance = wireResistance(copperResistivity(298.15), turns * core.turnLength, winding.copperArea);
+function layChoke(choke: WoundChoke, core: Core, conductor: Conductor): void {
+  winding.turns = choke.turns;
+  winding.breadth = core.windowBreadth;
+  winding.room = Math.max(0.1e-3, core.windowHeight - INSULATION - gapKeepOut(choke.gap));
+  parallelThatFitAt(conductor, winding, MOST_PARALLEL);
+  choke.parallel = winding.parallel;
+  layWindingAt(conductor, winding);
+  choke.fill = windowFill(winding.build, core.windowHeight - winding.room, core.windowHeight);
+  choke.dcResistance = (COPPER * choke.turns * core.turnLength) / winding.copperArea;
   choke.conductorThickness = winding.dowellThickness;
   choke.layers = winding.dowellLayers;
 }
@@ -138,14 +160,17 @@ function layChoke(choke: WoundChoke, core: Core, conductor: Conductor, turns: nu
  * @source igse-2002: ki·(2f)^α·ΔB^β·Ve at half duty; saturation from L·I/(N·Ae)
  * @valid the material's own range, else a limit tells
  */
-function coreOf(choke: WoundChoke, core: Core, material: Material, turns: number, inductance: number): void {
+function coreOf(choke: WoundChoke, core: Core, material: Material): void {
+  const { turns, inductance } = choke;
   choke.fluxPerAmpere = inductance / (turns * core.minimumArea);
   choke.saturationCurrent = material.saturation100 / choke.fluxPerAmpere;
   choke.saturationDrop = material.kind === 'powder' ? 0.5 : 0.2;
   choke.saturationExponent = material.kind === 'powder' ? 2 : 8;
-  const { ki } = knownConstants(choke.constants, material);
-  const swing = pow(inductance / (turns * core.area), material.fluxExponent);
-  choke.coreCoefficient = ki * core.coreVolume * pow(2, material.frequencyExponent) * swing;
+  const constants = knownConstants(choke.constants, material);
+  power[0] = inductance / (turns * core.area);
+  power[1] = material.fluxExponent;
+  powAt(power, 0);
+  choke.coreCoefficient = constants.ki * core.coreVolume * constants.doubling * power[0];
   choke.coreFrequencyExponent = material.frequencyExponent;
   choke.coreSwingExponent = material.fluxExponent;
 }
@@ -156,31 +181,32 @@ function coreOf(choke: WoundChoke, core: Core, material: Material, turns: number
  * @source churchill-1977 and radiation: surface
  * @valid rise near 40 K
  */
-function boxOf(
-  choke: WoundChoke,
-  core: Core,
-  material: Material,
-  conductor: Conductor,
-  turns: number,
-  airSpeed: number,
-  ambient: number,
-): void {
+function boxOf(choke: WoundChoke, core: Core, material: Material, conductor: Conductor, air: Air): void {
   choke.length = core.length;
   choke.width = core.width;
   choke.height = core.height;
-  const copper = copperMass(turns, core.turnLength, winding.copperArea);
-  const coreMass = core.coreVolume * material.density;
-  choke.mass = coreMass + copper;
-  choke.price.price = woundCost(
-    coreMass,
-    material.pricePerMass,
-    copper,
-    conductor.pricePerMass,
-    WINDING_FIXED,
-    LABOUR_PER_MASS,
-    LABOUR_FIXED,
-    MARGIN,
-  );
-  choke.surfaceResistance = RISE / surfacePower(RISE, core.surface, Math.sqrt(core.surface / 6), airSpeed, ambient);
+  bill.windingMass = copperMass(choke.turns, core.turnLength, winding.copperArea);
+  bill.windingPrice = conductor.pricePerMass;
+  bill.coreMass = core.coreVolume * material.density;
+  bill.corePrice = material.pricePerMass;
+  choke.mass = bill.coreMass + bill.windingMass;
+  woundCostAt(bill);
+  choke.price.price = bill.cost;
+  choke.surfaceResistance = knownSurface(choke.surfaces, core, air)[0];
   choke.ratedCurrent = Math.sqrt(RISE / (choke.surfaceResistance * choke.dcResistance));
+}
+
+/**
+ * Surface to air of a part wound on `core`, K/W, from `known`, worked out only where it is not known yet: all parts stand in the same `air`.
+ * @source churchill-1977 and radiation: surface
+ * @valid rise near 40 K
+ */
+export function knownSurface(known: Map<Core, Float64Array>, core: Core, air: Air): Float64Array {
+  let resistance = known.get(core);
+  if (resistance === undefined) {
+    const power = surfacePower(RISE, core.surface, Math.sqrt(core.surface / 6), air.airSpeed, air.ambient);
+    resistance = Float64Array.of(RISE / power);
+    known.set(core, resistance);
+  }
+  return resistance;
 }

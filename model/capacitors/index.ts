@@ -13,4 +13,4 @@ export { type BankTrace, bankTrace } from './bank-trace.ts';
 export { ceramicCapacitance, ceramicWorstFactor } from './ceramic.ts';
 export { electrolyticCost, filmCost } from './cost.ts';
 export { cancellation, capacitiveRipple, inputChargeRipple, inputMeanSquare } from './ripple.ts';
-export { electrolyticLife, selfHeating, seriesLoss } from './stress.ts';
+export { electrolyticLife, electrolyticLifeAt, selfHeating, seriesLoss } from './stress.ts';

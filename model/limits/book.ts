@@ -23,10 +23,10 @@ export class LimitBook {
   /** Index of the judged point where the slack was smallest; −1 where no point matters. */
   readonly corner: Int32Array;
   private readonly sign: Float64Array;
-  /** The judgement at hand. */
-  private found = 0.5;
-  private bound = 0.5;
-  private scale = 0.5;
+  /** The judgement at hand: what was found and what is allowed, in the limit's unit, and what turns a miss into a fraction. */
+  found = 0.5;
+  bound = 0.5;
+  scale = 0.5;
   private readonly places: Map<string, number>;
 
   constructor(definitions: readonly LimitDefinition[]) {
@@ -83,12 +83,14 @@ export class LimitBook {
     this.weighByScale(place, point);
   }
 
-  private weigh(place: number, point: number): void {
+  /** Notes the judgement that `found` and `bound` hold, as `judge` does: for callers too large for it to be inlined there. */
+  weigh(place: number, point: number): void {
     this.scale = this.bound;
     this.weighByScale(place, point);
   }
 
-  private weighByScale(place: number, point: number): void {
+  /** The same for a `scale` of the caller's. */
+  weighByScale(place: number, point: number): void {
     if (place < 0) return;
     const slack = (this.sign[place] * (this.bound - this.found)) / this.scale;
     // A figure that cannot be computed stays: no later corner may hide it.

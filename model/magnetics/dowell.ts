@@ -44,6 +44,9 @@ export function dowellAt(x: Float64Array, layers: number, factors: Float64Array,
   factors[i] = h * (skin + (more * (sinh - s)) / (cosh + c));
 }
 
+/** √(k + 1). */
+const ROOTS = Float64Array.from({ length: 64 }, (_, k) => Math.sqrt(k + 1));
+
 const single = new Float64Array(1);
 const result = new Float64Array(1);
 
@@ -66,9 +69,26 @@ export function dowell(x: number, layers: number): number {
  * @valid as `dowellAt`
  */
 export function dowellHarmonics(x1: number, layers: number, count: number, factors: Float64Array): void {
+  layer.x1 = x1;
+  layer.layers = layers;
+  dowellHarmonicsAt(layer, count, factors);
+}
+
+const layer = { x1: 0.5, layers: 1.5 };
+
+/**
+ * The same for `x1` and `layers` that stand in a record: no double crosses the call.
+ * @source dowell-1966
+ * @valid as `dowellAt`
+ */
+export function dowellHarmonicsAt(
+  at: { readonly x1: number; readonly layers: number },
+  count: number,
+  factors: Float64Array,
+): void {
   for (let k = 0; k < count; k++) {
-    factors[k] = x1 * Math.sqrt(k + 1);
-    dowellAt(factors, layers, factors, k);
+    factors[k] = at.x1 * ROOTS[k];
+    dowellAt(factors, at.layers, factors, k);
   }
 }
 

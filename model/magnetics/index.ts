@@ -19,7 +19,14 @@ export {
   trapezoidLossDensity,
   triangleLossDensity,
 } from './core-loss.ts';
-export { dowell, dowellAt, dowellHarmonics, optimumThickness, roundWireThickness } from './dowell.ts';
+export {
+  dowell,
+  dowellAt,
+  dowellHarmonics,
+  dowellHarmonicsAt,
+  optimumThickness,
+  roundWireThickness,
+} from './dowell.ts';
 export {
   type EffectiveParameters,
   effectiveParameters,
@@ -29,7 +36,7 @@ export {
 } from './effective.ts';
 export { fluxOfCurrent, fluxSwing, saturationFlux } from './flux.ts';
 export { gamma } from './gamma.ts';
-export { fringingFactor, gapFor } from './gap.ts';
+export { BARE, fringingFactor, gapAt, gapFor, HEIGHT, ROOT_AREA } from './gap.ts';
 export { idleLayerFactor } from './idle-layer.ts';
 export { leakageInductance, magnetizingInductance } from './leakage.ts';
 export { roundWireProximity, roundWireSkin } from './round-wire.ts';
@@ -61,14 +68,35 @@ export {
   type WindingAtFrequency,
   windingLossAt,
 } from './winding-frequency.ts';
-export { createWinding, gapKeepOut, layWinding, parallelThatFit, type Winding, windowFill } from './winding-layout.ts';
 export {
+  createWinding,
+  gapKeepOut,
+  layWinding,
+  layWindingAt,
+  parallelThatFit,
+  parallelThatFitAt,
+  type Winding,
+  windowFill,
+} from './winding-layout.ts';
+export {
+  createHarmonicLoss,
   effectiveResistanceFactor,
+  type HarmonicLoss,
   harmonicLoss,
+  harmonicLossAt,
   tailBound,
   WINDING_AC,
   WINDING_BOUND,
 } from './winding-loss.ts';
 export { gaugeDiameter, litzLoss, roundArea } from './wire.ts';
 export { knownConstants, type MaterialConstants, materialConstants, woundCoreLossAt } from './wound-core.ts';
-export { copperMass, coreTemperatureFactor, hotSpotRise, materialViolation, woundCost } from './wound-part.ts';
+export {
+  copperMass,
+  coreTemperatureFactor,
+  createWoundBill,
+  hotSpotRise,
+  materialViolation,
+  type WoundBill,
+  woundCost,
+  woundCostAt,
+} from './wound-part.ts';

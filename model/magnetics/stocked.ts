@@ -3,7 +3,7 @@
 import { expAt, logAt, powAt } from '../../optimizer/maths/index.ts';
 import type { Inductor } from '../parts/inductor.ts';
 import { COPPER_TEMPCO, copperResistivity, skinDepth } from './copper.ts';
-import { dowellHarmonics } from './dowell.ts';
+import { dowellHarmonicsAt } from './dowell.ts';
 
 /** Harmonics summed one by one; the rest is bounded. */
 export const RIPPLE_HARMONICS = 6;
@@ -64,7 +64,7 @@ export function prepareInductorAt(row: Inductor, into: InductorAtFrequency): voi
   into.coreScale = row.coreCoefficient * power[0];
   into.x1 = (row.conductorThickness * Math.sqrt(into.frequency)) / into.depth;
   into.layers = row.layers;
-  dowellHarmonics(into.x1, row.layers, RIPPLE_HARMONICS, into.factors);
+  dowellHarmonicsAt(into, RIPPLE_HARMONICS, into.factors);
 }
 
 /**

@@ -1,9 +1,16 @@
 /** How turns of a conductor lie in a window: layers, build, copper area, and the layer that Dowell's law sees. Once a design. */
 import type { Conductor } from '../parts/conductor.ts';
 
-/** A laid winding. Filled in place. */
+/** A winding: how it is asked for, and as it is laid. Filled in place. */
 export interface Winding {
   turns: number;
+  /** Conductors in parallel. */
+  parallel: number;
+  /** Breadth of the window and height that the winding may take there, m. */
+  breadth: number;
+  room: number;
+  /** 1, or 2 where the other winding lies between two halves of it. */
+  sections: number;
   /** Whole layers of conductors. */
   layers: number;
   /** Height across the layers, m. */
@@ -18,7 +25,8 @@ export interface Winding {
 
 /** A winding to be filled. */
 export function createWinding(): Winding {
-  return { turns: 1, layers: 1, build: 0, copperArea: 0, dowellThickness: 0, dowellLayers: 1 };
+  const asked = { turns: 1, parallel: 1, breadth: 0.5, room: 0.5, sections: 1 };
+  return { ...asked, layers: 1, build: 0.5, copperArea: 0.5, dowellThickness: 0.5, dowellLayers: 1.5 };
 }
 
 const ROUND = 0.5 * Math.sqrt(Math.PI);
@@ -41,6 +49,19 @@ export function layWinding(
   into: Winding,
 ): void {
   into.turns = turns;
+  into.parallel = parallel;
+  into.breadth = breadth;
+  into.sections = sections;
+  layWindingAt(conductor, into);
+}
+
+/**
+ * The same for what stands in `into` already: no double crosses the call.
+ * @source dowell-1966, porosity
+ * @valid as `layWinding`
+ */
+export function layWindingAt(conductor: Conductor, into: Winding): void {
+  const { turns, parallel, breadth, sections } = into;
   if (conductor.kind === 'foil') {
     into.layers = turns;
     into.build = turns * parallel * conductor.outerSize;
@@ -77,11 +98,30 @@ export function parallelThatFit(
   room: number,
   most: number,
 ): number {
-  if (conductor.kind === 'foil') return Math.max(1, Math.min(most, Math.floor(room / (turns * conductor.outerSize))));
+  placed.turns = turns;
+  placed.breadth = breadth;
+  placed.room = room;
+  parallelThatFitAt(conductor, placed, most);
+  return placed.parallel;
+}
+
+const placed = createWinding();
+
+/**
+ * Takes as many conductors in parallel as fit in the room that stands in `into`, as `parallelThatFit`: no double crosses the call.
+ * @derivation whole conductors in a rectangle
+ * @valid as `parallelThatFit`
+ */
+export function parallelThatFitAt(conductor: Conductor, into: Winding, most: number): void {
+  const { turns, breadth, room } = into;
+  if (conductor.kind === 'foil') {
+    into.parallel = Math.max(1, Math.min(most, Math.floor(room / (turns * conductor.outerSize))));
+    return;
+  }
   const perLayer = Math.floor(breadth / conductor.outerSize);
   const wires = (Math.floor(room / conductor.outerSize) * perLayer) / turns;
   const loose = conductor.kind === 'solid' ? MOST_LOOSE_WIRES : most;
-  return Math.max(1, Math.min(most, loose, perLayer, Math.floor(wires)));
+  into.parallel = Math.max(1, Math.min(most, loose, perLayer, Math.floor(wires)));
 }
 
 /**

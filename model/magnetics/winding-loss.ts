@@ -48,10 +48,43 @@ export function harmonicLoss(
   layers: number,
   into: Float64Array,
 ): void {
-  const omega = 2 * Math.PI * frequency;
+  Object.assign(current, { acMeanSquare, slopeMeanSquare, frequency, x1, layers });
+  harmonicLossAt(current, coefficients, factors, count, into);
+}
+
+/** What `harmonicLoss` asks of a current and a winding, in its words. */
+export interface HarmonicLoss {
+  acMeanSquare: number;
+  slopeMeanSquare: number;
+  frequency: number;
+  x1: number;
+  layers: number;
+}
+
+/** One to be filled. */
+export function createHarmonicLoss(): HarmonicLoss {
+  return { acMeanSquare: 0.5, slopeMeanSquare: 0.5, frequency: 0.5, x1: 0.5, layers: 1.5 };
+}
+
+const current = createHarmonicLoss();
+
+/**
+ * As `harmonicLoss`: no double crosses the call.
+ * @source dowell-1966 for the factor of each harmonic; tail by the derivation in `tailBound`
+ * @valid currents with finite edges
+ */
+export function harmonicLossAt(
+  of: HarmonicLoss,
+  coefficients: Float64Array,
+  factors: Float64Array,
+  count: number,
+  into: Float64Array,
+): void {
+  const { x1, layers } = of;
+  const omega = 2 * Math.PI * of.frequency;
   let loss = 0;
-  let rest = acMeanSquare;
-  let slope = slopeMeanSquare / (omega * omega);
+  let rest = of.acMeanSquare;
+  let slope = of.slopeMeanSquare / (omega * omega);
   for (let k = 0; k < count; k++) {
     const a = coefficients[2 * k];
     const b = coefficients[2 * k + 1];

@@ -1,4 +1,5 @@
 /** A core of one material in a design: the loss constant that its Steinmetz parameters give, and its loss under a flux. */
+import { pow } from '../../optimizer/maths/index.ts';
 import type { Core } from '../parts/core.ts';
 import type { Material } from '../parts/material.ts';
 import type { Waveform } from '../waveform/waveform.ts';
@@ -11,6 +12,8 @@ export interface MaterialConstants {
   readonly ki: number;
   readonly alpha: number;
   readonly beta: number;
+  /** 2^α. */
+  readonly doubling: number;
 }
 
 /**
@@ -20,7 +23,7 @@ export interface MaterialConstants {
  */
 export function materialConstants(material: Material): MaterialConstants {
   const { lossCoefficient: k, frequencyExponent: alpha, fluxExponent: beta } = material;
-  return { ki: igseConstant(k, alpha, beta), alpha, beta };
+  return { ki: igseConstant(k, alpha, beta), alpha, beta, doubling: pow(2, alpha) };
 }
 
 /**

@@ -51,10 +51,51 @@ export function woundCost(
   labourFixed: number,
   margin: number,
 ): number {
-  const core = coreMass * corePrice;
-  const winding = windingMass * windingPrice + windingFixed;
-  const labour = windingMass * labourPrice + labourFixed;
-  return (core + winding + labour) / (1 - margin);
+  Object.assign(paid, {
+    coreMass,
+    corePrice,
+    windingMass,
+    windingPrice,
+    windingFixed,
+    labourPrice,
+    labourFixed,
+    margin,
+  });
+  woundCostAt(paid);
+  return paid.cost;
+}
+
+/** Masses, kg, and prices of a wound part, as `woundCost` takes them, and the cost that they come to. */
+export interface WoundBill {
+  coreMass: number;
+  corePrice: number;
+  windingMass: number;
+  windingPrice: number;
+  windingFixed: number;
+  labourPrice: number;
+  labourFixed: number;
+  margin: number;
+  cost: number;
+}
+
+/** One to be filled: all ½. */
+export function createWoundBill(): WoundBill {
+  const masses = { coreMass: 0.5, corePrice: 0.5, windingMass: 0.5, windingPrice: 0.5, windingFixed: 0.5 };
+  return { ...masses, labourPrice: 0.5, labourFixed: 0.5, margin: 0.5, cost: 0.5 };
+}
+
+const paid = createWoundBill();
+
+/**
+ * Writes `bill.cost`, as `woundCost`: no double crosses the call.
+ * @source burkart-kolar-2013, inductors and transformers
+ * @valid as `woundCost`
+ */
+export function woundCostAt(bill: WoundBill): void {
+  const core = bill.coreMass * bill.corePrice;
+  const winding = bill.windingMass * bill.windingPrice + bill.windingFixed;
+  const labour = bill.windingMass * bill.labourPrice + bill.labourFixed;
+  bill.cost = (core + winding + labour) / (1 - bill.margin);
 }
 
 /**

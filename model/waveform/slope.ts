@@ -31,10 +31,20 @@ export function slopePowerMean(w: Waveform, alpha: number): number {
  * @valid period above 0
  */
 export function slopeMeanSquare(w: Waveform): number {
+  measureSlope(w, power);
+  return power[0];
+}
+
+/**
+ * The same, written to `into[0]` without garbage: the hot path's form.
+ * @source hurley-2000, section II (rms of the derivative)
+ * @valid period above 0
+ */
+export function measureSlope(w: Waveform, into: Float64Array): void {
   let sum = 0;
   for (let i = 0; i < w.count; i++) {
     const rise = w.end[i] - w.start[i];
     if (w.duration[i] > 0) sum += (rise * rise) / w.duration[i];
   }
-  return sum / w.period;
+  into[0] = sum / w.period;
 }

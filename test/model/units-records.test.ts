@@ -559,6 +559,8 @@ const PROVED: Readonly<Record<string, string>> = {
   windTransformer:
     'copper, air, permeability of nothing and insulation in metres fix all five units; its formulas stand in units.test.ts',
   windChoke: 'as windTransformer',
+  windingDepth: 'resistivity of one metal',
+  knownSurface: 'takes powers by surfacePower, which is a fit for air',
   prepareFlavour: 'takes capacitances by ceramicCapacitance, which stands in units.test.ts',
   isolatedRefusal: 'words',
   chooseFilterChoke: 'compares',

@@ -13,7 +13,7 @@ import type { Core } from '../../model/parts/core.ts';
 import type { Material } from '../../model/parts/material.ts';
 import { addOtherLosses } from '../../model/point-losses.ts';
 import { PointSolver } from '../../model/point-solver.ts';
-import { windTransformer } from '../../model/transformer.ts';
+import { windingDepth, windTransformer } from '../../model/transformer.ts';
 import { WoundChoke, windChoke } from '../../model/wound-choke.ts';
 import { type CaseGroup, type Common, make } from './case.ts';
 import { solvedDesign } from './ideal-stage.ts';
@@ -55,11 +55,14 @@ function materialOf(ki: number, alpha: number, beta: number): Material {
   };
 }
 
+/** Still air at 40 °C. */
+const AIR = { airSpeed: 0, ambient: 313.15 };
+
 /** W/m³ of a choke wound to order whose ripple swings its core by 0.2 T at 100 kHz, rising for `duty`. */
 function chokeLoss(material: Material, duty: number): number {
   const [turns, inductance] = [12, 50e-6];
-  const choke = new WoundChoke();
-  windChoke(choke, ETD29, material, WIRE, turns, inductance, 0, 313.15);
+  const choke = Object.assign(new WoundChoke(), { turns, inductance });
+  windChoke(choke, ETD29, material, WIRE, AIR);
   const at = createInductorAtFrequency();
   prepareInductor(choke, 1e5, 353.15, at);
   const watts = new Float64Array(2);
@@ -72,7 +75,8 @@ function transformerLoss(material: Material): number {
   const example = { frequency: 1e5, input: 48, output: 12, current: 10, ratio: 4, inductance: 1 } as const;
   const { design, state } = solvedDesign({ architecture: 'full-bridge-centre-tap', ...example });
   const choice = { core: ETD29, material, primary: WIRE, secondary: WIRE, primaryTurns: 8, secondaryTurns: 2 };
-  windTransformer(design.transformer, { ...choice, form: 'centre-tap' }, 1e5, 0.5, 0, 313.15);
+  const driven = { frequency: 1e5, duty: 0.5, depth: windingDepth(AIR) };
+  windTransformer(design.transformer, { ...choice, ...driven, form: 'centre-tap' }, AIR);
   Object.assign(state, { frequency: 2e5, fluxSwing: 0.2, fluxRamp: 0.5, transformerTemperature: 373.15 });
   const bare = { coreCoefficient: 0, coreFrequencyExponent: 1.4, coreSwingExponent: 2.5, dcResistance: 0 };
   const inductor = { ...design.inductor, ...bare, conductorThickness: 1e-6, layers: 1 };
