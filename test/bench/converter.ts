@@ -13,11 +13,16 @@ import { restoreRandom, seedRandom } from '../../optimizer/random.ts';
 import { createSpace, LINE, toGenes } from '../../optimizer/variation/index.ts';
 import { archiveGrid } from '../../optimizer/world.ts';
 import { shippedProblem } from '../model/shipped.ts';
+import { judgeAll, smallProblem } from '../support/small-rail.ts';
+import { SMALL_PARTS } from '../support/small-spaces.ts';
 
 /** Figures of the demo's rail. */
 export interface ConverterFigures {
   /** Hypervolume after 200,000 evaluations of the search, seed 1, islands as a sheet has them. */
   readonly searched: number;
+  /** The same with seeds 1 … N, and how far the best lies above the worst, as a part of the worst. */
+  readonly seeds: readonly number[];
+  readonly spread: number;
   /** Random designs drawn, and the hypervolume of those that kept every limit, at each doubling of their number. */
   readonly drawn: number;
   readonly random: readonly { readonly feasible: number; readonly hypervolume: number }[];
@@ -25,11 +30,48 @@ export interface ConverterFigures {
   readonly outsideModel: number;
 }
 
-/** Measures; draws until `feasible` random designs keep every limit, some 300 draws each. */
-export function measureConverter(feasible: number): ConverterFigures {
+/** A converter space judged whole, and what the search holds of its front after a hundredth of it. */
+export interface WholeSpaceFigures {
+  readonly designs: number;
+  readonly feasible: number;
+  /** Hypervolume of what each seed found over the true front's. */
+  readonly shares: readonly number[];
+}
+
+/** Measures with seeds 1 … `seeds`, at least one; draws until `feasible` random designs keep every limit, some 300 draws each. */
+export function measureConverter(feasible: number, seeds: number): ConverterFigures {
   const problem = shippedProblem('buoy-sensors');
-  const found = search(problem, { evaluations: 200_000, seed: 1, islands: 8, population: 50, epochGenerations: 20 });
-  return { searched: found.hypervolume, ...drawFeasible(problem, feasible), outsideModel: outsideModel(problem) };
+  const sheet = { evaluations: 200_000, islands: 8, population: 50, epochGenerations: 20 };
+  const found = seedsUpTo(Math.max(1, seeds)).map((seed) => search(problem, { ...sheet, seed }).hypervolume);
+  return {
+    searched: found[0],
+    seeds: found,
+    spread: Math.max(...found) / Math.min(...found) - 1,
+    ...drawFeasible(problem, feasible),
+    outsideModel: outsideModel(problem),
+  };
+}
+
+/** Frequencies of the whole space: 0.5 to 1.475 MHz in steps of 25 kHz. */
+const WHOLE_STEPS: readonly number[] = Array.from({ length: 40 }, (_, k) => 5e5 + 25e3 * k);
+/** Most ceramics at the output and at the input of the whole space, each. */
+const WHOLE_CERAMICS = 12;
+
+/** Judges every design of the tests' small space on a fine grid of frequencies, nearly 10⁷ of them, then searches it with seeds 1 … `seeds`. */
+export function measureWholeSpace(
+  seeds: number,
+  { ceramics, frequencies } = { ceramics: WHOLE_CERAMICS, frequencies: WHOLE_STEPS },
+): WholeSpaceFigures {
+  const problem = smallProblem({ parts: SMALL_PARTS, ceramics, frequencies });
+  const { designs, feasible, front } = judgeAll(problem, frequencies);
+  const truth = hypervolumeOf(problem, front);
+  const evaluations = Math.floor(designs / 100);
+  const shares = seedsUpTo(seeds).map((seed) => search(problem, { evaluations, seed }).hypervolume / truth);
+  return { designs, feasible, shares };
+}
+
+function seedsUpTo(last: number): number[] {
+  return Array.from({ length: last }, (_, k) => k + 1);
 }
 
 /** Draws designs evenly over the coordinates of the search into an archive like the search's. */

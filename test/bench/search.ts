@@ -1,14 +1,15 @@
 /**
  * `npm run bench:search`: the search's quality on published problems and the times of its kernels and of whole runs, as two tables, or with `--json` as rows. `--seeds
  * N` takes fewer seeds than 11, `--short` leaves out the plain versions that take seconds, `--random N`
- * draws until N random designs of the demo's rail are feasible (200,000 take an hour). A full run is kept in test/bench/results/.
+ * draws until N random designs of the demo's rail are feasible (200,000 take an hour), `--spread N` searches that rail with N seeds in the place of 12,
+ * `--whole N` judges a converter space of nearly 10⁷ designs whole (some ten minutes) and searches it with N seeds. A full run is kept in test/bench/results/.
  */
 import { execFileSync } from 'node:child_process';
 import { mkdirSync, writeFileSync } from 'node:fs';
 import { cpus } from 'node:os';
 import { join } from 'node:path';
 import { parseArgs } from 'node:util';
-import { measureConverter } from './converter.ts';
+import { measureConverter, measureWholeSpace } from './converter.ts';
 import { type Row, timeKernels } from './kernels.ts';
 import { measureQuality, type QualityRow } from './quality.ts';
 import { overheadAt200, timeRuns } from './runs.ts';
@@ -19,6 +20,8 @@ const { values } = parseArgs({
     short: { type: 'boolean', default: false },
     seeds: { type: 'string', default: '11' },
     random: { type: 'string', default: '1000' },
+    spread: { type: 'string', default: '12' },
+    whole: { type: 'string', default: '0' },
   },
 });
 const seeds = Number(values.seeds);
@@ -33,7 +36,8 @@ const record = {
   quality,
   times,
   overheadMicroseconds: overheadAt200(),
-  converter: measureConverter(Number(values.random)),
+  converter: measureConverter(Number(values.random), Number(values.spread)),
+  whole: Number(values.whole) > 0 ? measureWholeSpace(Number(values.whole)) : undefined,
 };
 process.stdout.write(values.json ? json(quality, times) : tables());
 if (seeds >= 11 && !values.short) keep();
@@ -82,10 +86,17 @@ function tables(): string {
 }
 
 function converterLines(): string {
-  const { searched, drawn, random, outsideModel } = record.converter;
+  const { searched, seeds: found, spread, drawn, random, outsideModel } = record.converter;
   const line = ({ feasible, hypervolume }: { feasible: number; hypervolume: number }): string =>
     `  ${feasible} random feasible designs hold ${hypervolume.toFixed(4)}; the search ${((100 * searched) / hypervolume - 100).toFixed(1)} % more\n`;
-  return `demo's rail: ${searched.toFixed(4)} after 200,000 evaluations; ${drawn} random designs drawn\n${random.map(line).join('')}  outside the model, population 200: ${(100 * outsideModel).toFixed(1)} % of the time (at most 20 %)\n`;
+  return `demo's rail: ${searched.toFixed(4)} after 200,000 evaluations; ${drawn} random designs drawn\n${random.map(line).join('')}  spread of ${found.length} seeds: ${Math.min(...found).toFixed(4)} to ${Math.max(...found).toFixed(4)}, ${(100 * spread).toFixed(2)} % (at most 0.5 %)\n  outside the model, population 200: ${(100 * outsideModel).toFixed(1)} % of the time (at most 20 %)\n${wholeLine()}`;
+}
+
+function wholeLine(): string {
+  if (record.whole === undefined) return '';
+  const { designs, feasible, shares } = record.whole;
+  const reached = shares.filter((share) => share >= 0.995).length;
+  return `  a space of ${designs} designs judged whole, ${feasible} feasible: after a hundredth of it ${reached} of ${shares.length} seeds hold 99.5 %, the worst ${(100 * Math.min(...shares)).toFixed(2)} %\n`;
 }
 
 function digits(value: number): string {
