@@ -21,6 +21,8 @@ export class ChokeSteadyState {
    */
   gapFall = 0;
   gapRise = 0;
+  /** The same for each ampere of valley current that must turn round before the current grows, Ω. */
+  gapTurn = 0;
   /** Current that moves the node from rail to rail within a gap, A, above 0. */
   gapCurrent = 1;
   /** The same where the node waits for its charge before an edge that its own current brings about; 0 where it moves at once. */
@@ -108,7 +110,7 @@ export function settleGaps(s: ChokeSteadyState): void {
       : -s.gapRise * Math.min(1, -peak / s.gapCurrent);
   // Half of what drives the choke at most: so duties stay between 0 and 1 where hardly anything does, and broken limits tell the rest.
   const most = (0.5 * s.rise * s.fall) / (s.rise + s.fall);
-  s.gapVolts = Math.max(-most, Math.min(most, first + second));
+  s.gapVolts = Math.max(-most, Math.min(most, first + second + s.gapTurn * Math.max(0, valley)));
 }
 
 /**

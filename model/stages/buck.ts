@@ -149,6 +149,7 @@ function gaps(design: Design): void {
   steady.gapRise = steady.gapFall;
   steady.gapCurrent = design.gapCurrent;
   steady.waitCurrent = design.gapCurrent;
+  steady.gapTurn = 0;
 }
 
 /** Where drops eat the whole drive no duty serves: a duty of one and the limits it breaks tell, not a negative voltage. */

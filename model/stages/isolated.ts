@@ -26,8 +26,24 @@ export interface IsolatedForm {
 }
 
 const steady = new ChokeSteadyState();
-/** Of the current that dies between pulses: mean square over that of its start, mean over its start. */
-const decay = new Float64Array(2);
+/** What the ramps in the leakage come to, on the secondary side: in a record, so that no double crosses a call. */
+class Turns {
+  /** Peak magnetizing current, what a pulse starts with and what is left of it to be taken back, A. */
+  magnetizing = 0.5;
+  start = 0.5;
+  back = 0.5;
+  /** s/A. */
+  pace = 0.5;
+  /** Share of the period in which a shifted bridge turns its current round. */
+  turnShare = 0.5;
+  /** Mean square that the ramps add, A², and mean, A. */
+  turnSquare = 0.5;
+  charge = 0.5;
+}
+
+const turns = new Turns();
+/** Of the current that dies between pulses, over what it starts with: mean square (over the square), mean, what is left at the end. */
+const decay = new Float64Array(3);
 
 /** Why no transformer stage can serve `rail`; undefined where one can. */
 export function isolatedRefusal(rail: Rail): string | undefined {
@@ -58,8 +74,12 @@ export function solveIsolated(form: IsolatedForm, design: Design, state: StageSt
   solveBentChoke(design, state, steady);
   applyForward(steady, state);
   state.effectiveInductance = steady.inductance;
-  writeCurrents(form, transformer, state, chokes, design.phaseShifted);
   writeFlux(form, design, transformer, state);
+  writeTurns(form, design, state);
+  writeCurrents(form, transformer, state, chokes, design.phaseShifted);
+  if (!form.doubleEnded) addMagnetizing(transformer, state);
+  writeChoke(form, design, state);
+  writeDraw(form, design, state);
 }
 
 /**
@@ -95,15 +115,28 @@ function voltages(form: IsolatedForm, t: Transformer, state: StageState, phaseCu
  * @valid gaps short beside the pulses
  */
 function rectifierGaps(form: IsolatedForm, design: Design, state: StageState, current: number): void {
-  const t = design.transformer;
-  const gap = design.gap;
-  const rise = (t.leakage * current) / (t.ratio * form.share * state.inputVoltage);
-  const time = design.phaseShifted ? gap + Math.max(gap, rise) + rise : 2 * gap + rise;
-  const drop = design.low.bodyDrop - current * state.lowResistance;
-  steady.gapFall = 0.5 * time * steady.frequency * (form.centreTap ? 0.5 : 1) * drop;
+  const { gap } = design;
+  const share = form.centreTap ? 0.5 : 1;
+  const pace = turnPace(form, design, state.inputVoltage);
+  const time = design.phaseShifted ? gap + Math.max(gap, pace * current) : 2 * gap;
+  const drop = share * (design.low.bodyDrop - current * state.lowResistance);
+  steady.gapFall = 0.5 * time * steady.frequency * drop;
+  steady.gapTurn = pace * steady.frequency * drop;
   steady.gapRise = 0;
   steady.gapCurrent = design.gapCurrent;
   steady.waitCurrent = 0;
+}
+
+/**
+ * Time that one ampere of a choke takes to turn round in the leakage, s/A: L/n over the primary's volts, which the body diode that still
+ * carries the choke helps.
+ * @derivation Llk·(I/n)/(V + n·drop), half of the drop where it stands across half a winding
+ * @valid gaps, so that a body diode carries the choke
+ */
+export function turnPace(form: IsolatedForm, design: Design, inputVoltage: number): number {
+  const { leakage, ratio } = design.transformer;
+  const drop = design.gap > 0 ? (form.centreTap ? 0.5 : 1) * design.low.bodyDrop : 0;
+  return leakage / (ratio * (form.share * inputVoltage + ratio * drop));
 }
 
 /**
@@ -114,16 +147,18 @@ function rectifierGaps(form: IsolatedForm, design: Design, state: StageState, cu
  */
 function writeCurrents(form: IsolatedForm, t: Transformer, state: StageState, chokes: number, shifted: boolean): void {
   const { valleyCurrent: a, peakCurrent: b, highShare: h, lowShare: l } = state;
+  const { magnetizing: m, turnShare, turnSquare } = turns;
   const square = (a * a + a * b + b * b) / 3;
   const n2 = t.ratio * t.ratio;
   // Share of the switching period in which the primary carries a pulse.
   const driven = form.doubler ? 2 * h : h;
   // Mean square of what goes on in the primary of a shifted bridge between pulses, on the secondary side, over that time.
-  decay.fill(0);
-  if (shifted) findDecay(form, t, state);
-  const left = decay[0] * b * b;
-  const between = form.doubler ? 1 - 2 * h : l;
-  state.primaryMeanSquare = (driven * square + between * left) / n2;
+  const left = shifted ? decay[0] * b * b : 0;
+  const leftPrimary = shifted ? decay[0] * (b + m) * (b + m) : 0;
+  const between = Math.max(0, (form.doubler ? 1 - 2 * h : l) - turnShare);
+  // The magnetizing current rises with the pulse, from one side of zero to the other.
+  const pulse = square + ((b - a) * m + m * m) / 3;
+  state.primaryMeanSquare = (driven * pulse + between * leftPrimary + turnSquare) / n2;
   state.highMeanSquare = form.doubleEnded ? 0.5 * state.primaryMeanSquare : state.primaryMeanSquare;
   if (form.doubler) {
     state.secondaryMeanSquare = driven * square + between * left;
@@ -138,13 +173,12 @@ function writeCurrents(form: IsolatedForm, t: Transformer, state: StageState, ch
     state.lowMeanSquare = 0.5 * square * (h + l);
   }
   state.chokeMeanSquare = square * (h + l);
-  state.highMean = (driven * 0.5 * (a + b) * form.share) / t.ratio;
+  state.highMean = ((driven * 0.5 * (a + b) + turns.charge) * form.share) / t.ratio;
   state.lowMean = 0.5 * (a + b) * 0.5 * (h + l) * chokes;
   state.highDevices = form.doubleEnded && form.inSeries === 2 ? 4 : 2;
   state.lowDevices = 2;
   state.chokes = chokes;
   state.drawCopies = state.activePhases;
-  writeWaveforms(form, t, state);
 }
 
 /**
@@ -157,39 +191,115 @@ function writeCurrents(form: IsolatedForm, t: Transformer, state: StageState, ch
 function findDecay(form: IsolatedForm, t: Transformer, state: StageState): void {
   const period = state.frequency > 0 ? 1 / state.frequency : 1;
   const time = form.doubler ? 0.5 * (1 - 2 * state.highShare) * period : state.lowShare * period;
-  const secondary = state.secondaryResistance + (form.doubler ? 2 : 1) * state.lowResistance;
+  // The halves of a centre tap carry half of the difference each, against each other.
+  const secondary =
+    (form.centreTap ? 0.5 : 1) * (state.secondaryResistance + (form.doubler ? 2 : 1) * state.lowResistance);
   const primary = form.inSeries * state.highResistance + state.primaryResistance;
   const resistance = primary + t.ratio * t.ratio * secondary;
   const x = (time * resistance) / t.leakage;
   decay.fill(1);
   if (!(x > 1e-6)) return;
-  decay[1] = -x;
-  expAt(decay, 1);
-  const rest = decay[1];
+  decay[2] = -x;
+  expAt(decay, 2);
+  const rest = decay[2];
   decay[0] = (1 - rest * rest) / (2 * x);
   decay[1] = (1 - rest) / x;
 }
 
 /**
- * The choke's waveform and what one phase draws from the input.
- * @derivation the choke's triangle, and its rising part times share/n at the input
- * @valid straight segments
+ * Before a pulse reaches the choke's valley current turns round in the leakage, and after it what the primary carries dies against the
+ * input, which takes it back; in a shifted bridge only once the next pulse begins.
+ * @derivation straight ramps of L/n over the volts of `turnPace`: I²·pace/2 is a ramp's charge, I³·pace/3 its square
+ * @valid ramps short beside the period
  */
-function writeWaveforms(form: IsolatedForm, t: Transformer, state: StageState): void {
+function writeTurns(form: IsolatedForm, design: Design, state: StageState): void {
+  const period = state.frequency > 0 ? 1 / state.frequency : 1;
+  const pace = turnPace(form, design, state.inputVoltage);
+  const m = form.doubleEnded ? design.transformer.ratio * state.magnetizingPeak : 0;
+  decay.fill(0);
+  if (design.phaseShifted) findDecay(form, design.transformer, state);
+  const start = Math.max(0, state.valleyCurrent - m);
+  const back = (Math.max(0, state.peakCurrent) + m) * (design.phaseShifted ? decay[2] : 1);
+  const each = (form.doubler ? 2 : 1) / period;
+  turns.magnetizing = m;
+  turns.start = start;
+  turns.back = back;
+  turns.pace = pace;
+  turns.turnShare = design.phaseShifted ? each * pace * (start + back) : 0;
+  turns.turnSquare = (each * pace * (start * start * start + back * back * back)) / 3;
+  turns.charge = 0.5 * each * pace * (start * start - back * back);
+}
+
+/**
+ * The choke's waveform: a triangle. What several phases leave of each other's ripple is shaped by less than that, so with them it has more
+ * corners: it falls faster while a body diode carries it, after a pulse for a gap and before one until the current has turned round (in a
+ * shifted bridge the primary goes on carrying it after a pulse), and resistances bow its rise.
+ * @derivation the volts that the gaps take, spread over the gaps; a rise whose slope falls by R·ΔI/L bows by R·ΔI·t/(8·L)
+ * @valid straight segments; gaps short beside the fall, else they are spread over all of it
+ */
+function writeChoke(form: IsolatedForm, design: Design, state: StageState): void {
   const { valleyCurrent: a, peakCurrent: b, highShare: h, lowShare: l } = state;
   const period = state.frequency > 0 ? 1 / state.frequency : 1;
-  const idle = pauses(state.mode) ? (1 - h - l) * period : 0;
+  const rests = pauses(state.mode);
+  const { gap } = design;
+  const first = design.phaseShifted ? 0 : gap;
+  const last = gap * (design.phaseShifted ? 2 : 1) + turns.pace * Math.max(0, a);
+  const several = state.activePhases > 1;
+  const more = rests || a < 0 || !several ? 0 : (steady.gapVolts * period) / steady.inductance;
+  const middle = l * period - first - last;
   clearWaveform(state.choke);
-  addSegment(state.choke, h * period, a, b);
-  addSegment(state.choke, l * period, b, a);
-  if (idle > 0) addSegment(state.choke, idle, 0, 0);
+  if (several) {
+    const bow = (drivingResistance(form, design.transformer, state) * (b - a) * h * period) / (8 * steady.inductance);
+    addSegment(state.choke, 0.5 * h * period, a, 0.5 * (a + b) + bow);
+    addSegment(state.choke, 0.5 * h * period, 0.5 * (a + b) + bow, b);
+  } else addSegment(state.choke, h * period, a, b);
+  if (more > 0 && middle > 0 && more < b - a) {
+    const slope = (b - a - more) / (l * period);
+    const high = b - slope * first - (more * first) / (first + last);
+    const low = high - slope * middle;
+    if (first > 0) addSegment(state.choke, first, b, high);
+    addSegment(state.choke, middle, high, low);
+    addSegment(state.choke, last, low, a);
+  } else {
+    addSegment(state.choke, l * period, b, a);
+    if (rests) addSegment(state.choke, (1 - h - l) * period, 0, 0);
+  }
+}
+
+/**
+ * Resistance that a choke's current meets while it rises, Ω at the secondary.
+ * @derivation the primary's resistances over n², the winding, the rectifiers, the choke
+ * @valid as `solveIsolated`
+ */
+function drivingResistance(form: IsolatedForm, t: Transformer, state: StageState): number {
+  const primary = (form.inSeries * state.highResistance + state.primaryResistance) / (t.ratio * t.ratio);
+  return primary + state.secondaryResistance + state.lowResistance + state.pathResistance;
+}
+
+/**
+ * What one phase draws from the input, of both signs. A ramp in the leakage is written as a block of two thirds of its height and three
+ * quarters of its length, which has its charge and its square: edges are instant here, what series inductance makes of them is the layout's.
+ * @derivation the choke's rise and the ramps of `writeTurns` times share/n; (2/3)·(3/4) = 1/2, (2/3)²·(3/4) = 1/3
+ * @valid straight segments
+ */
+function writeDraw(form: IsolatedForm, design: Design, state: StageState): void {
+  const { valleyCurrent: a, peakCurrent: b, highShare: h } = state;
+  const period = state.frequency > 0 ? 1 / state.frequency : 1;
   // The input sees one pulse each half period of a bridge: a doubler's choke alone runs at the switching frequency.
   const repeat = form.doubler ? 0.5 * period : period;
+  const { magnetizing: m, start, back, pace } = turns;
   const pulse = Math.min(h * period, repeat);
-  const scale = form.share / t.ratio;
+  const backTime = Math.min(0.75 * pace * back, repeat - pulse);
+  const startTime = Math.min(0.75 * pace * start, repeat - pulse - backTime);
+  const scale = form.share / design.transformer.ratio;
+  const returned = (-2 / 3) * back * scale;
+  const ramp = (2 / 3) * start * scale;
   clearWaveform(state.draw);
-  addSegment(state.draw, pulse, a * scale, b * scale);
-  addSegment(state.draw, repeat - pulse, 0, 0);
+  if (design.phaseShifted) addSegment(state.draw, backTime, returned, returned);
+  addSegment(state.draw, startTime, ramp, ramp);
+  addSegment(state.draw, pulse, (a - m) * scale, (b + m) * scale);
+  if (!design.phaseShifted) addSegment(state.draw, backTime, returned, returned);
+  addSegment(state.draw, repeat - pulse - startTime - backTime, 0, 0);
 }
 
 /**
@@ -212,7 +322,6 @@ function writeFlux(form: IsolatedForm, design: Design, t: Transformer, state: St
   const edges = form.doubleEnded && !form.doubler ? 2 : 1;
   const turned = Math.max(0, state.valleyCurrent) + (design.phaseShifted ? Math.max(0, state.peakCurrent) : 0);
   state.lostDuty = (edges * t.leakage * design.frequency * turned) / (t.ratio * volts);
-  if (!form.doubleEnded) addMagnetizing(t, state);
   state.rectifierVoltage = rectifierVoltage(form, state.inputVoltage, t.ratio);
 }
 

@@ -101,7 +101,7 @@ export class StageState {
   rectifierVoltage = 0.5;
 
   /** Choke current of one phase over its effective period. */
-  readonly choke: Waveform = createWaveform(4);
+  readonly choke: Waveform = createWaveform(6);
   /** Current that one phase draws from the input over its repetition period. */
-  readonly draw: Waveform = createWaveform(4);
+  readonly draw: Waveform = createWaveform(6);
 }

@@ -36,13 +36,25 @@ const tables = need(
   ),
 );
 
-/** The space of a shipped rail, with its architectures narrowed to `architecture`. */
-function shippedProblem(name: string, architecture?: Architecture): RailProblem {
+/** A shipped rail. */
+export function shippedRail(name: string): Rail {
   const file = `${name}.yaml`;
-  const rail: Rail = need(readRail(readFileSync(`model/rails/${file}`, 'utf8'), file));
-  const narrowed =
-    architecture === undefined ? rail : { ...rail, search: { ...rail.search, architectures: [architecture] } };
-  return need(createRailProblem(narrowed, tables));
+  return need(readRail(readFileSync(`model/rails/${file}`, 'utf8'), file));
+}
+
+/** The space of a shipped rail with its architectures narrowed to `architecture`. */
+export function shippedProblem(name: string, architecture: Architecture): RailProblem {
+  const rail = shippedRail(name);
+  return need(createRailProblem({ ...rail, search: { ...rail.search, architectures: [architecture] } }, tables));
+}
+
+/** A design of the rail called `rail`, under a name that says where it comes from. */
+export function named(rail: string, problem: RailProblem, genes: Float64Array): FoundDesign {
+  return {
+    name: `${rail}: ${problem.families.names[problem.families.of(genes)]} (${problem.id(genes)})`,
+    problem,
+    genes,
+  };
 }
 
 /** All twenty. */
@@ -50,11 +62,6 @@ export function foundDesigns(): FoundDesign[] {
   const held: readonly Held[] = JSON.parse(readFileSync('test/circuit/designs.json', 'utf8'));
   return held.map(({ rail, ...record }) => {
     const problem = shippedProblem(rail, record.architecture);
-    const genes = need(problem.genesFrom(record));
-    return {
-      name: `${rail}: ${problem.families.names[problem.families.of(genes)]} (${problem.id(genes)})`,
-      problem,
-      genes,
-    };
+    return named(rail, problem, need(problem.genesFrom(record)));
   });
 }

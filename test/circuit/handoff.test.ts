@@ -8,58 +8,23 @@ import { mkdtempSync, rmSync, writeFileSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { beforeAll, describe, expect, it } from 'vitest';
-import { agreesWith, fullLoad, solveAt, stageNetlist, stepNetlist } from '../../model/index.ts';
-import { conductionIn, readFigure } from '../../runners/simulate/figures.ts';
+import type { StageNetlist } from '../../model/handoff/netlist/stage-netlist.ts';
+import { readFigure } from '../../runners/simulate/figures.ts';
 import { nativePath, nativeSimulator } from '../../runners/simulate/native.ts';
 import { packagedSimulator } from '../../runners/simulate/packaged.ts';
 import type { Run, Simulator } from '../../runners/simulate/run.ts';
 import { needs } from '../support/needs.ts';
 import { type FoundDesign, foundDesigns } from './designs.ts';
+import { beyondBands, missesOf, netlistOf } from './holding.ts';
 
 const found = foundDesigns();
-const netlists = new Map(
-  found.map(({ name, problem, genes }) => [
-    name,
-    stageNetlist(problem, problem.id(genes), solveAt(problem, genes, fullLoad(problem.rail))),
-  ]),
-);
+const netlists = new Map(found.map((design) => [design.name, netlistOf(design)]));
 const native = nativePath();
 
-function netlistOf({ name }: FoundDesign) {
+function netlistNamed({ name }: FoundDesign): StageNetlist {
   const netlist = netlists.get(name);
   if (netlist === undefined) throw new Error(`no netlist of ${name}`);
   return netlist;
-}
-
-/** Ripples that a sheet limits, and where a netlist shows them. */
-const RIPPLES = [
-  ['outputRipple', 'v(out)'],
-  ['inputRipple', 'v(in)'],
-] as const;
-
-/** Limits of the sheet that a simulation misses, each at the corner where the model finds it worst: ripples of the stage, the step in the closed averaged loop. */
-async function missesOf({ problem, genes }: FoundDesign, simulator: Simulator): Promise<string[]> {
-  const { limits } = problem.assess(genes);
-  const misses: string[] = [];
-  const runs = new Map<string, Run>();
-  for (const [name, vector] of RIPPLES) {
-    const ripple = limits.find((one) => one.name === name);
-    if (ripple?.corner === undefined) continue;
-    const place = JSON.stringify(ripple.corner);
-    const point = solveAt(problem, genes, { ...ripple.corner, share: 0 }, true);
-    const run = runs.get(place) ?? (await simulator.run(stageNetlist(problem, problem.id(genes), point).text));
-    runs.set(place, run);
-    if (readFigure(run, { reading: 'peak-to-peak', vectors: [vector] }) > ripple.allowed) misses.push(name);
-  }
-  const limit = limits.find(({ name }) => name === 'loadStep');
-  if (limit?.corner === undefined) return misses;
-  const point = solveAt(problem, genes, { ...limit.corner, share: 0 }, true);
-  const netlist = stepNetlist(problem, problem.id(genes), point);
-  if (netlist === undefined) return [...misses, 'no loop'];
-  const volts = (await simulator.run(netlist.text)).vectors.get('v(out)') ?? [];
-  const excursion = Math.max(...Array.from(volts, (v) => Math.abs(v - volts[0])));
-  if (excursion + 0.5 * point.solver.outputRipple.ripple > limit.allowed) misses.push('load step');
-  return misses;
 }
 
 it('twenty designs of seven architectures', () => {
@@ -76,18 +41,10 @@ describe.runIf(needs('ngspice'))('in the native simulator', () => {
   const swings: { name: string; misses: string[] }[] = [];
 
   it.each(found)('the model agrees: $name', async (design) => {
-    const netlist = netlistOf(design);
+    const netlist = netlistNamed(design);
     const run = await simulator.run(netlist.text);
-    const beyond = netlist.predictions.flatMap((prediction) => {
-      const simulated = readFigure(run, prediction);
-      const { name, value } = prediction;
-      return agreesWith(prediction, simulated) ? [] : [`${name}: ${value} against ${simulated}`];
-    });
     swings.push({ name: design.name, misses: await missesOf(design, simulator) });
-    const loss = conductionIn(run, netlist.losses);
-    if (Math.abs(netlist.conduction / loss - 1) > 0.03)
-      beyond.push(`conduction: ${netlist.conduction} against ${loss}`);
-    expect(beyond).toEqual([]);
+    expect(beyondBands(netlist, run)).toEqual([]);
   });
 
   it("the sheet's ripple and step limits hold in simulation for all twenty, so that there is no exception to understand", () => {
@@ -99,7 +56,7 @@ describe.runIf(needs('ngspice'))('in the native simulator', () => {
     const folder = mkdtempSync(join(tmpdir(), 'chopfront-netlist-'));
     try {
       const design = found[0];
-      const { text, predictions } = netlistOf(design);
+      const { text, predictions } = netlistNamed(design);
       const file = join(folder, 'stage.cir');
       writeFileSync(file, text);
       const { stdout, stderr, status } = spawnSync(native ?? '', ['-b', file], { encoding: 'utf8' });
@@ -120,7 +77,7 @@ describe.runIf(needs('ngspice'))('in both simulators', () => {
   });
 
   it.each(found)('within 0.5 %: $name', async (design) => {
-    const netlist = netlistOf(design);
+    const netlist = netlistNamed(design);
     const a: Run = await nativeSimulator(native ?? '').run(netlist.text);
     const b = await packaged?.run(netlist.text);
     if (b === undefined) throw new Error('the packaged simulator is a dependency of the tests');

@@ -1,4 +1,5 @@
 /** When the pulses of a transformer stage come and what flows at time 0: what its netlist is timed by. */
+import { turnPace } from '../../stages/isolated.ts';
 import { pauses } from '../../stages/state.ts';
 import { sample } from '../../waveform/index.ts';
 import type { SolvedPoint } from '../solved-point.ts';
@@ -26,11 +27,12 @@ export function pulseTimes(point: SolvedPoint): PulseTimes {
   const choke = 1 / state.frequency;
   const period = stage.chokeMultiple * choke;
   if (form === undefined) return { period, pulse: 0, commutation: 0, gap: 0 };
-  const volts = form.share * state.inputVoltage;
   const gap = driver.deadTime;
-  // From rest to the valley that a pulse begins with. A shifted bridge must first stop the peak of the last pulse, and wait out the gap.
-  const pace = transformer.leakage / (transformer.ratio * volts);
-  const start = pace * Math.max(0, state.valleyCurrent);
+  // From rest to the valley that a pulse begins with; the magnetizing current, which the secondary carries between pulses, is on its
+  // way already. A shifted bridge must first stop the peak of the last pulse, and wait out the gap.
+  const pace = turnPace(form, design, state.inputVoltage);
+  const ahead = form.doubleEnded && !design.phaseShifted ? transformer.ratio * state.magnetizingPeak : 0;
+  const start = pace * Math.max(0, state.valleyCurrent - ahead);
   const commutation = design.phaseShifted ? Math.max(gap, pace * Math.max(0, state.peakCurrent)) + start : start;
   const longest = form.doubleEnded ? 0.5 * period - 2 * gap : 0.5 * period;
   const pulse = Math.min(longest, state.highShare * choke + commutation);

@@ -10,8 +10,10 @@ import { ascii, Lines, numberText } from './lines.ts';
 import { BANDS, conductionOf, type LossTerm, lossTerms, type Prediction, predictionsOf } from './predictions.ts';
 import { writeInput, writeOutput } from './surroundings.ts';
 
-/** Time steps a period, at least; fewer cost ripple. */
+/** Time steps a period, at least; fewer cost ripple. More, up to a most, where the output's groups ring: so many a turn. */
 const STEPS = 100;
+const STEPS_MOST = 1000;
+const STEPS_A_TURN = 20;
 /** Time constants of the filter until its start is forgotten. */
 const CONSTANTS = 5;
 /** Fewest and most periods that a simulation is given to settle. */
@@ -70,9 +72,25 @@ function writeTimes(lines: Lines, point: SolvedPoint, period: number, periods: n
   lines.derived('tshift', `tper/${copies}`, period / copies, 's', 'delay from phase to phase');
   lines.parameter('te', 1e-11, 's', 'edge of a gate; longer edges cost accuracy');
   lines.parameter('nper', periods, '', 'periods simulated; the last one is measured');
-  lines.derived('tmax', `tper/${STEPS}`, period / STEPS, 's', 'longest time step');
+  const steps = stepsOf(point, period);
+  lines.derived('tmax', `tper/${steps}`, period / steps, 's', 'longest time step');
   lines.derived('tstop', 'nper*tper', periods * period, 's', 'end');
   lines.derived('tfrom', 'tstop-tper', (periods - 1) * period, 's', 'start of what is measured');
+}
+
+/**
+ * Time steps a period: enough for what rings between the output's groups, the bulk's inductance with the ceramics.
+ * @derivation the ringing's own period √(L·C) times 2π; what is damped beyond 0.7 of critical is over before it matters
+ * @valid any bank
+ */
+function stepsOf({ output }: SolvedPoint, period: number): number {
+  const inductance = output.l1 + output.l2;
+  if (!(output.c2 > 0 && inductance > 0)) return STEPS;
+  const capacitance = (output.c1 * output.c2) / (output.c1 + output.c2);
+  const damping = 0.5 * (output.r1 + output.r2) * Math.sqrt(capacitance / inductance);
+  if (damping > 0.7) return STEPS;
+  const turn = 2 * Math.PI * Math.sqrt(inductance * capacitance);
+  return Math.max(STEPS, Math.min(STEPS_MOST, Math.ceil((STEPS_A_TURN * period) / turn)));
 }
 
 /**
