@@ -36,25 +36,13 @@ const tables = need(
   ),
 );
 
-/** A shipped rail. */
-export function shippedRail(name: string): Rail {
+/** The space of a shipped rail, with its architectures narrowed to `architecture`. */
+function shippedProblem(name: string, architecture?: Architecture): RailProblem {
   const file = `${name}.yaml`;
-  return need(readRail(readFileSync(`model/rails/${file}`, 'utf8'), file));
-}
-
-/** The space of a shipped rail with its architectures narrowed to `architecture`. */
-export function shippedProblem(name: string, architecture: Architecture): RailProblem {
-  const rail = shippedRail(name);
-  return need(createRailProblem({ ...rail, search: { ...rail.search, architectures: [architecture] } }, tables));
-}
-
-/** A design of the rail called `rail`, under a name that says where it comes from. */
-export function named(rail: string, problem: RailProblem, genes: Float64Array): FoundDesign {
-  return {
-    name: `${rail}: ${problem.families.names[problem.families.of(genes)]} (${problem.id(genes)})`,
-    problem,
-    genes,
-  };
+  const rail: Rail = need(readRail(readFileSync(`model/rails/${file}`, 'utf8'), file));
+  const narrowed =
+    architecture === undefined ? rail : { ...rail, search: { ...rail.search, architectures: [architecture] } };
+  return need(createRailProblem(narrowed, tables));
 }
 
 /** All twenty. */
@@ -62,6 +50,11 @@ export function foundDesigns(): FoundDesign[] {
   const held: readonly Held[] = JSON.parse(readFileSync('test/circuit/designs.json', 'utf8'));
   return held.map(({ rail, ...record }) => {
     const problem = shippedProblem(rail, record.architecture);
-    return named(rail, problem, need(problem.genesFrom(record)));
+    const genes = need(problem.genesFrom(record));
+    return {
+      name: `${rail}: ${problem.families.names[problem.families.of(genes)]} (${problem.id(genes)})`,
+      problem,
+      genes,
+    };
   });
 }
