@@ -27,17 +27,20 @@ export interface IsolatedForm {
 
 const steady = new ChokeSteadyState();
 /** What the ramps in the leakage come to, on the secondary side: in a record, so that no double crosses a call. */
-class Turns {
-  /** Peak magnetizing current, what a pulse starts with and what is left of it to be taken back, A. */
+export class Turns {
+  /** Peak magnetizing current that rides on each pulse of a double-ended stage, A. */
   magnetizing = 0.5;
+  /** Current that a ramp before a pulse rises to, A. */
   start = 0.5;
+  /** Current that a ramp falls from, once the input takes back what is left after a pulse, A. */
   back = 0.5;
-  /** s/A. */
+  /** Duration of a ramp for each ampere, s/A. */
   pace = 0.5;
-  /** Share of the period in which a shifted bridge turns its current round. */
+  /** Share of the period in which a shifted bridge turns its current round, 0 … 1. */
   turnShare = 0.5;
-  /** Mean square that the ramps add, A², and mean, A. */
+  /** Mean square that the ramps add, A². */
   turnSquare = 0.5;
+  /** Mean that the ramps add, A; negative where more is taken back than drawn. */
   charge = 0.5;
 }
 
@@ -204,6 +207,16 @@ function findDecay(form: IsolatedForm, t: Transformer, state: StageState): void 
   const rest = decay[2];
   decay[0] = (1 - rest * rest) / (2 * x);
   decay[1] = (1 - rest) / x;
+}
+
+/**
+ * The ramps in the leakage at a solved operating point; the record is written anew by the next point.
+ * @derivation as `writeTurns`
+ * @valid `state` as `solveIsolated` left it
+ */
+export function leakageTurns(form: IsolatedForm, design: Design, state: StageState): Readonly<Turns> {
+  writeTurns(form, design, state);
+  return turns;
 }
 
 /**

@@ -83,6 +83,7 @@ const STEADY: FieldUnits = {
   ...all('A', 'current', 'gapCurrent', 'waitCurrent', 'ripple'),
   ...all('Hz', 'frequency', 'effectiveFrequency'),
   ...all('1', 'mode', 'riseShare', 'fallShare', 'dutyCycle'),
+  gapTurn: 'Ω',
   inductance: 'H',
   shortestRise: 's',
 };
@@ -324,6 +325,7 @@ describe('The choke between two voltages', () => {
   const solved = ([current, blocking, shortestRise]: readonly [number, boolean, number], base: Base) => {
     const s = Object.assign(new ChokeSteadyState(), { rise: 30, fall: 12, current, inductance: 1e-5, frequency: 4e5 });
     Object.assign(s, { blocking, shortestRise, gapFall: 0.01, gapRise: 0.012, gapCurrent: 0.5, waitCurrent: 0.1 });
+    s.gapTurn = 0.002;
     const copy = rescaled(s, STEADY, base);
     solveChoke(copy);
     settleGaps(copy);
@@ -533,6 +535,8 @@ const PROVED: Readonly<Record<string, string>> = {
   filterInductance: 'units.test.ts',
   solveBentChoke: 'A solved stage',
   solveIsolated: 'A solved stage',
+  leakageTurns: 'A solved stage',
+  turnPace: 'Figures of the hand-off',
   addEdgeLosses: 'Switching losses of a stage',
   addIsolatedEdges: 'Switching losses of a stage',
   prepareEdges: 'Edge figures',
