@@ -13,8 +13,8 @@ export class PointSolver {
   heat: HeatBalance;
   readonly ledger = new Float64Array(LOSS_SLOTS.length);
   /** Summed choke current and summed draw from the input. */
-  readonly summed = createWaveform(64);
-  readonly drawn = createWaveform(64);
+  readonly summed = createWaveform(257);
+  readonly drawn = createWaveform(257);
   readonly outputRipple: BankRipple = createBankRipple();
   readonly inputRipple: BankRipple = createBankRipple();
   /** Whether a point starts from the temperatures of the point before; the first of a design must not. */

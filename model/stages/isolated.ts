@@ -36,6 +36,8 @@ export class Turns {
   back = 0.5;
   /** Duration of a ramp for each ampere, s/A. */
   pace = 0.5;
+  /** Resistance that a choke's current meets while it rises, Ω at the secondary; written where it is asked for. */
+  resistance = 0.5;
   /** Share of the period in which a shifted bridge turns its current round, 0 … 1. */
   turnShare = 0.5;
   /** Mean square that the ramps add, A². */
@@ -120,7 +122,8 @@ function voltages(form: IsolatedForm, t: Transformer, state: StageState, phaseCu
 function rectifierGaps(form: IsolatedForm, design: Design, state: StageState, current: number): void {
   const { gap } = design;
   const share = form.centreTap ? 0.5 : 1;
-  const pace = turnPace(form, design, state.inputVoltage);
+  findPace(form, design, state);
+  const { pace } = turns;
   const time = design.phaseShifted ? gap + Math.max(gap, pace * current) : 2 * gap;
   const drop = share * (design.low.bodyDrop - current * state.lowResistance);
   steady.gapFall = 0.5 * time * steady.frequency * drop;
@@ -133,13 +136,23 @@ function rectifierGaps(form: IsolatedForm, design: Design, state: StageState, cu
 /**
  * Time that one ampere of a choke takes to turn round in the leakage, s/A: L/n over the primary's volts, which the body diode that still
  * carries the choke helps.
+ * @derivation as `findPace`
+ * @valid gaps, so that a body diode carries the choke
+ */
+export function turnPace(form: IsolatedForm, design: Design, state: StageState): number {
+  findPace(form, design, state);
+  return turns.pace;
+}
+
+/**
+ * Writes `pace` of the turns.
  * @derivation Llk·(I/n)/(V + n·drop), half of the drop where it stands across half a winding
  * @valid gaps, so that a body diode carries the choke
  */
-export function turnPace(form: IsolatedForm, design: Design, inputVoltage: number): number {
+function findPace(form: IsolatedForm, design: Design, state: StageState): void {
   const { leakage, ratio } = design.transformer;
   const drop = design.gap > 0 ? (form.centreTap ? 0.5 : 1) * design.low.bodyDrop : 0;
-  return leakage / (ratio * (form.share * inputVoltage + ratio * drop));
+  turns.pace = leakage / (ratio * (form.share * state.inputVoltage + ratio * drop));
 }
 
 /**
@@ -215,6 +228,7 @@ function findDecay(form: IsolatedForm, t: Transformer, state: StageState): void 
  * @valid `state` as `solveIsolated` left it
  */
 export function leakageTurns(form: IsolatedForm, design: Design, state: StageState): Readonly<Turns> {
+  findPace(form, design, state);
   writeTurns(form, design, state);
   return turns;
 }
@@ -227,7 +241,7 @@ export function leakageTurns(form: IsolatedForm, design: Design, state: StageSta
  */
 function writeTurns(form: IsolatedForm, design: Design, state: StageState): void {
   const period = state.frequency > 0 ? 1 / state.frequency : 1;
-  const pace = turnPace(form, design, state.inputVoltage);
+  const { pace } = turns;
   const m = form.doubleEnded ? design.transformer.ratio * state.magnetizingPeak : 0;
   decay.fill(0);
   if (design.phaseShifted) findDecay(form, design.transformer, state);
@@ -237,7 +251,6 @@ function writeTurns(form: IsolatedForm, design: Design, state: StageState): void
   turns.magnetizing = m;
   turns.start = start;
   turns.back = back;
-  turns.pace = pace;
   turns.turnShare = design.phaseShifted ? each * pace * (start + back) : 0;
   turns.turnSquare = (each * pace * (start * start * start + back * back * back)) / 3;
   turns.charge = 0.5 * each * pace * (start * start - back * back);
@@ -262,7 +275,8 @@ function writeChoke(form: IsolatedForm, design: Design, state: StageState): void
   const middle = l * period - first - last;
   clearWaveform(state.choke);
   if (several) {
-    const bow = (drivingResistance(form, design.transformer, state) * (b - a) * h * period) / (8 * steady.inductance);
+    findDrivingResistance(form, design.transformer, state);
+    const bow = (turns.resistance * (b - a) * h * period) / (8 * steady.inductance);
     addSegment(state.choke, 0.5 * h * period, a, 0.5 * (a + b) + bow);
     addSegment(state.choke, 0.5 * h * period, 0.5 * (a + b) + bow, b);
   } else addSegment(state.choke, h * period, a, b);
@@ -280,13 +294,13 @@ function writeChoke(form: IsolatedForm, design: Design, state: StageState): void
 }
 
 /**
- * Resistance that a choke's current meets while it rises, Ω at the secondary.
+ * Writes the resistance that a choke's current meets while it rises, at the secondary.
  * @derivation the primary's resistances over n², the winding, the rectifiers, the choke
  * @valid as `solveIsolated`
  */
-function drivingResistance(form: IsolatedForm, t: Transformer, state: StageState): number {
+function findDrivingResistance(form: IsolatedForm, t: Transformer, state: StageState): void {
   const primary = (form.inSeries * state.highResistance + state.primaryResistance) / (t.ratio * t.ratio);
-  return primary + state.secondaryResistance + state.lowResistance + state.pathResistance;
+  turns.resistance = primary + state.secondaryResistance + state.lowResistance + state.pathResistance;
 }
 
 /**

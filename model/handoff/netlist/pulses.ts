@@ -30,7 +30,7 @@ export function pulseTimes(point: SolvedPoint): PulseTimes {
   const gap = driver.deadTime;
   // From rest to the valley that a pulse begins with; the magnetizing current, which the secondary carries between pulses, is on its
   // way already. A shifted bridge must first stop the peak of the last pulse, and wait out the gap.
-  const pace = turnPace(form, design, state.inputVoltage);
+  const pace = turnPace(form, design, state);
   const ahead = form.doubleEnded && !design.phaseShifted ? transformer.ratio * state.magnetizingPeak : 0;
   const start = pace * Math.max(0, state.valleyCurrent - ahead);
   const commutation = design.phaseShifted ? Math.max(gap, pace * Math.max(0, state.peakCurrent)) + start : start;
