@@ -66,16 +66,15 @@ export function isolatedRefusal(rail: Rail): string | undefined {
 export function solveIsolated(form: IsolatedForm, design: Design, state: StageState): void {
   const { transformer } = design;
   const chokes = form.doubler ? 2 : 1;
-  const phaseCurrent = state.loadCurrent / state.activePhases;
-  const current = phaseCurrent / chokes;
+  const current = state.loadCurrent / state.activePhases / chokes;
   state.meanCurrent = current;
   steady.frequency = design.frequency * (form.doubleEnded && !form.doubler ? 2 : 1);
   steady.current = current;
   // The chokes of a doubler couple through the winding: a pause in one is not a pause of the stage, so it always runs through.
   steady.blocking = design.emulates && !form.doubler;
   steady.shortestRise = design.shortestOnTime;
-  voltages(form, transformer, state, phaseCurrent, current);
-  rectifierGaps(form, design, state, current);
+  voltages(form, transformer, state);
+  rectifierGaps(form, design, state);
   solveBentChoke(design, state, steady);
   applyForward(steady, state);
   state.effectiveInductance = steady.inductance;
@@ -93,14 +92,15 @@ export function solveIsolated(form: IsolatedForm, design: Design, state: StageSt
  * @source rashid-2014, section 13.2: Vo = (Vi − drops)/n − Vd; leakage as a divider of volts
  * @valid drops taken at the mean current; L ≫ Llk/n²
  */
-function voltages(form: IsolatedForm, t: Transformer, state: StageState, phaseCurrent: number, current: number): void {
+function voltages(form: IsolatedForm, t: Transformer, state: StageState): void {
+  const { current } = steady;
   const n = t.ratio;
   const pulse = current / n;
   const primaryDrop = pulse * (form.inSeries * state.highResistance + state.primaryResistance);
   const secondary = (form.share * state.inputVoltage - primaryDrop) / n;
   const path = current * state.pathResistance;
   const winding = current * state.secondaryResistance;
-  const driving = form.doubler ? phaseCurrent : current;
+  const driving = form.doubler ? state.loadCurrent / state.activePhases : current;
   steady.rise = secondary - winding - driving * state.lowResistance - path - state.outputVoltage;
   const idle = form.centreTap
     ? 0.5 * current * (state.lowResistance + state.secondaryResistance)
@@ -119,7 +119,8 @@ function voltages(form: IsolatedForm, t: Transformer, state: StageState, phaseCu
  * @derivation the body diode's drop over the switch times the share of the period that the gaps and Llk·I/(n·V) take
  * @valid gaps short beside the pulses
  */
-function rectifierGaps(form: IsolatedForm, design: Design, state: StageState, current: number): void {
+function rectifierGaps(form: IsolatedForm, design: Design, state: StageState): void {
+  const { current } = steady;
   const { gap } = design;
   const share = form.centreTap ? 0.5 : 1;
   findPace(form, design, state);
@@ -321,12 +322,25 @@ function writeDraw(form: IsolatedForm, design: Design, state: StageState): void 
   const scale = form.share / design.transformer.ratio;
   const returned = (-2 / 3) * back * scale;
   const ramp = (2 / 3) * start * scale;
-  clearWaveform(state.draw);
-  if (design.phaseShifted) addSegment(state.draw, backTime, returned, returned);
-  addSegment(state.draw, startTime, ramp, ramp);
-  addSegment(state.draw, pulse, (a - m) * scale, (b + m) * scale);
-  if (!design.phaseShifted) addSegment(state.draw, backTime, returned, returned);
-  addSegment(state.draw, repeat - pulse - startTime - backTime, 0, 0);
+  // Written in place: so many doubles through calls would be boxed once the compiler stops inlining.
+  const { draw } = state;
+  const first = design.phaseShifted ? 0 : 2;
+  const at = design.phaseShifted ? 1 : 0;
+  const rest = repeat - pulse - startTime - backTime;
+  draw.count = 4;
+  draw.duration[first] = backTime;
+  draw.start[first] = returned;
+  draw.end[first] = returned;
+  draw.duration[at] = startTime;
+  draw.start[at] = ramp;
+  draw.end[at] = ramp;
+  draw.duration[at + 1] = pulse;
+  draw.start[at + 1] = (a - m) * scale;
+  draw.end[at + 1] = (b + m) * scale;
+  draw.duration[3] = rest;
+  draw.start[3] = 0;
+  draw.end[3] = 0;
+  draw.period = draw.duration[0] + draw.duration[1] + draw.duration[2] + rest;
 }
 
 /**
