@@ -110,10 +110,12 @@ describe.each(COUNTS)('%s', (architecture, switches, rectifiers, windings) => {
     }
   });
 
-  it.runIf(architecture === 'two-switch-forward')('a primary carries pulses, magnetizing current and ramps', () => {
-    for (const point of solved) {
-      const [primary] = transformerCurrents(point);
-      expect((primary.rms ?? Number.NaN) ** 2 / (forwardSquare(point) + forwardRamps(point))).toBeCloseTo(1, 9);
-    }
-  });
+  if (architecture === 'two-switch-forward') {
+    it('a primary carries pulses, magnetizing current and ramps', () => {
+      for (const point of solved) {
+        const [primary] = transformerCurrents(point);
+        expect((primary.rms ?? Number.NaN) ** 2 / (forwardSquare(point) + forwardRamps(point))).toBeCloseTo(1, 9);
+      }
+    });
+  }
 });
